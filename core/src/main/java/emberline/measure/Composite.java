@@ -1,0 +1,140 @@
+package emberline.measure;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+
+/** A feature made of other features. */
+final class Composite implements Formula {
+
+    private final List<Formula> parts;
+    private final Rule rule;
+    private final int[] rows;
+
+    /** How the parts are put together. */
+    interface Rule {
+        /** The value from the values of the parts. */
+        double value(double[] parts);
+
+        /** The derivative by each part. */
+        double[] gradient(double[] parts);
+    }
+
+    Composite(List<Formula> parts, Rule rule) {
+        this.parts = List.copyOf(parts);
+        this.rule = rule;
+        this.rows = parts.stream().flatMapToInt(part -> Arrays.stream(part.rows())).toArray();
+    }
+
+    /** The sum of all parts. */
+    static Rule sum() {
+        return new Rule() {
+            @Override
+            public double value(double[] parts) {
+                return Arrays.stream(parts).sum();
+            }
+
+            @Override
+            public double[] gradient(double[] parts) {
+                double[] ones = new double[parts.length];
+                Arrays.fill(ones, 1);
+                return ones;
+            }
+        };
+    }
+
+    /** The first part over the second. */
+    static Rule ratio() {
+        return new Rule() {
+            @Override
+            public double value(double[] parts) {
+                return parts[0] / parts[1];
+            }
+
+            @Override
+            public double[] gradient(double[] parts) {
+                return new double[] {1 / parts[1], -parts[0] / (parts[1] * parts[1])};
+            }
+        };
+    }
+
+    /**
+     * The shortfall (1 - a) / (1 - p(b)) of the first part against a polynomial in the second.
+     *
+     * @param coefficients of the polynomial, ascending
+     */
+    static Rule shortfall(List<Double> coefficients) {
+        return new Rule() {
+            @Override
+            public double value(double[] parts) {
+                return (1 - parts[0]) / (1 - polynomial(parts[1])[0]);
+            }
+
+            @Override
+            public double[] gradient(double[] parts) {
+                double[] solar = polynomial(parts[1]);
+                double below = 1 - solar[0];
+                return new double[] {-1 / below, (1 - parts[0]) * solar[1] / (below * below)};
+            }
+
+            private double[] polynomial(double x) {
+                double value = 0;
+                double slope = 0;
+                for (int k = coefficients.size() - 1; k >= 0; k--) {
+                    slope = slope * x + value;
+                    value = value * x + coefficients.get(k);
+                }
+                return new double[] {value, slope};
+            }
+        };
+    }
+
+    @Override
+    public int[] rows() {
+        return rows;
+    }
+
+    @Override
+    public double value(double[] y) {
+        return rule.value(partValues(y));
+    }
+
+    private double[] partValues(double[] y) {
+        return parts.stream().mapToDouble(part -> part.value(y)).toArray();
+    }
+
+    @Override
+    public double[] gradient(double[] y) {
+        double[] outer = rule.gradient(partValues(y));
+        double[] gradient = new double[rows.length];
+        int at = 0;
+        for (int p = 0; p < outer.length; p++) {
+            for (double inner : parts.get(p).gradient(y)) {
+                gradient[at++] = outer[p] * inner;
+            }
+        }
+        return gradient;
+    }
+
+    @Override
+    public void values(double[][] draws, double[] out) {
+        double[][] drawn = new double[parts.size()][out.length];
+        for (int p = 0; p < drawn.length; p++) {
+            parts.get(p).values(draws, drawn[p]);
+        }
+        double[] one = new double[drawn.length];
+        for (int n = 0; n < out.length; n++) {
+            for (int p = 0; p < drawn.length; p++) {
+                one[p] = drawn[p][n];
+            }
+            out[n] = rule.value(one);
+        }
+    }
+
+    @Override
+    public List<Continuum> continua() {
+        List<Continuum> continua = new ArrayList<>();
+        parts.forEach(part -> continua.addAll(part.continua()));
+        return continua;
+    }
+}

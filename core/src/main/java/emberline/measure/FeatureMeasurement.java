@@ -1,0 +1,19 @@
+package emberline.measure;
+
+import emberline.catalogue.Feature;
+import java.util.OptionalDouble;
+
+/**
+ * What came of one feature on one spectrum.
+ *
+ * @param feature the definition
+ * @param result the value, or the reason why there is none
+ * @param coverage least share of a window that good pixels cover, 0 to 1
+ * @param smoothedToResolvingPower the resolving power to which the spectrum was smoothed for this
+ *     feature; empty where it was measured as it is
+ */
+public record FeatureMeasurement(
+        Feature feature,
+        Measurement result,
+        double coverage,
+        OptionalDouble smoothedToResolvingPower) {}

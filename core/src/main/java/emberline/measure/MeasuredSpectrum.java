@@ -1,0 +1,119 @@
+package emberline.measure;
+
+import emberline.prepare.PreparedSpectrum;
+import java.util.List;
+import org.apache.commons.rng.UniformRandomProvider;
+import org.apache.commons.rng.sampling.distribution.ZigguratSampler;
+import org.apache.commons.rng.simple.RandomSource;
+
+/** The window functionals of one spectrum with their covariance; what features are made from. */
+final class MeasuredSpectrum {
+
+    private final FormulaBook book;
+    private final WindowOperator operator;
+    private final double[] means;
+    private final EnvelopeMatrix covariance;
+
+    MeasuredSpectrum(FormulaBook book, WindowOperator operator, PreparedSpectrum prepared) {
+        this.book = book;
+        this.operator = operator;
+        this.means = operator.apply(prepared.spectrum());
+        this.covariance = operator.covariance(prepared.spectrum(), prepared.noise());
+    }
+
+    FormulaBook book() {
+        return book;
+    }
+
+    /** Least coverage of the windows of a formula, 0 to 1. */
+    double coverage(Formula formula) {
+        double least = 1;
+        for (int row : formula.rows()) {
+            least = Math.min(least, operator.coverage(row));
+        }
+        return least;
+    }
+
+    double value(Formula formula) {
+        return formula.value(means);
+    }
+
+    double sigma(Formula formula) {
+        return Math.sqrt(Math.max(0, covariance(formula, formula)));
+    }
+
+    /** Covariance of two features, to first order. */
+    double covariance(Formula one, Formula two) {
+        double[] gradientOne = one.gradient(means);
+        double[] gradientTwo = one == two ? gradientOne : two.gradient(means);
+        return bilinear(one.rows(), gradientOne, two.rows(), gradientTwo);
+    }
+
+    private double bilinear(int[] rowsA, double[] a, int[] rowsB, double[] b) {
+        double sum = 0;
+        for (int i = 0; i < rowsA.length; i++) {
+            for (int j = 0; j < rowsB.length; j++) {
+                sum += a[i] * b[j] * covariance.get(rowsA[i], rowsB[j]);
+            }
+        }
+        return sum;
+    }
+
+    double continuum(Formula.Continuum continuum) {
+        return continuum.value(means);
+    }
+
+    double continuumSigma(Formula.Continuum continuum) {
+        return Math.sqrt(
+                Math.max(
+                        0,
+                        bilinear(
+                                continuum.rows(),
+                                continuum.weights(),
+                                continuum.rows(),
+                                continuum.weights())));
+    }
+
+    /**
+     * Draws of features: the window functionals are drawn from their joint normal distribution, and
+     * the features computed from each draw, so that a ratio keeps its skew.
+     *
+     * @param formulas what to compute
+     * @param count number of draws
+     * @param seed start of the random sequence
+     * @return for each formula one value a draw
+     */
+    double[][] draws(List<Formula> formulas, int count, long seed) {
+        EnvelopeMatrix factor = covariance.cholesky();
+        boolean[] wanted = new boolean[means.length];
+        boolean[] carried = new boolean[means.length];
+        for (Formula formula : formulas) {
+            for (int row : formula.rows()) {
+                wanted[row] = true;
+                for (int k = factor.start(row); k <= row; k++) {
+                    carried[k] = true;
+                }
+            }
+        }
+        UniformRandomProvider random = RandomSource.XO_RO_SHI_RO_128_PP.create(seed);
+        ZigguratSampler.NormalizedGaussian normal = ZigguratSampler.NormalizedGaussian.of(random);
+        double[][] deviates = new double[means.length][];
+        for (int row = 0; row < means.length; row++) {
+            if (carried[row]) {
+                deviates[row] = normal.samples(count).toArray();
+            }
+        }
+        double[][] drawn = new double[means.length][];
+        for (int row = 0; row < means.length; row++) {
+            if (wanted[row]) {
+                drawn[row] = new double[count];
+                factor.multiplyRow(deviates, means[row], row, drawn[row]);
+            }
+        }
+        double[][] values = new double[formulas.size()][count];
+        for (int f = 0; f < values.length; f++) {
+            formulas.get(f).values(drawn, values[f]);
+        }
+        return values;
+    }
+}

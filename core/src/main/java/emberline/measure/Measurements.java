@@ -1,0 +1,154 @@
+package emberline.measure;
+
+import emberline.measure.Measurement.Measured;
+import java.util.ArrayList;
+import java.util.Collection;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * What came of all features of a catalogue on one spectrum, or on the spectra of one object, with
+ * the covariance of the values.
+ */
+public final class Measurements {
+
+    private final Map<String, Entry> entries;
+
+    private Measurements(Map<String, Entry> entries) {
+        this.entries = entries;
+    }
+
+    /** A measurement with what is needed to relate it to others. */
+    private record Entry(
+            FeatureMeasurement measurement, MeasuredSpectrum spectrum, Optional<Formula> formula) {
+
+        /** Whether this is to be preferred to another measurement of the same feature. */
+        boolean beats(Entry other) {
+            double mine = sigmaOrInfinite();
+            return mine < other.sigmaOrInfinite();
+        }
+
+        private double sigmaOrInfinite() {
+            return measurement.result().fold(Measured::oneSigma, why -> Double.POSITIVE_INFINITY);
+        }
+    }
+
+    /** Collects the measurements of one spectrum in the order of the catalogue. */
+    static Measurements of(MeasuredSpectrum spectrum, List<FeatureMeasurement> measurements) {
+        Map<String, Entry> entries = new LinkedHashMap<>();
+        for (FeatureMeasurement measurement : measurements) {
+            String id = measurement.feature().id();
+            entries.put(id, new Entry(measurement, spectrum, spectrum.book().formula(id)));
+        }
+        return new Measurements(entries);
+    }
+
+    /**
+     * Of several spectra of one object the best measurement of each feature: the one with the
+     * smallest error.
+     *
+     * @param several measurements with one catalogue, at least one
+     * @return one measurement a feature
+     */
+    public static Measurements best(List<Measurements> several) {
+        Map<String, Entry> best = new LinkedHashMap<>(several.get(0).entries);
+        for (Measurements other : several.subList(1, several.size())) {
+            other.entries.forEach(
+                    (id, entry) -> best.merge(id, entry, (a, b) -> b.beats(a) ? b : a));
+        }
+        return new Measurements(best);
+    }
+
+    /**
+     * All measurements in the order of the catalogue.
+     *
+     * @return one entry a feature
+     */
+    public List<FeatureMeasurement> all() {
+        return entries.values().stream().map(Entry::measurement).toList();
+    }
+
+    /**
+     * The measurement of a feature.
+     *
+     * @param id the feature, e.g. {@code reid1995/tio5}
+     * @return the measurement, or empty where the catalogue has no such feature
+     */
+    public Optional<FeatureMeasurement> of(String id) {
+        return Optional.ofNullable(entries.get(id)).map(Entry::measurement);
+    }
+
+    /**
+     * The value of a feature with its error.
+     *
+     * @param id the feature
+     * @return the value, or empty where it was not measured
+     */
+    public Optional<Measured> measured(String id) {
+        return of(id).flatMap(m -> m.result().fold(Optional::of, why -> Optional.empty()));
+    }
+
+    /**
+     * The covariance of two measured features, from the pixels that they share, to first order.
+     *
+     * @param one a measured feature
+     * @param two a measured feature
+     * @return covariance in the units of both; 0 for features of different spectra
+     * @throws IllegalArgumentException if one of them was not measured
+     */
+    public double covariance(String one, String two) {
+        Entry a = measuredEntry(one);
+        Entry b = measuredEntry(two);
+        if (a.spectrum != b.spectrum) {
+            return 0;
+        }
+        return a.spectrum.covariance(a.formula.orElseThrow(), b.formula.orElseThrow());
+    }
+
+    /**
+     * Draws of measured features from their joint distribution under the pixel noise.
+     *
+     * @param ids measured features
+     * @param count number of draws, at least 1
+     * @param seed start of the random sequence; the same seed gives the same draws
+     * @return for each feature one value a draw
+     * @throws IllegalArgumentException if one of them was not measured
+     */
+    public double[][] draws(List<String> ids, int count, long seed) {
+        Map<MeasuredSpectrum, List<Integer>> bySpectrum = new LinkedHashMap<>();
+        for (int k = 0; k < ids.size(); k++) {
+            bySpectrum
+                    .computeIfAbsent(
+                            measuredEntry(ids.get(k)).spectrum, spectrum -> new ArrayList<>())
+                    .add(k);
+        }
+        double[][] draws = new double[ids.size()][];
+        long stream = seed;
+        for (Map.Entry<MeasuredSpectrum, List<Integer>> group : bySpectrum.entrySet()) {
+            List<Formula> formulas =
+                    group.getValue().stream()
+                            .map(k -> measuredEntry(ids.get(k)).formula.orElseThrow())
+                            .toList();
+            double[][] drawn = group.getKey().draws(formulas, count, stream++);
+            for (int f = 0; f < drawn.length; f++) {
+                draws[group.getValue().get(f)] = drawn[f];
+            }
+        }
+        return draws;
+    }
+
+    private Entry measuredEntry(String id) {
+        Entry entry = entries.get(id);
+        if (entry == null || !(entry.measurement.result() instanceof Measured)) {
+            throw new IllegalArgumentException(
+                    "feature " + id + " was not measured: expected one of " + measuredIds());
+        }
+        return entry;
+    }
+
+    private Collection<String> measuredIds() {
+        return entries.keySet().stream().filter(id -> measured(id).isPresent()).toList();
+    }
+}

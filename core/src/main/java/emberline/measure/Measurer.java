@@ -1,0 +1,151 @@
+package emberline.measure;
+
+import emberline.catalogue.Feature;
+import emberline.catalogue.FeatureCatalogue;
+import emberline.catalogue.Part;
+import emberline.measure.Measurement.Measured;
+import emberline.measure.Measurement.NotMeasured;
+import emberline.measure.Measurement.Why;
+import emberline.prepare.PreparedSpectrum;
+import emberline.spectrum.Spectrum;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * Measures every feature of a catalogue on a prepared spectrum. Safe for use by several threads;
+ * window operators are kept by wavelength grid, so that the spectra of one instrument share one.
+ */
+public final class Measurer {
+
+    private final FeatureCatalogue catalogue;
+    private final Measuring settings;
+    private final GridCache grids = new GridCache();
+
+    /**
+     * A measurer.
+     *
+     * @param catalogue what is measured
+     * @param settings how
+     */
+    public Measurer(FeatureCatalogue catalogue, Measuring settings) {
+        this.catalogue = catalogue;
+        this.settings = settings;
+    }
+
+    /**
+     * The catalogue that is measured.
+     *
+     * @return the catalogue
+     */
+    public FeatureCatalogue catalogue() {
+        return catalogue;
+    }
+
+    /**
+     * Measures a spectrum.
+     *
+     * @param prepared the spectrum, in vacuum and at rest
+     * @return every feature of the catalogue: its value, or the reason why there is none
+     */
+    public Measurements measure(PreparedSpectrum prepared) {
+        Plan plan = grids.of(prepared.spectrum(), prepared.resolvingPower(), () -> plan(prepared));
+        MeasuredSpectrum measured = new MeasuredSpectrum(plan.book(), plan.operator(), prepared);
+        List<FeatureMeasurement> results = new ArrayList<>();
+        for (Feature feature : catalogue.features()) {
+            results.add(measure(feature, plan, measured));
+        }
+        return Measurements.of(measured, results);
+    }
+
+    /** What can be prepared for a wavelength grid, before any flux is looked at. */
+    record Plan(
+            FormulaBook book,
+            WindowOperator operator,
+            Map<String, NotMeasured> refusals,
+            Applicability applicability) {}
+
+    private Plan plan(PreparedSpectrum prepared) {
+        Spectrum spectrum = prepared.spectrum();
+        Applicability applicability = new Applicability(spectrum, prepared.resolvingPower());
+        Map<String, NotMeasured> refusals = new LinkedHashMap<>();
+        List<Feature> applicable = new ArrayList<>();
+        for (Feature feature : catalogue.features()) {
+            Optional<NotMeasured> refusal = applicability.refusal(feature);
+            if (refusal.isPresent()) {
+                refusals.put(feature.id(), refusal.get());
+            } else {
+                applicable.add(feature);
+            }
+        }
+        FormulaBook book = FormulaBook.of(catalogue, applicable, applicability::smoothing);
+        WindowOperator operator =
+                WindowOperator.of(spectrum, prepared.resolvingPower().value(), book.functionals());
+        return new Plan(book, operator, Map.copyOf(refusals), applicability);
+    }
+
+    private FeatureMeasurement measure(Feature feature, Plan plan, MeasuredSpectrum measured) {
+        NotMeasured refusal = plan.refusals().get(feature.id());
+        Optional<Formula> formula = plan.book().formula(feature.id());
+        if (refusal == null && formula.isEmpty()) {
+            refusal = missingPart(feature, plan);
+        }
+        if (refusal != null) {
+            return new FeatureMeasurement(
+                    feature, refusal, 0, plan.applicability().smoothing(feature));
+        }
+        return new FeatureMeasurement(
+                feature,
+                evaluate(formula.orElseThrow(), measured),
+                measured.coverage(formula.orElseThrow()),
+                plan.applicability().smoothing(feature));
+    }
+
+    private static NotMeasured missingPart(Feature feature, Plan plan) {
+        String part =
+                feature.parts().stream()
+                        .map(Part::feature)
+                        .filter(id -> plan.book().formula(id).isEmpty())
+                        .findFirst()
+                        .orElse("");
+        return new NotMeasured(Why.PART_MISSING, "its part " + part + " does not apply");
+    }
+
+    private Measurement evaluate(Formula formula, MeasuredSpectrum measured) {
+        double coverage = measured.coverage(formula);
+        if (coverage < settings.minCoverage()) {
+            return refuse(
+                    Why.NOT_COVERED,
+                    "good pixels cover %.0f%% of a window; %.0f%% are needed",
+                    100 * coverage,
+                    100 * settings.minCoverage());
+        }
+        for (Formula.Continuum continuum : formula.continua()) {
+            double level = measured.continuum(continuum);
+            double sigma = measured.continuumSigma(continuum);
+            if (!(level > 0)) {
+                return refuse(Why.NEGATIVE_CONTINUUM, "the continuum is %.3g", level);
+            }
+            if (!(level >= settings.leastContinuumSignal() * sigma)) {
+                return refuse(
+                        Why.TOO_NOISY,
+                        "the continuum has a signal-to-noise of %.1f; %.1f is needed",
+                        level / sigma,
+                        settings.leastContinuumSignal());
+            }
+        }
+        double value = measured.value(formula);
+        double sigma = measured.sigma(formula);
+        if (!Double.isFinite(value) || !Double.isFinite(sigma)) {
+            return refuse(Why.OUTSIDE_VALID_RANGE, "the definition has no value for these fluxes");
+        }
+        return new Measured(value, sigma);
+    }
+
+    private static NotMeasured refuse(Why why, String format, Object... figures) {
+        return new NotMeasured(why, String.format(Locale.ROOT, format, figures));
+    }
+}

@@ -1,0 +1,27 @@
+package emberline.place;
+
+import emberline.spectrum.Finding;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * Where an object stands: its type and gravity with what they rest on.
+ *
+ * @param type the adopted type; empty where none could be given
+ * @param typeReason why there is no type; empty where there is one
+ * @param published the first witness: the published relations
+ * @param gravity the gravity class
+ * @param findings what the observer should know about the placement
+ */
+public record Placement(
+        Optional<TypeEstimate> type,
+        String typeReason,
+        PublishedType published,
+        GravityVerdict gravity,
+        List<Finding> findings) {
+
+    /** Copies the list. */
+    public Placement {
+        findings = List.copyOf(findings);
+    }
+}

@@ -1,0 +1,74 @@
+package emberline.place;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.measure.Measurements;
+import emberline.spectrum.Finding;
+import java.util.ArrayList;
+import java.util.List;
+
+/** Places an object on the sequence of spectral types and judges its gravity class. */
+public final class Placer {
+
+    private final PublishedWitness published;
+    private final GravityScorer gravity;
+
+    /**
+     * A placer.
+     *
+     * @param catalogue the relations and thresholds to use; the one with which was measured
+     */
+    public Placer(FeatureCatalogue catalogue) {
+        this.published = new PublishedWitness(catalogue);
+        this.gravity = new GravityScorer(catalogue);
+    }
+
+    /**
+     * Places an object.
+     *
+     * @param measurements its features
+     * @param seed start of the random draws for the gravity probabilities; the same seed gives the
+     *     same placement
+     * @return type and gravity, or the reasons why there are none
+     */
+    public Placement place(Measurements measurements, long seed) {
+        PublishedType type = published.witness(measurements);
+        GravityVerdict verdict =
+                type.type()
+                        .map(estimate -> gravity.judge(measurements, estimate, seed))
+                        .orElseGet(
+                                () ->
+                                        GravityVerdict.notJudged(
+                                                "no type, and the limits depend on the type",
+                                                List.of()));
+        return new Placement(
+                type.type(),
+                type.type().isPresent() ? "" : type.scheme(),
+                type,
+                verdict,
+                findings(type, verdict));
+    }
+
+    private static List<Finding> findings(PublishedType type, GravityVerdict verdict) {
+        List<Finding> findings = new ArrayList<>();
+        if (type.type().isPresent()) {
+            findings.addAll(type.findings());
+            findings.add(
+                    Finding.caution(
+                            "kind-not-judged",
+                            "the type holds only if the object is a late dwarf: giants, reddened"
+                                    + " stars and galaxies are not told apart by these relations"));
+        }
+        boolean alone =
+                verdict.gravityClass().isPresent()
+                        && verdict.scores().stream().filter(s -> s.score().isPresent()).count()
+                                == 1;
+        if (alone) {
+            findings.add(
+                    Finding.caution(
+                            "gravity-by-one-feature",
+                            "the gravity class rests on H-cont alone, which dust and metallicity"
+                                    + " move too"));
+        }
+        return findings;
+    }
+}

@@ -1,0 +1,27 @@
+package emberline.prepare;
+
+import emberline.spectrum.Finding;
+import emberline.spectrum.ResolvingPower;
+import emberline.spectrum.Spectrum;
+import java.util.List;
+
+/**
+ * A spectrum that is ready to be measured: in vacuum, in the rest frame as far as it is known, its
+ * noise known.
+ *
+ * @param spectrum the spectrum
+ * @param resolvingPower its resolving power and how that is known
+ * @param noise how the noise is known and how it is shared between neighbours
+ * @param findings what was assumed or changed on the way, reading included
+ */
+public record PreparedSpectrum(
+        Spectrum spectrum,
+        ResolvingPower resolvingPower,
+        NoiseModel noise,
+        List<Finding> findings) {
+
+    /** Copies the list. */
+    public PreparedSpectrum {
+        findings = List.copyOf(findings);
+    }
+}

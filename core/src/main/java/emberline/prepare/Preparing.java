@@ -1,0 +1,78 @@
+package emberline.prepare;
+
+import emberline.spectrum.Medium;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/**
+ * What the observer states about a spectrum; it goes before what the file says.
+ *
+ * @param medium medium of the wavelengths; empty to trust the file
+ * @param resolvingPower resolving power, positive; empty to trust the file
+ * @param radialVelocityKms radial velocity to take out (km/s, positive away from us); empty for
+ *     none
+ */
+public record Preparing(
+        Optional<Medium> medium, OptionalDouble resolvingPower, OptionalDouble radialVelocityKms) {
+
+    private static final Preparing NOTHING_STATED =
+            new Preparing(Optional.empty(), OptionalDouble.empty(), OptionalDouble.empty());
+
+    /** Checks the numbers. */
+    public Preparing {
+        if (resolvingPower.isPresent()
+                && (!(resolvingPower.getAsDouble() > 0)
+                        || Double.isInfinite(resolvingPower.getAsDouble()))) {
+            throw new IllegalArgumentException(
+                    "resolving power "
+                            + resolvingPower.getAsDouble()
+                            + ": expected a positive, finite number");
+        }
+        if (radialVelocityKms.isPresent()
+                && !(Math.abs(radialVelocityKms.getAsDouble()) < 30_000)) {
+            throw new IllegalArgumentException(
+                    "radial velocity "
+                            + radialVelocityKms.getAsDouble()
+                            + " km/s: expected a number between -30000 and 30000");
+        }
+    }
+
+    /**
+     * Nothing is stated; the file is trusted.
+     *
+     * @return the settings
+     */
+    public static Preparing withDefaults() {
+        return NOTHING_STATED;
+    }
+
+    /**
+     * These settings with a medium.
+     *
+     * @param stated medium of the wavelengths
+     * @return new settings
+     */
+    public Preparing withMedium(Medium stated) {
+        return new Preparing(Optional.of(stated), resolvingPower, radialVelocityKms);
+    }
+
+    /**
+     * These settings with a resolving power.
+     *
+     * @param stated resolving power, positive
+     * @return new settings
+     */
+    public Preparing withResolvingPower(double stated) {
+        return new Preparing(medium, OptionalDouble.of(stated), radialVelocityKms);
+    }
+
+    /**
+     * These settings with a radial velocity.
+     *
+     * @param stated velocity (km/s, positive away from us)
+     * @return new settings
+     */
+    public Preparing withRadialVelocityKms(double stated) {
+        return new Preparing(medium, resolvingPower, OptionalDouble.of(stated));
+    }
+}

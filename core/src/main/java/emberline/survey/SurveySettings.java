@@ -1,0 +1,63 @@
+package emberline.survey;
+
+import emberline.prepare.Preparing;
+
+/**
+ * Settings of a run over many objects.
+ *
+ * @param preparing what the observer states about every spectrum for which the list says nothing
+ * @param threads number of threads, at least 1
+ * @param seed start of all random draws
+ */
+public record SurveySettings(Preparing preparing, int threads, long seed) {
+
+    /** The seed where none is given. */
+    public static final long DEFAULT_SEED = 20_260_101L;
+
+    /** Checks the number of threads. */
+    public SurveySettings {
+        if (threads < 1) {
+            throw new IllegalArgumentException(threads + " threads: expected at least 1");
+        }
+    }
+
+    /**
+     * One thread a processor, the default seed, nothing stated about the spectra.
+     *
+     * @return the settings
+     */
+    public static SurveySettings withDefaults() {
+        return new SurveySettings(
+                Preparing.withDefaults(), Runtime.getRuntime().availableProcessors(), DEFAULT_SEED);
+    }
+
+    /**
+     * These settings with another number of threads.
+     *
+     * @param number at least 1
+     * @return new settings
+     */
+    public SurveySettings withThreads(int number) {
+        return new SurveySettings(preparing, number, seed);
+    }
+
+    /**
+     * These settings with another seed.
+     *
+     * @param start start of all random draws
+     * @return new settings
+     */
+    public SurveySettings withSeed(long start) {
+        return new SurveySettings(preparing, threads, start);
+    }
+
+    /**
+     * These settings with other statements about the spectra.
+     *
+     * @param stated what holds where the list says nothing
+     * @return new settings
+     */
+    public SurveySettings withPreparing(Preparing stated) {
+        return new SurveySettings(stated, threads, seed);
+    }
+}
