@@ -66,12 +66,8 @@ final class PixelEdges {
         return Math.max(0, Math.min(high[pixel], highMicron) - Math.max(low[pixel], lowMicron));
     }
 
-    /** Widths of all pixels (micron); 0 for bad ones. */
-    double[] widths() {
-        double[] widths = new double[low.length];
-        for (int i = 0; i < widths.length; i++) {
-            widths[i] = good[i] ? high[i] - low[i] : 0;
-        }
-        return widths;
+    /** Width of a pixel (micron); 0 for a bad one. */
+    double width(int pixel) {
+        return good[pixel] ? high[pixel] - low[pixel] : 0;
     }
 }

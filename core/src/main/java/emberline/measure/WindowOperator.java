@@ -52,38 +52,50 @@ final class WindowOperator {
             Window window = functional.window();
             int from = edges.firstEndingAbove(window.lowMicron());
             int to = edges.firstStartingAtOrAbove(window.highMicron());
-            double[] overlap = new double[Math.max(0, to - from)];
-            double covered = 0;
-            for (int i = from; i < to; i++) {
-                overlap[i - from] = edges.overlap(i, window.lowMicron(), window.highMicron());
-                covered += overlap[i - from];
-            }
-            coverage[row] = Math.min(1, covered / window.widthMicron());
+            double[] overlap = overlaps(edges, window, from, to);
+            coverage[row] = Math.min(1, Arrays.stream(overlap).sum() / window.widthMicron());
             first[row] = from;
-            if (covered > 0) {
-                weigh(spectrum, functional, from, overlap, covered);
-            } else {
-                overlap = new double[0];
+            if (functional.smoothedTo().isPresent()) {
+                SmoothedWindow smoothed =
+                        new SmoothedWindow(
+                                spectrum,
+                                window,
+                                resolvingPower,
+                                functional.smoothedTo().getAsDouble());
+                first[row] = smoothed.first();
+                overlap = overlaps(edges, smoothed);
             }
             weights[row] = overlap;
-            if (covered > 0 && functional.smoothedTo().isPresent()) {
-                SmoothingKernel kernel =
-                        new SmoothingKernel(
-                                spectrum, resolvingPower, functional.smoothedTo().getAsDouble());
-                first[row] = kernel.first(from);
-                weights[row] = smooth(kernel, from, overlap, edges.widths());
-            }
+            weigh(spectrum, functional, first[row], overlap);
         }
         return new WindowOperator(List.copyOf(functionals), first, weights, coverage);
     }
 
-    /** Turns overlaps into weights, in place. */
+    private static double[] overlaps(PixelEdges edges, Window window, int from, int to) {
+        double[] overlap = new double[Math.max(0, to - from)];
+        for (int k = 0; k < overlap.length; k++) {
+            overlap[k] = edges.overlap(from + k, window.lowMicron(), window.highMicron());
+        }
+        return overlap;
+    }
+
+    private static double[] overlaps(PixelEdges edges, SmoothedWindow smoothed) {
+        int first = smoothed.first();
+        double[] overlap = new double[Math.max(0, smoothed.end() - first)];
+        for (int k = 0; k < overlap.length; k++) {
+            double width = edges.width(first + k);
+            overlap[k] = width > 0 ? width * smoothed.share(first + k) : 0;
+        }
+        return overlap;
+    }
+
+    /** Turns overlaps into weights, in place; they stay zero where nothing is covered. */
     private static void weigh(
-            Spectrum spectrum,
-            WindowFunctional functional,
-            int from,
-            double[] overlap,
-            double covered) {
+            Spectrum spectrum, WindowFunctional functional, int from, double[] overlap) {
+        double covered = Arrays.stream(overlap).sum();
+        if (!(covered > 0)) {
+            return;
+        }
         Window window = functional.window();
         double norm =
                 functional.measure().isIntegral() ? window.widthMicron() / covered : 1 / covered;
@@ -92,19 +104,6 @@ final class WindowOperator {
             double x = (spectrum.wavelengthMicron(from + k) - window.centreMicron()) / half;
             overlap[k] *= norm * Math.pow(x, functional.measure().power());
         }
-    }
-
-    private static double[] smooth(
-            SmoothingKernel kernel, int from, double[] weights, double[] widths) {
-        int start = kernel.first(from);
-        int end = kernel.end(from + weights.length - 1);
-        double[] spread = new double[end - start];
-        for (int k = 0; k < weights.length; k++) {
-            if (weights[k] != 0) {
-                kernel.spread(from + k, weights[k], widths, spread, start);
-            }
-        }
-        return spread;
     }
 
     int size() {
