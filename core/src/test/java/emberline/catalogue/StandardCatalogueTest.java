@@ -271,6 +271,40 @@ class StandardCatalogueTest {
         assertEquals(0.7046 + 1.94e-4, continuum.highMicron(), 5e-7);
     }
 
+    /** An index falls with a line above its fraction bar and rises with one below. */
+    @Test
+    void senseFollowsTheSideOfTheLine() {
+        int checked = 0;
+        for (Feature f : catalogue.features()) {
+            boolean above = holdsLine(f, Role.NUMERATOR);
+            boolean below = holdsLine(f, Role.DENOMINATOR);
+            if (above != below && f.sense() != Sense.RISES_WITH_EMISSION) {
+                Sense expected = above ? Sense.FALLS_WITH_ABSORPTION : Sense.RISES_WITH_ABSORPTION;
+                assertEquals(expected, f.sense(), f.id());
+                checked++;
+            }
+        }
+        assertTrue(checked >= 20, "only " + checked + " features");
+    }
+
+    private boolean holdsLine(Feature feature, Role role) {
+        return feature.windows(role).stream()
+                .map(FeatureWindow::window)
+                .anyMatch(
+                        window ->
+                                catalogue.restLines().stream()
+                                        .filter(
+                                                line ->
+                                                        line.species()
+                                                                .replaceFirst(" I+$", "")
+                                                                .equals(feature.species()))
+                                        .mapToDouble(RestLine::vacuumMicron)
+                                        .anyMatch(
+                                                micron ->
+                                                        micron > window.lowMicron()
+                                                                && micron < window.highMicron()));
+    }
+
     /** Each index runs through its types without gap or overlap. */
     @Test
     void typeRangesTouch() {
