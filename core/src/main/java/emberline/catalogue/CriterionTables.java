@@ -81,16 +81,25 @@ final class CriterionTables {
     List<MetallicityClass> metallicityClasses() throws InvalidCatalogueException {
         List<MetallicityClass> classes = new ArrayList<>();
         for (CatalogueRow row : CatalogueTable.read(tables, TableKind.METALLICITY)) {
+            MetallicityClass.Name name = row.word("metallicity_class", MetallicityClass.Name.class);
+            String feature = features.named(row, "feature");
+            OptionalDouble above = row.optionalNumber("above");
+            OptionalDouble upTo = row.optionalNumber("up_to");
+            Source source = sources.of(row);
+            HowKnown howKnown = row.howKnown();
+            int confidence = row.confidencePercent();
             classes.add(
-                    new MetallicityClass(
-                            row.word("metallicity_class", MetallicityClass.Name.class),
-                            features.named(row, "feature"),
-                            row.optionalNumber("above"),
-                            row.optionalNumber("up_to"),
-                            sources.of(row),
-                            row.howKnown(),
-                            row.confidencePercent(),
-                            row.textOrBlank("note")));
+                    row.made(
+                            () ->
+                                    new MetallicityClass(
+                                            name,
+                                            feature,
+                                            above,
+                                            upTo,
+                                            source,
+                                            howKnown,
+                                            confidence,
+                                            row.textOrBlank("note"))));
         }
         return classes;
     }

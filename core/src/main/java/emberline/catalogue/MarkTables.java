@@ -66,18 +66,27 @@ final class MarkTables {
     List<MolecularBand> molecularBands() throws InvalidCatalogueException {
         List<MolecularBand> bands = new ArrayList<>();
         for (CatalogueRow row : CatalogueTable.read(tables, TableKind.BANDS)) {
+            String species = row.text("species");
+            Window extent = extent(row);
             OptionalDouble head = row.optionalPositive("head_micron");
+            double typeMin = row.number("type_min");
+            double typeMax = row.number("type_max");
+            Source source = sources.of(row);
+            HowKnown howKnown = row.howKnown();
+            int confidence = row.confidencePercent();
             bands.add(
-                    new MolecularBand(
-                            row.text("species"),
-                            extent(row),
-                            head,
-                            row.number("type_min"),
-                            row.number("type_max"),
-                            sources.of(row),
-                            row.howKnown(),
-                            row.confidencePercent(),
-                            row.textOrBlank("note")));
+                    row.made(
+                            () ->
+                                    new MolecularBand(
+                                            species,
+                                            extent,
+                                            head,
+                                            typeMin,
+                                            typeMax,
+                                            source,
+                                            howKnown,
+                                            confidence,
+                                            row.textOrBlank("note"))));
         }
         return bands;
     }

@@ -51,6 +51,15 @@ public record MetallicityClass(
         }
     }
 
+    /** Checks the order of the limits. */
+    public MetallicityClass {
+        boolean open = above.isEmpty() || upTo.isEmpty();
+        if (!open && !(above.getAsDouble() < upTo.getAsDouble())) {
+            throw new IllegalArgumentException(
+                    feature + ", class " + name + ": expected above below up_to");
+        }
+    }
+
     /**
      * Whether an index lies in the class.
      *

@@ -24,4 +24,17 @@ public record MolecularBand(
         Source source,
         HowKnown howKnown,
         int confidencePercent,
-        String note) {}
+        String note) {
+
+    /** Checks that the head lies in the extent and that the types are in order. */
+    public MolecularBand {
+        double head = headMicron.orElse(extent.lowMicron());
+        if (!(head >= extent.lowMicron() && head <= extent.highMicron())) {
+            throw new IllegalArgumentException(
+                    species + " band: expected the head within the extent, not " + head);
+        }
+        if (!(typeMin <= typeMax)) {
+            throw new IllegalArgumentException(species + " band: expected type_min up to type_max");
+        }
+    }
+}
