@@ -1,0 +1,24 @@
+package emberline.read;
+
+import java.io.IOException;
+
+/**
+ * Says why a file cannot be read as a spectrum: where, what was found there, what was expected, and
+ * what to do about it.
+ */
+public final class UnreadableSpectrumException extends IOException {
+
+    private static final long serialVersionUID = 1L;
+
+    /**
+     * Makes the exception; its message reads "where: found; expected X. Advice."
+     *
+     * @param where file name, with line, row, pixel or HDU where there is one
+     * @param found what stands there
+     * @param expected what should stand there
+     * @param advice what the observer can do, a full sentence
+     */
+    public UnreadableSpectrumException(String where, String found, String expected, String advice) {
+        super(where + ": " + found + "; expected " + expected + ". " + advice);
+    }
+}
