@@ -5,7 +5,6 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.FeatureWindow;
 import emberline.catalogue.Form;
 import emberline.catalogue.Part;
-import emberline.catalogue.Quantity;
 import emberline.catalogue.Relation;
 import emberline.catalogue.Role;
 import emberline.catalogue.Statistic;
@@ -196,8 +195,8 @@ final class FormulaBook {
             factors[k] = row(feature, part.window());
             exponents[k] =
                     switch (part.role()) {
-                        case NUMERATOR_1, NUMERATOR_2 -> 1;
-                        case DENOMINATOR_1, DENOMINATOR_2 -> -1;
+                        case NUMERATOR_1, DENOMINATOR_2 -> 1;
+                        case DENOMINATOR_1, NUMERATOR_2 -> -1;
                         default -> part.exponent();
                     };
         }
@@ -247,7 +246,8 @@ final class FormulaBook {
                 switch (feature.form()) {
                     case SUM_OF_FEATURES -> Composite.sum();
                     case RATIO_OF_FEATURES -> Composite.ratio();
-                    case METALLICITY_SHORTFALL -> Composite.shortfall(solarCurve(feature));
+                    case METALLICITY_SHORTFALL ->
+                            Composite.shortfall(solarCurve(feature).coefficients());
                     default ->
                             throw new IllegalStateException(
                                     feature.id() + ": form " + feature.form() + " has no parts");
@@ -255,11 +255,9 @@ final class FormulaBook {
         return Optional.of(new Composite(parts, rule));
     }
 
-    private List<Double> solarCurve(Feature feature) {
-        return catalogue.relations(Quantity.SOLAR_TIO5).stream()
-                .filter(curve -> curve.source().equals(feature.source()))
-                .map(Relation::coefficients)
-                .findFirst()
+    private Relation solarCurve(Feature feature) {
+        return catalogue
+                .solarCurve(feature)
                 .orElseThrow(
                         () ->
                                 new IllegalStateException(

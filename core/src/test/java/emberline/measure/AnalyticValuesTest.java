@@ -27,7 +27,12 @@ class AnalyticValuesTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"index-values-nir.csv", "index-values-optical.csv"})
+    @ValueSource(
+            strings = {
+                "index-values-nir.csv",
+                "index-values-optical.csv",
+                "index-values-lambda.csv"
+            })
     void powerLawsGiveTheComputedIndices(String table) throws IOException {
         List<NamedCsvRecord> rows = PublishedRows.of(table);
         Map<String, Measurements> byExponent = new HashMap<>();

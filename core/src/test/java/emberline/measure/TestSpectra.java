@@ -33,22 +33,9 @@ final class TestSpectra {
         return prepared(Spectrum.of(wavelengths, flux, sigma), resolvingPower);
     }
 
-    /**
-     * A noiseless spectrum from 0.6 to 2.5 micron that is sampled finely enough for windows of a
-     * few Angstrom in the optical and of a few nanometres in the infrared.
-     */
+    /** A noiseless spectrum from 0.6 to 2.5 micron, fine enough for windows of a few Angstrom. */
     static PreparedSpectrum fine(DoubleUnaryOperator fluxOfMicron) {
-        int optical = 40_500;
-        int size = optical + 29_900;
-        double[] wavelengths = new double[size];
-        double[] flux = new double[size];
-        double[] sigma = new double[size];
-        for (int i = 0; i < size; i++) {
-            wavelengths[i] = i < optical ? 0.6 + i * 1e-5 : 1.005 + (i - optical) * 5e-5;
-            flux[i] = fluxOfMicron.applyAsDouble(wavelengths[i]);
-            sigma[i] = 1e-9 * flux[i];
-        }
-        return prepared(Spectrum.of(wavelengths, flux, sigma), 20_000);
+        return of(0.6, 2.5, 1e-5, 20_000, 1e-9, fluxOfMicron);
     }
 
     static PreparedSpectrum prepared(Spectrum spectrum, double resolvingPower) {

@@ -1,0 +1,122 @@
+package emberline.prepare;
+
+import emberline.read.Observation;
+import emberline.spectrum.AirToVacuum;
+import emberline.spectrum.Finding;
+import emberline.spectrum.Medium;
+import emberline.spectrum.ResolvingPower;
+import emberline.spectrum.ResolvingPower.Basis;
+import emberline.spectrum.Spectrum;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+
+/**
+ * Prepares an observation for measuring: wavelengths in vacuum and at rest, noise and resolving
+ * power known. Every assumption becomes a finding.
+ */
+public final class Preparer {
+
+    private static final double SPEED_OF_LIGHT_KMS = 299_792.458;
+
+    /** Pixels that a resolution element is taken to span where nothing else is known. */
+    private static final double PIXELS_PER_ELEMENT = 2;
+
+    /** A preparer; it has no settings of its own. */
+    public Preparer() {}
+
+    /**
+     * Prepares an observation.
+     *
+     * @param observation what the file holds
+     * @param stated what the observer states about it
+     * @return the prepared spectrum with all findings, those of reading first
+     */
+    public PreparedSpectrum prepare(Observation observation, Preparing stated) {
+        List<Finding> findings = new ArrayList<>(observation.findings());
+        double[] wavelengths = observation.wavelengthsMicron();
+        if (medium(observation, stated, findings) == Medium.AIR) {
+            for (int i = 0; i < wavelengths.length; i++) {
+                wavelengths[i] = AirToVacuum.vacuumMicron(wavelengths[i]);
+            }
+        }
+        stated.radialVelocityKms().ifPresent(velocity -> toRest(wavelengths, velocity, findings));
+        double[] flux = observation.fluxes();
+        NoiseCheck.Settled noise = NoiseCheck.settle(observation, flux);
+        findings.addAll(noise.findings());
+        Spectrum spectrum = Spectrum.of(wavelengths, flux, noise.sigma());
+        ResolvingPower resolvingPower = resolvingPower(observation, stated, spectrum, findings);
+        return new PreparedSpectrum(spectrum, resolvingPower, noise.model(), findings);
+    }
+
+    private static Medium medium(
+            Observation observation, Preparing stated, List<Finding> findings) {
+        Optional<Medium> file = observation.medium();
+        if (stated.medium().isPresent()) {
+            Medium medium = stated.medium().get();
+            if (file.isPresent() && file.get() != medium) {
+                findings.add(
+                        Finding.caution(
+                                "medium-conflict",
+                                "the file says "
+                                        + file.get().word()
+                                        + ", the observer says "
+                                        + medium.word()
+                                        + "; the observer is followed"));
+            }
+            return medium;
+        }
+        if (file.isEmpty()) {
+            findings.add(
+                    Finding.caution(
+                            "medium-assumed",
+                            "neither the file nor the list says whether wavelengths are in air or"
+                                    + " vacuum; vacuum is assumed (air would shift them by 1.9"
+                                    + " Angstrom at 0.70 micron, 3.4 at 1.25, 6.0 at 2.2)"));
+        }
+        return file.orElse(Medium.VACUUM);
+    }
+
+    private static void toRest(double[] wavelengths, double velocity, List<Finding> findings) {
+        double factor =
+                Math.sqrt(
+                        (1 - velocity / SPEED_OF_LIGHT_KMS) / (1 + velocity / SPEED_OF_LIGHT_KMS));
+        for (int i = 0; i < wavelengths.length; i++) {
+            wavelengths[i] *= factor;
+        }
+        findings.add(
+                Finding.note(
+                        "rest-frame",
+                        String.format(
+                                Locale.ROOT,
+                                "shifted to rest by the stated radial velocity of %.1f km/s",
+                                velocity)));
+    }
+
+    private static ResolvingPower resolvingPower(
+            Observation observation, Preparing stated, Spectrum spectrum, List<Finding> findings) {
+        if (stated.resolvingPower().isPresent()) {
+            return new ResolvingPower(stated.resolvingPower().getAsDouble(), Basis.GIVEN);
+        }
+        if (observation.resolvingPower().isPresent()) {
+            return observation.resolvingPower().get();
+        }
+        double[] perPixel = new double[spectrum.size()];
+        for (int i = 0; i < perPixel.length; i++) {
+            perPixel[i] = spectrum.wavelengthMicron(i) / spectrum.localSpacingMicron(i);
+        }
+        Arrays.sort(perPixel);
+        double estimate = perPixel[perPixel.length / 2] / PIXELS_PER_ELEMENT;
+        findings.add(
+                Finding.caution(
+                        "resolution-estimated",
+                        String.format(
+                                Locale.ROOT,
+                                "resolving power is not stated; %.0f was taken from the sampling"
+                                        + " (two pixels a resolution element), an upper limit",
+                                estimate)));
+        return new ResolvingPower(estimate, Basis.SAMPLING);
+    }
+}

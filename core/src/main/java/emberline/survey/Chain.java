@@ -1,0 +1,156 @@
+package emberline.survey;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.measure.Measurements;
+import emberline.measure.Measurer;
+import emberline.measure.Measuring;
+import emberline.place.Placement;
+import emberline.place.Placer;
+import emberline.prepare.PreparedSpectrum;
+import emberline.prepare.Preparer;
+import emberline.prepare.Preparing;
+import emberline.read.Observation;
+import emberline.read.SpectrumReader;
+import emberline.read.UnreadableSpectrumException;
+import emberline.spectrum.Candidate;
+import emberline.spectrum.Finding;
+import emberline.spectrum.Medium;
+import java.nio.file.InvalidPathException;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * The whole chain for one object: read, prepare, measure, place. An object that fails gets a result
+ * that says why; no exception leaves the chain for bad data. Safe for use by several threads.
+ */
+public final class Chain {
+
+    private final SpectrumReader reader = new SpectrumReader();
+    private final Preparer preparer = new Preparer();
+    private final Measurer measurer;
+    private final Placer placer;
+    private final Preparing defaults;
+    private final long seed;
+
+    /**
+     * A chain.
+     *
+     * @param catalogue what is measured and by what it is placed
+     * @param measuring how it is measured
+     * @param settings what holds for all objects
+     */
+    public Chain(FeatureCatalogue catalogue, Measuring measuring, SurveySettings settings) {
+        this.measurer = new Measurer(catalogue, measuring);
+        this.placer = new Placer(catalogue);
+        this.defaults = settings.preparing();
+        this.seed = settings.seed();
+    }
+
+    /**
+     * Takes one object through the chain.
+     *
+     * @param candidate the object
+     * @param folder the folder to which the paths of its spectra are relative
+     * @return the result, whatever happened
+     */
+    public ObjectResult run(Candidate candidate, Path folder) {
+        List<SpectrumResult> spectra = new ArrayList<>();
+        List<String> troubles = new ArrayList<>();
+        for (String path : candidate.spectra()) {
+            try {
+                spectra.add(measure(path, folder.resolve(path), stated(candidate)));
+            } catch (UnreadableSpectrumException e) {
+                troubles.add(e.getMessage());
+            } catch (InvalidPathException e) {
+                troubles.add("path '" + path + "' is not a file name: " + e.getReason());
+            }
+        }
+        if (spectra.isEmpty()) {
+            return failed(
+                    candidate,
+                    troubles.isEmpty() ? "no spectrum is listed" : String.join(" | ", troubles));
+        }
+        return placed(candidate, spectra, troubles);
+    }
+
+    /**
+     * The result of an object that cannot be taken through the chain.
+     *
+     * @param candidate the object
+     * @param reason why
+     * @return a result with status {@link Status#FAILED}
+     */
+    public static ObjectResult failed(Candidate candidate, String reason) {
+        return new ObjectResult(
+                candidate,
+                Status.FAILED,
+                reason,
+                List.of(),
+                Optional.empty(),
+                Optional.empty(),
+                List.of());
+    }
+
+    private SpectrumResult measure(String path, Path file, Preparing stated)
+            throws UnreadableSpectrumException {
+        Observation observation = reader.read(file);
+        PreparedSpectrum prepared = preparer.prepare(observation, stated);
+        return new SpectrumResult(
+                path,
+                observation.format(),
+                observation.sha256(),
+                prepared,
+                measurer.measure(prepared));
+    }
+
+    private ObjectResult placed(
+            Candidate candidate, List<SpectrumResult> spectra, List<String> troubles) {
+        Measurements best =
+                Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
+        Placement placement = placer.place(best, ObjectSeed.of(candidate.name(), seed));
+        List<Finding> findings = new ArrayList<>();
+        spectra.forEach(spectrum -> findings.addAll(spectrum.prepared().findings()));
+        for (String trouble : troubles) {
+            findings.add(Finding.warning("spectrum-unreadable", trouble));
+        }
+        if (spectra.size() > 1) {
+            findings.add(
+                    Finding.note(
+                            "several-spectra",
+                            spectra.size()
+                                    + " spectra were measured apart; of each feature the"
+                                    + " measurement with the smallest error was placed"));
+        }
+        findings.addAll(placement.findings());
+        List<String> reasons = new ArrayList<>(troubles);
+        if (placement.type().isEmpty()) {
+            reasons.add(placement.typeReason());
+        }
+        return new ObjectResult(
+                candidate,
+                reasons.isEmpty() ? Status.MEASURED : Status.PARTIAL,
+                String.join(" | ", reasons),
+                spectra,
+                Optional.of(best),
+                Optional.of(placement),
+                findings);
+    }
+
+    /** What is stated about the spectra of a candidate: the list goes before the defaults. */
+    private Preparing stated(Candidate candidate) {
+        Preparing stated = defaults;
+        Optional<Medium> medium = candidate.text("medium").flatMap(Medium::named);
+        if (medium.isPresent()) {
+            stated = stated.withMedium(medium.get());
+        }
+        if (candidate.number("resolution").isPresent()) {
+            stated = stated.withResolvingPower(candidate.number("resolution").getAsDouble());
+        }
+        if (candidate.number("rv_kms").isPresent()) {
+            stated = stated.withRadialVelocityKms(candidate.number("rv_kms").getAsDouble());
+        }
+        return stated;
+    }
+}
