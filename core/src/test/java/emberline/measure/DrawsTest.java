@@ -1,0 +1,182 @@
+package emberline.measure;
+
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.measure.Measurement.Measured;
+import emberline.prepare.NoiseModel;
+import emberline.prepare.PreparedSpectrum;
+import emberline.spectrum.ResolvingPower;
+import emberline.spectrum.ResolvingPower.Basis;
+import emberline.spectrum.Spectrum;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Random;
+import org.apache.commons.math3.stat.correlation.PearsonsCorrelation;
+import org.apache.commons.math3.stat.descriptive.moment.Skewness;
+import org.apache.commons.math3.stat.descriptive.moment.StandardDeviation;
+import org.apache.commons.math3.stat.descriptive.rank.Percentile;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+
+/**
+ * Drawing window means is the same as drawing pixels: the distribution of the features agrees
+ * within sampling error. Statistics by Apache Commons Math.
+ */
+class DrawsTest {
+
+    private static final int DRAWS = 4000;
+
+    /** A ratio, an interpolated continuum, a weighted sum, a product of powers, a width. */
+    private static final List<String> FEATURES =
+            List.of(
+                    "burgasser2006/h2o-j",
+                    "allers2013/ki_j",
+                    "allers2013/h-cont",
+                    "kirkpatrick1999/vo-a-sum",
+                    "wilking1999/q",
+                    "morelli2020/ew_ki_1.252");
+
+    private static PreparedSpectrum spectrum(double signalToNoise, NoiseModel noise) {
+        double step = 1e-3;
+        int size = 1900;
+        double[] wavelengths = new double[size];
+        double[] flux = new double[size];
+        double[] sigma = new double[size];
+        for (int i = 0; i < size; i++) {
+            wavelengths[i] = 0.62 + i * step;
+            flux[i] = 1 + 0.3 * Math.sin(9 * wavelengths[i]);
+            sigma[i] = flux[i] / signalToNoise;
+        }
+        return new PreparedSpectrum(
+                Spectrum.of(wavelengths, flux, sigma),
+                new ResolvingPower(900, Basis.GIVEN),
+                noise,
+                List.of());
+    }
+
+    private static double[][] byPixels(PreparedSpectrum prepared, List<String> ids) {
+        Measurer measurer = new Measurer(FeatureCatalogue.standard(), new Measuring(0.8, 0));
+        Random random = new Random(7);
+        double[][] values = new double[ids.size()][DRAWS];
+        Spectrum spectrum = prepared.spectrum();
+        for (int n = 0; n < DRAWS; n++) {
+            double[] flux = spectrum.fluxes();
+            for (int i = 0; i < flux.length; i++) {
+                flux[i] += spectrum.fluxSigma(i) * random.nextGaussian();
+            }
+            Measurements measured =
+                    measurer.measure(
+                            new PreparedSpectrum(
+                                    spectrum.withFluxes(flux, spectrum.fluxSigmas()),
+                                    prepared.resolvingPower(),
+                                    prepared.noise(),
+                                    List.of()));
+            for (int k = 0; k < ids.size(); k++) {
+                values[k][n] = TestSpectra.value(measured, ids.get(k));
+            }
+        }
+        return values;
+    }
+
+    @ParameterizedTest
+    @CsvSource({"20", "5", "2"})
+    void drawingWindowMeansIsDrawingPixels(double signalToNoise) {
+        PreparedSpectrum prepared = spectrum(signalToNoise, NoiseModel.INDEPENDENT);
+        double[][] pixels = byPixels(prepared, FEATURES);
+        double[][] means =
+                new Measurer(FeatureCatalogue.standard(), new Measuring(0.8, 0))
+                        .measure(prepared)
+                        .draws(FEATURES, DRAWS, 11);
+        for (int k = 0; k < FEATURES.size(); k++) {
+            String id = FEATURES.get(k) + " at S/N " + signalToNoise;
+            double sigma = new StandardDeviation().evaluate(pixels[k]);
+            // sampling error of a median, a sigma and a skew of 4000 draws, times 4
+            double median = 4 * 1.2533 * sigma * Math.sqrt(2.0 / DRAWS);
+            assertEquals(median(pixels[k]), median(means[k]), median, id);
+            assertEquals(interval(pixels[k]), interval(means[k]), 0.07 * interval(pixels[k]), id);
+            if (signalToNoise >= 5) {
+                assertEquals(sigma, new StandardDeviation().evaluate(means[k]), 0.07 * sigma, id);
+            }
+            assertEquals(
+                    new Skewness().evaluate(trimmed(pixels[k])),
+                    new Skewness().evaluate(trimmed(means[k])),
+                    4 * Math.sqrt(2 * 6.0 / DRAWS),
+                    id);
+        }
+        assertEquals(
+                correlation(pixels[1], pixels[5]),
+                correlation(means[1], means[5]),
+                4 * Math.sqrt(2.0 / DRAWS));
+    }
+
+    private static double median(double[] values) {
+        return new Percentile(50).evaluate(values);
+    }
+
+    private static double interval(double[] values) {
+        return new Percentile(84).evaluate(values) - new Percentile(16).evaluate(values);
+    }
+
+    /** Without the outermost percent, since ratios at S/N 2 have no finite moments. */
+    private static double[] trimmed(double[] values) {
+        double[] sorted = values.clone();
+        Arrays.sort(sorted);
+        return Arrays.copyOfRange(sorted, sorted.length / 200, sorted.length - sorted.length / 200);
+    }
+
+    private static double correlation(double[] a, double[] b) {
+        return new PearsonsCorrelation().correlation(a, b);
+    }
+
+    @Test
+    void sigmaAndCovarianceAreThoseOfTheDraws() {
+        Measurements measured = TestSpectra.measure(spectrum(50, NoiseModel.INDEPENDENT));
+        List<String> ids = List.of("burgasser2006/h2o-j", "burgasser2006/ch4-j");
+        double[][] draws = measured.draws(ids, 20_000, 3);
+        Measured one = measured.measured(ids.get(0)).orElseThrow();
+        assertEquals(
+                new StandardDeviation().evaluate(draws[0]), one.oneSigma(), 0.03 * one.oneSigma());
+        double other = measured.measured(ids.get(1)).orElseThrow().oneSigma();
+        assertEquals(
+                correlation(draws[0], draws[1]),
+                measured.covariance(ids.get(0), ids.get(1)) / (one.oneSigma() * other),
+                0.03);
+    }
+
+    /** With neighbours that share noise, the noise of a wide mean grows by 1 + 2 (r1 + r2). */
+    @Test
+    void sharedNoiseIsCarried() {
+        String id = "burgasser2006/h2o-j";
+        Measured alone =
+                TestSpectra.measure(spectrum(50, NoiseModel.INDEPENDENT))
+                        .measured(id)
+                        .orElseThrow();
+        Measured shared =
+                TestSpectra.measure(spectrum(50, new NoiseModel(false, 1, 0.4, 0.1)))
+                        .measured(id)
+                        .orElseThrow();
+        // a window of 25 pixels has 24 neighbours, not 25
+        assertEquals(
+                Math.sqrt(1 + 2 * (0.4 * 24 + 0.1 * 23) / 25),
+                shared.oneSigma() / alone.oneSigma(),
+                0.02);
+    }
+
+    @Test
+    void theSameSeedGivesTheSameDraws() {
+        Measurements measured = TestSpectra.measure(spectrum(10, NoiseModel.INDEPENDENT));
+        assertArrayEquals(measured.draws(FEATURES, 100, 5)[2], measured.draws(FEATURES, 100, 5)[2]);
+    }
+
+    @Test
+    void drawsOfWhatWasNotMeasuredAreRefused() {
+        Measurements measured = TestSpectra.measure(spectrum(10, NoiseModel.INDEPENDENT));
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> measured.draws(List.of("reid1995/tio5"), 10, 1));
+    }
+}

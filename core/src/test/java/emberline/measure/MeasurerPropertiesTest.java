@@ -1,0 +1,194 @@
+package emberline.measure;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertInstanceOf;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import emberline.catalogue.Statistic;
+import emberline.measure.Measurement.Measured;
+import emberline.measure.Measurement.NotMeasured;
+import emberline.measure.Measurement.Why;
+import emberline.prepare.PreparedSpectrum;
+import emberline.spectrum.Spectrum;
+import java.util.List;
+import java.util.Random;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
+
+/** What must hold for every feature on every spectrum. */
+class MeasurerPropertiesTest {
+
+    /** A rough spectrum with structure at all scales, as noise would have. */
+    private static Spectrum rough(long seed, double stepMicron, double relativeSigma) {
+        Random random = new Random(seed);
+        int size = (int) Math.round(1.9 / stepMicron);
+        double[] wavelengths = new double[size];
+        double[] flux = new double[size];
+        double[] sigma = new double[size];
+        for (int i = 0; i < size; i++) {
+            wavelengths[i] = 0.6 + i * stepMicron;
+            flux[i] = 1 + 0.3 * Math.sin(20 * wavelengths[i]) + 0.05 * random.nextGaussian();
+            sigma[i] = relativeSigma * flux[i];
+        }
+        return Spectrum.of(wavelengths, flux, sigma);
+    }
+
+    private static void assertSame(
+            Measurements expected, Measurements actual, double tolerance, double sigmaFactor) {
+        int compared = 0;
+        for (FeatureMeasurement one : expected.all()) {
+            if (one.result() instanceof Measured value) {
+                Measured other = actual.measured(one.feature().id()).orElseThrow();
+                assertEquals(
+                        value.value(),
+                        other.value(),
+                        tolerance * Math.max(1, Math.abs(value.value())),
+                        one.feature().id());
+                assertEquals(
+                        value.oneSigma() * sigmaFactor,
+                        other.oneSigma(),
+                        1e-6 * value.oneSigma() * sigmaFactor + tolerance,
+                        one.feature().id());
+                compared++;
+            }
+        }
+        assertTrue(compared > 100, compared + " features");
+    }
+
+    @ParameterizedTest
+    @ValueSource(longs = {1, 2, 3})
+    void scalingTheFluxChangesNothing(long seed) {
+        Spectrum spectrum = rough(seed, 2e-4, 0.02);
+        assertSame(
+                TestSpectra.measure(TestSpectra.prepared(spectrum, 2000)),
+                TestSpectra.measure(TestSpectra.prepared(spectrum.withFluxScaledBy(3.7e-15), 2000)),
+                1e-9,
+                1);
+    }
+
+    @ParameterizedTest
+    @ValueSource(longs = {1, 2, 3})
+    void shiftingTheFrameAndBackChangesNothing(long seed) {
+        Spectrum spectrum = rough(seed, 2e-4, 0.02);
+        double[] moved = spectrum.wavelengthsMicron();
+        for (int i = 0; i < moved.length; i++) {
+            moved[i] = moved[i] * 1.0003 / 1.0003;
+        }
+        assertSame(
+                TestSpectra.measure(TestSpectra.prepared(spectrum, 2000)),
+                TestSpectra.measure(
+                        TestSpectra.prepared(spectrum.withWavelengthsMicron(moved), 2000)),
+                1e-7,
+                1);
+    }
+
+    /** Two half pixels of the same flux with root-two times the noise say the same. */
+    @ParameterizedTest
+    @ValueSource(longs = {1, 2})
+    void splittingEveryPixelChangesNothing(long seed) {
+        Spectrum spectrum = rough(seed, 2e-4, 0.02);
+        int size = spectrum.size();
+        double[] wavelengths = new double[2 * size];
+        double[] flux = new double[2 * size];
+        double[] sigma = new double[2 * size];
+        for (int i = 0; i < size; i++) {
+            double quarter = (spectrum.highEdgeMicron(i) - spectrum.lowEdgeMicron(i)) / 4;
+            for (int k = 0; k < 2; k++) {
+                wavelengths[2 * i + k] = spectrum.wavelengthMicron(i) + (2 * k - 1) * quarter;
+                flux[2 * i + k] = spectrum.flux(i);
+                sigma[2 * i + k] = Math.sqrt(2) * spectrum.fluxSigma(i);
+            }
+        }
+        Measurements whole = TestSpectra.measure(TestSpectra.prepared(spectrum, 180));
+        Measurements halves =
+                TestSpectra.measure(
+                        TestSpectra.prepared(Spectrum.of(wavelengths, flux, sigma), 180));
+        for (FeatureMeasurement one : whole.all()) {
+            boolean comparable =
+                    one.result() instanceof Measured && one.feature().statistic() == Statistic.MEAN;
+            if (comparable) {
+                Measured value = whole.measured(one.feature().id()).orElseThrow();
+                Measured other = halves.measured(one.feature().id()).orElseThrow();
+                String id = one.feature().id();
+                // a softened window samples its edge at the pixel centres, which move
+                double tolerance = one.smoothedToResolvingPower().isPresent() ? 1e-4 : 1e-9;
+                assertEquals(value.value(), other.value(), tolerance, id);
+                // pixels cut by an edge share their noise less when they are halved
+                assertEquals(value.oneSigma(), other.oneSigma(), 0.1 * value.oneSigma(), id);
+            }
+        }
+    }
+
+    @Test
+    void sigmaScalesWithTheNoise() {
+        Spectrum spectrum = rough(5, 2e-4, 0.01);
+        double[] doubled = spectrum.fluxSigmas();
+        for (int i = 0; i < doubled.length; i++) {
+            doubled[i] *= 2;
+        }
+        assertSame(
+                TestSpectra.measure(TestSpectra.prepared(spectrum, 2000)),
+                TestSpectra.measure(
+                        TestSpectra.prepared(
+                                spectrum.withFluxes(spectrum.fluxes(), doubled), 2000)),
+                1e-9,
+                2);
+    }
+
+    @Test
+    void aGapIsNotCovered() {
+        Spectrum spectrum = rough(6, 2e-4, 0.02);
+        double[] flux = spectrum.fluxes();
+        for (int i = 0; i < flux.length; i++) {
+            if (spectrum.wavelengthMicron(i) > 1.14 && spectrum.wavelengthMicron(i) < 1.15) {
+                flux[i] = Double.NaN;
+            }
+        }
+        Measurements measured =
+                TestSpectra.measure(
+                        TestSpectra.prepared(
+                                spectrum.withFluxes(flux, spectrum.fluxSigmas()), 2000));
+        NotMeasured why =
+                assertInstanceOf(
+                        NotMeasured.class,
+                        measured.of("burgasser2006/h2o-j").orElseThrow().result());
+        assertEquals(Why.NOT_COVERED, why.why());
+        assertTrue(why.detail().contains("60%"), why.detail());
+    }
+
+    @Test
+    void lowResolutionRefusesNarrowWindows() {
+        PreparedSpectrum coarse =
+                TestSpectra.of(0.6, 2.5, 2e-3, 100, 0.01, micron -> 1 + 0.1 * micron);
+        Measurements measured = TestSpectra.measure(coarse);
+        for (String id : List.of("reid1995/tio5", "allers2013/feh_j", "morelli2020/ew_ki_1.252")) {
+            NotMeasured why =
+                    assertInstanceOf(NotMeasured.class, measured.of(id).orElseThrow().result());
+            assertEquals(Why.TOO_COARSE, why.why(), id);
+        }
+        assertTrue(measured.measured("burgasser2006/h2o-j").isPresent());
+    }
+
+    @Test
+    void aContinuumLostInNoiseIsRefused() {
+        PreparedSpectrum noisy = TestSpectra.of(0.8, 2.5, 2e-3, 100, 30, micron -> 1);
+        for (FeatureMeasurement one : TestSpectra.measure(noisy).all()) {
+            assertInstanceOf(NotMeasured.class, one.result(), one.feature().id());
+        }
+    }
+
+    @Test
+    void aNegativeContinuumIsRefused() {
+        PreparedSpectrum negative =
+                TestSpectra.prepared(
+                        Spectrum.of(
+                                new double[] {1.0, 1.1, 1.2, 1.3, 1.4},
+                                new double[] {-1, -1, -1, -1, -1},
+                                new double[] {0.1, 0.1, 0.1, 0.1, 0.1}),
+                        10);
+        for (FeatureMeasurement one : TestSpectra.measure(negative).all()) {
+            assertInstanceOf(NotMeasured.class, one.result(), one.feature().id());
+        }
+    }
+}
