@@ -85,14 +85,16 @@ class DrawsTest {
     @ParameterizedTest
     @CsvSource({"20", "5", "2"})
     void drawingWindowMeansIsDrawingPixels(double signalToNoise) {
+        // at S/N 2 the side windows of a line are too noisy for a continuum
+        List<String> features = signalToNoise > 2 ? FEATURES : FEATURES.subList(0, 5);
         PreparedSpectrum prepared = spectrum(signalToNoise, NoiseModel.INDEPENDENT);
-        double[][] pixels = byPixels(prepared, FEATURES);
+        double[][] pixels = byPixels(prepared, features);
         double[][] means =
                 new Measurer(FeatureCatalogue.standard(), new Measuring(0.8, 0))
                         .measure(prepared)
-                        .draws(FEATURES, DRAWS, 11);
-        for (int k = 0; k < FEATURES.size(); k++) {
-            String id = FEATURES.get(k) + " at S/N " + signalToNoise;
+                        .draws(features, DRAWS, 11);
+        for (int k = 0; k < features.size(); k++) {
+            String id = features.get(k) + " at S/N " + signalToNoise;
             double sigma = new StandardDeviation().evaluate(pixels[k]);
             // sampling error of a median, a sigma and a skew of 4000 draws, times 4
             double median = 4 * 1.2533 * sigma * Math.sqrt(2.0 / DRAWS);
@@ -108,8 +110,8 @@ class DrawsTest {
                     id);
         }
         assertEquals(
-                correlation(pixels[1], pixels[5]),
-                correlation(means[1], means[5]),
+                correlation(pixels[1], pixels[2]),
+                correlation(means[1], means[2]),
                 4 * Math.sqrt(2.0 / DRAWS));
     }
 
@@ -177,6 +179,6 @@ class DrawsTest {
         Measurements measured = TestSpectra.measure(spectrum(10, NoiseModel.INDEPENDENT));
         assertThrows(
                 IllegalArgumentException.class,
-                () -> measured.draws(List.of("reid1995/tio5"), 10, 1));
+                () -> measured.draws(List.of("kirkpatrick1999/no-such"), 10, 1));
     }
 }
