@@ -1,0 +1,226 @@
+package emberline.reports.attach;
+
+import emberline.place.Placement;
+import emberline.place.TypeEstimate;
+import emberline.prepare.BandSignal;
+import emberline.reports.attach.ResultColumn.Content;
+import emberline.spectrum.Finding;
+import emberline.survey.ObjectResult;
+import emberline.survey.SpectrumResult;
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.Set;
+import java.util.function.Function;
+import java.util.function.ToDoubleFunction;
+import java.util.stream.Collectors;
+
+/** The columns of the results table in their order. */
+public final class ResultColumns {
+
+    private static final List<ResultColumn> STANDARD = standardColumns();
+
+    private ResultColumns() {}
+
+    /**
+     * The columns that every results table has.
+     *
+     * @return columns in their order, {@code name} first
+     */
+    public static List<ResultColumn> standard() {
+        return STANDARD;
+    }
+
+    /**
+     * The columns of a results table for a candidate list: the standard ones, then those of the
+     * list, as listed. The column {@code name} is not repeated; a column of the list whose name is
+     * one of the standard ones gets {@code list_} before it.
+     *
+     * @param listColumns names of the columns of the list in their order
+     * @return columns in their order; their names are unique
+     */
+    public static List<ResultColumn> forList(List<String> listColumns) {
+        List<ResultColumn> columns = new ArrayList<>(STANDARD);
+        Set<String> taken = STANDARD.stream().map(ResultColumn::name).collect(Collectors.toSet());
+        Set<String> seen = new HashSet<>();
+        for (String listed : listColumns) {
+            if (listed.equals("name") || !seen.add(listed)) {
+                continue;
+            }
+            String name = listed;
+            while (!taken.add(name)) {
+                name = "list_" + name;
+            }
+            columns.add(
+                    new ResultColumn(
+                            name,
+                            "",
+                            "column " + listed + " of the candidate list, as listed",
+                            Content.TEXT,
+                            result -> result.candidate().cells().getOrDefault(listed, "")));
+        }
+        return List.copyOf(columns);
+    }
+
+    /**
+     * The spectrum that stands for an object where one number is wanted, such as its resolving
+     * power: the one with the highest signal-to-noise.
+     *
+     * @param result the result of an object
+     * @return its leading spectrum; empty where none was read
+     */
+    public static Optional<SpectrumResult> leading(ObjectResult result) {
+        SpectrumResult leading = null;
+        double highest = Double.NEGATIVE_INFINITY;
+        for (SpectrumResult spectrum : result.spectra()) {
+            double signal =
+                    BandSignal.best(spectrum.prepared().spectrum())
+                            .map(BandSignal::medianSignalToNoise)
+                            .orElse(Double.NEGATIVE_INFINITY);
+            if (leading == null || signal > highest) {
+                leading = spectrum;
+                highest = signal;
+            }
+        }
+        return Optional.ofNullable(leading);
+    }
+
+    private static List<ResultColumn> standardColumns() {
+        List<ResultColumn> columns = new ArrayList<>();
+        columns.add(text("name", "name of the object as listed", r -> r.candidate().name()));
+        columns.add(
+                text(
+                        "status",
+                        "how far the object came: measured, partial, photometric or failed",
+                        r -> r.status().word()));
+        columns.add(text("reason", "why it came no further", ObjectResult::reason));
+        columns.add(text("kind", "kind of object; empty where it is not judged", r -> ""));
+        addType(columns);
+        columns.add(
+                text(
+                        "published_type",
+                        "type by the published relations alone, combined",
+                        r -> published(r).map(TypeText::code).orElse("")));
+        columns.add(
+                number(
+                        "published_type_sigma",
+                        "subclass",
+                        "one-sigma error of the type by the published relations",
+                        r -> published(r).map(t -> Digits.type(t.sigmaSubclass())).orElse("")));
+        addGravity(columns);
+        columns.add(
+                number(
+                        "snr",
+                        "",
+                        "median signal-to-noise per pixel in the band that is covered best",
+                        r ->
+                                leading(r)
+                                        .flatMap(s -> BandSignal.best(s.prepared().spectrum()))
+                                        .map(s -> Digits.signal(s.medianSignalToNoise()))
+                                        .orElse("")));
+        columns.add(
+                number(
+                        "resolution",
+                        "",
+                        "resolving power of the spectrum with the highest signal-to-noise",
+                        r ->
+                                leading(r)
+                                        .map(s -> s.prepared().resolvingPower().value())
+                                        .map(Digits::significant)
+                                        .orElse("")));
+        columns.add(
+                text(
+                        "findings",
+                        "codes of the findings, each once, separated by blanks",
+                        r ->
+                                r.findings().stream()
+                                        .map(Finding::code)
+                                        .distinct()
+                                        .collect(Collectors.joining(" "))));
+        return List.copyOf(columns);
+    }
+
+    private static void addType(List<ResultColumn> columns) {
+        columns.add(
+                text(
+                        "type",
+                        "adopted spectral type; one colon where its error exceeds one subclass,"
+                                + " two where it exceeds two",
+                        r -> adopted(r).map(TypeText::code).orElse("")));
+        columns.add(
+                typeNumber(
+                        "type_number",
+                        "adopted type on the scale M0 = 0, L0 = 10, T0 = 20, Y0 = 30",
+                        TypeEstimate::typeNumber));
+        columns.add(
+                typeNumber(
+                        "type_sigma",
+                        "one-sigma error of the adopted type",
+                        TypeEstimate::sigmaSubclass));
+        columns.add(typeNumber("type_lo68", "lower end of the 68% interval", TypeEstimate::lo68));
+        columns.add(typeNumber("type_hi68", "upper end of the 68% interval", TypeEstimate::hi68));
+        columns.add(typeNumber("type_lo95", "lower end of the 95% interval", TypeEstimate::lo95));
+        columns.add(typeNumber("type_hi95", "upper end of the 95% interval", TypeEstimate::hi95));
+    }
+
+    private static void addGravity(List<ResultColumn> columns) {
+        columns.add(
+                text(
+                        "gravity",
+                        "gravity class by the published scores: FLD-G, INT-G or VL-G; empty where"
+                                + " it is not judged",
+                        r ->
+                                r.placement()
+                                        .flatMap(p -> p.gravity().gravityClass())
+                                        .map(g -> g.label())
+                                        .orElse("")));
+        columns.add(
+                gravityShare("p_fldg", "probability of FLD-G", p -> p.gravity().pFieldGravity()));
+        columns.add(
+                gravityShare(
+                        "p_intg", "probability of INT-G", p -> p.gravity().pIntermediateGravity()));
+        columns.add(
+                gravityShare("p_vlg", "probability of VL-G", p -> p.gravity().pVeryLowGravity()));
+    }
+
+    private static Optional<TypeEstimate> adopted(ObjectResult result) {
+        return result.placement().flatMap(Placement::type);
+    }
+
+    private static Optional<TypeEstimate> published(ObjectResult result) {
+        return result.placement().flatMap(placement -> placement.published().type());
+    }
+
+    private static ResultColumn text(
+            String name, String description, Function<ObjectResult, String> take) {
+        return new ResultColumn(name, "", description, Content.TEXT, take);
+    }
+
+    private static ResultColumn number(
+            String name, String unit, String description, Function<ObjectResult, String> take) {
+        return new ResultColumn(name, unit, description, Content.NUMBER, take);
+    }
+
+    private static ResultColumn typeNumber(
+            String name, String description, ToDoubleFunction<TypeEstimate> part) {
+        return number(
+                name,
+                "subclass",
+                description,
+                r -> adopted(r).map(t -> Digits.type(part.applyAsDouble(t))).orElse(""));
+    }
+
+    private static ResultColumn gravityShare(
+            String name, String description, Function<Placement, OptionalDouble> share) {
+        return number(
+                name,
+                "",
+                description,
+                r -> {
+                    OptionalDouble value = r.placement().map(share).orElse(OptionalDouble.empty());
+                    return value.isPresent() ? Digits.probability(value.getAsDouble()) : "";
+                });
+    }
+}

@@ -1,0 +1,75 @@
+package emberline.reports.attach;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertNull;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import com.fasterxml.jackson.jr.ob.JSON;
+import emberline.reports.Samples;
+import emberline.survey.ObjectResult;
+import java.io.IOException;
+import java.util.List;
+import java.util.Map;
+import org.junit.jupiter.api.Test;
+
+class ObjectJsonTest {
+
+    @Test
+    void jsonIsReadBackWithTheNumbersOfTheTable() throws IOException {
+        ObjectResult result = Samples.lDwarf();
+        Map<String, Object> map = JSON.std.mapFrom(ObjectJson.text(result));
+        for (ResultColumn column : ResultColumns.standard()) {
+            assertTrue(map.containsKey(column.name()), column.name());
+        }
+        ResultColumn number = column("type_number");
+        assertEquals(Double.parseDouble(number.text(result)), map.get("type_number"));
+        List<?> features = (List<?>) map.get("features");
+        assertEquals(Samples.CATALOGUE.features().size(), features.size());
+        for (Object feature : features) {
+            Map<?, ?> cells = (Map<?, ?>) feature;
+            boolean measured = cells.get("value") != null;
+            assertEquals(measured, cells.get("sigma") != null);
+            assertEquals(measured, cells.get("why").toString().isEmpty(), cells.toString());
+        }
+        Map<?, ?> spectrum = (Map<?, ?>) ((List<?>) map.get("spectra")).get(0);
+        assertEquals(Samples.SHA256, spectrum.get("sha256"));
+        assertEquals("given", spectrum.get("resolution_basis"));
+    }
+
+    @Test
+    void aFailedObjectHasEveryKeyAndNoNumbers() throws IOException {
+        String text = ObjectJson.text(Samples.failed("x", "line 3: no number"));
+        Map<String, Object> map = JSON.std.mapFrom(text);
+        assertEquals("failed", map.get("status"));
+        assertEquals("line 3: no number", map.get("reason"));
+        assertTrue(map.containsKey("type_number"));
+        assertNull(map.get("type_number"));
+        assertFalse(text.contains("NaN"));
+    }
+
+    @Test
+    void theSameResultGivesTheSameBytes() {
+        assertEquals(ObjectJson.text(Samples.tDwarf()), ObjectJson.text(Samples.tDwarf()));
+    }
+
+    @Test
+    void aRunCountsItsObjectsAndNamesItsInputs() throws IOException {
+        RunJson run = new RunJson("0.1.0", Map.of("medium", "vacuum"), 7, "ab12");
+        run.add(Samples.lDwarf());
+        run.add(Samples.failed("x", "gone"));
+        Map<String, Object> map = JSON.std.mapFrom(run.text());
+        assertEquals(2, map.get("objects"));
+        assertEquals(
+                Map.of("measured", 1, "partial", 0, "failed", 1), map.get("objects_by_status"));
+        Map<?, ?> input = (Map<?, ?>) ((List<?>) map.get("inputs")).get(0);
+        assertEquals(Samples.SHA256, input.get("sha256"));
+    }
+
+    private static ResultColumn column(String name) {
+        return ResultColumns.standard().stream()
+                .filter(column -> column.name().equals(name))
+                .findFirst()
+                .orElseThrow();
+    }
+}
