@@ -1,0 +1,117 @@
+package emberline.cli;
+
+import emberline.catalogue.Band;
+import emberline.catalogue.Feature;
+import emberline.catalogue.FeatureCatalogue;
+import emberline.reports.attach.CatalogueTable;
+import emberline.reports.attach.TableFormat;
+import java.util.List;
+import java.util.Locale;
+import java.util.concurrent.Callable;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.ParameterException;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+
+/** {@code catalogue}: lists the definitions, or prints one. */
+@Command(
+        name = "catalogue",
+        description =
+                "Lists the definitions of bands and lines with their sources, or prints one in"
+                        + " full.",
+        mixinStandardHelpOptions = true)
+final class CatalogueCommand implements Callable<Integer> {
+
+    @Spec private CommandSpec spec;
+    @Mixin private CatalogueOption catalogueOption;
+
+    @Parameters(
+            paramLabel = "ID",
+            arity = "0..1",
+            description = "One definition, e.g. reid1995/tio5.")
+    private String id;
+
+    @Option(
+            names = "--band",
+            paramLabel = "BAND",
+            description = "Only definitions of this band: ${COMPLETION-CANDIDATES}.")
+    private Band band;
+
+    @Option(
+            names = "--molecule",
+            paramLabel = "SPECIES",
+            description = "Only definitions of this molecule or atom, e.g. H2O, K.")
+    private String molecule;
+
+    @Option(
+            names = "--format",
+            paramLabel = "text|csv|json",
+            defaultValue = "text",
+            description = "Form of the table (default ${DEFAULT-VALUE}).")
+    private TableFormat format;
+
+    @Override
+    public Integer call() {
+        FeatureCatalogue catalogue = catalogueOption.load();
+        if (id != null) {
+            spec.commandLine().getOut().print(CatalogueTable.printOne(one(catalogue), catalogue));
+        } else {
+            spec.commandLine().getOut().print(CatalogueTable.print(chosen(catalogue), format));
+        }
+        spec.commandLine().getOut().flush();
+        return ExitCode.DONE;
+    }
+
+    private Feature one(FeatureCatalogue catalogue) {
+        return catalogue
+                .feature(id.toLowerCase(Locale.ROOT))
+                .orElseThrow(
+                        () ->
+                                new ParameterException(
+                                        spec.commandLine(),
+                                        "no definition "
+                                                + id
+                                                + ": expected an id as 'catalogue' lists them"
+                                                + nearest(catalogue)));
+    }
+
+    /** Definitions with the same symbol in other papers, as a suggestion. */
+    private String nearest(FeatureCatalogue catalogue) {
+        String symbol = id.substring(id.lastIndexOf('/') + 1).toLowerCase(Locale.ROOT);
+        List<String> similar =
+                catalogue.features().stream()
+                        .map(Feature::id)
+                        .filter(known -> known.contains(symbol))
+                        .limit(4)
+                        .toList();
+        return similar.isEmpty() ? "" : ", perhaps " + String.join(" or ", similar);
+    }
+
+    private List<Feature> chosen(FeatureCatalogue catalogue) {
+        List<Feature> chosen =
+                catalogue.features().stream()
+                        .filter(feature -> band == null || feature.band() == band)
+                        .filter(
+                                feature ->
+                                        molecule == null
+                                                || feature.species().equalsIgnoreCase(molecule))
+                        .toList();
+        if (chosen.isEmpty()) {
+            throw new ParameterException(
+                    spec.commandLine(),
+                    "no definition of "
+                            + (molecule == null ? "any species" : molecule)
+                            + (band == null ? "" : " in band " + band)
+                            + ": expected one of "
+                            + catalogue.features().stream()
+                                    .map(Feature::species)
+                                    .distinct()
+                                    .sorted()
+                                    .toList());
+        }
+        return chosen;
+    }
+}

@@ -1,0 +1,73 @@
+package emberline.cli;
+
+import emberline.reports.page.HeadlessFonts;
+import java.io.PrintWriter;
+import java.nio.charset.StandardCharsets;
+import java.util.logging.LogManager;
+import picocli.CommandLine;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.ParameterException;
+import picocli.CommandLine.Spec;
+
+/** The program: measures, places and judges cool-dwarf candidates from one-dimensional spectra. */
+@Command(
+        name = "emberline",
+        description = {
+            "Measures molecular bands and lines in spectra of cool-dwarf candidates (0.6 to 2.5"
+                    + " micron), places each on the sequence M, L, T, Y, and reports.",
+            "It supports and does not replace expert judgement."
+        },
+        subcommands = {
+            SortCommand.class,
+            MeasureCommand.class,
+            PlaceCommand.class,
+            ReportCommand.class,
+            CatalogueCommand.class
+        },
+        mixinStandardHelpOptions = true,
+        versionProvider = ProgramVersion.class,
+        exitCodeListHeading = "%nExit codes:%n",
+        exitCodeList = {
+            "0:all was done",
+            "1:finished, but some objects failed",
+            "2:wrong arguments",
+            "3:nothing could be read",
+            "4:an output could not be written"
+        })
+public final class Emberline implements Runnable {
+
+    @Spec private CommandSpec spec;
+
+    /** Runs a command line and ends the program with its exit code. */
+    @SuppressWarnings("SystemExitOutsideMain")
+    public static void main(String[] arguments) {
+        LogManager.getLogManager().reset(); // the table and FITS libraries log what we report better
+        HeadlessFonts.install();
+        PrintWriter out = new PrintWriter(System.out, false, StandardCharsets.UTF_8);
+        PrintWriter err = new PrintWriter(System.err, true, StandardCharsets.UTF_8);
+        int code = commandLine(out, err).execute(arguments);
+        out.flush();
+        System.exit(code);
+    }
+
+    /**
+     * The command line with given streams.
+     *
+     * @param out where results go
+     * @param err where progress, findings and messages go
+     * @return a command line, ready to execute
+     */
+    static CommandLine commandLine(PrintWriter out, PrintWriter err) {
+        return new CommandLine(new Emberline())
+                .setOut(out)
+                .setErr(err)
+                .setCaseInsensitiveEnumValuesAllowed(true)
+                .setExecutionExceptionHandler(new FailureHandler());
+    }
+
+    @Override
+    public void run() {
+        throw new ParameterException(spec.commandLine(), "expected a command");
+    }
+}

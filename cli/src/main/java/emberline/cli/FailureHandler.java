@@ -1,0 +1,25 @@
+package emberline.cli;
+
+import emberline.read.UnreadableListException;
+import java.io.IOException;
+import picocli.CommandLine;
+import picocli.CommandLine.IExecutionExceptionHandler;
+import picocli.CommandLine.ParseResult;
+
+/** Turns what a command throws into a message and an exit code. */
+final class FailureHandler implements IExecutionExceptionHandler {
+
+    @Override
+    public int handleExecutionException(
+            Exception failure, CommandLine commandLine, ParseResult parsed) throws Exception {
+        if (failure instanceof UnreadableListException) {
+            commandLine.getErr().println(failure.getMessage());
+            return ExitCode.NOTHING_READ;
+        }
+        if (failure instanceof IOException) {
+            commandLine.getErr().println(OutputTrouble.message((IOException) failure));
+            return ExitCode.NOT_WRITTEN;
+        }
+        throw failure;
+    }
+}

@@ -1,0 +1,188 @@
+package emberline.reports.attach;
+
+import emberline.catalogue.Feature;
+import emberline.catalogue.FeatureCatalogue;
+import emberline.catalogue.FeatureWindow;
+import emberline.catalogue.GravityThreshold;
+import emberline.catalogue.Part;
+import emberline.catalogue.Relation;
+import emberline.catalogue.Source;
+import emberline.catalogue.Window;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.OptionalDouble;
+
+/** The catalogue as a table, and one definition in full. */
+public final class CatalogueTable {
+
+    private static final List<String> HEADER =
+            List.of(
+                    "id",
+                    "symbol",
+                    "species",
+                    "band",
+                    "form",
+                    "low_micron",
+                    "high_micron",
+                    "min_resolving_power",
+                    "source",
+                    "how_known",
+                    "confidence_percent");
+
+    private CatalogueTable() {}
+
+    /**
+     * The table of definitions.
+     *
+     * @param features the definitions in the order of the table
+     * @param format how it is printed
+     * @return the printed table, with a line end
+     */
+    public static String print(List<Feature> features, TableFormat format) {
+        if (format == TableFormat.JSON) {
+            List<Map<String, Object>> objects = new ArrayList<>();
+            for (Feature feature : features) {
+                Map<String, Object> object = new LinkedHashMap<>();
+                List<String> row = row(feature);
+                for (int k = 0; k < HEADER.size(); k++) {
+                    object.put(HEADER.get(k), row.get(k));
+                }
+                objects.add(object);
+            }
+            return JsonText.of(objects) + "\n";
+        }
+        AlignedTable table = new AlignedTable(HEADER);
+        features.forEach(feature -> table.add(row(feature)));
+        return format == TableFormat.CSV ? table.csv() : table.text();
+    }
+
+    private static List<String> row(Feature feature) {
+        return List.of(
+                feature.id(),
+                feature.symbol(),
+                feature.species(),
+                feature.band().name(),
+                feature.form().name().toLowerCase(Locale.ROOT),
+                feature.span().map(Window::lowMicron).map(CatalogueTable::micron).orElse(""),
+                feature.span().map(Window::highMicron).map(CatalogueTable::micron).orElse(""),
+                whole(feature.minResolvingPower()),
+                feature.source().key(),
+                feature.howKnown().name().toLowerCase(Locale.ROOT),
+                Integer.toString(feature.confidencePercent()));
+    }
+
+    private static String micron(double wavelengthMicron) {
+        return String.format(Locale.ROOT, "%.5f", wavelengthMicron);
+    }
+
+    private static String whole(OptionalDouble value) {
+        return value.isPresent() ? String.format(Locale.ROOT, "%.0f", value.getAsDouble()) : "";
+    }
+
+    /**
+     * One definition with its windows, source, relations and thresholds.
+     *
+     * @param feature the definition
+     * @param catalogue where its relations and thresholds stand
+     * @return text of several lines, with a line end
+     */
+    public static String printOne(Feature feature, FeatureCatalogue catalogue) {
+        StringBuilder text = new StringBuilder();
+        line(text, feature.id(), feature.symbol() + ", " + feature.species());
+        line(text, "  form", feature.form().name().toLowerCase(Locale.ROOT));
+        line(text, "  source", cite(feature.source(), feature.place()));
+        line(
+                text,
+                "  how known",
+                feature.howKnown().name().toLowerCase(Locale.ROOT).replace('_', ' ')
+                        + ", "
+                        + feature.confidencePercent()
+                        + "% sure");
+        line(
+                text,
+                "  printed in",
+                feature.printedMedium().word() + (feature.mediumStated() ? "" : " (not stated)"));
+        if (feature.minResolvingPower().isPresent()) {
+            line(text, "  needs R", whole(feature.minResolvingPower()));
+        }
+        if (feature.smoothToResolvingPower().isPresent()) {
+            line(text, "  smoothed to R", whole(feature.smoothToResolvingPower()));
+        }
+        for (FeatureWindow part : feature.windows()) {
+            line(text, "  " + part.role().name().toLowerCase(Locale.ROOT), window(part));
+        }
+        for (Part part : feature.parts()) {
+            line(text, "  " + part.role().name().toLowerCase(Locale.ROOT), part.feature());
+        }
+        relations(text, feature, catalogue);
+        thresholds(text, feature, catalogue);
+        if (!feature.note().isBlank()) {
+            line(text, "  note", feature.note());
+        }
+        return text.toString();
+    }
+
+    private static String window(FeatureWindow part) {
+        String text =
+                micron(part.window().lowMicron())
+                        + " to "
+                        + micron(part.window().highMicron())
+                        + " micron, vacuum";
+        if (part.weight() != 1) {
+            text += ", weight " + part.weight();
+        }
+        return part.exponent() == 1 ? text : text + ", exponent " + part.exponent();
+    }
+
+    private static void relations(StringBuilder text, Feature feature, FeatureCatalogue catalogue) {
+        for (Relation relation : catalogue.relations()) {
+            if (relation.feature().equals(feature.id())) {
+                line(
+                        text,
+                        "  relation",
+                        relation.id()
+                                + ": "
+                                + relation.quantity().name().toLowerCase(Locale.ROOT)
+                                + ", rms "
+                                + (relation.rms().isPresent()
+                                        ? relation.rms().getAsDouble()
+                                        : "not printed")
+                                + ", on spectra of known type: "
+                                + relation.verdict()
+                                        .name()
+                                        .toLowerCase(Locale.ROOT)
+                                        .replace('_', ' '));
+            }
+        }
+    }
+
+    private static void thresholds(
+            StringBuilder text, Feature feature, FeatureCatalogue catalogue) {
+        List<GravityThreshold> scored =
+                catalogue.gravityThresholds().stream()
+                        .filter(threshold -> threshold.feature().equals(feature.id()))
+                        .toList();
+        if (!scored.isEmpty()) {
+            line(
+                    text,
+                    "  gravity",
+                    String.format(
+                            Locale.ROOT,
+                            "scored from type %.0f to %.0f, source %s",
+                            scored.get(0).typeNumber(),
+                            scored.get(scored.size() - 1).typeNumber(),
+                            scored.get(0).source().key()));
+        }
+    }
+
+    private static String cite(Source source, String place) {
+        return source.cite() + (place.isBlank() ? "" : ", " + place);
+    }
+
+    private static void line(StringBuilder text, String name, String value) {
+        text.append(String.format(Locale.ROOT, "%-22s%s%n", name, value).replace("\r", ""));
+    }
+}
