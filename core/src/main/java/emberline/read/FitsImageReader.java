@@ -34,17 +34,25 @@ final class FitsImageReader {
         FitsImage image = FitsImage.of(unit);
         int first = image.length(1);
         int second = image.length(2);
-        boolean flat = image.axes().length <= 2;
-        if (flat && second >= 2 && second <= MOST_ROWS && first > second) {
+        boolean mayBeRows = image.axes().length <= 2 && !saysPlanes();
+        if (mayBeRows && second >= 2 && second <= MOST_ROWS && first >= second) {
             if (isWavelengths(image.row(0))) {
                 return rows(withoutOffset(image), second, first, true);
             }
-        } else if (flat && first >= 2 && first <= MOST_ROWS && second > 1) {
+        }
+        if (mayBeRows && first >= 2 && first <= MOST_ROWS && second > 1) {
             if (isWavelengths(image.column(0))) {
                 return rows(withoutOffset(image), first, second, false);
             }
         }
         return planes(image);
+    }
+
+    /** Whether the header says that the first row is a flux and the axis the wavelength. */
+    private boolean saysPlanes() {
+        String first = unit.text("ARRAY1").or(() -> unit.text("BANDID1")).orElse("");
+        return first.toLowerCase(Locale.ROOT).matches("(flux|spec).*")
+                || (unit.number("COEFF0").isPresent() && unit.number("COEFF1").isPresent());
     }
 
     private static boolean isWavelengths(double[] row) {

@@ -78,13 +78,17 @@ enum FluxUnit {
         if (letters.equals("flambda") || letters.equals("flam")) {
             return Optional.of(F_LAMBDA);
         }
+        boolean namesWavelength =
+                text.matches("(?i).*([/ ]|\\b)(a|aa|ang\\w*|nm|um|microns?)\\b.*");
         for (boolean plural : new boolean[] {true, false}) {
             for (boolean dividesAll : new boolean[] {false, true}) {
                 Optional<FluxUnit> unit =
                         UnitExponents.parse(text.trim(), plural, dividesAll)
                                 .flatMap(FluxUnit::ofDimensions);
                 if (unit.isPresent()) {
-                    return unit;
+                    // Some surveys write erg/cm/s/Ang for erg/cm2/s/Ang.
+                    boolean meant = unit.get() == LAMBDA_F_LAMBDA && namesWavelength;
+                    return meant ? Optional.of(F_LAMBDA) : unit;
                 }
             }
         }

@@ -245,7 +245,9 @@ final class PixelOrder {
         return Arrays.copyOf(distinct, n);
     }
 
-    private UnreadableSpectrumException notRising(int before, int pixel) {
+    private UnreadableSpectrumException notRising(int one, int other) {
+        int before = Math.min(one, other);
+        int pixel = Math.max(one, other);
         float a = (float) wavelengths[before];
         float b = (float) wavelengths[pixel];
         if (wavelengths[before] == wavelengths[pixel]) {

@@ -173,13 +173,15 @@ final class TextTable {
                 : TextCells.BLANKS;
     }
 
-    /** Whether blanks also separate numbers on a line with tabs. */
+    /** Whether a line with tabs has its cells between blanks of any kind, none of them empty. */
     private boolean isAlignedWithTabs(int from, int end) {
         cells.cut(bytes, from, end, TextCells.BLANKS);
         int byBlanks = cells.count();
-        boolean numbers = byBlanks > 1 && beginsWithNumber();
+        boolean numbers = beginsWithNumber();
         cells.cut(bytes, from, end, '\t');
-        return (numbers && byBlanks > cells.count()) || cells.count() == 1;
+        return byBlanks == cells.count()
+                || cells.count() == 1
+                || (numbers && byBlanks > cells.count());
     }
 
     private boolean beginsWithNumber() {

@@ -21,4 +21,9 @@ public final class UnreadableListException extends IOException {
     public UnreadableListException(String where, String found, String expected, String advice) {
         super(where + ": " + found + "; expected " + expected + ". " + advice);
     }
+
+    /** Passes on what is wrong with the file as such. */
+    UnreadableListException(UnreadableSpectrumException cause) {
+        super(cause.getMessage(), cause);
+    }
 }

@@ -1,0 +1,223 @@
+package emberline.read;
+
+import emberline.spectrum.Candidate;
+import emberline.spectrum.Medium;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.HashMap;
+import java.util.HashSet;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+
+/**
+ * Reads a candidate list: a table with a row for each object, told by content (CSV separated by
+ * commas, semicolons or tabs; ECSV; VOTable; FITS table; each also packed by gzip).
+ *
+ * <p>The columns {@code name} and {@code spectrum} must be there (in any case); {@code spectrum}
+ * holds paths relative to the folder of the list, several joined by {@code ;}. Known beside them
+ * are medium, resolution, ra_deg, dec_deg, parallax_mas, pmra_masyr, pmdec_masyr, rv_kms, j_mag,
+ * h_mag, k_mag, w1_mag, w2_mag (most with a column of the same name and {@code _err}), known_type,
+ * known_gravity and known_kind. Other columns are kept as they are. Every row of the list becomes a
+ * candidate; what makes one unusable is said beside it. Has no state; one reader may serve many
+ * threads.
+ */
+public final class CandidateListReader {
+
+    private static final Set<String> POSITIVE_COLUMNS = Set.of("resolution");
+
+    private static final Set<String> NUMBER_COLUMNS =
+            Set.of(
+                    "resolution",
+                    "ra_deg",
+                    "dec_deg",
+                    "parallax_mas",
+                    "parallax_mas_err",
+                    "pmra_masyr",
+                    "pmra_masyr_err",
+                    "pmdec_masyr",
+                    "pmdec_masyr_err",
+                    "rv_kms",
+                    "rv_kms_err",
+                    "j_mag",
+                    "j_mag_err",
+                    "h_mag",
+                    "h_mag_err",
+                    "k_mag",
+                    "k_mag_err",
+                    "w1_mag",
+                    "w1_mag_err",
+                    "w2_mag",
+                    "w2_mag_err");
+
+    private static final Set<String> TEXT_COLUMNS =
+            Set.of("name", "spectrum", "medium", "known_type", "known_gravity", "known_kind");
+
+    /** Words that stand for "no value" in a column of numbers. */
+    private static final Set<String> NO_VALUE = Set.of("nan", "null", "none", "n/a", "--", "-");
+
+    /**
+     * Reads a list.
+     *
+     * @param list path of the list
+     * @return every row of it
+     * @throws UnreadableListException if the file is missing, unreadable or no table, has no column
+     *     {@code name} or {@code spectrum}, or has no rows; its message says what to do
+     */
+    public CandidateList read(Path list) throws UnreadableListException {
+        ListTable table;
+        String name;
+        try {
+            FileContent content = FileContent.load(list);
+            name = content.name();
+            table = ListTableReader.read(content);
+        } catch (UnreadableSpectrumException e) {
+            throw new UnreadableListException(e);
+        }
+        List<String> keys = table.columns().stream().map(CandidateListReader::key).toList();
+        requireColumns(name, keys, table.columns());
+        if (table.rows().isEmpty()) {
+            throw new UnreadableListException(
+                    name, "no rows below the names", "one row for each object", "Add the objects.");
+        }
+        Map<String, Integer> rowOfName = new HashMap<>();
+        List<ListedCandidate> rows = new ArrayList<>();
+        for (int i = 0; i < table.rows().size(); i++) {
+            rows.add(listed(keys, table.rows().get(i), i + 1, rowOfName));
+        }
+        return new CandidateList(list, keys, rows);
+    }
+
+    /** The known name of a column whatever its case; other names as they are. */
+    private static String key(String column) {
+        String lower = column.toLowerCase(Locale.ROOT).trim();
+        return NUMBER_COLUMNS.contains(lower) || TEXT_COLUMNS.contains(lower) ? lower : column;
+    }
+
+    private static void requireColumns(String name, List<String> keys, List<String> columns)
+            throws UnreadableListException {
+        for (String needed : new String[] {"name", "spectrum"}) {
+            if (!keys.contains(needed)) {
+                throw new UnreadableListException(
+                        name,
+                        columns.isEmpty()
+                                ? "no line of column names"
+                                : "no column '" + needed + "' among " + shortened(columns),
+                        "the columns name and spectrum",
+                        "Name the columns in the first line, separated by commas.");
+            }
+        }
+        Set<String> seen = new HashSet<>();
+        for (String key : keys) {
+            if (!key.isEmpty() && !seen.add(key)) {
+                throw new UnreadableListException(
+                        name,
+                        "the column '" + key + "' stands twice",
+                        "every column once",
+                        "Rename or remove one of the two.");
+            }
+        }
+    }
+
+    private static String shortened(List<String> columns) {
+        String text = String.join(", ", columns);
+        return text.length() > 200 ? text.substring(0, 200) + "..." : text;
+    }
+
+    private static ListedCandidate listed(
+            List<String> keys, List<String> cells, int row, Map<String, Integer> rowOfName) {
+        Map<String, String> byColumn = new LinkedHashMap<>();
+        for (int i = 0; i < keys.size(); i++) {
+            byColumn.put(keys.get(i), i < cells.size() ? cells.get(i) : "");
+        }
+        String written = byColumn.get("name").trim();
+        String name = written.isEmpty() ? "row " + row : written;
+        List<String> spectra =
+                Arrays.stream(byColumn.get("spectrum").split(";", -1))
+                        .map(String::trim)
+                        .filter(path -> !path.isEmpty())
+                        .toList();
+        Candidate candidate = new Candidate(name, row, spectra, byColumn);
+        Optional<String> problem = problem(candidate, keys.size(), cells.size(), written);
+        Integer first = rowOfName.putIfAbsent(name.toLowerCase(Locale.ROOT), row);
+        if (first != null && problem.isEmpty()) {
+            problem =
+                    Optional.of(
+                            at("name", row)
+                                    + "'"
+                                    + name
+                                    + "' stands in row "
+                                    + first
+                                    + " already; expected every name once. Rename it, or join its"
+                                    + " spectra by ; in one row.");
+        }
+        return new ListedCandidate(candidate, problem);
+    }
+
+    private static Optional<String> problem(
+            Candidate candidate, int columns, int cells, String writtenName) {
+        int row = candidate.row();
+        if (cells != columns) {
+            return Optional.of(
+                    "row "
+                            + row
+                            + ": "
+                            + cells
+                            + (cells == 1 ? " cell" : " cells")
+                            + "; expected "
+                            + columns
+                            + " as there are columns. Complete the row, or put cells that hold the"
+                            + " separator in quotes.");
+        }
+        if (writtenName.isEmpty()) {
+            return Optional.of(
+                    at("name", row) + "no name; expected a name. Give the object a name.");
+        }
+        if (candidate.spectra().isEmpty()) {
+            return Optional.of(
+                    at("spectrum", row)
+                            + "no path; expected the path of a spectrum. Add it, relative to the"
+                            + " folder of the list.");
+        }
+        Optional<String> medium = candidate.text("medium");
+        if (medium.isPresent() && Medium.named(medium.get()).isEmpty()) {
+            return Optional.of(
+                    at("medium", row)
+                            + "'"
+                            + medium.get()
+                            + "'; expected air or vacuum. Correct the word or leave it empty.");
+        }
+        return badNumber(candidate);
+    }
+
+    private static Optional<String> badNumber(Candidate candidate) {
+        for (String column : candidate.cells().keySet()) {
+            Optional<String> text = candidate.text(column);
+            if (!NUMBER_COLUMNS.contains(column)
+                    || text.isEmpty()
+                    || NO_VALUE.contains(text.get().toLowerCase(Locale.ROOT))) {
+                continue;
+            }
+            boolean positive = POSITIVE_COLUMNS.contains(column);
+            boolean known = candidate.number(column).isPresent();
+            if (!known || (positive && !(candidate.number(column).getAsDouble() > 0))) {
+                return Optional.of(
+                        at(column, candidate.row())
+                                + "'"
+                                + text.get()
+                                + "'; expected a "
+                                + (positive ? "positive " : "")
+                                + "number. Correct it or leave it empty.");
+            }
+        }
+        return Optional.empty();
+    }
+
+    private static String at(String column, int row) {
+        return "row " + row + ", column " + column + ": ";
+    }
+}
