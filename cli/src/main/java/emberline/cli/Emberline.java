@@ -1,6 +1,5 @@
 package emberline.cli;
 
-import emberline.reports.page.HeadlessFonts;
 import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
 import java.util.logging.LogManager;
@@ -22,7 +21,6 @@ import picocli.CommandLine.Spec;
             SortCommand.class,
             MeasureCommand.class,
             PlaceCommand.class,
-            ReportCommand.class,
             CatalogueCommand.class
         },
         mixinStandardHelpOptions = true,
@@ -42,8 +40,8 @@ public final class Emberline implements Runnable {
     /** Runs a command line and ends the program with its exit code. */
     @SuppressWarnings("SystemExitOutsideMain")
     public static void main(String[] arguments) {
-        LogManager.getLogManager().reset(); // the table and FITS libraries log what we report better
-        HeadlessFonts.install();
+        LogManager.getLogManager()
+                .reset(); // the table and FITS libraries log what we report better
         PrintWriter out = new PrintWriter(System.out, false, StandardCharsets.UTF_8);
         PrintWriter err = new PrintWriter(System.err, true, StandardCharsets.UTF_8);
         int code = commandLine(out, err).execute(arguments);

@@ -16,8 +16,8 @@ final class FailureHandler implements IExecutionExceptionHandler {
             commandLine.getErr().println(failure.getMessage());
             return ExitCode.NOTHING_READ;
         }
-        if (failure instanceof IOException) {
-            commandLine.getErr().println(OutputTrouble.message((IOException) failure));
+        if (failure instanceof IOException trouble) {
+            commandLine.getErr().println(OutputTrouble.message(trouble));
             return ExitCode.NOT_WRITTEN;
         }
         throw failure;

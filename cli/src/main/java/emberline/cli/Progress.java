@@ -1,5 +1,6 @@
 package emberline.cli;
 
+import java.io.Console;
 import java.io.PrintWriter;
 import java.util.Locale;
 
@@ -31,9 +32,18 @@ final class Progress {
         this.total = total;
     }
 
-    /** Whether standard error is a terminal, as far as this can be told. */
+    /** Whether a person watches at a terminal, as far as this can be told. */
+    @SuppressWarnings("SystemConsoleNull") // from JDK 22 on the console itself is asked below
     static boolean isTerminal() {
-        return System.console() != null;
+        Console console = System.console();
+        if (console == null) {
+            return false;
+        }
+        try {
+            return (boolean) Console.class.getMethod("isTerminal").invoke(console);
+        } catch (ReflectiveOperationException e) {
+            return true; // before JDK 22 there is a console at a terminal only
+        }
     }
 
     /** Another object is done. */
@@ -78,7 +88,6 @@ final class Progress {
             err.println();
         }
         err.println(
-                String.format(
-                        Locale.ROOT, "%s in %.1f s", summary, seconds(System.nanoTime())));
+                String.format(Locale.ROOT, "%s in %.1f s", summary, seconds(System.nanoTime())));
     }
 }

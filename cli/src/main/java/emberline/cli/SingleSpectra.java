@@ -51,7 +51,8 @@ final class SingleSpectra {
     private static String name(Path file) {
         Path last = file.getFileName();
         String name = last == null ? file.toString() : last.toString();
-        String stem = name.replaceFirst("(?i)(\\.(fits?|csv|txt|dat|ecsv|vot|xml|tsv))?(\\.gz)?$", "");
+        String stem =
+                name.replaceFirst("(?i)(\\.(fits?|csv|txt|dat|ecsv|vot|xml|tsv))?(\\.gz)?$", "");
         return stem.isBlank() ? name : stem;
     }
 

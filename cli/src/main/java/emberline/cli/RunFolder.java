@@ -1,0 +1,79 @@
+package emberline.cli;
+
+import emberline.read.CandidateList;
+import emberline.reports.attach.AtomicFile;
+import emberline.reports.attach.ObjectJson;
+import emberline.reports.attach.ResultColumns;
+import emberline.reports.attach.ResultTable;
+import emberline.reports.attach.RunJson;
+import emberline.reports.attach.SafeFileNames;
+import emberline.survey.ObjectResult;
+import java.io.Closeable;
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+
+/**
+ * The output folder of a run over a list: {@code results.csv}, {@code objects/}, {@code reports/},
+ * {@code survey.html} and {@code run.json}. Files of one object may be written by several threads
+ * at once; everything else is written in the order of the list by one thread.
+ */
+final class RunFolder implements Closeable {
+
+    private final Path folder;
+    private final SafeFileNames names;
+    private final ResultTable table;
+    private final RunJson run;
+    private boolean complete;
+
+    /**
+     * Opens a folder, which is made if it does not stand there.
+     *
+     * @param folder where everything is written
+     * @param list the candidates
+     * @param run the record of the run
+     * @throws IOException if the folder cannot be made or written to
+     */
+    RunFolder(Path folder, CandidateList list, RunJson run) throws IOException {
+        this.folder = folder;
+        this.run = run;
+        this.names =
+                SafeFileNames.of(list.rows().stream().map(row -> row.candidate().name()).toList());
+        Files.createDirectories(folder.resolve("objects"));
+        this.table =
+                ResultTable.open(
+                        folder.resolve("results.csv"), ResultColumns.forList(list.columns()));
+    }
+
+    /** The stem of the files of an object. */
+    private String stem(ObjectResult result) {
+        return names.stem(result.candidate().row() - 1);
+    }
+
+    /** Writes the files of one object; several threads may do so at once. */
+    void writeObject(ObjectResult result) throws IOException {
+        AtomicFile.write(
+                folder.resolve("objects").resolve(stem(result) + ".json"), ObjectJson.text(result));
+    }
+
+    /** Adds an object to the tables; in the order of the list. */
+    void add(ObjectResult result) throws IOException {
+        table.write(result);
+        run.add(result);
+    }
+
+    /** Puts everything in its place. */
+    void complete() throws IOException {
+        complete = true;
+        table.close();
+        AtomicFile.write(folder.resolve("run.json"), run.text());
+    }
+
+    @Override
+    public void close() throws IOException {
+        if (!complete) {
+            table.abandon();
+            table.close();
+        }
+    }
+}

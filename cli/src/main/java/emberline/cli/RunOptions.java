@@ -1,0 +1,24 @@
+package emberline.cli;
+
+import emberline.survey.SurveySettings;
+import java.util.LinkedHashMap;
+import java.util.Map;
+
+/** The options of a run that bear on its results, for its record. */
+final class RunOptions {
+
+    private RunOptions() {}
+
+    static Map<String, String> of(SurveySettings settings, boolean reports) {
+        Map<String, String> options = new LinkedHashMap<>();
+        options.put(
+                "medium", settings.preparing().medium().map(medium -> medium.word()).orElse(""));
+        options.put(
+                "resolution",
+                settings.preparing().resolvingPower().isPresent()
+                        ? Double.toString(settings.preparing().resolvingPower().getAsDouble())
+                        : "");
+        options.put("reports", reports ? "pdf" : "none");
+        return options;
+    }
+}

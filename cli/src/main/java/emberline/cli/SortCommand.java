@@ -1,0 +1,122 @@
+package emberline.cli;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.measure.Measuring;
+import emberline.read.CandidateList;
+import emberline.read.CandidateListReader;
+import emberline.reports.attach.RunJson;
+import emberline.survey.Chain;
+import emberline.survey.ObjectResult;
+import emberline.survey.Status;
+import emberline.survey.SurveyRunner;
+import emberline.survey.SurveySettings;
+import java.io.IOException;
+import java.nio.file.Path;
+import java.util.EnumMap;
+import java.util.Locale;
+import java.util.Map;
+import java.util.concurrent.Callable;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+
+/** {@code sort}: takes a candidate list through the whole chain. */
+@Command(
+        name = "sort",
+        description = {
+            "Takes a list of candidates through the whole chain and writes a folder with"
+                    + " results.csv, objects/NAME.json, reports/NAME.pdf, survey.html and run.json.",
+            "The list needs the columns name and spectrum (path relative to the list; several"
+                    + " joined by ;)."
+        },
+        mixinStandardHelpOptions = true)
+final class SortCommand implements Callable<Integer> {
+
+    @Spec private CommandSpec spec;
+    @Mixin private SpectrumOptions spectrumOptions;
+    @Mixin private CatalogueOption catalogueOption;
+
+    @Parameters(
+            paramLabel = "LIST",
+            description = "The candidate list: CSV, ECSV, VOTable or FITS.")
+    private Path list;
+
+    @Option(
+            names = "--out",
+            paramLabel = "DIR",
+            required = true,
+            description = "Folder for the results; made if it does not stand there.")
+    private Path out;
+
+    @Option(
+            names = "--threads",
+            paramLabel = "N",
+            description = "Number of threads (default: one a processor).")
+    private int threads = Runtime.getRuntime().availableProcessors();
+
+    @Option(names = "--no-reports", description = "Write no PDF reports.")
+    private boolean noReports;
+
+    private final Map<Status, Long> counts = new EnumMap<>(Status.class);
+
+    @Override
+    public Integer call() throws IOException, InterruptedException {
+        SurveySettings settings = spectrumOptions.settings(threads);
+        FeatureCatalogue catalogue = catalogueOption.load();
+        CandidateList candidates = new CandidateListReader().read(list);
+        Chain chain = new Chain(catalogue, Measuring.withDefaults(), settings);
+        Progress progress =
+                new Progress(
+                        spec.commandLine().getErr(),
+                        Progress.isTerminal(),
+                        candidates.rows().size());
+        try (RunFolder folder = new RunFolder(out, candidates, record(settings))) {
+            new SurveyRunner(chain, settings.threads())
+                    .run(
+                            candidates,
+                            result -> {
+                                folder.writeObject(result);
+                                return result;
+                            },
+                            result -> {
+                                folder.add(result);
+                                tell(result, progress);
+                            });
+            folder.complete();
+        }
+        progress.finish(summary(candidates.rows().size()));
+        return ExitCode.of(candidates.rows().size(), counts.getOrDefault(Status.FAILED, 0L));
+    }
+
+    private void tell(ObjectResult result, Progress progress) {
+        counts.merge(result.status(), 1L, Long::sum);
+        if (result.status() == Status.FAILED) {
+            progress.say(result.candidate().name() + ": failed: " + result.reason());
+        }
+        progress.step();
+    }
+
+    private String summary(int objects) {
+        StringBuilder text = new StringBuilder(objects + (objects == 1 ? " object:" : " objects:"));
+        for (Status status : Status.values()) {
+            text.append(
+                    String.format(
+                            Locale.ROOT,
+                            " %d %s,",
+                            counts.getOrDefault(status, 0L),
+                            status.word()));
+        }
+        return text.append(" written to ").append(out).toString();
+    }
+
+    private RunJson record(SurveySettings settings) throws IOException {
+        return new RunJson(
+                ProgramVersion.number(),
+                RunOptions.of(settings, !noReports),
+                settings.seed(),
+                FileChecksum.sha256(list));
+    }
+}
