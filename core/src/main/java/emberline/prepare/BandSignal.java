@@ -55,6 +55,15 @@ public record BandSignal(Range range, double coverage, double medianSignalToNois
         public String words() {
             return words;
         }
+
+        /**
+         * The middle of the band.
+         *
+         * @return wavelength (micron); infinite for {@link #WHOLE}
+         */
+        public double middleMicron() {
+            return (lowMicron + highMicron) / 2;
+        }
     }
 
     /**

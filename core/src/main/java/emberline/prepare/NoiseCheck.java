@@ -19,6 +19,9 @@ final class NoiseCheck {
     /** Stated noise is remarked on where the scatter is below it by more than this factor. */
     private static final double TOO_LARGE = 3;
 
+    /** Factor within which scatter and correlation must agree on the noise. */
+    private static final double SAME_STORY = 1.5;
+
     private NoiseCheck() {}
 
     /**
@@ -66,17 +69,49 @@ final class NoiseCheck {
                                     ratio)));
             return new Settled(sigma, new NoiseModel(false, ratio, 0, 0), findings);
         }
+        return withCorrelation(flux, sigma, ratio, findings);
+    }
+
+    /**
+     * Noise whose sigma is taken as stated. Shared noise makes the pixels scatter less than their
+     * sigma; it is believed where the scatter and the correlation of neighbours tell the same.
+     */
+    private static Settled withCorrelation(
+            double[] flux, double[] sigma, double ratio, List<Finding> findings) {
+        NoiseCorrelation correlation = NoiseCorrelation.of(flux, sigma);
+        double agreement = ratio * correlation.scatterDeficit();
+        boolean shared =
+                correlation.lag1() > 0 && agreement < SAME_STORY && agreement > 1 / SAME_STORY;
+        if (shared) {
+            findings.add(correlated(correlation));
+            return new Settled(
+                    sigma,
+                    new NoiseModel(false, 1, correlation.lag1(), correlation.lag2()),
+                    findings);
+        }
         if (ratio < 1 / TOO_LARGE) {
             findings.add(
                     Finding.note(
                             "sigma-above-scatter",
                             String.format(
                                     Locale.ROOT,
-                                    "the pixels scatter %.2f times their stated sigma: correlated"
-                                            + " noise or a cautious sigma; left as it is",
+                                    "the pixels scatter %.2f times their stated sigma: a cautious"
+                                            + " sigma; left as it is",
                                     ratio)));
         }
         return new Settled(sigma, NoiseModel.INDEPENDENT, findings);
+    }
+
+    private static Finding correlated(NoiseCorrelation correlation) {
+        return Finding.note(
+                "noise-shared",
+                String.format(
+                        Locale.ROOT,
+                        "neighbouring pixels share their noise (correlation %.2f, next but one"
+                                + " %.2f), as in resampled spectra; this is carried into all"
+                                + " errors",
+                        correlation.lag1(),
+                        correlation.lag2()));
     }
 
     /** Whether most pixels have a positive sigma. */
@@ -92,14 +127,22 @@ final class NoiseCheck {
 
     private static Settled estimated(double[] flux, boolean stated) {
         String why = stated ? "the sigma column is mostly empty" : "the file states no sigma";
+        double[] sigma = PixelScatter.sigma(flux);
+        NoiseCorrelation correlation = NoiseCorrelation.of(flux, sigma);
+        for (int i = 0; i < sigma.length; i++) {
+            sigma[i] *= correlation.scatterDeficit();
+        }
+        List<Finding> findings = new ArrayList<>();
+        findings.add(
+                Finding.caution(
+                        "sigma-estimated",
+                        why
+                                + "; it was estimated from the pixel-to-pixel scatter and may be"
+                                + " wrong by a factor of two"));
+        if (correlation.lag1() > 0) {
+            findings.add(correlated(correlation));
+        }
         return new Settled(
-                PixelScatter.sigma(flux),
-                new NoiseModel(true, 1, 0, 0),
-                List.of(
-                        Finding.caution(
-                                "sigma-estimated",
-                                why
-                                        + "; it was estimated from the pixel-to-pixel scatter,"
-                                        + " which is too small where pixels share noise")));
+                sigma, new NoiseModel(true, 1, correlation.lag1(), correlation.lag2()), findings);
     }
 }

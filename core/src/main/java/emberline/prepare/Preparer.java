@@ -46,7 +46,9 @@ public final class Preparer {
         double[] flux = observation.fluxes();
         NoiseCheck.Settled noise = NoiseCheck.settle(observation, flux);
         findings.addAll(noise.findings());
-        Spectrum spectrum = Spectrum.of(wavelengths, flux, noise.sigma());
+        double[] sigma = noise.sigma();
+        stated.extinction().ifPresent(e -> deredden(wavelengths, flux, sigma, e, findings));
+        Spectrum spectrum = Spectrum.of(wavelengths, flux, sigma);
         ResolvingPower resolvingPower = resolvingPower(observation, stated, spectrum, findings);
         return new PreparedSpectrum(spectrum, resolvingPower, noise.model(), findings);
     }
@@ -93,6 +95,33 @@ public final class Preparer {
                                 Locale.ROOT,
                                 "shifted to rest by the stated radial velocity of %.1f km/s",
                                 velocity)));
+    }
+
+    private static void deredden(
+            double[] wavelengths,
+            double[] flux,
+            double[] sigma,
+            Preparing.Extinction extinction,
+            List<Finding> findings) {
+        ExtinctionLaw law = ExtinctionLaw.fitzpatrick1999(extinction.rv());
+        for (int i = 0; i < flux.length; i++) {
+            double factor =
+                    wavelengths[i] < ExtinctionLaw.SHORTEST_MICRON
+                            ? Double.NaN
+                            : Math.pow(
+                                    10, 0.4 * extinction.avMag() * law.relativeTo(wavelengths[i]));
+            flux[i] *= factor;
+            sigma[i] *= factor;
+        }
+        findings.add(
+                Finding.note(
+                        "dereddened",
+                        String.format(
+                                Locale.ROOT,
+                                "an extinction of A_V = %.2f mag was taken out (Fitzpatrick 1999,"
+                                        + " R_V = %.1f)",
+                                extinction.avMag(),
+                                extinction.rv())));
     }
 
     private static ResolvingPower resolvingPower(

@@ -11,12 +11,41 @@ import java.util.OptionalDouble;
  * @param resolvingPower resolving power, positive; empty to trust the file
  * @param radialVelocityKms radial velocity to take out (km/s, positive away from us); empty for
  *     none
+ * @param extinction interstellar extinction to take out; empty for none
  */
 public record Preparing(
-        Optional<Medium> medium, OptionalDouble resolvingPower, OptionalDouble radialVelocityKms) {
+        Optional<Medium> medium,
+        OptionalDouble resolvingPower,
+        OptionalDouble radialVelocityKms,
+        Optional<Extinction> extinction) {
 
     private static final Preparing NOTHING_STATED =
-            new Preparing(Optional.empty(), OptionalDouble.empty(), OptionalDouble.empty());
+            new Preparing(
+                    Optional.empty(),
+                    OptionalDouble.empty(),
+                    OptionalDouble.empty(),
+                    Optional.empty());
+
+    /**
+     * Interstellar extinction in front of an object, by the law of Fitzpatrick (1999).
+     *
+     * @param avMag extinction in V (mag), 0 to 100
+     * @param rv ratio of total to selective extinction, 2 to 6
+     */
+    public record Extinction(double avMag, double rv) {
+
+        /** Checks the ranges. */
+        public Extinction {
+            if (!(avMag >= 0 && avMag <= 100) || !(rv >= 2 && rv <= 6)) {
+                throw new IllegalArgumentException(
+                        "extinction A_V = "
+                                + avMag
+                                + " mag with R_V = "
+                                + rv
+                                + ": expected 0 to 100 and 2 to 6");
+            }
+        }
+    }
 
     /** Checks the numbers. */
     public Preparing {
@@ -53,7 +82,7 @@ public record Preparing(
      * @return new settings
      */
     public Preparing withMedium(Medium stated) {
-        return new Preparing(Optional.of(stated), resolvingPower, radialVelocityKms);
+        return new Preparing(Optional.of(stated), resolvingPower, radialVelocityKms, extinction);
     }
 
     /**
@@ -63,7 +92,7 @@ public record Preparing(
      * @return new settings
      */
     public Preparing withResolvingPower(double stated) {
-        return new Preparing(medium, OptionalDouble.of(stated), radialVelocityKms);
+        return new Preparing(medium, OptionalDouble.of(stated), radialVelocityKms, extinction);
     }
 
     /**
@@ -73,6 +102,16 @@ public record Preparing(
      * @return new settings
      */
     public Preparing withRadialVelocityKms(double stated) {
-        return new Preparing(medium, resolvingPower, OptionalDouble.of(stated));
+        return new Preparing(medium, resolvingPower, OptionalDouble.of(stated), extinction);
+    }
+
+    /**
+     * These settings with an extinction.
+     *
+     * @param stated extinction to take out
+     * @return new settings
+     */
+    public Preparing withExtinction(Extinction stated) {
+        return new Preparing(medium, resolvingPower, radialVelocityKms, Optional.of(stated));
     }
 }
