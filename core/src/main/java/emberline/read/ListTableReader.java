@@ -102,9 +102,15 @@ final class ListTableReader {
 
     private static StarTable fits(FileContent content)
             throws UnreadableSpectrumException, UnreadableListException {
-        boolean anyTable = FitsUnit.all(content).stream().anyMatch(FitsUnit::isTable);
-        if (!anyTable) {
+        List<FitsUnit> tables = FitsUnit.all(content).stream().filter(FitsUnit::isTable).toList();
+        if (tables.isEmpty()) {
             throw noTable(content.name(), "a FITS file without a table");
+        }
+        for (FitsUnit table : tables) {
+            FitsTableGuard.check(table);
+            if (FitsTableGuard.hasVariableArrays(table)) {
+                throw noTable(table.where(), "a FITS table with arrays of variable length");
+            }
         }
         try {
             return new FitsTableBuilder()
