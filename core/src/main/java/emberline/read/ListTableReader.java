@@ -78,6 +78,15 @@ final class ListTableReader {
                     "rows of cells, with each quote closed",
                     "Write the list again with a spreadsheet or a table library.");
         }
+        boolean swallowed =
+                rows.stream().flatMap(List::stream).anyMatch(cell -> cell.contains("\n"));
+        if (swallowed && body.chars().filter(c -> c == '"').count() % 2 == 1) {
+            throw new UnreadableListException(
+                    content.name(),
+                    "a quote that is never closed",
+                    "rows of cells, with each quote closed",
+                    "Close the quote; the rows after it would be lost.");
+        }
         return new ListTable(columns, rows);
     }
 
