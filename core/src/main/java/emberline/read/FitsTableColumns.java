@@ -44,6 +44,7 @@ final class FitsTableColumns implements TabularReader.Columns {
         if (!TabularReader.holdsSpectrum(labels)) {
             throw TabularReader.noSpectrum(unit.where(), labels);
         }
+        FitsTableGuard.check(unit);
         if (!(unit.data() instanceof TableData table) || table.getNRows() == 0) {
             throw new UnreadableSpectrumException(
                     unit.where(),

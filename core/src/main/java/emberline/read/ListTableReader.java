@@ -78,6 +78,15 @@ final class ListTableReader {
                     "rows of cells, with each quote closed",
                     "Write the list again with a spreadsheet or a table library.");
         }
+        boolean swallowed =
+                rows.stream().flatMap(List::stream).anyMatch(cell -> cell.contains("\n"));
+        if (swallowed && body.chars().filter(c -> c == '"').count() % 2 == 1) {
+            throw new UnreadableListException(
+                    content.name(),
+                    "a quote that is never closed",
+                    "rows of cells, with each quote closed",
+                    "Close the quote; the rows after it would be lost.");
+        }
         return new ListTable(columns, rows);
     }
 
@@ -102,9 +111,15 @@ final class ListTableReader {
 
     private static StarTable fits(FileContent content)
             throws UnreadableSpectrumException, UnreadableListException {
-        boolean anyTable = FitsUnit.all(content).stream().anyMatch(FitsUnit::isTable);
-        if (!anyTable) {
+        List<FitsUnit> tables = FitsUnit.all(content).stream().filter(FitsUnit::isTable).toList();
+        if (tables.isEmpty()) {
             throw noTable(content.name(), "a FITS file without a table");
+        }
+        for (FitsUnit table : tables) {
+            FitsTableGuard.check(table);
+            if (FitsTableGuard.hasVariableArrays(table)) {
+                throw noTable(table.where(), "a FITS table with arrays of variable length");
+            }
         }
         try {
             return new FitsTableBuilder()

@@ -15,7 +15,7 @@ import java.util.stream.IntStream;
  * orders that overlap a little. There the wavelength steps back at a few joints, and the grid is
  * regular on either side of each. Two equal wavelengths count as a joint only where the pixel
  * spacing changes at them (the end of one order meets the start of the next) or where the grid is
- * irregular all around (the overlap of two orders, sorted by wavelength); in an even grid they are
+ * irregular beside them (the overlap of two orders, sorted by wavelength); in an even grid they are
  * a mistake. A last wavelength repeated three times or more is padding and is cut.
  */
 final class PixelOrder {
@@ -216,19 +216,24 @@ final class PixelOrder {
         return step > 0 && other > 0 && Math.abs(step - other) <= within * Math.min(step, other);
     }
 
+    /** Whether, on one side of a step at least, two of the next five steps stand out. */
     private static boolean isIrregularAround(double[] grid, int i) {
-        int from = Math.max(1, i - NEIGHBOURHOOD);
-        int to = Math.min(grid.length - 1, i + NEIGHBOURHOOD);
-        double[] steps = new double[to - from + 1];
+        return isIrregular(grid, i - NEIGHBOURHOOD, i - 1)
+                || isIrregular(grid, i + 1, i + NEIGHBOURHOOD);
+    }
+
+    private static boolean isIrregular(double[] grid, int firstStep, int lastStep) {
+        int from = Math.max(1, firstStep);
+        int to = Math.min(grid.length - 1, lastStep);
+        double[] steps = new double[Math.max(0, to - from + 1)];
         for (int k = from; k <= to; k++) {
             steps[k - from] = grid[k] - grid[k - 1];
         }
         double[] sorted = steps.clone();
         Arrays.sort(sorted);
-        double middle = sorted[sorted.length / 2];
-        long odd =
-                Arrays.stream(steps).filter(s -> Math.abs(s - middle) > REGULAR * middle).count();
-        return odd * 2 >= steps.length - 1;
+        double middle = sorted.length == 0 ? 0 : sorted[sorted.length / 2];
+        return Arrays.stream(steps).filter(s -> Math.abs(s - middle) > REGULAR * middle).count()
+                >= 2;
     }
 
     /** Of pixels at one wavelength, the first whose flux is a number. */
