@@ -45,7 +45,7 @@ final class FitsTableColumns implements TabularReader.Columns {
             throw TabularReader.noSpectrum(unit.where(), labels);
         }
         FitsTableGuard.check(unit);
-        if (!(unit.data() instanceof TableData table) || table.getNRows() == 0) {
+        if (!(unit.table() instanceof TableData table) || table.getNRows() == 0) {
             throw new UnreadableSpectrumException(
                     unit.where(),
                     "a table without rows",

@@ -12,7 +12,6 @@ import nom.tam.fits.BinaryTable;
 import nom.tam.fits.Data;
 import nom.tam.fits.Header;
 import nom.tam.fits.HeaderCard;
-import nom.tam.fits.ImageData;
 import nom.tam.fits.PaddingException;
 import nom.tam.util.FitsInputStream;
 
@@ -156,13 +155,13 @@ final class FitsUnit implements Keywords {
         return (long) declared;
     }
 
-    /** Reads the data through the FITS library. */
-    Data data() throws UnreadableSpectrumException {
+    /** Reads the data of a table through the FITS library. */
+    Data table() throws UnreadableSpectrumException {
         byte[] bytes = content.bytes();
         try (FitsInputStream in =
                 new FitsInputStream(
                         new ByteArrayInputStream(bytes, dataStart, bytes.length - dataStart))) {
-            Data data = emptyData();
+            Data data = emptyTable();
             try {
                 data.read(in);
             } catch (PaddingException e) {
@@ -176,14 +175,11 @@ final class FitsUnit implements Keywords {
     }
 
     /**
-     * An empty data part after the header. The library's other ways read header and data in one go,
+     * An empty table after the header. The library's other ways read header and data in one go,
      * before any size can be checked; hence its constructors "for internal use".
      */
     @SuppressWarnings("deprecation")
-    private Data emptyData() {
-        if (!isTable()) {
-            return new ImageData(header);
-        }
+    private Data emptyTable() {
         return text("XTENSION").orElse("").equals("TABLE")
                 ? new AsciiTable(header)
                 : new BinaryTable(header);

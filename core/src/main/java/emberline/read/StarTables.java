@@ -4,6 +4,7 @@ import java.io.IOException;
 import java.util.ArrayList;
 import java.util.List;
 import uk.ac.starlink.ecsv.EcsvTableBuilder;
+import uk.ac.starlink.ecsv.MessagePolicy;
 import uk.ac.starlink.table.StarTable;
 import uk.ac.starlink.table.StoragePolicy;
 import uk.ac.starlink.table.TableSequence;
@@ -28,11 +29,7 @@ final class StarTables {
         }
         try {
             ByteArrayDataSource source = new ByteArrayDataSource("content", content.bytes());
-            return kind == ContentKind.VOTABLE
-                    ? votables(source)
-                    : List.of(
-                            new EcsvTableBuilder()
-                                    .makeStarTable(source, false, StoragePolicy.PREFER_MEMORY));
+            return kind == ContentKind.VOTABLE ? votables(source) : List.of(ecsv(source));
         } catch (IOException | RuntimeException e) {
             throw new UnreadableSpectrumException(
                     content.name(),
@@ -40,6 +37,12 @@ final class StarTables {
                     "a table after the standard",
                     "Write the table again with a table library.");
         }
+    }
+
+    private static StarTable ecsv(ByteArrayDataSource source) throws IOException {
+        EcsvTableBuilder builder = new EcsvTableBuilder();
+        builder.setColcheck(MessagePolicy.FAIL);
+        return builder.makeStarTable(source, false, StoragePolicy.PREFER_MEMORY);
     }
 
     private static List<StarTable> votables(ByteArrayDataSource source) throws IOException {

@@ -8,6 +8,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import emberline.spectrum.Finding;
 import emberline.spectrum.Medium;
 import emberline.spectrum.ResolvingPower;
+import java.io.ByteArrayInputStream;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.util.HashMap;
@@ -15,7 +16,9 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.zip.GZIPOutputStream;
+import nom.tam.fits.Fits;
 import nom.tam.fits.NullDataHDU;
+import nom.tam.util.ArrayFuncs;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -227,6 +230,29 @@ class FitsImageTest {
                                 1, 0.1, "CUNIT1", "um", "BSCALE", 0.5, "BZERO", 100.0, "BLANK",
                                 -32768));
         assertArrayEquals(new double[] {105, 110, Double.NaN, 120}, read(file).fluxes());
+    }
+
+    /** Numbers of every kind, against what the FITS library reads from the same bytes. */
+    @Test
+    void everyKindOfNumberIsReadAsTheFitsLibraryReadsIt() throws IOException {
+        Object[] images = {
+            new byte[] {0, 1, 127, -128, -1},
+            new short[] {0, 1, -1, Short.MAX_VALUE, Short.MIN_VALUE},
+            new int[] {0, 1, -1, Integer.MAX_VALUE, Integer.MIN_VALUE},
+            new long[] {0, 1, -1, Long.MAX_VALUE, Long.MIN_VALUE},
+            new float[] {0, -1.5f, Float.MIN_VALUE, Float.NaN, Float.MAX_VALUE},
+            new double[] {0, -1.5, Double.MIN_VALUE, Double.NaN, Double.MAX_VALUE},
+            new double[][][] {{{1, 2, 3}, {4, 5, 6}}, {{7, 8, 9}, {10, 11, 12}}},
+        };
+        for (Object image : images) {
+            byte[] file = FitsFiles.image(image, Map.of());
+            Object theirs;
+            try (Fits fits = new Fits(new ByteArrayInputStream(file))) {
+                theirs = ArrayFuncs.flatten(fits.getHDU(0).getKernel());
+            }
+            FitsUnit unit = FitsUnit.all(FileContent.of(file, "made.fits")).get(0);
+            assertArrayEquals(FitsImage.toDouble(theirs), FitsImage.of(unit).values());
+        }
     }
 
     @Test
