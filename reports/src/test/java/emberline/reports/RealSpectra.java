@@ -4,13 +4,17 @@ import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
 import emberline.spectrum.Spectrum;
 import emberline.survey.ObjectResult;
+import java.io.ByteArrayInputStream;
 import java.io.IOException;
+import java.io.InputStream;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.zip.GZIPInputStream;
 
 /** Real spectra from the folder beside the project, where there is one. */
 public final class RealSpectra {
@@ -40,18 +44,20 @@ public final class RealSpectra {
     /** An object of the list, taken through measuring and placing. */
     public static ObjectResult object(Map<String, String> row) throws IOException {
         List<double[]> pixels = new ArrayList<>();
-        for (String line : Files.readAllLines(FOLDER.resolve(row.get("spectrum")))) {
+        for (String line : text(FOLDER.resolve(row.get("spectrum"))).lines().toList()) {
             String[] cells = line.split(",", -1);
-            if (line.startsWith("#") || !Character.isDigit(line.charAt(0)) || cells.length < 2) {
+            boolean data = !line.isEmpty() && Character.isDigit(line.charAt(0));
+            if (!data || cells.length < 2) {
                 continue;
             }
             double flux = Double.parseDouble(cells[1]);
             double sigma =
                     cells.length > 2 && !cells[2].isBlank()
                             ? Double.parseDouble(cells[2])
-                            : Math.abs(flux) / 30;
+                            : Double.NaN;
             pixels.add(new double[] {Double.parseDouble(cells[0]), flux, sigma});
         }
+        estimateMissingSigma(pixels);
         Spectrum spectrum = Spectrum.of(column(pixels, 0), column(pixels, 1), column(pixels, 2));
         String resolution = row.get("resolution");
         return Samples.object(
@@ -59,6 +65,34 @@ public final class RealSpectra {
                 row,
                 List.of(spectrum),
                 resolution.isBlank() ? 100 : Double.parseDouble(resolution));
+    }
+
+    private static String text(Path file) throws IOException {
+        byte[] bytes = Files.readAllBytes(file);
+        if (bytes[0] == 0x1f && bytes[1] == (byte) 0x8b) {
+            try (InputStream stream = new GZIPInputStream(new ByteArrayInputStream(bytes))) {
+                bytes = stream.readAllBytes();
+            }
+        }
+        return new String(bytes, StandardCharsets.UTF_8);
+    }
+
+    /** Mean absolute difference to the mean of both neighbours over 41 pixels, roughly one sigma. */
+    private static void estimateMissingSigma(List<double[]> pixels) {
+        for (int i = 0; i < pixels.size(); i++) {
+            if (!Double.isNaN(pixels.get(i)[2])) {
+                continue;
+            }
+            double sum = 0;
+            int count = 0;
+            int to = Math.min(pixels.size() - 2, i + 20);
+            for (int k = Math.max(1, i - 20); k <= to; k++) {
+                double mean = (pixels.get(k - 1)[1] + pixels.get(k + 1)[1]) / 2;
+                sum += Math.abs(pixels.get(k)[1] - mean);
+                count++;
+            }
+            pixels.get(i)[2] = sum / count;
+        }
     }
 
     private static double[] column(List<double[]> rows, int column) {

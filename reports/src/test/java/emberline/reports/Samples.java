@@ -39,8 +39,8 @@ public final class Samples {
 
     /** Depths of the bands of an invented dwarf. */
     public record Bands(double water, double methane, double carbonMonoxide) {
-        /** About L0. */
-        public static final Bands L_DWARF = new Bands(0.45, 0, 0.25);
+        /** About L3. */
+        public static final Bands L_DWARF = new Bands(0.24, 0, 0.12);
 
         /** About T5. */
         public static final Bands T_DWARF = new Bands(1.8, 1.6, 0.1);

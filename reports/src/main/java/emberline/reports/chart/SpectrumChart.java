@@ -1,0 +1,200 @@
+package emberline.reports.chart;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.catalogue.TelluricRegion;
+import emberline.place.Placement;
+import emberline.place.TypeEstimate;
+import emberline.prepare.BandSignal;
+import emberline.spectrum.Spectrum;
+import emberline.survey.ObjectResult;
+import emberline.survey.SpectrumResult;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * The spectrum of an object with its one-sigma band; bands and lines labelled in rows above it;
+ * telluric regions marked at the bottom, the opaque ones over the full height; gaps hatched.
+ */
+public final class SpectrumChart {
+
+    /** Below this signal-to-noise a long spectrum is shown as means, with its pixels behind. */
+    private static final double NOISY = 12;
+
+    /** About so many means are shown of a noisy spectrum. */
+    private static final int MEANS = 260;
+
+    /** A gap is hatched when it is wider than this share of the axis. */
+    private static final double WIDE_GAP = 0.004;
+
+    /** Share of the axis that stays free at either end. */
+    private static final double MARGIN = 0.008;
+
+    private static final double STRIP_SHARE = 0.018;
+    private static final double LOWEST = -0.35;
+    private static final double HIGHEST = 1.7;
+
+    private final FeatureCatalogue catalogue;
+    private final ChartSize size;
+    private final TextWidth textWidth;
+
+    /**
+     * A builder of spectrum charts.
+     *
+     * @param catalogue bands, lines and telluric regions
+     * @param size the room inside the axes
+     * @param textWidth how wide labels are
+     */
+    public SpectrumChart(FeatureCatalogue catalogue, ChartSize size, TextWidth textWidth) {
+        this.catalogue = catalogue;
+        this.size = size;
+        this.textWidth = textWidth;
+    }
+
+    /**
+     * A chart with what must be said below it.
+     *
+     * @param chart the chart
+     * @param remark how the curve was made, in a sentence; empty where pixels are shown as they are
+     */
+    public record Drawn(Chart chart, String remark) {}
+
+    /**
+     * The chart of an object.
+     *
+     * @param result the result of an object with at least one spectrum
+     * @return the chart
+     * @throws IllegalArgumentException if there is no spectrum
+     */
+    public Drawn of(ObjectResult result) {
+        if (result.spectra().isEmpty()) {
+            throw new IllegalArgumentException(
+                    result.candidate().name() + " has no spectrum: expected at least one");
+        }
+        List<Spectrum> spectra =
+                result.spectra().stream().map(s -> s.prepared().spectrum()).toList();
+        double from = spectra.stream().mapToDouble(s -> s.lowEdgeMicron(0)).min().orElseThrow();
+        double to =
+                spectra.stream().mapToDouble(s -> s.highEdgeMicron(s.size() - 1)).max().orElseThrow();
+        double margin = MARGIN * (to - from);
+        double low = from - margin;
+        double high = to + margin;
+        List<Curve> curves = new ArrayList<>();
+        List<String> remarks = new ArrayList<>();
+        Heights heights = new Heights();
+        for (int i = 0; i < spectra.size(); i++) {
+            Optional<Spectrum> first = i == 0 ? Optional.empty() : Optional.of(spectra.get(0));
+            addSpectrum(spectra.get(i), first, low, high, curves, remarks, heights);
+        }
+        if (spectra.size() > 1) {
+            remarks.add("Several spectra are scaled to the first where they overlap.");
+        }
+        BandMarks marks = new BandMarks(catalogue, size, textWidth, low, high);
+        List<PlacedLabel> labels = marks.of(spectra, type(result), resolvingPower(result));
+        double rowHeight = size.labelSizePoint() + 4.5;
+        double room = labels.stream().mapToInt(l -> l.row() + 1).max().orElse(0) * rowHeight + 4;
+        double share = Math.min(0.45, room / size.heightPoint());
+        double top = heights.high + (heights.high - heights.low) * share / (1 - share);
+        List<Layer> layers = new ArrayList<>(telluric(low, high, 1 - share));
+        layers.addAll(gaps(spectra, low, high, 1 - share));
+        curves.forEach(curve -> layers.add(curve.upTo(heights.high)));
+        layers.add(new Layer.Labels(labels, rowHeight));
+        Axis x = new Axis("Wavelength", "µm, vacuum", low, high, Ticks.round(low, high, 10));
+        Axis y =
+                new Axis(
+                        "Normalised flux F\u03bb",
+                        "",
+                        heights.low,
+                        top,
+                        Ticks.round(heights.low, heights.high, 5));
+        return new Drawn(new Chart("", x, y, layers), String.join(" ", remarks));
+    }
+
+    /** The range of heights that is shown. */
+    private static final class Heights {
+        private double low = -0.03;
+        private double high = 1.05;
+
+        void include(double lowest, double highest) {
+            low = Math.max(LOWEST, Math.min(low, lowest));
+            high = Math.min(HIGHEST, Math.max(high, highest));
+        }
+    }
+
+    private void addSpectrum(
+            Spectrum spectrum,
+            Optional<Spectrum> scaleTo,
+            double low,
+            double high,
+            List<Curve> curves,
+            List<String> remarks,
+            Heights heights) {
+        int columns = (int) Math.round(1.2 * size.widthPoint());
+        Reduction pixels = Reduction.ofPixels(spectrum, low, high, columns);
+        int atOnce = Math.max(1, spectrum.size() / MEANS);
+        Reduction means = Reduction.ofMeans(spectrum, atOnce);
+        double peak = means.size() > 0 ? means.peak() : pixels.peak();
+        double factor = peak > 0 ? 1 / peak : 1;
+        if (scaleTo.isPresent()) {
+            factor = OverlapScale.of(spectrum, scaleTo.get(), factor);
+        }
+        boolean noisy =
+                BandSignal.best(spectrum).map(s -> s.medianSignalToNoise() < NOISY).orElse(false);
+        if (noisy && atOnce > 1 && means.size() > 0) {
+            curves.add(pixels.curve(factor, Tone.PIXELS, false));
+            curves.add(means.curve(factor, Tone.SPECTRUM, true));
+            remarks.add("Dark: means of " + atOnce + " pixels; light: single pixels.");
+        } else {
+            curves.add(pixels.curve(factor, Tone.SPECTRUM, true));
+        }
+        heights.include(
+                factor * pixels.quantile(0.004) - 0.02, factor * pixels.quantile(0.996) + 0.04);
+    }
+
+    private static Optional<TypeEstimate> type(ObjectResult result) {
+        return result.placement().flatMap(Placement::type);
+    }
+
+    private static double resolvingPower(ObjectResult result) {
+        double finest = 0;
+        for (SpectrumResult spectrum : result.spectra()) {
+            finest = Math.max(finest, spectrum.prepared().resolvingPower().value());
+        }
+        return finest;
+    }
+
+    private List<Layer> telluric(double low, double high, double topShare) {
+        List<Layer> regions = new ArrayList<>();
+        for (TelluricRegion region : catalogue.telluricRegions()) {
+            double from = Math.max(low, region.window().lowMicron());
+            double to = Math.min(high, region.window().highMicron());
+            if (!(from < to)) {
+                continue;
+            }
+            Tone tone =
+                    switch (region.strength()) {
+                        case OPAQUE -> Tone.TELLURIC_OPAQUE;
+                        case STRONG -> Tone.TELLURIC_STRONG;
+                        case WET -> Tone.TELLURIC_WET;
+                        case WEAK -> Tone.TELLURIC_WEAK;
+                    };
+            boolean opaque = tone == Tone.TELLURIC_OPAQUE;
+            if (opaque) {
+                regions.add(new Layer.Region(
+                                from, to, STRIP_SHARE, topShare, Tone.TELLURIC_WEAK, false));
+            }
+            regions.add(new Layer.Region(from, to, 0, STRIP_SHARE, tone, false));
+        }
+        return regions;
+    }
+
+    private static List<Layer> gaps(
+            List<Spectrum> spectra, double low, double high, double topShare) {
+        List<Layer> gaps = new ArrayList<>();
+        double widest = WIDE_GAP * (high - low);
+        for (double[] gap : CoveredRanges.gaps(spectra, widest)) {
+            gaps.add(new Layer.Region(gap[0], gap[1], STRIP_SHARE, topShare, Tone.GAP, true));
+        }
+        return gaps;
+    }
+}

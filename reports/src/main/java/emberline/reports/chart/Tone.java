@@ -1,0 +1,43 @@
+package emberline.reports.chart;
+
+/** What a mark means; a theme gives each its colour. */
+public enum Tone {
+    /** The spectrum. */
+    SPECTRUM,
+    /** Single pixels behind a binned spectrum. */
+    PIXELS,
+    /** The one-sigma band of a spectrum. */
+    SIGMA,
+    /** Where the atmosphere hardly lets light through. */
+    TELLURIC_OPAQUE,
+    /** Deep telluric bands. */
+    TELLURIC_STRONG,
+    /** Telluric bands that are deep only in wet weather. */
+    TELLURIC_WET,
+    /** Shallow telluric bands. */
+    TELLURIC_WEAK,
+    /** No data. */
+    GAP,
+    /** A molecular band. */
+    BAND,
+    /** An atomic line. */
+    LINE,
+    /** An estimate that entered the result. */
+    USED,
+    /** An estimate that is shown for comparison. */
+    SHOWN,
+    /** The result, or this object. */
+    RESULT,
+    /** The 68% interval of the result. */
+    RESULT_68,
+    /** The 95% interval of the result. */
+    RESULT_95,
+    /** Field gravity. */
+    FIELD,
+    /** Intermediate gravity. */
+    INTERMEDIATE,
+    /** Very low gravity. */
+    VERY_LOW,
+    /** A line that guides the eye. */
+    GUIDE
+}

@@ -1,0 +1,125 @@
+package emberline.reports.page;
+
+import emberline.place.GravityVerdict;
+import emberline.place.Placement;
+import emberline.place.RelationEstimate.Use;
+import emberline.place.TypeEstimate;
+import emberline.prepare.BandSignal;
+import emberline.reports.attach.Digits;
+import emberline.reports.attach.ResultColumns;
+import emberline.reports.attach.TypeText;
+import emberline.survey.ObjectResult;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/** The finding on an object in a sentence: what, how sure, from how much. */
+public final class FindingSentence {
+
+    private FindingSentence() {}
+
+    /**
+     * The finding.
+     *
+     * @param result the result of an object
+     * @return for instance "Spectral type L3.5 ± 0.7 by 6 published relations; gravity VL-G (P =
+     *     0.93) by 3 scores; S/N about 40 in J."; where something is not known it says so and why
+     */
+    public static String of(ObjectResult result) {
+        if (result.placement().isEmpty()) {
+            return "Nothing was measured: " + result.reason() + ".";
+        }
+        Placement placement = result.placement().get();
+        StringBuilder text = new StringBuilder();
+        if (placement.type().isPresent()) {
+            TypeEstimate type = placement.type().get();
+            long used = used(placement);
+            text.append("Spectral type ")
+                    .append(withError(type))
+                    .append(" by ")
+                    .append(count(used, "published relation"))
+                    .append("; ")
+                    .append(gravity(placement.gravity()));
+        } else {
+            text.append("No spectral type: ").append(placement.typeReason());
+        }
+        signal(result).ifPresent(signal -> text.append("; ").append(signal));
+        return text.append('.').toString();
+    }
+
+    /**
+     * A type with its one-sigma error.
+     *
+     * @param type an estimate
+     * @return for instance {@code L3.5 ± 0.7}
+     */
+    static String withError(TypeEstimate type) {
+        return TypeText.code(type) + " ± " + Digits.fixed(type.sigmaSubclass(), 1);
+    }
+
+    /**
+     * A probability with its sign: draws do not tell 0.999 from 1.
+     *
+     * @param share 0 to 1
+     * @return for instance {@code = 0.93} or {@code > 0.99}
+     */
+    static String probability(double share) {
+        return share >= 0.995
+                ? "> 0.99"
+                : share < 0.005 ? "< 0.01" : "= " + Digits.fixed(share, 2);
+    }
+
+    /** The number of relations that were combined. */
+    static long used(Placement placement) {
+        return placement.published().estimates().stream()
+                .filter(e -> e.use() == Use.COMBINED)
+                .count();
+    }
+
+    private static String gravity(GravityVerdict verdict) {
+        if (verdict.gravityClass().isEmpty()) {
+            return "gravity not judged (" + verdict.reason() + ")";
+        }
+        long scores = verdict.scores().stream().filter(s -> s.score().isPresent()).count();
+        OptionalDouble share = share(verdict);
+        return "gravity "
+                + verdict.gravityClass().get().label()
+                + (share.isPresent()
+                        ? " (P " + probability(share.getAsDouble()) + ")"
+                        : "")
+                + " by "
+                + count(scores, "published score");
+    }
+
+    /** The probability of the class that was given. */
+    static OptionalDouble share(GravityVerdict verdict) {
+        if (verdict.gravityClass().isEmpty()) {
+            return OptionalDouble.empty();
+        }
+        return switch (verdict.gravityClass().get()) {
+            case FLD_G -> verdict.pFieldGravity();
+            case INT_G -> verdict.pIntermediateGravity();
+            case VL_G -> verdict.pVeryLowGravity();
+        };
+    }
+
+    private static Optional<String> signal(ObjectResult result) {
+        return ResultColumns.leading(result)
+                .flatMap(s -> BandSignal.best(s.prepared().spectrum()))
+                .map(
+                        s ->
+                                String.format(
+                                        Locale.ROOT,
+                                        "S/N about %s per pixel in %s",
+                                        about(s.medianSignalToNoise()),
+                                        s.range().words()));
+    }
+
+    private static String about(double ratio) {
+        return ratio < 10 ? Digits.fixed(ratio, 1) : Digits.fixed(ratio, 0);
+    }
+
+    private static String count(long number, String what) {
+        return number + " " + what + (number == 1 ? "" : "s");
+    }
+}

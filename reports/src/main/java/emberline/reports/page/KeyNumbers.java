@@ -1,0 +1,185 @@
+package emberline.reports.page;
+
+import emberline.measure.Measurement.Measured;
+import emberline.place.GravityVerdict;
+import emberline.place.TypeEstimate;
+import emberline.prepare.BandSignal;
+import emberline.reports.attach.Digits;
+import emberline.reports.attach.ResultColumns;
+import emberline.spectrum.Candidate;
+import emberline.spectrum.Spectrum;
+import emberline.spectrum.SpectralType;
+import emberline.survey.ObjectResult;
+import emberline.survey.SpectrumResult;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.stream.Collectors;
+
+/** The numbers of the first page: a label and a value each. */
+final class KeyNumbers {
+
+    private static final List<String> MAGNITUDES =
+            List.of("i_mag", "z_mag", "y_mag", "j_mag", "h_mag", "k_mag", "w1_mag", "w2_mag");
+
+    private KeyNumbers() {}
+
+    /** A number with its label. */
+    record Entry(String label, String value) {}
+
+    static List<Entry> of(ObjectResult result) {
+        List<Entry> entries = new ArrayList<>();
+        result.placement()
+                .flatMap(p -> p.type())
+                .ifPresent(type -> addType(entries, type));
+        result.placement().ifPresent(p -> addGravity(entries, p.gravity()));
+        addSpectra(entries, result);
+        addListed(entries, result.candidate());
+        return entries;
+    }
+
+    private static void addType(List<Entry> entries, TypeEstimate type) {
+        entries.add(
+                new Entry(
+                        "Type number",
+                        Digits.type(type.typeNumber())
+                                + " ± "
+                                + Digits.type(type.sigmaSubclass())
+                                + "  (L0 = 10)"));
+        entries.add(new Entry("68% interval", interval(type.lo68(), type.hi68())));
+        entries.add(new Entry("95% interval", interval(type.lo95(), type.hi95())));
+    }
+
+    private static String interval(double low, double high) {
+        return fine(low) + " to " + fine(high);
+    }
+
+    private static String fine(double number) {
+        if (!(number >= -9)) {
+            return "before K";
+        }
+        return number < 40 ? new SpectralType(number).fineCode() : "after Y";
+    }
+
+    private static void addGravity(List<Entry> entries, GravityVerdict verdict) {
+        if (verdict.gravityClass().isEmpty()) {
+            entries.add(new Entry("Gravity", "not judged"));
+            return;
+        }
+        entries.add(
+                new Entry(
+                        "P(FLD, INT, VL)",
+                        share(verdict.pFieldGravity())
+                                + ", "
+                                + share(verdict.pIntermediateGravity())
+                                + ", "
+                                + share(verdict.pVeryLowGravity())));
+    }
+
+    private static String share(OptionalDouble share) {
+        return share.isPresent() ? Digits.fixed(share.getAsDouble(), 2) : "\u2013";
+    }
+
+    private static void addSpectra(List<Entry> entries, ObjectResult result) {
+        Optional<SpectrumResult> leading = ResultColumns.leading(result);
+        if (leading.isEmpty()) {
+            return;
+        }
+        Spectrum spectrum = leading.get().prepared().spectrum();
+        List<BandSignal> signals = BandSignal.of(spectrum);
+        boolean bands = signals.stream().anyMatch(s -> s.range() != BandSignal.Range.WHOLE);
+        String signal =
+                signals.stream()
+                        .filter(s -> !bands || s.range() != BandSignal.Range.WHOLE)
+                        .map(
+                                s ->
+                                        Digits.fixed(
+                                                        s.medianSignalToNoise(),
+                                                        s.medianSignalToNoise() < 10 ? 1 : 0)
+                                                + " ("
+                                                + s.range().words().replace("the optical", "opt")
+                                                + ")")
+                        .collect(Collectors.joining(", "));
+        entries.add(new Entry("S/N per pixel", signal.isEmpty() ? "not known" : signal));
+        double resolvingPower = leading.get().prepared().resolvingPower().value();
+        entries.add(
+                new Entry(
+                        "Resolving power",
+                        Digits.significant(Math.rint(resolvingPower))
+                                + ", "
+                                + ProvenanceText.basis(
+                                        leading.get().prepared().resolvingPower().basis())));
+        entries.add(
+                new Entry(
+                        "Wavelengths",
+                        String.format(
+                                Locale.ROOT,
+                                "%.2f to %.2f µm, %d pixels",
+                                spectrum.wavelengthMicron(0),
+                                spectrum.wavelengthMicron(spectrum.size() - 1),
+                                spectrum.size())));
+        if (result.spectra().size() > 1) {
+            entries.add(
+                    new Entry(
+                            "Spectra",
+                            result.spectra().size() + "; the above is of the best of them"));
+        }
+        result.best()
+                .ifPresent(
+                        best -> {
+                            long measured =
+                                    best.all().stream()
+                                            .filter(m -> m.result() instanceof Measured)
+                                            .count();
+                            entries.add(
+                                    new Entry(
+                                            "Features measured",
+                                            measured + " of " + best.all().size()));
+                        });
+    }
+
+    private static void addListed(List<Entry> entries, Candidate candidate) {
+        List<String> known = new ArrayList<>();
+        candidate.text("known_type").ifPresent(known::add);
+        candidate.text("known_gravity").ifPresent(known::add);
+        if (!known.isEmpty()) {
+            entries.add(new Entry("Listed as", String.join(", ", known)));
+        }
+        OptionalDouble ra = candidate.number("ra_deg");
+        OptionalDouble dec = candidate.number("dec_deg");
+        if (ra.isPresent() && dec.isPresent()) {
+            entries.add(
+                    new Entry(
+                            "RA, Dec (deg)",
+                            Digits.fixed(ra.getAsDouble(), 5)
+                                    + ", "
+                                    + Digits.fixed(dec.getAsDouble(), 5).replace('-', '\u2212')));
+        }
+        String magnitudes =
+                MAGNITUDES.stream()
+                        .filter(column -> candidate.number(column).isPresent())
+                        .map(
+                                column ->
+                                        column.replace("_mag", "").toUpperCase(Locale.ROOT)
+                                                + " "
+                                                + Digits.fixed(
+                                                        candidate.number(column).getAsDouble(), 2))
+                        .collect(Collectors.joining(", "));
+        if (!magnitudes.isEmpty()) {
+            entries.add(new Entry("Magnitudes", magnitudes));
+        }
+        OptionalDouble parallax = candidate.number("parallax_mas");
+        if (parallax.isPresent()) {
+            OptionalDouble error = candidate.number("parallax_mas_err");
+            entries.add(
+                    new Entry(
+                            "Parallax (mas)",
+                            Digits.fixed(parallax.getAsDouble(), 2)
+                                    + (error.isPresent()
+                                            ? " ± " + Digits.fixed(error.getAsDouble(), 2)
+                                            : "")));
+        }
+    }
+}
