@@ -1,5 +1,6 @@
 package emberline.cli;
 
+import emberline.reports.paint.HeadlessFonts;
 import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
 import java.util.logging.LogManager;
@@ -21,6 +22,7 @@ import picocli.CommandLine.Spec;
             SortCommand.class,
             MeasureCommand.class,
             PlaceCommand.class,
+            ReportCommand.class,
             CatalogueCommand.class
         },
         mixinStandardHelpOptions = true,
@@ -42,6 +44,7 @@ public final class Emberline implements Runnable {
     public static void main(String[] arguments) {
         LogManager.getLogManager()
                 .reset(); // the table and FITS libraries log what we report better
+        HeadlessFonts.prepare();
         PrintWriter out = new PrintWriter(System.out, false, StandardCharsets.UTF_8);
         PrintWriter err = new PrintWriter(System.err, true, StandardCharsets.UTF_8);
         int code = commandLine(out, err).execute(arguments);

@@ -7,11 +7,13 @@ import emberline.reports.attach.ResultColumns;
 import emberline.reports.attach.ResultTable;
 import emberline.reports.attach.RunJson;
 import emberline.reports.attach.SafeFileNames;
+import emberline.reports.page.PdfReport;
 import emberline.survey.ObjectResult;
 import java.io.Closeable;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Optional;
 
 /**
  * The output folder of a run over a list: {@code results.csv}, {@code objects/}, {@code reports/},
@@ -24,6 +26,7 @@ final class RunFolder implements Closeable {
     private final SafeFileNames names;
     private final ResultTable table;
     private final RunJson run;
+    private final Optional<ReportWriter> reports;
     private boolean complete;
 
     /**
@@ -32,14 +35,20 @@ final class RunFolder implements Closeable {
      * @param folder where everything is written
      * @param list the candidates
      * @param run the record of the run
+     * @param pdf writes the reports; empty for none
      * @throws IOException if the folder cannot be made or written to
      */
-    RunFolder(Path folder, CandidateList list, RunJson run) throws IOException {
+    RunFolder(Path folder, CandidateList list, RunJson run, Optional<PdfReport> pdf)
+            throws IOException {
         this.folder = folder;
         this.run = run;
         this.names =
                 SafeFileNames.of(list.rows().stream().map(row -> row.candidate().name()).toList());
         Files.createDirectories(folder.resolve("objects"));
+        this.reports = pdf.map(writer -> new ReportWriter(writer, folder.resolve("reports")));
+        if (pdf.isPresent()) {
+            Files.createDirectories(folder.resolve("reports"));
+        }
         this.table =
                 ResultTable.open(
                         folder.resolve("results.csv"), ResultColumns.forList(list.columns()));
@@ -54,6 +63,9 @@ final class RunFolder implements Closeable {
     void writeObject(ObjectResult result) throws IOException {
         AtomicFile.write(
                 folder.resolve("objects").resolve(stem(result) + ".json"), ObjectJson.text(result));
+        if (reports.isPresent()) {
+            reports.get().write(result, stem(result));
+        }
     }
 
     /** Adds an object to the tables; in the order of the list. */

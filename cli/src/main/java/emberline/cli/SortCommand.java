@@ -5,6 +5,8 @@ import emberline.measure.Measuring;
 import emberline.read.CandidateList;
 import emberline.read.CandidateListReader;
 import emberline.reports.attach.RunJson;
+import emberline.reports.page.PdfReport;
+import emberline.reports.page.ReportSettings;
 import emberline.survey.Chain;
 import emberline.survey.ObjectResult;
 import emberline.survey.Status;
@@ -15,6 +17,7 @@ import java.nio.file.Path;
 import java.util.EnumMap;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Optional;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -73,7 +76,8 @@ final class SortCommand implements Callable<Integer> {
                         spec.commandLine().getErr(),
                         Progress.isTerminal(),
                         candidates.rows().size());
-        try (RunFolder folder = new RunFolder(out, candidates, record(settings))) {
+        try (RunFolder folder =
+                new RunFolder(out, candidates, record(settings), pdf(settings, catalogue))) {
             new SurveyRunner(chain, settings.threads())
                     .run(
                             candidates,
@@ -89,6 +93,15 @@ final class SortCommand implements Callable<Integer> {
         }
         progress.finish(summary(candidates.rows().size()));
         return ExitCode.of(candidates.rows().size(), counts.getOrDefault(Status.FAILED, 0L));
+    }
+
+    private Optional<PdfReport> pdf(SurveySettings settings, FeatureCatalogue catalogue) {
+        return noReports
+                ? Optional.empty()
+                : Optional.of(
+                        new PdfReport(
+                                ReportSettings.of(ProgramVersion.number(), settings.seed()),
+                                catalogue));
     }
 
     private void tell(ObjectResult result, Progress progress) {

@@ -33,7 +33,8 @@ final class Reduction {
                 continue;
             }
             int end = i + 1;
-            double until = low + width * (Math.floor((spectrum.wavelengthMicron(i) - low) / width) + 1);
+            double until =
+                    low + width * (Math.floor((spectrum.wavelengthMicron(i) - low) / width) + 1);
             while (end < spectrum.size()
                     && spectrum.isGood(end)
                     && spectrum.wavelengthMicron(end) < until
@@ -126,8 +127,7 @@ final class Reduction {
     }
 
     private void stop(double x) {
-        boolean stopped =
-                points.isEmpty() || !Double.isFinite(points.get(points.size() - 1)[1]);
+        boolean stopped = points.isEmpty() || !Double.isFinite(points.get(points.size() - 1)[1]);
         if (!stopped) {
             points.add(new double[] {x, Double.NaN, Double.NaN, Double.NaN});
         }

@@ -75,7 +75,10 @@ public final class SpectrumChart {
                 result.spectra().stream().map(s -> s.prepared().spectrum()).toList();
         double from = spectra.stream().mapToDouble(s -> s.lowEdgeMicron(0)).min().orElseThrow();
         double to =
-                spectra.stream().mapToDouble(s -> s.highEdgeMicron(s.size() - 1)).max().orElseThrow();
+                spectra.stream()
+                        .mapToDouble(s -> s.highEdgeMicron(s.size() - 1))
+                        .max()
+                        .orElseThrow();
         double margin = MARGIN * (to - from);
         double low = from - margin;
         double high = to + margin;
@@ -180,7 +183,8 @@ public final class SpectrumChart {
                     };
             boolean opaque = tone == Tone.TELLURIC_OPAQUE;
             if (opaque) {
-                regions.add(new Layer.Region(
+                regions.add(
+                        new Layer.Region(
                                 from, to, STRIP_SHARE, topShare, Tone.TELLURIC_WEAK, false));
             }
             regions.add(new Layer.Region(from, to, 0, STRIP_SHARE, tone, false));

@@ -53,7 +53,9 @@ final class DetailPages {
                 document.styles().finding().with(emberline.reports.paint.Face.SERIF_BOLD),
                 FirstPage.MARGIN,
                 baseline,
-                number == 1 ? "Measurements and provenance" : "Measurements and provenance, continued");
+                number == 1
+                        ? "Measurements and provenance"
+                        : "Measurements and provenance, continued");
         sheet.rule(
                 FirstPage.MARGIN,
                 paper.widthPoint() - FirstPage.MARGIN,
@@ -99,10 +101,7 @@ final class DetailPages {
     }
 
     private void features(
-            Flow flow,
-            List<FeatureMeasurement> measured,
-            Placement placement,
-            SourceList sources)
+            Flow flow, List<FeatureMeasurement> measured, Placement placement, SourceList sources)
             throws IOException {
         flow.heading("Measured features");
         flow.paragraph(
@@ -116,8 +115,7 @@ final class DetailPages {
         for (Band band : Band.values()) {
             measured.stream()
                     .filter(m -> m.feature().band() == band)
-                    .forEach(
-                            m -> byBand.computeIfAbsent(band, b -> new ArrayList<>()).add(m));
+                    .forEach(m -> byBand.computeIfAbsent(band, b -> new ArrayList<>()).add(m));
         }
         for (Map.Entry<Band, List<FeatureMeasurement>> group : byBand.entrySet()) {
             flow.subheading(bandWords(group.getKey()));
@@ -207,8 +205,7 @@ final class DetailPages {
         for (Map.Entry<Measurement.Why, List<String>> group : byReason.entrySet()) {
             List<String> symbols = group.getValue().stream().distinct().toList();
             String words = group.getKey().words();
-            String title =
-                    words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1);
+            String title = words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1);
             flow.paragraph(
                     styles.table(),
                     title
@@ -221,8 +218,7 @@ final class DetailPages {
         }
     }
 
-    private void relations(Flow flow, Placement placement, SourceList sources)
-            throws IOException {
+    private void relations(Flow flow, Placement placement, SourceList sources) throws IOException {
         flow.heading("Type relations");
         List<RelationEstimate> estimates = placement.published().estimates();
         if (placement.type().isPresent()) {
@@ -252,14 +248,9 @@ final class DetailPages {
     }
 
     private void relationGroup(
-            Flow flow,
-            String title,
-            Use use,
-            List<RelationEstimate> estimates,
-            SourceList sources)
+            Flow flow, String title, Use use, List<RelationEstimate> estimates, SourceList sources)
             throws IOException {
-        List<RelationEstimate> group =
-                estimates.stream().filter(e -> e.use() == use).toList();
+        List<RelationEstimate> group = estimates.stream().filter(e -> e.use() == use).toList();
         if (group.isEmpty()) {
             return;
         }
@@ -295,7 +286,9 @@ final class DetailPages {
     /** The index and the range in which its relation holds. */
     private static String outside(RelationEstimate estimate) {
         String index =
-                estimate.index().fold(v -> Digits.fixed(v.value(), 3), n -> "").replace('-', '\u2212');
+                estimate.index()
+                        .fold(v -> Digits.fixed(v.value(), 3), n -> "")
+                        .replace('-', '\u2212');
         OptionalDouble low = estimate.relation().validIndexMin();
         OptionalDouble high = estimate.relation().validIndexMax();
         String range =

@@ -62,8 +62,7 @@ final class FirstPage {
     void write(Sheet sheet, ObjectResult result) throws IOException {
         float y = head(sheet, result);
         List<String> limits =
-                document.lines()
-                        .wrap(styles.body(), LimitsText.of(result), width - 2 * BOX_PAD);
+                document.lines().wrap(styles.body(), LimitsText.of(result), width - 2 * BOX_PAD);
         float limitsTall =
                 styles.heading().leadingPoint()
                         + limits.size() * styles.body().leadingPoint()
@@ -148,7 +147,9 @@ final class FirstPage {
                         g ->
                                 g.label()
                                         + (share.isPresent()
-                                                ? "   P " + FindingSentence.probability(share.getAsDouble())
+                                                ? "   P "
+                                                        + FindingSentence.probability(
+                                                                share.getAsDouble())
                                                 : ""))
                 .orElse("gravity not judged");
     }
@@ -215,8 +216,7 @@ final class FirstPage {
                         .anyMatch(e -> e.use() == Use.COMBINED || e.use() == Use.SHOWN);
         sheet.text(styles.heading(), MARGIN, y + 7, "Type by published relations");
         if (any) {
-            Chart chart = PosteriorChart.of(
-                            placement.published(), catalogue, relationRows(result));
+            Chart chart = PosteriorChart.of(placement.published(), catalogue, relationRows(result));
             sheet.text(
                     styles.small(),
                     MARGIN + 112,
@@ -237,8 +237,7 @@ final class FirstPage {
         sheet.rule(left, MARGIN + width, y + 11, document.theme().rule(), 0.5f);
         float at = y + 20.5f;
         for (KeyNumbers.Entry entry : keys) {
-            sheet.text(
-                    styles.table().in(document.theme().quiet()), left, at, entry.label());
+            sheet.text(styles.table().in(document.theme().quiet()), left, at, entry.label());
             for (String line : valueLines(entry)) {
                 sheet.text(styles.table(), left + 68, at, line);
                 at += styles.table().leadingPoint();
@@ -305,8 +304,7 @@ final class FirstPage {
                 .orElse("");
     }
 
-    private void limits(Sheet sheet, List<String> lines, float top, float tall)
-            throws IOException {
+    private void limits(Sheet sheet, List<String> lines, float top, float tall) throws IOException {
         sheet.box(MARGIN, top, width, tall, BOX);
         float at = top + BOX_PAD + 6.5f;
         sheet.text(styles.heading(), MARGIN + BOX_PAD, at, "What this cannot tell");

@@ -1,0 +1,73 @@
+package emberline.cli;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.reports.attach.SafeFileNames;
+import emberline.reports.page.Paper;
+import emberline.reports.page.PdfReport;
+import emberline.reports.page.ReportSettings;
+import emberline.survey.ObjectResult;
+import emberline.survey.SurveySettings;
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.concurrent.Callable;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+
+/** {@code report}: writes the PDF report of spectra. */
+@Command(
+        name = "report",
+        description = "Writes a PDF report for each spectrum and prints the names of the files.",
+        mixinStandardHelpOptions = true)
+final class ReportCommand implements Callable<Integer> {
+
+    @Spec private CommandSpec spec;
+    @Mixin private SpectrumOptions spectrumOptions;
+    @Mixin private CatalogueOption catalogueOption;
+
+    @Parameters(paramLabel = "SPECTRUM", arity = "1..*", description = "Files of spectra.")
+    private List<Path> spectra;
+
+    @Option(
+            names = "--out",
+            paramLabel = "DIR",
+            required = true,
+            description = "Folder for the reports; made if it does not stand there.")
+    private Path out;
+
+    @Option(
+            names = "--paper",
+            paramLabel = "a4|letter",
+            defaultValue = "a4",
+            description = "Size of the pages (default ${DEFAULT-VALUE}).")
+    private Paper paper;
+
+    @Override
+    public Integer call() throws IOException {
+        SurveySettings settings = spectrumOptions.settings(1);
+        FeatureCatalogue catalogue = catalogueOption.load();
+        List<ObjectResult> results =
+                SingleSpectra.run(spectra, catalogue, settings, spec.commandLine().getErr());
+        PdfReport pdf =
+                new PdfReport(
+                        ReportSettings.of(ProgramVersion.number(), settings.seed())
+                                .withPaper(paper),
+                        catalogue);
+        Files.createDirectories(out);
+        ReportWriter writer = new ReportWriter(pdf, out);
+        SafeFileNames names =
+                SafeFileNames.of(results.stream().map(r -> r.candidate().name()).toList());
+        for (int k = 0; k < results.size(); k++) {
+            if (writer.write(results.get(k), names.stem(k))) {
+                spec.commandLine().getOut().println(out.resolve(names.stem(k) + ".pdf"));
+            }
+        }
+        spec.commandLine().getOut().flush();
+        return SingleSpectra.exitCode(results);
+    }
+}
