@@ -44,6 +44,7 @@ final class RunFolder implements Closeable {
         this.run = run;
         this.names =
                 SafeFileNames.of(list.rows().stream().map(row -> row.candidate().name()).toList());
+        Files.createDirectories(folder);
         Files.createDirectories(folder.resolve("objects"));
         this.reports = pdf.map(writer -> new ReportWriter(writer, folder.resolve("reports")));
         if (pdf.isPresent()) {

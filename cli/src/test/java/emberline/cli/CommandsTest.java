@@ -1,0 +1,118 @@
+package emberline.cli;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.io.IOException;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
+
+class CommandsTest {
+
+    @TempDir private Path folder;
+
+    private static Path demoSpectrum() throws IOException {
+        List<String> lines = Files.readAllLines(DemoRun.survey());
+        int column = List.of(lines.get(0).split(",")).indexOf("spectrum");
+        return DemoRun.survey().resolveSibling(lines.get(1).split(",", -1)[column]);
+    }
+
+    @ParameterizedTest
+    @ValueSource(strings = {"text", "csv", "json"})
+    void measurePrintsEveryFeature(String format) throws IOException {
+        CommandRun run = CommandRun.of("measure", demoSpectrum(), "--format", format);
+        assertEquals(ExitCode.DONE, run.code(), run.err());
+        assertTrue(run.out().contains("burgasser2006/h2o-j"), run.out());
+        if (format.equals("json")) {
+            assertTrue(run.out().startsWith("{"), run.out());
+        }
+    }
+
+    @Test
+    void placePrintsTypeAndGravity() throws IOException {
+        CommandRun run = CommandRun.of("place", demoSpectrum(), "--format", "csv");
+        assertEquals(ExitCode.DONE, run.code(), run.err());
+        List<String> lines = run.out().lines().toList();
+        assertEquals(2, lines.size());
+        assertTrue(lines.get(0).startsWith("name,"), lines.get(0));
+        assertTrue(lines.get(1).contains("M6"), lines.get(1));
+    }
+
+    @Test
+    void reportWritesAPdfAndPrintsItsName() throws IOException {
+        CommandRun run = CommandRun.of("report", demoSpectrum(), "--out", folder);
+        assertEquals(ExitCode.DONE, run.code(), run.err());
+        Path pdf = Path.of(run.out().strip());
+        assertEquals("%PDF", new String(Files.readAllBytes(pdf), 0, 4, StandardCharsets.US_ASCII));
+    }
+
+    @Test
+    void oneBadSpectrumDoesNotStopTheOthers() throws IOException {
+        Path bad = folder.resolve("bad.csv");
+        Files.writeString(bad, "");
+        CommandRun run = CommandRun.of("place", bad, demoSpectrum(), "--format", "csv");
+        assertEquals(ExitCode.SOME_FAILED, run.code());
+        assertEquals(3, run.out().lines().count());
+        assertTrue(run.err().contains("bad: failed: "), run.err());
+        assertEquals(ExitCode.NOTHING_READ, CommandRun.of("place", bad).code());
+    }
+
+    @Test
+    void catalogueListsAndFilters() {
+        CommandRun all = CommandRun.of("catalogue", "--format", "csv");
+        CommandRun water =
+                CommandRun.of("catalogue", "--band", "H", "--molecule", "H2O", "--format", "csv");
+        assertEquals(ExitCode.DONE, all.code());
+        assertTrue(all.out().lines().count() > 170);
+        assertTrue(water.out().lines().count() < 30);
+        assertTrue(water.out().contains("burgasser2006/h2o-h"));
+        assertTrue(!water.out().contains("ch4"));
+    }
+
+    @Test
+    void catalogueShowsOneDefinitionWithItsSource() {
+        CommandRun run = CommandRun.of("catalogue", "allers2013/ki_j");
+        assertEquals(ExitCode.DONE, run.code());
+        for (String word :
+                List.of("Allers", "from memory", "continuum_1", "vacuum", "scored from type 6")) {
+            assertTrue(run.out().contains(word), run.out());
+        }
+    }
+
+    @ParameterizedTest
+    @CsvSource({"h2o-x, as 'catalogue' lists them", "nowhere/tio5, perhaps reid1995/tio5"})
+    void anUnknownDefinitionIsExplained(String id, String words) {
+        CommandRun run = CommandRun.of("catalogue", id);
+        assertEquals(ExitCode.WRONG_USAGE, run.code());
+        assertTrue(run.err().contains(words), run.err());
+    }
+
+    @Test
+    void aBrokenCatalogueIsExplained() throws IOException {
+        Files.createDirectory(folder.resolve("features"));
+        Files.writeString(folder.resolve("features/mine2026.csv"), "id,nonsense\nx,y\n");
+        CommandRun run = CommandRun.of("catalogue", "--catalogue", folder);
+        assertEquals(ExitCode.WRONG_USAGE, run.code());
+        assertTrue(
+                run.err().contains("--catalogue") && run.err().contains("mine2026.csv"), run.err());
+    }
+
+    @Test
+    void versionAndHelpAreThere() {
+        assertTrue(CommandRun.of("--version").out().startsWith("emberline "));
+        for (String command : List.of("sort", "measure", "place", "report", "catalogue")) {
+            CommandRun help = CommandRun.of(command, "--help");
+            assertEquals(ExitCode.DONE, help.code());
+            assertTrue(help.out().contains("Usage: emberline " + command), help.out());
+        }
+        assertEquals(ExitCode.WRONG_USAGE, CommandRun.of().code());
+        assertEquals(ExitCode.WRONG_USAGE, CommandRun.of("place").code());
+    }
+}
