@@ -40,6 +40,7 @@ final class MeasureCommand implements Callable<Integer> {
                 SingleSpectra.run(
                         spectra,
                         catalogueOption.load(),
+                        spectrumOptions.measuring(),
                         spectrumOptions.settings(1),
                         spec.commandLine().getErr());
         spec.commandLine().getOut().print(MeasurementTable.print(results, format));

@@ -52,7 +52,12 @@ final class ReportCommand implements Callable<Integer> {
         SurveySettings settings = spectrumOptions.settings(1);
         FeatureCatalogue catalogue = catalogueOption.load();
         List<ObjectResult> results =
-                SingleSpectra.run(spectra, catalogue, settings, spec.commandLine().getErr());
+                SingleSpectra.run(
+                        spectra,
+                        catalogue,
+                        spectrumOptions.measuring(),
+                        settings,
+                        spec.commandLine().getErr());
         PdfReport pdf =
                 new PdfReport(
                         ReportSettings.of(ProgramVersion.number(), settings.seed())

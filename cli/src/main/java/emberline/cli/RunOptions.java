@@ -1,5 +1,6 @@
 package emberline.cli;
 
+import emberline.measure.Measuring;
 import emberline.survey.SurveySettings;
 import java.util.LinkedHashMap;
 import java.util.Map;
@@ -9,7 +10,7 @@ final class RunOptions {
 
     private RunOptions() {}
 
-    static Map<String, String> of(SurveySettings settings, boolean reports) {
+    static Map<String, String> of(SurveySettings settings, Measuring measuring, boolean reports) {
         Map<String, String> options = new LinkedHashMap<>();
         options.put(
                 "medium", settings.preparing().medium().map(medium -> medium.word()).orElse(""));
@@ -18,6 +19,19 @@ final class RunOptions {
                 settings.preparing().resolvingPower().isPresent()
                         ? Double.toString(settings.preparing().resolvingPower().getAsDouble())
                         : "");
+        options.put("site", measuring.site().word());
+        options.put(
+                "av_mag",
+                settings.preparing()
+                        .extinction()
+                        .map(extinction -> Double.toString(extinction.avMag()))
+                        .orElse(""));
+        options.put(
+                "r_v",
+                settings.preparing()
+                        .extinction()
+                        .map(extinction -> Double.toString(extinction.rv()))
+                        .orElse(""));
         options.put("reports", reports ? "pdf" : "none");
         return options;
     }

@@ -25,6 +25,7 @@ final class SingleSpectra {
      *
      * @param files the spectra; each becomes an object named after its file
      * @param catalogue what is measured
+     * @param measuring how it is measured
      * @param settings what holds for all
      * @param err where findings and failures go
      * @return a result for each file, in order
@@ -32,9 +33,10 @@ final class SingleSpectra {
     static List<ObjectResult> run(
             List<Path> files,
             FeatureCatalogue catalogue,
+            Measuring measuring,
             SurveySettings settings,
             PrintWriter err) {
-        Chain chain = new Chain(catalogue, Measuring.withDefaults(), settings);
+        Chain chain = new Chain(catalogue, measuring, settings);
         List<ObjectResult> results = new ArrayList<>();
         for (Path file : files) {
             String path = file.toString();

@@ -1,7 +1,6 @@
 package emberline.cli;
 
 import emberline.catalogue.FeatureCatalogue;
-import emberline.measure.Measuring;
 import emberline.read.CandidateList;
 import emberline.read.CandidateListReader;
 import emberline.reports.attach.RunJson;
@@ -70,7 +69,7 @@ final class SortCommand implements Callable<Integer> {
         SurveySettings settings = spectrumOptions.settings(threads);
         FeatureCatalogue catalogue = catalogueOption.load();
         CandidateList candidates = new CandidateListReader().read(list);
-        Chain chain = new Chain(catalogue, Measuring.withDefaults(), settings);
+        Chain chain = new Chain(catalogue, spectrumOptions.measuring(), settings);
         Progress progress =
                 new Progress(
                         spec.commandLine().getErr(),
@@ -128,7 +127,7 @@ final class SortCommand implements Callable<Integer> {
     private RunJson record(SurveySettings settings) throws IOException {
         return new RunJson(
                 ProgramVersion.number(),
-                RunOptions.of(settings, !noReports),
+                RunOptions.of(settings, spectrumOptions.measuring(), !noReports),
                 settings.seed(),
                 FileChecksum.sha256(list));
     }

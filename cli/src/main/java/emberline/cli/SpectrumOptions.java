@@ -1,5 +1,7 @@
 package emberline.cli;
 
+import emberline.measure.Measuring;
+import emberline.measure.Site;
 import emberline.prepare.Preparing;
 import emberline.spectrum.Medium;
 import emberline.survey.SurveySettings;
@@ -30,6 +32,28 @@ final class SpectrumOptions {
     private Double resolution;
 
     @Option(
+            names = "--site",
+            paramLabel = "space|dry|wet",
+            defaultValue = "dry",
+            description =
+                    "From where was observed: which telluric regions are flagged (default"
+                            + " ${DEFAULT-VALUE}).")
+    private Site site;
+
+    @Option(
+            names = "--av",
+            paramLabel = "MAG",
+            description = "Extinction in V to take out of every spectrum (mag).")
+    private Double avMag;
+
+    @Option(
+            names = "--rv",
+            paramLabel = "R_V",
+            defaultValue = "3.1",
+            description = "Ratio of total to selective extinction (default ${DEFAULT-VALUE}).")
+    private double rv;
+
+    @Option(
             names = "--seed",
             paramLabel = "N",
             defaultValue = "" + SurveySettings.DEFAULT_SEED,
@@ -52,6 +76,9 @@ final class SpectrumOptions {
             }
             stated = stated.withResolvingPower(resolution);
         }
+        if (avMag != null) {
+            stated = stated.withExtinction(extinction());
+        }
         if (threads < 1) {
             throw new ParameterException(
                     spec.commandLine(), "--threads: expected at least 1 but was " + threads);
@@ -60,5 +87,18 @@ final class SpectrumOptions {
                 .withThreads(threads)
                 .withSeed(seed)
                 .withPreparing(stated);
+    }
+
+    private Preparing.Extinction extinction() {
+        try {
+            return new Preparing.Extinction(avMag, rv);
+        } catch (IllegalArgumentException e) {
+            throw new ParameterException(spec.commandLine(), "--av, --rv: " + e.getMessage());
+        }
+    }
+
+    /** How features are measured. */
+    Measuring measuring() {
+        return Measuring.withDefaults().withSite(site);
     }
 }

@@ -9,6 +9,8 @@ import java.util.OptionalDouble;
  * @param feature the definition
  * @param result the value, or the reason why there is none
  * @param coverage least share of a window that good pixels cover, 0 to 1
+ * @param telluricShare largest share of a window that the atmosphere can spoil at the site of the
+ *     observation, 0 to 1
  * @param smoothedToResolvingPower the resolving power to which the spectrum was smoothed for this
  *     feature; empty where it was measured as it is
  */
@@ -16,4 +18,5 @@ public record FeatureMeasurement(
         Feature feature,
         Measurement result,
         double coverage,
+        double telluricShare,
         OptionalDouble smoothedToResolvingPower) {}

@@ -44,6 +44,8 @@ public sealed interface Measurement {
         NEGATIVE_CONTINUUM("continuum not positive"),
         /** The continuum is lost in the noise. */
         TOO_NOISY("too noisy"),
+        /** The atmosphere lets hardly any light through there. */
+        TELLURIC("saturated by tellurics"),
         /** A part of a composite feature was not measured. */
         PART_MISSING("part missing"),
         /** The value lies outside the range for which the definition holds. */

@@ -23,6 +23,7 @@ public final class Measurer {
 
     private final FeatureCatalogue catalogue;
     private final Measuring settings;
+    private final TelluricCheck tellurics;
     private final GridCache grids = new GridCache();
 
     /**
@@ -34,6 +35,7 @@ public final class Measurer {
     public Measurer(FeatureCatalogue catalogue, Measuring settings) {
         this.catalogue = catalogue;
         this.settings = settings;
+        this.tellurics = new TelluricCheck(catalogue.telluricRegions(), settings.site());
     }
 
     /**
@@ -74,7 +76,8 @@ public final class Measurer {
         Map<String, NotMeasured> refusals = new LinkedHashMap<>();
         List<Feature> applicable = new ArrayList<>();
         for (Feature feature : catalogue.features()) {
-            Optional<NotMeasured> refusal = applicability.refusal(feature);
+            Optional<NotMeasured> refusal =
+                    applicability.refusal(feature).or(() -> tellurics.refusal(feature));
             if (refusal.isPresent()) {
                 refusals.put(feature.id(), refusal.get());
             } else {
@@ -95,12 +98,17 @@ public final class Measurer {
         }
         if (refusal != null) {
             return new FeatureMeasurement(
-                    feature, refusal, 0, plan.applicability().smoothing(feature));
+                    feature,
+                    refusal,
+                    0,
+                    tellurics.share(feature),
+                    plan.applicability().smoothing(feature));
         }
         return new FeatureMeasurement(
                 feature,
                 evaluate(formula.orElseThrow(), measured),
                 measured.coverage(formula.orElseThrow()),
+                tellurics.share(feature),
                 plan.applicability().smoothing(feature));
     }
 

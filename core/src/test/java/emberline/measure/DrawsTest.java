@@ -59,7 +59,10 @@ class DrawsTest {
     }
 
     private static double[][] byPixels(PreparedSpectrum prepared, List<String> ids) {
-        Measurer measurer = new Measurer(FeatureCatalogue.standard(), new Measuring(0.8, 0));
+        Measurer measurer =
+                new Measurer(
+                        FeatureCatalogue.standard(),
+                        Measuring.withDefaults().withLeastContinuumSignal(0));
         Random random = new Random(7);
         double[][] values = new double[ids.size()][DRAWS];
         Spectrum spectrum = prepared.spectrum();
@@ -90,7 +93,9 @@ class DrawsTest {
         PreparedSpectrum prepared = spectrum(signalToNoise, NoiseModel.INDEPENDENT);
         double[][] pixels = byPixels(prepared, features);
         double[][] means =
-                new Measurer(FeatureCatalogue.standard(), new Measuring(0.8, 0))
+                new Measurer(
+                                FeatureCatalogue.standard(),
+                                Measuring.withDefaults().withLeastContinuumSignal(0))
                         .measure(prepared)
                         .draws(features, DRAWS, 11);
         for (int k = 0; k < features.size(); k++) {
