@@ -77,7 +77,9 @@ public final class RealSpectra {
         return new String(bytes, StandardCharsets.UTF_8);
     }
 
-    /** Mean absolute difference to the mean of both neighbours over 41 pixels, roughly one sigma. */
+    /**
+     * Mean absolute difference to the mean of both neighbours over 41 pixels, roughly one sigma.
+     */
     private static void estimateMissingSigma(List<double[]> pixels) {
         for (int i = 0; i < pixels.size(); i++) {
             if (!Double.isNaN(pixels.get(i)[2])) {

@@ -75,8 +75,7 @@ final class BandMarks {
             }
         }
         double unit = (high - low) / size.widthPoint();
-        LabelRows rows =
-                new LabelRows(low, high, GAP * size.labelSizePoint() * unit, MOST_ROWS);
+        LabelRows rows = new LabelRows(low, high, GAP * size.labelSizePoint() * unit, MOST_ROWS);
         return rows.place(wanted);
     }
 

@@ -15,8 +15,7 @@ public final class Curve implements Layer {
     private final Tone tone;
     private final double ceiling;
 
-    private Curve(
-            double[] x, double[] y, double[] low, double[] high, Tone tone, double ceiling) {
+    private Curve(double[] x, double[] y, double[] low, double[] high, Tone tone, double ceiling) {
         this.x = x;
         this.y = y;
         this.low = low;
@@ -52,7 +51,8 @@ public final class Curve implements Layer {
         if (y.length != x.length || low.length != x.length || high.length != x.length) {
             throw new IllegalArgumentException("curve: expected arrays of one length");
         }
-        return new Curve(x.clone(), y.clone(), low.clone(), high.clone(), tone, Double.POSITIVE_INFINITY);
+        return new Curve(
+                x.clone(), y.clone(), low.clone(), high.clone(), tone, Double.POSITIVE_INFINITY);
     }
 
     /**

@@ -60,13 +60,7 @@ public final class GravityChart {
         layers.add(area(veryLow, intermediate, below, Tone.INTERMEDIATE, "INT"));
         layers.add(area(end, veryLow, below, Tone.VERY_LOW, "VL"));
         layers.add(new Layer.Points(object, Tone.RESULT, true));
-        Axis x =
-                new Axis(
-                        "",
-                        "",
-                        FIRST_TYPE,
-                        LAST_TYPE,
-                        Ticks.types(FIRST_TYPE, LAST_TYPE, 6));
+        Axis x = new Axis("", "", FIRST_TYPE, LAST_TYPE, Ticks.types(FIRST_TYPE, LAST_TYPE, 6));
         Axis y = new Axis("", "", range[0], range[1], Ticks.round(range[0], range[1], 4));
         return new Chart(feature.symbol(), x, y, layers);
     }
@@ -106,8 +100,8 @@ public final class GravityChart {
         low -= room;
         high += room;
         for (Layer.Point point : object) {
-            low = Math.max(first, Math.min(low, point.y() - room / 2));
-            high = Math.min(last, Math.max(high, point.y() + room / 2));
+            low = Math.max(first, Math.min(low, point.yLow() - room / 4));
+            high = Math.min(last, Math.max(high, point.yHigh() + room / 4));
         }
         return new double[] {low, high};
     }

@@ -73,8 +73,7 @@ final class LabelRows {
             } else {
                 ends.set(row, to);
             }
-            placed.add(
-                    new PlacedLabel(wanted.text(), centre, wanted.spans(), row, wanted.tone()));
+            placed.add(new PlacedLabel(wanted.text(), centre, wanted.spans(), row, wanted.tone()));
         }
         return placed;
     }
@@ -88,8 +87,7 @@ final class LabelRows {
 
     private List<Wanted> join(List<Wanted> all) {
         List<Wanted> sorted = new ArrayList<>(all);
-        sorted.sort(
-                Comparator.comparing(Wanted::text).thenComparingDouble(Wanted::from));
+        sorted.sort(Comparator.comparing(Wanted::text).thenComparingDouble(Wanted::from));
         List<Wanted> joined = new ArrayList<>();
         for (Wanted next : sorted) {
             Wanted last = joined.isEmpty() ? null : joined.get(joined.size() - 1);

@@ -60,8 +60,7 @@ public sealed interface Layer
      * @param tone what it means
      * @param label a word inside it; may be empty
      */
-    record Area(List<Vertex> lower, List<Vertex> upper, Tone tone, String label)
-            implements Layer {
+    record Area(List<Vertex> lower, List<Vertex> upper, Tone tone, String label) implements Layer {
         /** Copies the lists. */
         public Area {
             lower = List.copyOf(lower);

@@ -47,8 +47,7 @@ public final class PosteriorChart {
         for (RelationEstimate estimate : shown) {
             TypeEstimate given = estimate.type().orElseThrow();
             Layer.Point point =
-                    new Layer.Point(
-                            given.typeNumber(), given.lo68(), given.hi68(), row, row, row);
+                    new Layer.Point(given.typeNumber(), given.lo68(), given.hi68(), row, row, row);
             (estimate.use() == Use.COMBINED ? used : aside).add(point);
             rows.add(new Tick(row, rowLabel(estimate, catalogue)));
             row--;
@@ -66,8 +65,18 @@ public final class PosteriorChart {
                                             1,
                                             Tone.RESULT_95,
                                             false));
-                            layers.add(interval(combined.lo95(), combined.hi95(), 0.12, Tone.RESULT_95));
-                            layers.add(interval(combined.lo68(), combined.hi68(), 0.28, Tone.RESULT_68));
+                            layers.add(
+                                    interval(
+                                            combined.lo95(),
+                                            combined.hi95(),
+                                            0.12,
+                                            Tone.RESULT_95));
+                            layers.add(
+                                    interval(
+                                            combined.lo68(),
+                                            combined.hi68(),
+                                            0.28,
+                                            Tone.RESULT_68));
                         });
         layers.add(new Layer.Points(aside, Tone.SHOWN, false));
         layers.add(new Layer.Points(used, Tone.USED, true));
@@ -82,7 +91,13 @@ public final class PosteriorChart {
                                             true));
                             rows.add(new Tick(0, "combined"));
                         });
-        Axis x = new Axis("Spectral type", "", range[0], range[1], Ticks.types(range[0], range[1], 9));
+        Axis x =
+                new Axis(
+                        "Spectral type",
+                        "",
+                        range[0],
+                        range[1],
+                        Ticks.types(range[0], range[1], 9));
         Axis y = new Axis("", "", -0.8, shown.size() + 0.8, rows);
         return new Chart("", x, y, layers);
     }

@@ -21,6 +21,9 @@ public final class SpectrumChart {
     /** Below this signal-to-noise a long spectrum is shown as means, with its pixels behind. */
     private static final double NOISY = 12;
 
+    /** Pixels of a good spectrum with more noise than this share of its peak are pale. */
+    private static final double SPOILT = 0.25;
+
     /** About so many means are shown of a noisy spectrum. */
     private static final int MEANS = 260;
 
@@ -75,7 +78,10 @@ public final class SpectrumChart {
                 result.spectra().stream().map(s -> s.prepared().spectrum()).toList();
         double from = spectra.stream().mapToDouble(s -> s.lowEdgeMicron(0)).min().orElseThrow();
         double to =
-                spectra.stream().mapToDouble(s -> s.highEdgeMicron(s.size() - 1)).max().orElseThrow();
+                spectra.stream()
+                        .mapToDouble(s -> s.highEdgeMicron(s.size() - 1))
+                        .max()
+                        .orElseThrow();
         double margin = MARGIN * (to - from);
         double low = from - margin;
         double high = to + margin;
@@ -144,7 +150,15 @@ public final class SpectrumChart {
             curves.add(pixels.curve(factor, Tone.PIXELS, false));
             curves.add(means.curve(factor, Tone.SPECTRUM, true));
             remarks.add("Dark: means of " + atOnce + " pixels; light: single pixels.");
+        } else if (noisy) {
+            curves.add(pixels.curve(factor, Tone.SPECTRUM, true));
         } else {
+            Reduction spoilt = pixels.bySigma(SPOILT / factor, true);
+            if (spoilt.size() > 0) {
+                curves.add(spoilt.curve(factor, Tone.PIXELS, false));
+                remarks.add("Light: pixels with a noise above a quarter of the peak.");
+            }
+            pixels = pixels.bySigma(SPOILT / factor, false);
             curves.add(pixels.curve(factor, Tone.SPECTRUM, true));
         }
         heights.include(
@@ -180,7 +194,8 @@ public final class SpectrumChart {
                     };
             boolean opaque = tone == Tone.TELLURIC_OPAQUE;
             if (opaque) {
-                regions.add(new Layer.Region(
+                regions.add(
+                        new Layer.Region(
                                 from, to, STRIP_SHARE, topShare, Tone.TELLURIC_WEAK, false));
             }
             regions.add(new Layer.Region(from, to, 0, STRIP_SHARE, tone, false));

@@ -27,8 +27,7 @@ final class Ticks {
     }
 
     private static String plain(BigDecimal value, double step) {
-        int decimals =
-                Math.max(0, BigDecimal.valueOf(step).stripTrailingZeros().scale());
+        int decimals = Math.max(0, BigDecimal.valueOf(step).stripTrailingZeros().scale());
         return value.setScale(decimals, java.math.RoundingMode.HALF_EVEN)
                 .toPlainString()
                 .replace('-', '\u2212');

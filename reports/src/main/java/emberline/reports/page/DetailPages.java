@@ -53,7 +53,9 @@ final class DetailPages {
                 document.styles().finding().with(emberline.reports.paint.Face.SERIF_BOLD),
                 FirstPage.MARGIN,
                 baseline,
-                number == 1 ? "Measurements and provenance" : "Measurements and provenance, continued");
+                number == 1
+                        ? "Measurements and provenance"
+                        : "Measurements and provenance, continued");
         sheet.rule(
                 FirstPage.MARGIN,
                 paper.widthPoint() - FirstPage.MARGIN,
@@ -69,18 +71,17 @@ final class DetailPages {
         List<FeatureMeasurement> measured =
                 all.stream().filter(m -> m.result() instanceof Measured).toList();
         SourceList sources = sources(measured, placement);
-        try (Flow flow = new Flow(document, settings.paper())) {
-            features(flow, measured, placement, sources);
-            notMeasured(flow, all);
-            relations(flow, placement, sources);
-            findings(flow, result);
-            provenance(flow, result);
-            flow.heading("Sources");
-            for (Source source : sources.sources()) {
-                flow.paragraph(styles.table(), sources.mark(source) + " " + source.cite(), 14);
-            }
-            return flow.bookmarks();
+        Flow flow = new Flow(document, settings.paper());
+        features(flow, measured, placement, sources);
+        notMeasured(flow, all);
+        relations(flow, placement, sources);
+        findings(flow, result);
+        provenance(flow, result);
+        flow.heading("Sources");
+        for (Source source : sources.sources()) {
+            flow.paragraph(styles.table(), sources.mark(source) + " " + source.cite(), 14);
         }
+        return flow.draw();
     }
 
     private SourceList sources(List<FeatureMeasurement> measured, Placement placement) {
@@ -99,11 +100,7 @@ final class DetailPages {
     }
 
     private void features(
-            Flow flow,
-            List<FeatureMeasurement> measured,
-            Placement placement,
-            SourceList sources)
-            throws IOException {
+            Flow flow, List<FeatureMeasurement> measured, Placement placement, SourceList sources) {
         flow.heading("Measured features");
         flow.paragraph(
                 styles.note(),
@@ -116,8 +113,7 @@ final class DetailPages {
         for (Band band : Band.values()) {
             measured.stream()
                     .filter(m -> m.feature().band() == band)
-                    .forEach(
-                            m -> byBand.computeIfAbsent(band, b -> new ArrayList<>()).add(m));
+                    .forEach(m -> byBand.computeIfAbsent(band, b -> new ArrayList<>()).add(m));
         }
         for (Map.Entry<Band, List<FeatureMeasurement>> group : byBand.entrySet()) {
             flow.subheading(bandWords(group.getKey()));
@@ -137,8 +133,7 @@ final class DetailPages {
     }
 
     private void feature(
-            Flow flow, FeatureMeasurement measurement, Placement placement, SourceList sources)
-            throws IOException {
+            Flow flow, FeatureMeasurement measurement, Placement placement, SourceList sources) {
         Feature feature = measurement.feature();
         Measured value = (Measured) measurement.result();
         String unit = feature.kind() == emberline.catalogue.Kind.BAND_INDEX ? "" : " Å";
@@ -192,7 +187,7 @@ final class DetailPages {
         return new Cell(style, text, end, 27, true);
     }
 
-    private void notMeasured(Flow flow, List<FeatureMeasurement> all) throws IOException {
+    private void notMeasured(Flow flow, List<FeatureMeasurement> all) {
         Map<Measurement.Why, List<String>> byReason = new LinkedHashMap<>();
         for (FeatureMeasurement measurement : all) {
             if (measurement.result() instanceof NotMeasured reason) {
@@ -207,8 +202,7 @@ final class DetailPages {
         for (Map.Entry<Measurement.Why, List<String>> group : byReason.entrySet()) {
             List<String> symbols = group.getValue().stream().distinct().toList();
             String words = group.getKey().words();
-            String title =
-                    words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1);
+            String title = words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1);
             flow.paragraph(
                     styles.table(),
                     title
@@ -221,8 +215,7 @@ final class DetailPages {
         }
     }
 
-    private void relations(Flow flow, Placement placement, SourceList sources)
-            throws IOException {
+    private void relations(Flow flow, Placement placement, SourceList sources) {
         flow.heading("Type relations");
         List<RelationEstimate> estimates = placement.published().estimates();
         if (placement.type().isPresent()) {
@@ -256,10 +249,8 @@ final class DetailPages {
             String title,
             Use use,
             List<RelationEstimate> estimates,
-            SourceList sources)
-            throws IOException {
-        List<RelationEstimate> group =
-                estimates.stream().filter(e -> e.use() == use).toList();
+            SourceList sources) {
+        List<RelationEstimate> group = estimates.stream().filter(e -> e.use() == use).toList();
         if (group.isEmpty()) {
             return;
         }
@@ -295,12 +286,14 @@ final class DetailPages {
     /** The index and the range in which its relation holds. */
     private static String outside(RelationEstimate estimate) {
         String index =
-                estimate.index().fold(v -> Digits.fixed(v.value(), 3), n -> "").replace('-', '\u2212');
+                estimate.index()
+                        .fold(v -> Digits.fixed(v.value(), 3), n -> "")
+                        .replace('-', '\u2212');
         OptionalDouble low = estimate.relation().validIndexMin();
         OptionalDouble high = estimate.relation().validIndexMax();
-        String range =
-                (low.isPresent() ? "from " + Digits.fixed(low.getAsDouble(), 3) : "")
-                        + (high.isPresent() ? " to " + Digits.fixed(high.getAsDouble(), 3) : "");
+        String from = low.isPresent() ? Digits.fixed(low.getAsDouble(), 3) : "";
+        String to = high.isPresent() ? "to " + Digits.fixed(high.getAsDouble(), 3) : "and above";
+        String range = from + " " + to;
         return index + ", valid " + range.strip().replace('-', '\u2212');
     }
 
@@ -311,7 +304,7 @@ final class DetailPages {
                 .orElse(estimate.relation().feature());
     }
 
-    private void findings(Flow flow, ObjectResult result) throws IOException {
+    private void findings(Flow flow, ObjectResult result) {
         flow.heading("Findings");
         if (result.findings().isEmpty()) {
             flow.paragraph(styles.table(), "None.", 0);
@@ -328,7 +321,7 @@ final class DetailPages {
         }
     }
 
-    private void provenance(Flow flow, ObjectResult result) throws IOException {
+    private void provenance(Flow flow, ObjectResult result) {
         flow.heading("Spectra and provenance");
         for (SpectrumResult spectrum : result.spectra()) {
             flow.paragraph(styles.table(), ProvenanceText.of(spectrum), 8);

@@ -64,9 +64,7 @@ public final class FindingSentence {
      * @return for instance {@code = 0.93} or {@code > 0.99}
      */
     static String probability(double share) {
-        return share >= 0.995
-                ? "> 0.99"
-                : share < 0.005 ? "< 0.01" : "= " + Digits.fixed(share, 2);
+        return share >= 0.995 ? "> 0.99" : share < 0.005 ? "< 0.01" : "= " + Digits.fixed(share, 2);
     }
 
     /** The number of relations that were combined. */
@@ -84,9 +82,7 @@ public final class FindingSentence {
         OptionalDouble share = share(verdict);
         return "gravity "
                 + verdict.gravityClass().get().label()
-                + (share.isPresent()
-                        ? " (P " + probability(share.getAsDouble()) + ")"
-                        : "")
+                + (share.isPresent() ? " (P " + probability(share.getAsDouble()) + ")" : "")
                 + " by "
                 + count(scores, "published score");
     }

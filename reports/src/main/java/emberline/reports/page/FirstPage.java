@@ -19,6 +19,7 @@ import emberline.survey.ObjectResult;
 import java.awt.Color;
 import java.io.IOException;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
 
@@ -40,6 +41,8 @@ final class FirstPage {
     private static final float RELATION_ROW = 9.2f;
     private static final float MOST_RELATION_ROW = 15;
     private static final int MOST_WARNINGS = 2;
+    private static final String TYPE_HEADING = "Type by published relations";
+    private static final String GRAVITY_HEADING = "Gravity by published scores";
     private static final Color BOX = new Color(0xF3F5F8);
     private static final Frame SPECTRUM_FRAME = new Frame(32, 4, 3, 24);
     private static final Frame RELATIONS_FRAME = new Frame(122, 2, 5, 24);
@@ -62,8 +65,7 @@ final class FirstPage {
     void write(Sheet sheet, ObjectResult result) throws IOException {
         float y = head(sheet, result);
         List<String> limits =
-                document.lines()
-                        .wrap(styles.body(), LimitsText.of(result), width - 2 * BOX_PAD);
+                document.lines().wrap(styles.body(), LimitsText.of(result), width - 2 * BOX_PAD);
         float limitsTall =
                 styles.heading().leadingPoint()
                         + limits.size() * styles.body().leadingPoint()
@@ -148,7 +150,9 @@ final class FirstPage {
                         g ->
                                 g.label()
                                         + (share.isPresent()
-                                                ? "   P " + FindingSentence.probability(share.getAsDouble())
+                                                ? "   P "
+                                                        + FindingSentence.probability(
+                                                                share.getAsDouble())
                                                 : ""))
                 .orElse("gravity not judged");
     }
@@ -213,13 +217,12 @@ final class FirstPage {
         boolean any =
                 placement.published().estimates().stream()
                         .anyMatch(e -> e.use() == Use.COMBINED || e.use() == Use.SHOWN);
-        sheet.text(styles.heading(), MARGIN, y + 7, "Type by published relations");
+        sheet.text(styles.heading(), MARGIN, y + 7, TYPE_HEADING);
         if (any) {
-            Chart chart = PosteriorChart.of(
-                            placement.published(), catalogue, relationRows(result));
+            Chart chart = PosteriorChart.of(placement.published(), catalogue, relationRows(result));
             sheet.text(
                     styles.small(),
-                    MARGIN + 112,
+                    MARGIN + document.lines().width(styles.heading(), TYPE_HEADING) + 8,
                     y + 7,
                     "filled: combined; open: shown for comparison; bars: 68% and 95%");
             sheet.chart(chart, MARGIN, y + 12, chartWidth, middleTall - 22, RELATIONS_FRAME);
@@ -227,7 +230,10 @@ final class FirstPage {
             float at = y + 20;
             for (String line :
                     document.lines()
-                            .wrap(styles.body(), placement.published().scheme(), chartWidth)) {
+                            .wrap(
+                                    styles.body(),
+                                    sentence(placement.published().scheme()),
+                                    chartWidth)) {
                 sheet.text(styles.body(), MARGIN, at, line);
                 at += styles.body().leadingPoint();
             }
@@ -237,14 +243,17 @@ final class FirstPage {
         sheet.rule(left, MARGIN + width, y + 11, document.theme().rule(), 0.5f);
         float at = y + 20.5f;
         for (KeyNumbers.Entry entry : keys) {
-            sheet.text(
-                    styles.table().in(document.theme().quiet()), left, at, entry.label());
+            sheet.text(styles.table().in(document.theme().quiet()), left, at, entry.label());
             for (String line : valueLines(entry)) {
                 sheet.text(styles.table(), left + 68, at, line);
                 at += styles.table().leadingPoint();
             }
             at += 1.6f;
         }
+    }
+
+    private static String sentence(String words) {
+        return words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1) + ".";
     }
 
     private static List<GravityScore> scores(ObjectResult result) {
@@ -260,7 +269,7 @@ final class FirstPage {
 
     private void gravity(Sheet sheet, ObjectResult result, float y) throws IOException {
         List<GravityScore> scores = scores(result);
-        sheet.text(styles.heading(), MARGIN, y + 7, "Gravity by published scores");
+        sheet.text(styles.heading(), MARGIN, y + 7, GRAVITY_HEADING);
         Placement placement = result.placement().orElseThrow();
         if (scores.isEmpty()) {
             String reason = "Not judged: " + placement.gravity().reason() + ".";
@@ -273,7 +282,7 @@ final class FirstPage {
         }
         sheet.text(
                 styles.small(),
-                MARGIN + 116,
+                MARGIN + document.lines().width(styles.heading(), GRAVITY_HEADING) + 8,
                 y + 7,
                 "index against type; areas from pale to dark: field, intermediate, very low gravity;"
                         + " limits of "
@@ -305,8 +314,7 @@ final class FirstPage {
                 .orElse("");
     }
 
-    private void limits(Sheet sheet, List<String> lines, float top, float tall)
-            throws IOException {
+    private void limits(Sheet sheet, List<String> lines, float top, float tall) throws IOException {
         sheet.box(MARGIN, top, width, tall, BOX);
         float at = top + BOX_PAD + 6.5f;
         sheet.text(styles.heading(), MARGIN + BOX_PAD, at, "What this cannot tell");

@@ -1,5 +1,6 @@
 package emberline.reports.page;
 
+import de.rototor.pdfbox.graphics2d.PdfBoxGraphics2DFontTextDrawer;
 import emberline.reports.paint.Face;
 import java.awt.Font;
 import java.io.IOException;
@@ -11,7 +12,6 @@ import org.apache.fontbox.ttf.TrueTypeFont;
 import org.apache.pdfbox.pdmodel.PDDocument;
 import org.apache.pdfbox.pdmodel.font.PDFont;
 import org.apache.pdfbox.pdmodel.font.PDType0Font;
-import de.rototor.pdfbox.graphics2d.PdfBoxGraphics2DFontTextDrawer;
 
 /** The fonts of one document: widths of texts, and which characters can be written. */
 final class FontSet {
@@ -40,7 +40,9 @@ final class FontSet {
         return drawer;
     }
 
-    /** The text as the font can write it: blanks for control characters, a box for what it lacks. */
+    /**
+     * The text as the font can write it: blanks for control characters, a box for what it lacks.
+     */
     String clean(Face face, String text) {
         CmapLookup known = glyphs.get(face);
         StringBuilder clean = new StringBuilder(text.length());

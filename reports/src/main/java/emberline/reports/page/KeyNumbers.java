@@ -7,8 +7,8 @@ import emberline.prepare.BandSignal;
 import emberline.reports.attach.Digits;
 import emberline.reports.attach.ResultColumns;
 import emberline.spectrum.Candidate;
-import emberline.spectrum.Spectrum;
 import emberline.spectrum.SpectralType;
+import emberline.spectrum.Spectrum;
 import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
 import java.util.ArrayList;
@@ -31,9 +31,7 @@ final class KeyNumbers {
 
     static List<Entry> of(ObjectResult result) {
         List<Entry> entries = new ArrayList<>();
-        result.placement()
-                .flatMap(p -> p.type())
-                .ifPresent(type -> addType(entries, type));
+        result.placement().flatMap(p -> p.type()).ifPresent(type -> addType(entries, type));
         result.placement().ifPresent(p -> addGravity(entries, p.gravity()));
         addSpectra(entries, result);
         addListed(entries, result.candidate());

@@ -38,7 +38,8 @@ final class PdfIdentity {
 
     static void stamp(PDDocument pdf, ObjectResult result, ReportSettings settings)
             throws IOException {
-        String title = result.candidate().name().replaceAll("\\p{Cntrl}", " ") + ": spectral report";
+        String title =
+                result.candidate().name().replaceAll("\\p{Cntrl}", " ") + ": spectral report";
         String program = "Emberline " + settings.programVersion();
         PDDocumentInformation information = new PDDocumentInformation();
         information.setTitle(title);

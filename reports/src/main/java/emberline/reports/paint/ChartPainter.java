@@ -37,8 +37,7 @@ public final class ChartPainter {
      * @param height full height (point)
      * @param frame the room around the data area
      */
-    public void paint(
-            Chart chart, Graphics2D graphics, double width, double height, Frame frame) {
+    public void paint(Chart chart, Graphics2D graphics, double width, double height, Frame frame) {
         XYPlot plot =
                 new XYPlot(
                         null,
@@ -69,8 +68,7 @@ public final class ChartPainter {
         if (!chart.title().isEmpty()) {
             graphics.setFont(fonts.title());
             graphics.setPaint(theme.ink());
-            graphics.drawString(
-                    chart.title(), (float) frame.left() + 1, (float) frame.top() - 3f);
+            graphics.drawString(chart.title(), (float) frame.left() + 1, (float) frame.top() - 3f);
         }
     }
 }

@@ -20,7 +20,11 @@ final class LabelDrawing {
     private LabelDrawing() {}
 
     static void draw(
-            Graphics2D graphics, Places places, Layer.Labels labels, Theme theme, ChartFonts fonts) {
+            Graphics2D graphics,
+            Places places,
+            Layer.Labels labels,
+            Theme theme,
+            ChartFonts fonts) {
         double top = places.area().getMinY() + 2;
         for (PlacedLabel label : labels.labels()) {
             double baseline =

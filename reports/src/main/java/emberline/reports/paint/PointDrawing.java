@@ -32,12 +32,18 @@ final class PointDrawing {
             if (point.xLow() < point.xHigh()) {
                 graphics.draw(
                         new Line2D.Double(
-                                places.clampedX(point.xLow()), y, places.clampedX(point.xHigh()), y));
+                                places.clampedX(point.xLow()),
+                                y,
+                                places.clampedX(point.xHigh()),
+                                y));
             }
             if (point.yLow() < point.yHigh()) {
                 graphics.draw(
                         new Line2D.Double(
-                                x, places.clampedY(point.yLow()), x, places.clampedY(point.yHigh())));
+                                x,
+                                places.clampedY(point.yLow()),
+                                x,
+                                places.clampedY(point.yHigh())));
             }
             Shape mark = mark(places, point, points.tone(), x, y);
             graphics.setPaint(points.filled() ? colour : Color.WHITE);
@@ -55,11 +61,13 @@ final class PointDrawing {
         boolean left = places.x(point.x()) < places.area().getMinX();
         if (above || below) {
             double turn = above ? 1 : -1;
-            return polygon(x, y, x - DIAMOND, y + turn * 2 * DIAMOND, x + DIAMOND, y + turn * 2 * DIAMOND);
+            return polygon(
+                    x, y, x - DIAMOND, y + turn * 2 * DIAMOND, x + DIAMOND, y + turn * 2 * DIAMOND);
         }
         if (left || right) {
             double turn = left ? 1 : -1;
-            return polygon(x, y, x + turn * 2 * DIAMOND, y - DIAMOND, x + turn * 2 * DIAMOND, y + DIAMOND);
+            return polygon(
+                    x, y, x + turn * 2 * DIAMOND, y - DIAMOND, x + turn * 2 * DIAMOND, y + DIAMOND);
         }
         if (tone == Tone.RESULT) {
             return polygon(x, y - DIAMOND, x + DIAMOND, y, x, y + DIAMOND, x - DIAMOND, y);
