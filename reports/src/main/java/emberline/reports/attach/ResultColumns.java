@@ -72,6 +72,9 @@ public final class ResultColumns {
      * @return its leading spectrum; empty where none was read
      */
     public static Optional<SpectrumResult> leading(ObjectResult result) {
+        if (result.spectra().size() == 1) {
+            return Optional.of(result.spectra().get(0));
+        }
         SpectrumResult leading = null;
         double highest = Double.NEGATIVE_INFINITY;
         for (SpectrumResult spectrum : result.spectra()) {

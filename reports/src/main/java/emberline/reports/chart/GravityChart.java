@@ -100,8 +100,8 @@ public final class GravityChart {
         low -= room;
         high += room;
         for (Layer.Point point : object) {
-            low = Math.max(first, Math.min(low, point.y() - room / 2));
-            high = Math.min(last, Math.max(high, point.y() + room / 2));
+            low = Math.max(first, Math.min(low, point.yLow() - room / 4));
+            high = Math.min(last, Math.max(high, point.yHigh() + room / 4));
         }
         return new double[] {low, high};
     }

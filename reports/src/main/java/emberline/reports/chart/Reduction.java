@@ -4,6 +4,7 @@ import emberline.spectrum.Spectrum;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.stream.DoubleStream;
 
 /**
  * A spectrum with no more points than a plot can show. Points: centre, flux, lower and upper end of
@@ -13,6 +14,9 @@ final class Reduction {
 
     /** A pixel further from its neighbour than this many spacings begins anew. */
     private static final double BREAK = 2.5;
+
+    /** Signal-to-noise from which a point counts for the peak. */
+    private static final double CLEAR = 5;
 
     private final List<double[]> points = new ArrayList<>();
 
@@ -142,28 +146,55 @@ final class Reduction {
                 : Curve.line(x, y, tone);
     }
 
+    /** The points whose sigma is at most, or with {@code above} more than, a limit; gaps else. */
+    Reduction bySigma(double limit, boolean above) {
+        Reduction part = new Reduction();
+        for (double[] point : points) {
+            boolean wanted = Double.isFinite(point[1]) && sigma(point) > limit == above;
+            if (wanted) {
+                part.points.add(point);
+            } else {
+                part.stop(point[0]);
+            }
+        }
+        return part;
+    }
+
+    private static double sigma(double[] point) {
+        return (point[3] - point[2]) / 2;
+    }
+
     private double[] column(int column, double factor) {
         return points.stream().mapToDouble(point -> point[column] * factor).toArray();
     }
 
+    private DoubleStream heights() {
+        return points.stream().mapToDouble(point -> point[1]).filter(Double::isFinite);
+    }
+
     /** A quantile of the finite heights; empty heights give zero. */
     double quantile(double share) {
-        double[] heights =
-                points.stream()
-                        .mapToDouble(point -> point[1])
-                        .filter(Double::isFinite)
-                        .sorted()
-                        .toArray();
+        double[] heights = heights().sorted().toArray();
         if (heights.length == 0) {
             return 0;
         }
         return heights[(int) Math.round(share * (heights.length - 1))];
     }
 
-    /** The highest running median of five heights: the peak of the spectrum without spikes. */
+    /**
+     * The highest running median of five heights: the peak of the spectrum without spikes. Points
+     * that do not stand out of their noise are left out, unless most do not.
+     */
     double peak() {
-        double[] heights =
-                points.stream().mapToDouble(p -> p[1]).filter(Double::isFinite).toArray();
+        double[] clear =
+                points.stream()
+                        .filter(p -> p[1] > CLEAR * sigma(p))
+                        .mapToDouble(p -> p[1])
+                        .toArray();
+        double[] heights = heights().toArray();
+        if (clear.length > heights.length / 4) {
+            heights = clear;
+        }
         if (heights.length < 5) {
             return Arrays.stream(heights).max().orElse(1);
         }

@@ -21,6 +21,9 @@ public final class SpectrumChart {
     /** Below this signal-to-noise a long spectrum is shown as means, with its pixels behind. */
     private static final double NOISY = 12;
 
+    /** Pixels of a good spectrum with more noise than this share of its peak are pale. */
+    private static final double SPOILT = 0.25;
+
     /** About so many means are shown of a noisy spectrum. */
     private static final int MEANS = 260;
 
@@ -147,7 +150,15 @@ public final class SpectrumChart {
             curves.add(pixels.curve(factor, Tone.PIXELS, false));
             curves.add(means.curve(factor, Tone.SPECTRUM, true));
             remarks.add("Dark: means of " + atOnce + " pixels; light: single pixels.");
+        } else if (noisy) {
+            curves.add(pixels.curve(factor, Tone.SPECTRUM, true));
         } else {
+            Reduction spoilt = pixels.bySigma(SPOILT / factor, true);
+            if (spoilt.size() > 0) {
+                curves.add(spoilt.curve(factor, Tone.PIXELS, false));
+                remarks.add("Light: pixels with a noise above a quarter of the peak.");
+            }
+            pixels = pixels.bySigma(SPOILT / factor, false);
             curves.add(pixels.curve(factor, Tone.SPECTRUM, true));
         }
         heights.include(

@@ -71,18 +71,17 @@ final class DetailPages {
         List<FeatureMeasurement> measured =
                 all.stream().filter(m -> m.result() instanceof Measured).toList();
         SourceList sources = sources(measured, placement);
-        try (Flow flow = new Flow(document, settings.paper())) {
-            features(flow, measured, placement, sources);
-            notMeasured(flow, all);
-            relations(flow, placement, sources);
-            findings(flow, result);
-            provenance(flow, result);
-            flow.heading("Sources");
-            for (Source source : sources.sources()) {
-                flow.paragraph(styles.table(), sources.mark(source) + " " + source.cite(), 14);
-            }
-            return flow.bookmarks();
+        Flow flow = new Flow(document, settings.paper());
+        features(flow, measured, placement, sources);
+        notMeasured(flow, all);
+        relations(flow, placement, sources);
+        findings(flow, result);
+        provenance(flow, result);
+        flow.heading("Sources");
+        for (Source source : sources.sources()) {
+            flow.paragraph(styles.table(), sources.mark(source) + " " + source.cite(), 14);
         }
+        return flow.draw();
     }
 
     private SourceList sources(List<FeatureMeasurement> measured, Placement placement) {
@@ -101,8 +100,7 @@ final class DetailPages {
     }
 
     private void features(
-            Flow flow, List<FeatureMeasurement> measured, Placement placement, SourceList sources)
-            throws IOException {
+            Flow flow, List<FeatureMeasurement> measured, Placement placement, SourceList sources) {
         flow.heading("Measured features");
         flow.paragraph(
                 styles.note(),
@@ -135,8 +133,7 @@ final class DetailPages {
     }
 
     private void feature(
-            Flow flow, FeatureMeasurement measurement, Placement placement, SourceList sources)
-            throws IOException {
+            Flow flow, FeatureMeasurement measurement, Placement placement, SourceList sources) {
         Feature feature = measurement.feature();
         Measured value = (Measured) measurement.result();
         String unit = feature.kind() == emberline.catalogue.Kind.BAND_INDEX ? "" : " Å";
@@ -190,7 +187,7 @@ final class DetailPages {
         return new Cell(style, text, end, 27, true);
     }
 
-    private void notMeasured(Flow flow, List<FeatureMeasurement> all) throws IOException {
+    private void notMeasured(Flow flow, List<FeatureMeasurement> all) {
         Map<Measurement.Why, List<String>> byReason = new LinkedHashMap<>();
         for (FeatureMeasurement measurement : all) {
             if (measurement.result() instanceof NotMeasured reason) {
@@ -218,7 +215,7 @@ final class DetailPages {
         }
     }
 
-    private void relations(Flow flow, Placement placement, SourceList sources) throws IOException {
+    private void relations(Flow flow, Placement placement, SourceList sources) {
         flow.heading("Type relations");
         List<RelationEstimate> estimates = placement.published().estimates();
         if (placement.type().isPresent()) {
@@ -248,8 +245,11 @@ final class DetailPages {
     }
 
     private void relationGroup(
-            Flow flow, String title, Use use, List<RelationEstimate> estimates, SourceList sources)
-            throws IOException {
+            Flow flow,
+            String title,
+            Use use,
+            List<RelationEstimate> estimates,
+            SourceList sources) {
         List<RelationEstimate> group = estimates.stream().filter(e -> e.use() == use).toList();
         if (group.isEmpty()) {
             return;
@@ -291,9 +291,9 @@ final class DetailPages {
                         .replace('-', '\u2212');
         OptionalDouble low = estimate.relation().validIndexMin();
         OptionalDouble high = estimate.relation().validIndexMax();
-        String range =
-                (low.isPresent() ? "from " + Digits.fixed(low.getAsDouble(), 3) : "")
-                        + (high.isPresent() ? " to " + Digits.fixed(high.getAsDouble(), 3) : "");
+        String from = low.isPresent() ? Digits.fixed(low.getAsDouble(), 3) : "";
+        String to = high.isPresent() ? "to " + Digits.fixed(high.getAsDouble(), 3) : "and above";
+        String range = from + " " + to;
         return index + ", valid " + range.strip().replace('-', '\u2212');
     }
 
@@ -304,7 +304,7 @@ final class DetailPages {
                 .orElse(estimate.relation().feature());
     }
 
-    private void findings(Flow flow, ObjectResult result) throws IOException {
+    private void findings(Flow flow, ObjectResult result) {
         flow.heading("Findings");
         if (result.findings().isEmpty()) {
             flow.paragraph(styles.table(), "None.", 0);
@@ -321,7 +321,7 @@ final class DetailPages {
         }
     }
 
-    private void provenance(Flow flow, ObjectResult result) throws IOException {
+    private void provenance(Flow flow, ObjectResult result) {
         flow.heading("Spectra and provenance");
         for (SpectrumResult spectrum : result.spectra()) {
             flow.paragraph(styles.table(), ProvenanceText.of(spectrum), 8);

@@ -19,6 +19,7 @@ import emberline.survey.ObjectResult;
 import java.awt.Color;
 import java.io.IOException;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
 
@@ -40,6 +41,8 @@ final class FirstPage {
     private static final float RELATION_ROW = 9.2f;
     private static final float MOST_RELATION_ROW = 15;
     private static final int MOST_WARNINGS = 2;
+    private static final String TYPE_HEADING = "Type by published relations";
+    private static final String GRAVITY_HEADING = "Gravity by published scores";
     private static final Color BOX = new Color(0xF3F5F8);
     private static final Frame SPECTRUM_FRAME = new Frame(32, 4, 3, 24);
     private static final Frame RELATIONS_FRAME = new Frame(122, 2, 5, 24);
@@ -214,12 +217,12 @@ final class FirstPage {
         boolean any =
                 placement.published().estimates().stream()
                         .anyMatch(e -> e.use() == Use.COMBINED || e.use() == Use.SHOWN);
-        sheet.text(styles.heading(), MARGIN, y + 7, "Type by published relations");
+        sheet.text(styles.heading(), MARGIN, y + 7, TYPE_HEADING);
         if (any) {
             Chart chart = PosteriorChart.of(placement.published(), catalogue, relationRows(result));
             sheet.text(
                     styles.small(),
-                    MARGIN + 112,
+                    MARGIN + document.lines().width(styles.heading(), TYPE_HEADING) + 8,
                     y + 7,
                     "filled: combined; open: shown for comparison; bars: 68% and 95%");
             sheet.chart(chart, MARGIN, y + 12, chartWidth, middleTall - 22, RELATIONS_FRAME);
@@ -227,7 +230,10 @@ final class FirstPage {
             float at = y + 20;
             for (String line :
                     document.lines()
-                            .wrap(styles.body(), placement.published().scheme(), chartWidth)) {
+                            .wrap(
+                                    styles.body(),
+                                    sentence(placement.published().scheme()),
+                                    chartWidth)) {
                 sheet.text(styles.body(), MARGIN, at, line);
                 at += styles.body().leadingPoint();
             }
@@ -246,6 +252,10 @@ final class FirstPage {
         }
     }
 
+    private static String sentence(String words) {
+        return words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1) + ".";
+    }
+
     private static List<GravityScore> scores(ObjectResult result) {
         return result.placement()
                 .filter(p -> p.gravity().gravityClass().isPresent())
@@ -259,7 +269,7 @@ final class FirstPage {
 
     private void gravity(Sheet sheet, ObjectResult result, float y) throws IOException {
         List<GravityScore> scores = scores(result);
-        sheet.text(styles.heading(), MARGIN, y + 7, "Gravity by published scores");
+        sheet.text(styles.heading(), MARGIN, y + 7, GRAVITY_HEADING);
         Placement placement = result.placement().orElseThrow();
         if (scores.isEmpty()) {
             String reason = "Not judged: " + placement.gravity().reason() + ".";
@@ -272,7 +282,7 @@ final class FirstPage {
         }
         sheet.text(
                 styles.small(),
-                MARGIN + 116,
+                MARGIN + document.lines().width(styles.heading(), GRAVITY_HEADING) + 8,
                 y + 7,
                 "index against type; areas from pale to dark: field, intermediate, very low gravity;"
                         + " limits of "

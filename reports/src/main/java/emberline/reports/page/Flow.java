@@ -1,27 +1,24 @@
 package emberline.reports.page;
 
-import java.io.Closeable;
 import java.io.IOException;
 import java.util.ArrayList;
 import java.util.List;
 
-/** Sets lines in columns: down a column, on to the next one, on to the next page. */
-final class Flow implements Closeable {
+/**
+ * Sets lines in columns: down a column, on to the next one, on to the next page; the columns of the
+ * last page are of about equal length. Lines are collected first and drawn at the end.
+ */
+final class Flow {
 
     private static final int COLUMNS = 3;
     private static final float GUTTER = 15;
     private static final float BEFORE_HEADING = 7;
-
-    /** A heading wants this much room below it in its column (point). */
-    private static final float WITH_HEADING = 30;
+    private static final float BALANCE_STEP = 4;
 
     private final ReportDocument document;
     private final Paper paper;
     private final float columnWidth;
-    private final List<Bookmark> bookmarks = new ArrayList<>();
-    private final List<Sheet> sheets = new ArrayList<>();
-    private int column = COLUMNS;
-    private float y;
+    private final List<Line> lines = new ArrayList<>();
 
     Flow(ReportDocument document, Paper paper) {
         this.document = document;
@@ -44,109 +41,168 @@ final class Flow implements Closeable {
      */
     record Cell(Style style, String text, float from, float width, boolean right) {}
 
+    /**
+     * A line of a column.
+     *
+     * @param cells its pieces
+     * @param before room above it, dropped at the top of a column (point)
+     * @param leading distance from the line above (point)
+     * @param after room below it (point)
+     * @param keep how many of the following lines stay in the same column
+     * @param heading whether it begins a section and has a rule below
+     */
+    private record Line(
+            List<Cell> cells, float before, float leading, float after, int keep, boolean heading) {
+
+        float tall(boolean first) {
+            return (first ? 0 : before) + leading + after;
+        }
+    }
+
     float columnWidth() {
         return columnWidth;
     }
 
-    List<Bookmark> bookmarks() {
-        return bookmarks;
-    }
-
-    void heading(String text) throws IOException {
+    void heading(String text) {
         Style style = document.styles().heading();
-        boolean first = column == COLUMNS || y <= top() + 1;
-        need(style.leadingPoint() + (first ? 0 : BEFORE_HEADING) + WITH_HEADING);
-        if (y > top() + 1) {
-            y += BEFORE_HEADING;
-        }
-        y += style.leadingPoint() - 2;
-        sheet().text(style, left(), y, text);
-        sheet().rule(left(), left() + columnWidth, y + 3, document.theme().rule(), 0.5f);
-        y += 5;
-        bookmarks.add(new Bookmark(text, sheet()));
+        Cell cell = new Cell(style, text, 0, columnWidth, false);
+        lines.add(new Line(List.of(cell), BEFORE_HEADING, style.leadingPoint() - 2, 5, 3, true));
     }
 
-    void subheading(String text) throws IOException {
+    void subheading(String text) {
         Style style = document.styles().note();
-        need(2.5f * style.leadingPoint());
-        y += style.leadingPoint() + 1;
-        sheet().text(style, left(), y, text);
+        Cell cell = new Cell(style, text, 0, columnWidth, false);
+        lines.add(new Line(List.of(cell), 1, style.leadingPoint(), 0, 1, false));
     }
 
-    void row(List<Cell> cells) throws IOException {
-        float leading = cells.get(0).style().leadingPoint();
-        need(leading);
-        y += leading;
-        for (Cell cell : cells) {
-            String text = document.lines().fit(cell.style(), cell.text(), cell.width());
-            if (cell.right()) {
-                sheet().textRight(cell.style(), left() + cell.from(), y, text);
-            } else {
-                sheet().text(cell.style(), left() + cell.from(), y, text);
-            }
-        }
+    void row(List<Cell> cells) {
+        lines.add(
+                new Line(List.copyOf(cells), 0, cells.get(0).style().leadingPoint(), 0, 0, false));
     }
 
     /** A paragraph whose lines after the first begin further right. */
-    void paragraph(Style style, String text, float hanging) throws IOException {
-        Lines lines = document.lines();
-        List<String> first = lines.wrap(style, text, columnWidth);
-        List<String> all = new ArrayList<>();
-        all.add(first.get(0));
-        if (first.size() > 1) {
-            String rest = lines.wrap(style, text, Float.MAX_VALUE).get(0);
-            String remaining = rest.substring(Math.min(rest.length(), first.get(0).length()));
-            all.addAll(lines.wrap(style, remaining.stripLeading(), columnWidth - hanging));
+    void paragraph(Style style, String text, float hanging) {
+        Lines breaker = document.lines();
+        List<String> wrapped = breaker.wrap(style, text, columnWidth);
+        if (wrapped.size() > 1 && hanging > 0) {
+            String whole = breaker.wrap(style, text, Float.MAX_VALUE).get(0);
+            String rest = whole.substring(wrapped.get(0).length()).stripLeading();
+            List<String> hung = new ArrayList<>(wrapped.subList(0, 1));
+            hung.addAll(breaker.wrap(style, rest, columnWidth - hanging));
+            wrapped = hung;
         }
-        need(Math.min(2, all.size()) * style.leadingPoint());
-        for (int i = 0; i < all.size(); i++) {
-            need(style.leadingPoint());
-            y += style.leadingPoint();
-            sheet().text(style, left() + (i == 0 ? 0 : hanging), y, all.get(i));
+        for (int i = 0; i < wrapped.size(); i++) {
+            add(style, wrapped.get(i), i == 0 ? 0 : hanging, i == 0 && wrapped.size() > 1);
         }
     }
 
     /** A paragraph of which every line begins further right. */
-    void indented(Style style, String text, float indent) throws IOException {
+    void indented(Style style, String text, float indent) {
         for (String line : document.lines().wrap(style, text, columnWidth - indent)) {
-            need(style.leadingPoint());
-            y += style.leadingPoint();
-            sheet().text(style, left() + indent, y, line);
+            add(style, line, indent, false);
         }
     }
 
-    private Sheet sheet() {
-        return sheets.get(sheets.size() - 1);
+    private void add(Style style, String text, float from, boolean keep) {
+        Cell cell = new Cell(style, text, from, columnWidth - from, false);
+        lines.add(new Line(List.of(cell), 0, style.leadingPoint(), 0, keep ? 1 : 0, false));
     }
 
-    private float left() {
-        return FirstPage.MARGIN + column * (columnWidth + GUTTER);
+    /** Draws all lines on as many pages as they need; returns where the sections begin. */
+    List<Bookmark> draw() throws IOException {
+        List<Bookmark> bookmarks = new ArrayList<>();
+        int from = 0;
+        int page = 0;
+        while (from < lines.size()) {
+            float full = paper.heightPoint() - FirstPage.FOOT - 6 - top();
+            int[] starts = columns(from, full);
+            if (starts[COLUMNS] == lines.size()) {
+                starts = balanced(from, full);
+            }
+            page++;
+            try (Sheet sheet = new Sheet(document, paper)) {
+                DetailPages.head(document, sheet, paper, page);
+                for (int column = 0; column < COLUMNS; column++) {
+                    draw(sheet, column, starts[column], starts[column + 1], bookmarks);
+                }
+            }
+            from = starts[COLUMNS];
+        }
+        return bookmarks;
+    }
+
+    private int[] balanced(int from, float full) {
+        float sum = 0;
+        for (Line line : lines.subList(from, lines.size())) {
+            sum += line.tall(false);
+        }
+        for (float tall = sum / COLUMNS; tall < full; tall += BALANCE_STEP) {
+            int[] starts = columns(from, tall);
+            if (starts[COLUMNS] == lines.size()) {
+                return starts;
+            }
+        }
+        return columns(from, full);
+    }
+
+    /** The first line of each column of a page, and the first that finds no room. */
+    private int[] columns(int from, float tall) {
+        int[] starts = new int[COLUMNS + 1];
+        int next = from;
+        for (int column = 0; column < COLUMNS; column++) {
+            starts[column] = next;
+            float y = 0;
+            int start = next;
+            while (next < lines.size()) {
+                y += lines.get(next).tall(next == start);
+                if (y > tall && next > start) {
+                    break;
+                }
+                next++;
+            }
+            next = keptTogether(start, next);
+        }
+        starts[COLUMNS] = next;
+        return starts;
+    }
+
+    /** Moves the end of a column up where a line must not be parted from those after it. */
+    private int keptTogether(int start, int end) {
+        if (end == lines.size()) {
+            return end;
+        }
+        for (int i = Math.max(start + 1, end - 4); i < end; i++) {
+            if (i + lines.get(i).keep() >= end) {
+                return i;
+            }
+        }
+        return end;
+    }
+
+    private void draw(Sheet sheet, int column, int from, int to, List<Bookmark> bookmarks)
+            throws IOException {
+        float left = FirstPage.MARGIN + column * (columnWidth + GUTTER);
+        float y = top();
+        for (int i = from; i < to; i++) {
+            Line line = lines.get(i);
+            y += (i == from ? 0 : line.before()) + line.leading();
+            for (Cell cell : line.cells()) {
+                String text = document.lines().fit(cell.style(), cell.text(), cell.width());
+                if (cell.right()) {
+                    sheet.textRight(cell.style(), left + cell.from(), y, text);
+                } else {
+                    sheet.text(cell.style(), left + cell.from(), y, text);
+                }
+            }
+            if (line.heading()) {
+                sheet.rule(left, left + columnWidth, y + 3, document.theme().rule(), 0.5f);
+                bookmarks.add(new Bookmark(line.cells().get(0).text(), sheet));
+            }
+            y += line.after();
+        }
     }
 
     private static float top() {
         return FirstPage.TOP + 20;
-    }
-
-    private void need(float point) throws IOException {
-        if (column < COLUMNS && y + point <= paper.heightPoint() - FirstPage.FOOT - 6) {
-            return;
-        }
-        column++;
-        if (column >= COLUMNS) {
-            if (!sheets.isEmpty()) {
-                sheet().close();
-            }
-            sheets.add(new Sheet(document, paper));
-            column = 0;
-            DetailPages.head(document, sheet(), paper, sheets.size());
-        }
-        y = top();
-    }
-
-    @Override
-    public void close() throws IOException {
-        if (!sheets.isEmpty()) {
-            sheet().close();
-        }
     }
 }

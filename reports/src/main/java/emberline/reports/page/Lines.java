@@ -54,7 +54,9 @@ final class Lines {
             return lines;
         }
         List<String> kept = new ArrayList<>(lines.subList(0, most));
-        kept.set(most - 1, fit(style, kept.get(most - 1) + " " + ELLIPSIS + ELLIPSIS, width));
+        kept.set(
+                most - 1,
+                fit(style, String.join(" ", lines.subList(most - 1, lines.size())), width));
         return kept;
     }
 

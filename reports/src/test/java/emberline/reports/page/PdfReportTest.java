@@ -1,0 +1,236 @@
+package emberline.reports.page;
+
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.junit.jupiter.api.Assumptions.assumeTrue;
+
+import emberline.reports.RealSpectra;
+import emberline.reports.Samples;
+import emberline.reports.Samples.Bands;
+import emberline.reports.page.PdfText.Box;
+import emberline.survey.ObjectResult;
+import java.awt.geom.Rectangle2D;
+import java.io.ByteArrayOutputStream;
+import java.io.IOException;
+import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
+import java.util.Collection;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import java.util.concurrent.ExecutionException;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import java.util.concurrent.Future;
+import org.apache.pdfbox.Loader;
+import org.apache.pdfbox.cos.COSName;
+import org.apache.pdfbox.pdmodel.PDDocument;
+import org.apache.pdfbox.pdmodel.PDPage;
+import org.apache.pdfbox.pdmodel.PDResources;
+import org.apache.pdfbox.pdmodel.font.PDFont;
+import org.apache.pdfbox.pdmodel.graphics.form.PDFormXObject;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.EnumSource;
+import org.junit.jupiter.params.provider.MethodSource;
+
+class PdfReportTest {
+
+    private static final PdfReport A4 =
+            new PdfReport(ReportSettings.of("0.1.0", 7), Samples.CATALOGUE);
+
+    private static final String LONG_NAME =
+            "Ember field 7, object 1234 of the second epoch, with a name that goes on over more"
+                    + " than three lines <b>and</b> \u03b1\u03b2 \u4e2d\u6587 "
+                    + "without_any_blank_in_its_last_word".repeat(4);
+
+    static Collection<ObjectResult> objects() {
+        var clean = Samples.spectrum(0.8, 2.45, 600, Bands.L_DWARF, 60, 9);
+        return List.of(
+                Samples.lDwarf(),
+                Samples.tDwarf(),
+                Samples.object(
+                        LONG_NAME, Samples.spectrum(0.8, 2.45, 600, Bands.L_DWARF, 3, 9), 120),
+                Samples.object(
+                        "Gaps", Samples.withGap(Samples.withGap(clean, 1.34, 1.45), 1.8, 2.0), 120),
+                Samples.object("Short", Samples.spectrum(2.0, 2.1, 40, Bands.L_DWARF, 60, 9), 120),
+                Samples.object("Two", Samples.spectrum(2.0, 2.01, 2, Bands.L_DWARF, 60, 9), 120),
+                Samples.object(
+                        "Noisy", Samples.spectrum(0.6, 2.45, 4000, Bands.L_DWARF, 3, 9), 1800),
+                Samples.object(
+                        "Pair",
+                        Map.of("j_mag", "14.05", "ra_deg", "58.84", "dec_deg", "-11.56"),
+                        List.of(Samples.spectrum(0.8, 1.35, 500, Bands.L_DWARF, 60, 9), clean),
+                        750));
+    }
+
+    @ParameterizedTest
+    @MethodSource("objects")
+    void noTextOverlapsAnotherOrLeavesThePage(ObjectResult object) throws IOException {
+        assertWellSet(pdf(A4, object), Paper.A4);
+    }
+
+    @ParameterizedTest
+    @EnumSource(Paper.class)
+    void bothPapersHoldTheSameContent(Paper paper) throws IOException {
+        ReportSettings settings = ReportSettings.of("0.1.0", 7).withPaper(paper);
+        byte[] pdf = pdf(new PdfReport(settings, Samples.CATALOGUE), Samples.lDwarf());
+        assertWellSet(pdf, paper);
+        assertTrue(PdfText.all(pdf).contains("What this cannot tell"));
+    }
+
+    @Test
+    void realSpectraAreSetWithoutOverlap() throws IOException {
+        assumeTrue(
+                RealSpectra.present(),
+                "no folder shared/spectra beside the project: real spectra are not tried");
+        var rows = RealSpectra.rows();
+        for (String name :
+                List.of(
+                        "2MASS J2011-5048",
+                        "HD 70138",
+                        "SIMP J1615+1340 (2)",
+                        "SDSS composite of 5 stars",
+                        "SIMP J1339+1523",
+                        "WISE J235402.77+024015.0",
+                        "2MASS J01415823-4633574")) {
+            assertWellSet(pdf(A4, RealSpectra.object(rows.get(name))), Paper.A4);
+        }
+    }
+
+    @Test
+    void textIsReadInOrder() throws IOException {
+        ObjectResult object = Samples.lDwarf();
+        String text = PdfText.all(pdf(A4, object)).replaceAll("\\s+", " ");
+        int before = -1;
+        for (String piece :
+                List.of(
+                        "Ember 12",
+                        FindingSentence.of(object),
+                        "Wavelength (µm, vacuum)",
+                        "Type by published relations",
+                        "Key numbers",
+                        "Gravity by published scores",
+                        "What this cannot tell",
+                        "Measured features",
+                        "FeH_z",
+                        "Not measured",
+                        "Type relations",
+                        "Findings",
+                        "Spectra and provenance",
+                        "Sources")) {
+            int at = text.indexOf(piece, before + 1);
+            assertTrue(at > before, piece + " not after what goes before it in: " + text);
+            before = at;
+        }
+        assertTrue(text.contains("H\u2082O"), "subscripts are lost");
+    }
+
+    @Test
+    void allFontsAreEmbedded() throws IOException {
+        try (PDDocument document = Loader.loadPDF(pdf(A4, Samples.lDwarf()))) {
+            Set<String> fonts = new HashSet<>();
+            for (PDPage page : document.getPages()) {
+                checkFonts(page.getResources(), fonts);
+            }
+            assertTrue(fonts.size() >= 4, fonts.toString());
+        }
+    }
+
+    private static void checkFonts(PDResources resources, Set<String> seen) throws IOException {
+        for (COSName name : resources.getFontNames()) {
+            PDFont font = resources.getFont(name);
+            assertTrue(font.isEmbedded(), font.getName());
+            assertTrue(font.getName().contains("DejaVu"), font.getName());
+            seen.add(font.getName());
+        }
+        for (COSName name : resources.getXObjectNames()) {
+            if (resources.getXObject(name) instanceof PDFormXObject form
+                    && form.getResources() != null) {
+                checkFonts(form.getResources(), seen);
+            }
+        }
+    }
+
+    @Test
+    void theDocumentSaysWhatItIs() throws IOException {
+        byte[] pdf = pdf(A4, Samples.lDwarf());
+        try (PDDocument document = Loader.loadPDF(pdf)) {
+            assertEquals("Ember 12: spectral report", document.getDocumentInformation().getTitle());
+            assertEquals("en-GB", document.getDocumentCatalog().getLanguage());
+            assertEquals(1, document.getDocumentCatalog().getOutputIntents().size());
+            assertEquals(
+                    "Finding",
+                    document.getDocumentCatalog().getDocumentOutline().getFirstChild().getTitle());
+            String xmp =
+                    new String(
+                            document.getDocumentCatalog().getMetadata().toByteArray(),
+                            StandardCharsets.UTF_8);
+            assertTrue(xmp.contains("pdfaid:part"), xmp);
+            assertEquals(2, document.getNumberOfPages());
+        }
+    }
+
+    @Test
+    void theSameResultGivesTheSameBytesOnAnyThread()
+            throws IOException, InterruptedException, ExecutionException {
+        ObjectResult object = Samples.lDwarf();
+        byte[] expected =
+                pdf(new PdfReport(ReportSettings.of("0.1.0", 7), Samples.CATALOGUE), object);
+        ExecutorService threads = Executors.newFixedThreadPool(3);
+        try {
+            List<Future<byte[]>> made = new ArrayList<>();
+            for (int i = 0; i < 6; i++) {
+                made.add(threads.submit(() -> pdf(A4, object)));
+            }
+            for (Future<byte[]> each : made) {
+                assertArrayEquals(expected, each.get());
+            }
+        } finally {
+            threads.shutdownNow();
+        }
+    }
+
+    @Test
+    void aFailedObjectHasNoReport() {
+        ObjectResult failed = Samples.failed("x", "no such file");
+        assertFalse(PdfReport.canReport(failed));
+        assertThrows(IllegalArgumentException.class, () -> pdf(A4, failed));
+    }
+
+    private static byte[] pdf(PdfReport report, ObjectResult object) throws IOException {
+        ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+        report.write(object, bytes);
+        return bytes.toByteArray();
+    }
+
+    private static void assertWellSet(byte[] pdf, Paper paper) throws IOException {
+        Rectangle2D page =
+                new Rectangle2D.Double(30, 24, paper.widthPoint() - 60, paper.heightPoint() - 54);
+        List<Box> boxes = PdfText.boxes(pdf);
+        assertTrue(boxes.size() > 50, "only " + boxes.size() + " texts");
+        for (int i = 0; i < boxes.size(); i++) {
+            Box box = boxes.get(i);
+            assertTrue(page.contains(box.place()), box + " leaves the page");
+            for (Box other : boxes.subList(0, i)) {
+                boolean overlap =
+                        box.page() == other.page()
+                                && shrunk(box.place()).intersects(shrunk(other.place()));
+                assertFalse(overlap, box + " overlaps " + other);
+            }
+        }
+    }
+
+    private static Rectangle2D shrunk(Rectangle2D box) {
+        double by = 0.2;
+        return new Rectangle2D.Double(
+                box.getX() + by,
+                box.getY() + by,
+                box.getWidth() - 2 * by,
+                box.getHeight() - 2 * by);
+    }
+}
