@@ -23,7 +23,8 @@ final class Atmosphere {
             double high = region.number("high_micron");
             double soft = SOFT * (high - low);
             double opacity = -StrictMath.log(region.number("transmission"));
-            depth += opacity * OpacityShape.TRAPEZOID.at(micron, low - soft, low, high, high + soft);
+            depth +=
+                    opacity * OpacityShape.TRAPEZOID.at(micron, low - soft, low, high, high + soft);
         }
         return StrictMath.exp(-depth);
     }

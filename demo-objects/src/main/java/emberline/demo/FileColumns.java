@@ -2,9 +2,7 @@ package emberline.demo;
 
 import emberline.spectrum.AirToVacuum;
 
-/**
- * The columns of a file: a spectrum in the units and the medium of its exposure.
- */
+/** The columns of a file: a spectrum in the units and the medium of its exposure. */
 final class FileColumns {
 
     private final double[] wavelength;

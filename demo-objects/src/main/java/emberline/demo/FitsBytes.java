@@ -6,6 +6,7 @@ import nom.tam.fits.BasicHDU;
 import nom.tam.fits.Fits;
 import nom.tam.fits.FitsException;
 import nom.tam.fits.Header;
+import nom.tam.fits.header.Standard;
 import nom.tam.util.FitsOutputStream;
 
 /** FITS files made of image HDUs, as bytes. */
@@ -41,6 +42,9 @@ final class FitsBytes {
             for (BasicHDU<?> unit : units) {
                 fits.addHDU(unit);
             }
+            // The library writes the time of day into this comment; the survey must not depend on
+            // it.
+            units[0].getHeader().findCard(Standard.SIMPLE).setComment("conforms to FITS standard");
             fits.write(stream);
         } catch (FitsException e) {
             throw new IOException("a FITS file could not be written", e);

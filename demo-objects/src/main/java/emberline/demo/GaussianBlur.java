@@ -1,6 +1,8 @@
 package emberline.demo;
 
-/** Convolution with a normal curve on an evenly spaced grid; the curve is renormalised at the ends. */
+/**
+ * Convolution with a normal curve on an evenly spaced grid; the curve is renormalised at the ends.
+ */
 final class GaussianBlur {
 
     private static final double REACH_SIGMAS = 5;

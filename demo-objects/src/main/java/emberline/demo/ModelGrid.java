@@ -1,8 +1,6 @@
 package emberline.demo;
 
-/**
- * The fine wavelength grid of the model: equal steps in the logarithm of wavelength, in vacuum.
- */
+/** The fine wavelength grid of the model: equal steps in the logarithm of wavelength, in vacuum. */
 final class ModelGrid {
 
     /** Shortest wavelength (micron). */

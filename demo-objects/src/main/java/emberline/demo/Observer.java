@@ -10,8 +10,8 @@ import org.apache.commons.rng.simple.RandomSource;
  * noise, and the correction for the atmosphere leaves its residuals. The same observation of the
  * same light always gives the same spectrum.
  *
- * <p>Noise: sigma² goes with object plus sky, where the sky of H is {@value #SKY_H} times that of
- * J and the thermal background doubles every {@value #THERMAL_DOUBLING_MICRON} micron beyond 1.9
+ * <p>Noise: sigma² goes with object plus sky, where the sky of H is {@value #SKY_H} times that of J
+ * and the thermal background doubles every {@value #THERMAL_DOUBLING_MICRON} micron beyond 1.9
  * micron; it grows by the inverse transmission of the atmosphere. Residuals: the correction is
  * wrong by a share of the absorbed light, {@value #RESIDUAL} times a slow random curve.
  */
@@ -136,8 +136,7 @@ final class Observer {
     }
 
     private double[] sample(double[] flux, Instrument instrument, double[] edges) {
-        double sigmaPoints =
-                ModelGrid.PIXELS_PER_E / instrument.resolvingPower() * SIGMA_PER_FWHM;
+        double sigmaPoints = ModelGrid.PIXELS_PER_E / instrument.resolvingPower() * SIGMA_PER_FWHM;
         double[] blurred = GaussianBlur.blur(flux, sigmaPoints);
         double[] integral = new double[blurred.length];
         for (int i = 1; i < integral.length; i++) {

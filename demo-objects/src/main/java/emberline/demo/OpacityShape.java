@@ -6,7 +6,9 @@ enum OpacityShape {
     HEAD {
         @Override
         double at(double micron, double a, double b, double c, double d) {
-            return micron >= a ? StrictMath.exp((a - micron) / b) : StrictMath.exp((micron - a) / c);
+            return micron >= a
+                    ? StrictMath.exp((a - micron) / b)
+                    : StrictMath.exp((micron - a) / c);
         }
     },
     /** A trapezoid with feet a and d and top from b to c. */

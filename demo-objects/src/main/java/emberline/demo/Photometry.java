@@ -10,9 +10,9 @@ import org.apache.commons.rng.sampling.distribution.ZigguratSampler;
 import org.apache.commons.rng.simple.RandomSource;
 
 /**
- * Magnitudes and parallax of an object: for a dwarf from the absolute magnitudes of its type ({@code
- * magnitudes.csv}) and its made-up distance, for others as {@code objects.csv} gives them; with
- * errors that grow towards the faint end.
+ * Magnitudes and parallax of an object: for a dwarf from the absolute magnitudes of its type
+ * ({@code magnitudes.csv}) and its made-up distance, for others as {@code objects.csv} gives them;
+ * with errors that grow towards the faint end.
  */
 final class Photometry {
 

@@ -2,7 +2,9 @@ package emberline.demo;
 
 import java.nio.charset.StandardCharsets;
 
-/** Seeds of the random sequences: each purpose has a name, and its seed depends on the name alone. */
+/**
+ * Seeds of the random sequences: each purpose has a name, and its seed depends on the name alone.
+ */
 final class Seeds {
 
     private static final long OFFSET = 0xcbf29ce484222325L;

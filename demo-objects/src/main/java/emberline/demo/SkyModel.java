@@ -15,7 +15,7 @@ final class SkyModel {
 
     /**
      * Interstellar extinction at one micron, A(1 micron) / A_V, with the slope 1.61 towards the
-     * infrared: Cardelli, Clayton & Mathis (1989, ApJ 345, 245), from memory.
+     * infrared: Cardelli, Clayton and Mathis (1989, ApJ 345, 245), from memory.
      */
     private static final double EXTINCTION_AT_ONE_MICRON = 0.404;
 

@@ -120,8 +120,7 @@ final class SurveyTables {
         return own;
     }
 
-    private static String join(
-            List<Exposure> exposures, Function<Exposure, String> cell) {
+    private static String join(List<Exposure> exposures, Function<Exposure, String> cell) {
         return exposures.stream().map(cell).collect(Collectors.joining(";"));
     }
 

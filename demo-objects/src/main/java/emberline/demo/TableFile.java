@@ -31,12 +31,7 @@ final class TableFile implements SpectrumFile {
         table.addColumn(column("wavelength", wave, "em.wl", columns.wavelength(), 8));
         table.addColumn(column("flux", flux, "phot.flux.density;em.wl", columns.flux(), 5));
         table.addColumn(
-                column(
-                        "sigma",
-                        flux,
-                        "stat.error;phot.flux.density;em.wl",
-                        columns.sigma(),
-                        5));
+                column("sigma", flux, "stat.error;phot.flux.density;em.wl", columns.sigma(), 5));
         table.setName(exposure.object());
         add(table, "OBJECT", exposure.object());
         add(table, "MEDIUM", exposure.air() ? "air" : "vacuum");
@@ -48,7 +43,9 @@ final class TableFile implements SpectrumFile {
 
     private StarTableWriter writer() {
         if (!votable) {
-            return new FitsTableWriter();
+            FitsTableWriter writer = new FitsTableWriter();
+            writer.setWriteDate(false);
+            return writer;
         }
         VOTableWriter writer = new VOTableWriter(DataFormat.TABLEDATA, true);
         writer.setWriteDate(false);
