@@ -8,6 +8,7 @@ import emberline.reports.attach.ResultTable;
 import emberline.reports.attach.RunJson;
 import emberline.reports.attach.SafeFileNames;
 import emberline.reports.page.PdfReport;
+import emberline.reports.survey.SurveyPage;
 import emberline.survey.ObjectResult;
 import java.io.Closeable;
 import java.io.IOException;
@@ -25,6 +26,7 @@ final class RunFolder implements Closeable {
     private final Path folder;
     private final SafeFileNames names;
     private final ResultTable table;
+    private final SurveyPage page;
     private final RunJson run;
     private final Optional<ReportWriter> reports;
     private boolean complete;
@@ -53,6 +55,11 @@ final class RunFolder implements Closeable {
         this.table =
                 ResultTable.open(
                         folder.resolve("results.csv"), ResultColumns.forList(list.columns()));
+        this.page =
+                SurveyPage.open(
+                        folder.resolve("survey.html"),
+                        list.file().getFileName().toString(),
+                        ProgramVersion.number());
     }
 
     /** The stem of the files of an object. */
@@ -72,6 +79,7 @@ final class RunFolder implements Closeable {
     /** Adds an object to the tables; in the order of the list. */
     void add(ObjectResult result) throws IOException {
         table.write(result);
+        page.add(result, stem(result), reports.isPresent() && PdfReport.canReport(result));
         run.add(result);
     }
 
@@ -79,6 +87,7 @@ final class RunFolder implements Closeable {
     void complete() throws IOException {
         complete = true;
         table.close();
+        page.close();
         AtomicFile.write(folder.resolve("run.json"), run.text());
     }
 
@@ -87,6 +96,8 @@ final class RunFolder implements Closeable {
         if (!complete) {
             table.abandon();
             table.close();
+            page.abandon();
+            page.close();
         }
     }
 }
