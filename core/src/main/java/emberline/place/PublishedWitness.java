@@ -37,6 +37,9 @@ final class PublishedWitness {
     /** Density where the type lies outside the range of a relation (per subclass). */
     private static final double UNINFORMATIVE_DENSITY = 0.08;
 
+    /** The same as a share of the peak of a relation with a large sigma. */
+    private static final double UNINFORMATIVE_SHARE = 0.3;
+
     /** Factor against types well inside the range of a relation whose index is outside it. */
     private static final double OUT_OF_RANGE_FACTOR = 0.2;
 
@@ -204,12 +207,14 @@ final class PublishedWitness {
         if (estimate.use() != Use.COMBINED) {
             return 0;
         }
-        if (type < from - MARGIN || type > to + MARGIN) {
-            return Math.log(UNINFORMATIVE_DENSITY);
-        }
         TypeEstimate given = estimate.type().orElseThrow();
+        double peak = 1 / (given.sigmaSubclass() * Math.sqrt(2 * Math.PI));
+        if (type < from - MARGIN || type > to + MARGIN) {
+            // a noisy relation must not be worth more where it says nothing
+            return Math.log(Math.min(UNINFORMATIVE_DENSITY, UNINFORMATIVE_SHARE * peak));
+        }
         double x = (type - given.typeNumber()) / given.sigmaSubclass();
-        double normal = Math.exp(-0.5 * x * x) / (given.sigmaSubclass() * Math.sqrt(2 * Math.PI));
+        double normal = peak * Math.exp(-0.5 * x * x);
         return Math.log((1 - OUTLIER_SHARE) * normal + OUTLIER_DENSITY);
     }
 
