@@ -2,6 +2,7 @@ package emberline.measure;
 
 import emberline.measure.Measurement.Measured;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Collection;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -13,6 +14,14 @@ import java.util.Optional;
  * the covariance of the values.
  */
 public final class Measurements {
+
+    /** Signal-to-noise of the continuum from which errors are taken as symmetric. */
+    static final double LINEAR = 15;
+
+    private static final int INTERVAL_DRAWS = 1000;
+
+    /** Share of a normal distribution below minus one sigma. */
+    private static final double LOW_TAIL = 0.158655253931457;
 
     private final Map<String, Entry> entries;
 
@@ -138,6 +147,38 @@ public final class Measurements {
         }
         return draws;
     }
+
+    /**
+     * The 68% interval of a measured feature. Where the continuum is well measured it is the value
+     * plus and minus one sigma; below a signal-to-noise of {@value #LINEAR} it is taken from draws,
+     * since a ratio is skewed there.
+     *
+     * @param id a measured feature
+     * @param seed start of the random sequence
+     * @return the 68% interval in the unit of the feature
+     * @throws IllegalArgumentException if it was not measured
+     */
+    public Interval68 interval68(String id, long seed) {
+        FeatureMeasurement measurement = measuredEntry(id).measurement;
+        if (measurement.continuumSignal() >= LINEAR) {
+            Measured value = measured(id).orElseThrow();
+            return new Interval68(
+                    value.value() - value.oneSigma(), value.value() + value.oneSigma());
+        }
+        double[] drawn = draws(List.of(id), INTERVAL_DRAWS, seed)[0];
+        Arrays.sort(drawn);
+        return new Interval68(
+                drawn[(int) (INTERVAL_DRAWS * LOW_TAIL)],
+                drawn[(int) (INTERVAL_DRAWS * (1 - LOW_TAIL))]);
+    }
+
+    /**
+     * A 68% interval.
+     *
+     * @param low lower end, in the unit of the feature
+     * @param high upper end
+     */
+    public record Interval68(double low, double high) {}
 
     private Entry measuredEntry(String id) {
         Entry entry = entries.get(id);

@@ -14,6 +14,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * Measures every feature of a catalogue on a prepared spectrum. Safe for use by several threads;
@@ -96,20 +97,32 @@ public final class Measurer {
         if (refusal == null && formula.isEmpty()) {
             refusal = missingPart(feature, plan);
         }
+        double telluric = tellurics.share(feature);
+        OptionalDouble smoothed = plan.applicability().smoothing(feature);
         if (refusal != null) {
-            return new FeatureMeasurement(
-                    feature,
-                    refusal,
-                    0,
-                    tellurics.share(feature),
-                    plan.applicability().smoothing(feature));
+            return new FeatureMeasurement(feature, refusal, 0, 0, telluric, smoothed);
         }
+        double coverage = measured.coverage(formula.orElseThrow());
+        double signal = continuumSignal(formula.orElseThrow(), measured);
+        Measurement result = evaluate(formula.orElseThrow(), coverage, signal, measured);
         return new FeatureMeasurement(
                 feature,
-                evaluate(formula.orElseThrow(), measured),
-                measured.coverage(formula.orElseThrow()),
-                tellurics.share(feature),
-                plan.applicability().smoothing(feature));
+                result,
+                coverage,
+                result instanceof Measured ? signal : 0,
+                telluric,
+                smoothed);
+    }
+
+    /** Least signal-to-noise of the continua of a formula; NaN where one is not positive. */
+    private static double continuumSignal(Formula formula, MeasuredSpectrum measured) {
+        double least = Double.POSITIVE_INFINITY;
+        for (Formula.Continuum continuum : formula.continua()) {
+            double level = measured.continuum(continuum);
+            double signal = level / measured.continuumSigma(continuum);
+            least = level > 0 ? Math.min(least, signal) : Double.NaN;
+        }
+        return least;
     }
 
     private static NotMeasured missingPart(Feature feature, Plan plan) {
@@ -122,8 +135,8 @@ public final class Measurer {
         return new NotMeasured(Why.PART_MISSING, "its part " + part + " does not apply");
     }
 
-    private Measurement evaluate(Formula formula, MeasuredSpectrum measured) {
-        double coverage = measured.coverage(formula);
+    private Measurement evaluate(
+            Formula formula, double coverage, double signal, MeasuredSpectrum measured) {
         if (coverage < settings.minCoverage()) {
             return refuse(
                     Why.NOT_COVERED,
@@ -131,19 +144,15 @@ public final class Measurer {
                     100 * coverage,
                     100 * settings.minCoverage());
         }
-        for (Formula.Continuum continuum : formula.continua()) {
-            double level = measured.continuum(continuum);
-            double sigma = measured.continuumSigma(continuum);
-            if (!(level > 0)) {
-                return refuse(Why.NEGATIVE_CONTINUUM, "the continuum is %.3g", level);
-            }
-            if (!(level >= settings.leastContinuumSignal() * sigma)) {
-                return refuse(
-                        Why.TOO_NOISY,
-                        "the continuum has a signal-to-noise of %.1f; %.1f is needed",
-                        level / sigma,
-                        settings.leastContinuumSignal());
-            }
+        if (Double.isNaN(signal)) {
+            return refuse(Why.NEGATIVE_CONTINUUM, "a continuum is zero or negative");
+        }
+        if (signal < settings.leastContinuumSignal()) {
+            return refuse(
+                    Why.TOO_NOISY,
+                    "the continuum has a signal-to-noise of %.1f; %.1f is needed",
+                    signal,
+                    settings.leastContinuumSignal());
         }
         double value = measured.value(formula);
         double sigma = measured.sigma(formula);
