@@ -12,6 +12,7 @@ import emberline.spectrum.Spectrum;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 
 /**
  * Whether a definition can be applied to a spectrum at all, before anything is measured: does the
@@ -19,16 +20,25 @@ import java.util.OptionalDouble;
  *
  * <p>Rules. A feature with a calibrated range of resolving power needs at least {@value
  * #CALIBRATION_SLACK} of its lower end. A line needs its own window to be at least one resolution
- * element wide; a band index needs every window to be at least {@value #LEAST_WINDOW} of one, since
- * bands are smooth. A resolution element is never taken finer than one pixel.
+ * element wide. A band index needs every window to be at least {@value #LEAST_SMOOTH} of one where
+ * the absorber varies smoothly (water, methane, carbon monoxide, ammonia, hydrogen, continua), and
+ * {@value #LEAST_STRUCTURED} of one where it has sharp heads or lines (oxides, hydrides, atoms):
+ * spectra of one object at two resolutions disagree below that. A resolution element is never taken
+ * finer than one pixel.
  */
 final class Applicability {
 
     /** Share of the printed lower end of the resolving power that is still accepted. */
     static final double CALIBRATION_SLACK = 0.8;
 
-    /** Least width of a band window in resolution elements. */
-    static final double LEAST_WINDOW = 0.3;
+    /** Least width of a window in resolution elements, absorbers that vary smoothly. */
+    static final double LEAST_SMOOTH = 0.3;
+
+    /** Least width of a window in resolution elements, absorbers with sharp heads or lines. */
+    static final double LEAST_STRUCTURED = 0.6;
+
+    private static final Set<String> SMOOTH =
+            Set.of("H2O", "CH4", "CO", "NH3", "H2", "CN", "CONTINUUM");
 
     /** A spectrum up to this much finer than the calibration is not smoothed. */
     static final double SMOOTHING_SLACK = 1.1;
@@ -91,7 +101,7 @@ final class Applicability {
         boolean line = feature.kind() == Kind.EQUIVALENT_WIDTH;
         for (FeatureWindow part : feature.windows()) {
             boolean core = line && part.role() == Role.LINE;
-            double needed = core ? 1 : LEAST_WINDOW;
+            double needed = core ? 1 : least(feature);
             double element = elementMicron(part.window().centreMicron());
             if (part.window().widthMicron() < needed * element) {
                 return tooCoarse(
@@ -106,6 +116,10 @@ final class Applicability {
             }
         }
         return Optional.empty();
+    }
+
+    private static double least(Feature feature) {
+        return SMOOTH.contains(feature.species()) ? LEAST_SMOOTH : LEAST_STRUCTURED;
     }
 
     private double elementMicron(double micron) {
