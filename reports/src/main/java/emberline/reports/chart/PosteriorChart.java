@@ -54,56 +54,27 @@ public final class PosteriorChart {
         }
         double[] range = range(type, shown);
         List<Layer> layers = new ArrayList<>();
-        type.type()
-                .ifPresent(
-                        combined -> {
-                            layers.add(
-                                    new Layer.Region(
-                                            combined.lo68(),
-                                            combined.hi68(),
-                                            0,
-                                            1,
-                                            Tone.RESULT_95,
-                                            false));
-                            layers.add(
-                                    interval(
-                                            combined.lo95(),
-                                            combined.hi95(),
-                                            0.12,
-                                            Tone.RESULT_95));
-                            layers.add(
-                                    interval(
-                                            combined.lo68(),
-                                            combined.hi68(),
-                                            0.28,
-                                            Tone.RESULT_68));
-                        });
+        type.type().ifPresent(combined -> layers.addAll(intervals(combined)));
         layers.add(new Layer.Points(aside, Tone.SHOWN, false));
         layers.add(new Layer.Points(used, Tone.USED, true));
-        type.type()
-                .ifPresent(
-                        combined -> {
-                            double at = combined.typeNumber();
-                            layers.add(
-                                    new Layer.Points(
-                                            List.of(new Layer.Point(at, at, at, 0, 0, 0)),
-                                            Tone.RESULT,
-                                            true));
-                            rows.add(new Tick(0, "combined"));
-                        });
-        Axis x =
-                new Axis(
-                        "Spectral type",
-                        "",
-                        range[0],
-                        range[1],
-                        Ticks.types(range[0], range[1], 9));
+        if (type.type().isPresent()) {
+            double at = type.type().get().typeNumber();
+            Layer.Point point = new Layer.Point(at, at, at, 0, 0, 0);
+            layers.add(new Layer.Points(List.of(point), Tone.RESULT, true));
+            rows.add(new Tick(0, "combined"));
+        }
+        List<Tick> types = Ticks.types(range[0], range[1], 9);
+        Axis x = new Axis("Spectral type", "", range[0], range[1], types);
         Axis y = new Axis("", "", -0.8, shown.size() + 0.8, rows);
         return new Chart("", x, y, layers);
     }
 
-    private static Layer.Interval interval(double from, double to, double half, Tone tone) {
-        return new Layer.Interval(from, to, 0, half, tone);
+    /** The combined type: its 68% interval over the full height, both intervals as bars. */
+    private static List<Layer> intervals(TypeEstimate type) {
+        return List.of(
+                new Layer.Region(type.lo68(), type.hi68(), 0, 1, Tone.RESULT_95, false),
+                new Layer.Interval(type.lo95(), type.hi95(), 0, 0.12, Tone.RESULT_95),
+                new Layer.Interval(type.lo68(), type.hi68(), 0, 0.28, Tone.RESULT_68));
     }
 
     /** The relations with a type, the combined ones first, in the order of their types. */

@@ -231,7 +231,12 @@ final class DetailPages {
         }
         relationGroup(flow, "Combined", Use.COMBINED, estimates, sources);
         relationGroup(flow, "Shown, not combined", Use.SHOWN, estimates, sources);
-        relationGroup(flow, "Outside the valid range", Use.OUTSIDE_RANGE, estimates, sources);
+        relationGroup(
+                flow,
+                "Outside the valid range (index, range)",
+                Use.OUTSIDE_RANGE,
+                estimates,
+                sources);
         List<String> missing =
                 estimates.stream()
                         .filter(e -> e.use() == Use.NOT_MEASURED)
@@ -294,7 +299,7 @@ final class DetailPages {
         String from = low.isPresent() ? Digits.fixed(low.getAsDouble(), 3) : "";
         String to = high.isPresent() ? "to " + Digits.fixed(high.getAsDouble(), 3) : "and above";
         String range = from + " " + to;
-        return index + ", valid " + range.strip().replace('-', '\u2212');
+        return index + ", " + range.strip().replace('-', '\u2212');
     }
 
     private String symbol(RelationEstimate estimate) {

@@ -20,7 +20,7 @@ final class PdfText {
 
     private PdfText() {}
 
-    /** A piece of text on a page. */
+    /** A sign on a page. */
     record Box(int page, String text, Rectangle2D place) {}
 
     /** All text in the order of the file. */
@@ -30,7 +30,7 @@ final class PdfText {
         }
     }
 
-    /** Every word with the rectangle it takes up (point from the lower left corner). */
+    /** Every sign with the rectangle it takes up (point from the lower left corner). */
     static List<Box> boxes(byte[] pdf) throws IOException {
         try (PDDocument document = Loader.loadPDF(pdf)) {
             Collector collector = new Collector();
@@ -48,14 +48,10 @@ final class PdfText {
         }
 
         @Override
-        protected void writeString(String text, List<TextPosition> positions) {
-            Rectangle2D box = null;
-            for (TextPosition position : positions) {
-                Rectangle2D glyph = place(position);
-                box = box == null ? glyph : box.createUnion(glyph);
-            }
-            if (box != null && !text.isBlank()) {
-                boxes.add(new Box(getCurrentPageNo(), text, box));
+        protected void processTextPosition(TextPosition position) {
+            super.processTextPosition(position);
+            if (!position.getUnicode().isBlank()) {
+                boxes.add(new Box(getCurrentPageNo(), position.getUnicode(), place(position)));
             }
         }
 

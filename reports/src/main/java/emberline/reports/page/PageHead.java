@@ -1,0 +1,93 @@
+package emberline.reports.page;
+
+import emberline.place.GravityVerdict;
+import emberline.place.Placement;
+import emberline.place.TypeEstimate;
+import emberline.spectrum.Finding;
+import emberline.spectrum.Finding.Severity;
+import emberline.survey.ObjectResult;
+import java.io.IOException;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/** The top of the first page: name, type, the finding in a sentence, warnings. */
+final class PageHead {
+
+    private static final float HEADLINE_WIDTH = 165;
+    private static final float GUTTER = 18;
+    private static final int MOST_WARNINGS = 2;
+
+    private final ReportDocument document;
+    private final Styles styles;
+    private final float width;
+
+    PageHead(ReportDocument document, float width) {
+        this.document = document;
+        this.styles = document.styles();
+        this.width = width;
+    }
+
+    /** Name and type, the finding, warnings. Returns the place below them. */
+    float write(Sheet sheet, ObjectResult result) throws IOException {
+        Optional<TypeEstimate> type = result.placement().flatMap(Placement::type);
+        List<String> name =
+                document.lines()
+                        .wrap(
+                                styles.name(),
+                                result.candidate().name(),
+                                width - HEADLINE_WIDTH - GUTTER,
+                                3);
+        float y = FirstPage.TOP + 14;
+        float right = FirstPage.MARGIN + width;
+        float baseline = y;
+        for (String line : name) {
+            sheet.text(styles.name(), FirstPage.MARGIN, baseline, line);
+            baseline += styles.name().leadingPoint();
+        }
+        String headline = type.map(FindingSentence::withError).orElse("no type");
+        sheet.textRight(styles.headline(), right, y + 1, headline);
+        String gravity = gravityWords(result.placement().orElseThrow().gravity());
+        sheet.textRight(styles.subhead(), right, y + 14.5f, gravity);
+        float below = Math.max(baseline - styles.name().leadingPoint() + 7, y + 19);
+        sheet.rule(FirstPage.MARGIN, right, below, document.theme().ink(), 0.7f);
+        float at = below + 14;
+        for (String line :
+                document.lines().wrap(styles.finding(), FindingSentence.of(result), width)) {
+            sheet.text(styles.finding(), FirstPage.MARGIN, at, line);
+            at += styles.finding().leadingPoint();
+        }
+        return warnings(sheet, result, at);
+    }
+
+    private float warnings(Sheet sheet, ObjectResult result, float from) throws IOException {
+        float y = from;
+        List<Finding> warnings =
+                result.findings().stream()
+                        .filter(f -> f.severity() == Severity.WARNING)
+                        .limit(MOST_WARNINGS)
+                        .toList();
+        for (Finding warning : warnings) {
+            String text = "Warning: " + warning.text() + ".";
+            for (String line : document.lines().wrap(styles.warning(), text, width, 2)) {
+                sheet.text(styles.warning(), FirstPage.MARGIN, y, line);
+                y += styles.warning().leadingPoint();
+            }
+        }
+        return y - 3;
+    }
+
+    private static String gravityWords(GravityVerdict verdict) {
+        OptionalDouble share = FindingSentence.share(verdict);
+        return verdict.gravityClass()
+                .map(
+                        g ->
+                                g.label()
+                                        + (share.isPresent()
+                                                ? "   P "
+                                                        + FindingSentence.probability(
+                                                                share.getAsDouble())
+                                                : ""))
+                .orElse("gravity not judged");
+    }
+}
