@@ -7,7 +7,10 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 
-/** Reads what classes are decided by: gravity limits, type ranges, pair planes, metallicity, activity. */
+/**
+ * Reads what classes are decided by: gravity limits, type ranges, pair planes, metallicity,
+ * activity.
+ */
 final class CriterionTables {
 
     /** The word for the spectral type on the abscissa of a plane. */
@@ -107,8 +110,7 @@ final class CriterionTables {
     List<ActivityFactor> activityFactors() throws InvalidCatalogueException {
         List<ActivityFactor> factors = new ArrayList<>();
         for (CatalogueRow row : CatalogueTable.read(tables, TableKind.ACTIVITY)) {
-            ActivityFactor.Quantity quantity =
-                    row.word("quantity", ActivityFactor.Quantity.class);
+            ActivityFactor.Quantity quantity = row.word("quantity", ActivityFactor.Quantity.class);
             OptionalDouble type = row.optionalNumber("type_number");
             double value = row.number("value");
             OptionalDouble error = row.optionalPositive("error");

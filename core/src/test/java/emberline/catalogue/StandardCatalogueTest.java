@@ -187,8 +187,7 @@ class StandardCatalogueTest {
                         catalogue.pairPlanes().stream().map(PairPlane::confidencePercent),
                         catalogue.metallicityClasses().stream()
                                 .map(MetallicityClass::confidencePercent),
-                        catalogue.activityFactors().stream()
-                                .map(ActivityFactor::confidencePercent),
+                        catalogue.activityFactors().stream().map(ActivityFactor::confidencePercent),
                         catalogue.restLines().stream().map(RestLine::confidencePercent),
                         catalogue.telluricRegions().stream().map(TelluricRegion::confidencePercent),
                         catalogue.molecularBands().stream().map(MolecularBand::confidencePercent))
