@@ -120,41 +120,34 @@ class RealLinesTest {
 
     /**
      * Spectra of one instrument of the Montreal library stand 4 to 5 angstrom red of others in K I
-     * (a note of the library's list): +96 to +120 km/s at 1.25 micron. They are too coarse for a
-     * velocity of their own (R about 500: one element is 600 km/s), and are refused as such; the
-     * median of the common match of three K I lines over all of them finds the shift within 40
-     * km/s, a fifteenth of an element.
+     * (a note of the library's list): +96 to +120 km/s at 1.2526 micron. They are too coarse for a
+     * velocity of their own (R about 500: one element is 600 km/s) and are refused as such. The
+     * median of the fits of K I 1.2526 alone, six of eleven at 3 sigma with errors of 24 to 50
+     * km/s, finds the shift; K I at 1.1693 does not show it, so that this is an error of the
+     * wavelength scale and no velocity. 50 km/s, one such error, is allowed.
      */
     @Test
     void aWrongWavelengthScaleIsFound() throws Exception {
         List<Double> shifts = new ArrayList<>();
+        double element = FittingLine.elementKms(500);
+        FittingLine potassium = new FittingLine("K I", 1.2525537, false, element, 1000);
         for (Candidate dwarf : listed("montreal", "dwarf")) {
             if (!dwarf.spectra().get(0).contains("_NIRI_")) {
                 continue;
             }
             PreparedSpectrum prepared = prepared(dwarf.spectra().get(0), 500);
-            assertEquals(
-                    Why.TOO_COARSE,
-                    ((NotMeasured)
-                                    REPORTER.report(prepared, MEASURER.measure(prepared))
-                                            .velocity()
-                                            .kms())
-                            .why());
-            double element = FittingLine.elementKms(500);
-            List<FittingLine> potassium =
-                    CATALOGUE.restLines().stream()
-                            .filter(line -> line.species().equals("K I"))
-                            .map(line -> line.vacuumMicron())
-                            .filter(micron -> micron > 1.16 && micron < 1.26)
-                            .filter(micron -> Math.abs(micron - 1.1775) > 0.001)
-                            .map(micron -> new FittingLine("K I", micron, false, element, 1000))
-                            .toList();
-            assertEquals(3, potassium.size());
-            shifts.add(StartVelocity.find(prepared.spectrum(), potassium));
+            RadialVelocity refused =
+                    REPORTER.report(prepared, MEASURER.measure(prepared)).velocity();
+            assertEquals(Why.TOO_COARSE, ((NotMeasured) refused.kms()).why());
+            LineSegment.of(prepared.spectrum(), potassium, 0)
+                    .flatMap(s -> LineFit.of(s, potassium, 0, prepared.noise()))
+                    .filter(fit -> fit.signal() >= 3)
+                    .filter(fit -> fit.width() > 0.5 && fit.width() < 3)
+                    .ifPresent(fit -> shifts.add(fit.kms()));
         }
         double[] sorted = shifts.stream().mapToDouble(v -> v).sorted().toArray();
-        assertTrue(sorted.length >= 8, shifts.toString());
-        assertEquals(108, sorted[sorted.length / 2], 40, shifts.toString());
+        assertTrue(sorted.length >= 5, shifts.toString());
+        assertEquals(108, sorted[sorted.length / 2], 50, shifts.toString());
     }
 
     /**
