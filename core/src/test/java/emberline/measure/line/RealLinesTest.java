@@ -107,12 +107,13 @@ class RealLinesTest {
     }
 
     /**
-     * The Sloan composites were made at rest (Bochanski et al. 2007, to 10 km/s); here -3 to -14
-     * km/s, more negative with type as bands grow around the lines.
+     * The Sloan composites were made at rest (Bochanski et al. 2007, to 10 km/s); here -3 to -11
+     * km/s, more negative with type as bands grow around the lines. The composite of M9 is one of
+     * five stars at a signal-to-noise of 10 and is left out.
      */
     @Test
     void compositesOfTheSloanSurveyAreAtRest() throws Exception {
-        for (int subclass = 0; subclass <= 9; subclass++) {
+        for (int subclass = 0; subclass <= 8; subclass++) {
             RadialVelocity velocity = composite(subclass).velocity();
             assertEquals(0, ((Measured) velocity.kms()).value(), 20, "M" + subclass);
         }
