@@ -12,6 +12,7 @@ record CatalogueContent(
         List<TypeBoundary> typeBoundaries,
         List<PairPlane> pairPlanes,
         List<MetallicityClass> metallicityClasses,
+        List<ActivityFactor> activityFactors,
         List<RestLine> restLines,
         List<TelluricRegion> telluricRegions,
         List<MolecularBand> molecularBands) {
@@ -25,6 +26,7 @@ record CatalogueContent(
         typeBoundaries = List.copyOf(typeBoundaries);
         pairPlanes = List.copyOf(pairPlanes);
         metallicityClasses = List.copyOf(metallicityClasses);
+        activityFactors = List.copyOf(activityFactors);
         restLines = List.copyOf(restLines);
         telluricRegions = List.copyOf(telluricRegions);
         molecularBands = List.copyOf(molecularBands);
@@ -34,7 +36,7 @@ record CatalogueContent(
     static CatalogueContent empty() {
         return new CatalogueContent(
                 List.of(), List.of(), List.of(), List.of(), List.of(), List.of(), List.of(),
-                List.of(), List.of(), List.of());
+                List.of(), List.of(), List.of(), List.of());
     }
 
     /** One list after another. */

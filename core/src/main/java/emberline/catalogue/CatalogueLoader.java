@@ -35,6 +35,7 @@ final class CatalogueLoader {
                 CatalogueContent.joined(before.typeBoundaries(), criteria.typeBoundaries()),
                 CatalogueContent.joined(before.pairPlanes(), criteria.pairPlanes()),
                 CatalogueContent.joined(before.metallicityClasses(), criteria.metallicityClasses()),
+                CatalogueContent.joined(before.activityFactors(), criteria.activityFactors()),
                 CatalogueContent.joined(before.restLines(), marks.restLines()),
                 CatalogueContent.joined(before.telluricRegions(), marks.telluricRegions()),
                 CatalogueContent.joined(before.molecularBands(), marks.molecularBands()));

@@ -7,7 +7,10 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 
-/** Reads what classes are decided by: gravity limits, type ranges, pair planes, metallicity. */
+/**
+ * Reads what classes are decided by: gravity limits, type ranges, pair planes, metallicity,
+ * activity.
+ */
 final class CriterionTables {
 
     /** The word for the spectral type on the abscissa of a plane. */
@@ -102,6 +105,32 @@ final class CriterionTables {
                                             row.textOrBlank("note"))));
         }
         return classes;
+    }
+
+    List<ActivityFactor> activityFactors() throws InvalidCatalogueException {
+        List<ActivityFactor> factors = new ArrayList<>();
+        for (CatalogueRow row : CatalogueTable.read(tables, TableKind.ACTIVITY)) {
+            ActivityFactor.Quantity quantity = row.word("quantity", ActivityFactor.Quantity.class);
+            OptionalDouble type = row.optionalNumber("type_number");
+            double value = row.number("value");
+            OptionalDouble error = row.optionalPositive("error");
+            Source source = sources.of(row);
+            HowKnown howKnown = row.howKnown();
+            int confidence = row.confidencePercent();
+            factors.add(
+                    row.made(
+                            () ->
+                                    new ActivityFactor(
+                                            quantity,
+                                            type,
+                                            value,
+                                            error,
+                                            source,
+                                            howKnown,
+                                            confidence,
+                                            row.textOrBlank("note"))));
+        }
+        return factors;
     }
 
     List<PairPlane> pairPlanes() throws InvalidCatalogueException {

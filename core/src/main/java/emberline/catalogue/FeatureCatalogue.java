@@ -145,6 +145,15 @@ public final class FeatureCatalogue {
     }
 
     /**
+     * The numbers that turn the width of H alpha into an activity.
+     *
+     * @return numbers in the order of the tables
+     */
+    public List<ActivityFactor> activityFactors() {
+        return content.activityFactors();
+    }
+
+    /**
      * The atomic lines.
      *
      * @return lines in the order of the table

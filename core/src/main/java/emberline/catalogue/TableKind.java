@@ -38,6 +38,10 @@ enum TableKind {
             "metallicity/*.csv",
             "feature,metallicity_class,above,up_to,source,how_known,confidence_percent",
             "note"),
+    ACTIVITY(
+            "activity/*.csv",
+            "quantity,value,source,how_known,confidence_percent",
+            "type_number,error,note"),
     LINES(
             "lines.csv",
             "species,wavelength,unit,medium,purpose,source,how_known,confidence_percent",

@@ -5,12 +5,13 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * Where an object stands: its type and gravity with what they rest on.
+ * Where an object stands: its type, gravity and activity with what they rest on.
  *
  * @param type the adopted type; empty where none could be given
  * @param typeReason why there is no type; empty where there is one
  * @param published the first witness: the published relations
  * @param gravity the gravity class
+ * @param activity the activity by H alpha
  * @param findings what the observer should know about the placement
  */
 public record Placement(
@@ -18,6 +19,7 @@ public record Placement(
         String typeReason,
         PublishedType published,
         GravityVerdict gravity,
+        Activity activity,
         List<Finding> findings) {
 
     /** Copies the list. */

@@ -6,11 +6,12 @@ import emberline.spectrum.Finding;
 import java.util.ArrayList;
 import java.util.List;
 
-/** Places an object on the sequence of spectral types and judges its gravity class. */
+/** Places an object on the sequence of spectral types and judges its gravity class and activity. */
 public final class Placer {
 
     private final PublishedWitness published;
     private final GravityScorer gravity;
+    private final ActivityJudge activity;
 
     /**
      * A placer.
@@ -20,6 +21,7 @@ public final class Placer {
     public Placer(FeatureCatalogue catalogue) {
         this.published = new PublishedWitness(catalogue);
         this.gravity = new GravityScorer(catalogue);
+        this.activity = new ActivityJudge(catalogue);
     }
 
     /**
@@ -28,7 +30,7 @@ public final class Placer {
      * @param measurements its features
      * @param seed start of the random draws for the gravity probabilities; the same seed gives the
      *     same placement
-     * @return type and gravity, or the reasons why there are none
+     * @return type, gravity and activity, or the reasons why there are none
      */
     public Placement place(Measurements measurements, long seed) {
         PublishedType type = published.witness(measurements);
@@ -40,15 +42,21 @@ public final class Placer {
                                         GravityVerdict.notJudged(
                                                 "no type, and the limits depend on the type",
                                                 List.of()));
+        Activity halpha =
+                type.type()
+                        .map(estimate -> activity.judge(measurements, estimate))
+                        .orElseGet(() -> Activity.none("no type, and chi depends on the type"));
         return new Placement(
                 type.type(),
                 type.type().isPresent() ? "" : type.scheme(),
                 type,
                 verdict,
-                findings(type, verdict));
+                halpha,
+                findings(type, verdict, activity.findings(halpha)));
     }
 
-    private static List<Finding> findings(PublishedType type, GravityVerdict verdict) {
+    private static List<Finding> findings(
+            PublishedType type, GravityVerdict verdict, List<Finding> ofActivity) {
         List<Finding> findings = new ArrayList<>();
         if (type.type().isPresent()) {
             findings.addAll(type.findings());
@@ -69,6 +77,7 @@ public final class Placer {
                             "the gravity class rests on H-cont alone, which dust and metallicity"
                                     + " move too"));
         }
+        findings.addAll(ofActivity);
         return findings;
     }
 }

@@ -4,6 +4,7 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurements;
 import emberline.measure.Measurer;
 import emberline.measure.Measuring;
+import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
 import emberline.prepare.PreparedSpectrum;
@@ -30,6 +31,7 @@ public final class Chain {
     private final SpectrumReader reader = new SpectrumReader();
     private final Preparer preparer = new Preparer();
     private final Measurer measurer;
+    private final LineReporter lines;
     private final Placer placer;
     private final Preparing defaults;
     private final long seed;
@@ -43,6 +45,7 @@ public final class Chain {
      */
     public Chain(FeatureCatalogue catalogue, Measuring measuring, SurveySettings settings) {
         this.measurer = new Measurer(catalogue, measuring);
+        this.lines = new LineReporter(catalogue);
         this.placer = new Placer(catalogue);
         this.defaults = settings.preparing();
         this.seed = settings.seed();
@@ -97,12 +100,14 @@ public final class Chain {
             throws UnreadableSpectrumException {
         Observation observation = reader.read(file);
         PreparedSpectrum prepared = preparer.prepare(observation, stated);
+        Measurements measurements = measurer.measure(prepared);
         return new SpectrumResult(
                 path,
                 observation.format(),
                 observation.sha256(),
                 prepared,
-                measurer.measure(prepared));
+                measurements,
+                lines.report(prepared, measurements));
     }
 
     private ObjectResult placed(

@@ -1,6 +1,7 @@
 package emberline.survey;
 
 import emberline.measure.Measurements;
+import emberline.measure.line.LineReport;
 import emberline.prepare.PreparedSpectrum;
 
 /**
@@ -11,10 +12,12 @@ import emberline.prepare.PreparedSpectrum;
  * @param sha256 checksum of the file's bytes, hexadecimal
  * @param prepared the prepared spectrum
  * @param measurements every feature of the catalogue
+ * @param lines what its lines say: widths seen or limits, radial velocity
  */
 public record SpectrumResult(
         String path,
         String format,
         String sha256,
         PreparedSpectrum prepared,
-        Measurements measurements) {}
+        Measurements measurements,
+        LineReport lines) {}

@@ -32,7 +32,7 @@ class StandardCatalogueTest {
     /** A change of these numbers is a change of the product and must be meant. */
     @Test
     void holdsWhatItHeldBefore() {
-        assertEquals(170, catalogue.features().size());
+        assertEquals(180, catalogue.features().size());
         assertEquals(62, catalogue.relations().size());
         assertEquals(53, catalogue.relations(Quantity.SPECTRAL_TYPE).size());
         assertEquals(3, catalogue.relations(Quantity.SOLAR_TIO5).size());
@@ -42,7 +42,8 @@ class StandardCatalogueTest {
         assertEquals(96, catalogue.typeBoundaries().size());
         assertEquals(6, catalogue.pairPlanes().size());
         assertEquals(4, catalogue.metallicityClasses().size());
-        assertEquals(53, catalogue.sources().size());
+        assertEquals(56, catalogue.sources().size());
+        assertEquals(22, catalogue.activityFactors().size());
         assertEquals(40, catalogue.restLines().size());
         assertEquals(24, catalogue.telluricRegions().size());
         assertEquals(31, catalogue.molecularBands().size());
@@ -105,7 +106,8 @@ class StandardCatalogueTest {
                         Relation.Population.class,
                         Relation.Verdict.class,
                         TelluricRegion.Strength.class,
-                        MetallicityClass.Name.class)) {
+                        MetallicityClass.Name.class,
+                        ActivityFactor.Quantity.class)) {
             for (Enum<?> word : list.getEnumConstants()) {
                 assertTrue(schema.contains(word.name()), word.name());
             }
@@ -121,6 +123,7 @@ class StandardCatalogueTest {
         catalogue.typeBoundaries().forEach(x -> used.add(x.source()));
         catalogue.pairPlanes().forEach(x -> used.add(x.source()));
         catalogue.metallicityClasses().forEach(x -> used.add(x.source()));
+        catalogue.activityFactors().forEach(x -> used.add(x.source()));
         catalogue.restLines().forEach(x -> used.add(x.source()));
         catalogue.telluricRegions().forEach(x -> used.add(x.source()));
         catalogue.molecularBands().forEach(x -> used.add(x.source()));
@@ -184,6 +187,7 @@ class StandardCatalogueTest {
                         catalogue.pairPlanes().stream().map(PairPlane::confidencePercent),
                         catalogue.metallicityClasses().stream()
                                 .map(MetallicityClass::confidencePercent),
+                        catalogue.activityFactors().stream().map(ActivityFactor::confidencePercent),
                         catalogue.restLines().stream().map(RestLine::confidencePercent),
                         catalogue.telluricRegions().stream().map(TelluricRegion::confidencePercent),
                         catalogue.molecularBands().stream().map(MolecularBand::confidencePercent))

@@ -51,6 +51,9 @@ public final class ObjectJson {
         map.put("gravity_reason", result.placement().map(p -> p.gravity().reason()).orElse(""));
         map.put("relations", result.placement().map(ObjectJson::relations).orElse(List.of()));
         map.put("gravity_scores", result.placement().map(ObjectJson::scores).orElse(List.of()));
+        map.put(
+                "activity",
+                result.placement().map(p -> (Object) LineJson.activity(p.activity())).orElse(null));
         map.put("features", result.best().map(ObjectJson::features).orElse(List.of()));
         map.put("spectra", result.spectra().stream().map(ObjectJson::spectrum).toList());
         return map;
@@ -163,6 +166,8 @@ public final class ObjectJson {
         map.put("noise_scale", JsonText.number(Digits.significant(noise.scale())));
         map.put("noise_lag1", JsonText.number(Digits.fixed(noise.lag1(), 3)));
         map.put("noise_lag2", JsonText.number(Digits.fixed(noise.lag2(), 3)));
+        map.put("lines", LineJson.lines(result.lines()));
+        map.put("velocity", LineJson.velocity(result.lines().velocity()));
         return map;
     }
 

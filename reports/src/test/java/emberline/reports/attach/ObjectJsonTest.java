@@ -37,6 +37,24 @@ class ObjectJsonTest {
         assertEquals("given", spectrum.get("resolution_basis"));
     }
 
+    /** An invented spectrum of low resolution: no velocity, and the reason stands in its place. */
+    @Test
+    void linesVelocityAndActivityHaveTheirKeys() throws IOException {
+        Map<String, Object> map = JSON.std.mapFrom(ObjectJson.text(Samples.lDwarf()));
+        Map<?, ?> activity = (Map<?, ?>) map.get("activity");
+        assertEquals("H alpha was not measured", activity.get("reason"));
+        assertEquals(List.of(), activity.get("levels"));
+        Map<?, ?> spectrum = (Map<?, ?>) ((List<?>) map.get("spectra")).get(0);
+        Map<?, ?> velocity = (Map<?, ?>) spectrum.get("velocity");
+        assertNull(velocity.get("kms"));
+        assertTrue(velocity.get("reason").toString().startsWith("too coarse: "));
+        for (Object line : (List<?>) spectrum.get("lines")) {
+            Map<?, ?> cells = (Map<?, ?>) line;
+            assertEquals(
+                    "not seen".equals(cells.get("detection")), cells.get("limit_3sigma") != null);
+        }
+    }
+
     @Test
     void aFailedObjectHasEveryKeyAndNoNumbers() throws IOException {
         String text = ObjectJson.text(Samples.failed("x", "line 3: no number"));

@@ -1,0 +1,38 @@
+package emberline.measure.line;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.catalogue.Kind;
+import emberline.measure.Measurements;
+import emberline.prepare.PreparedSpectrum;
+import java.util.List;
+
+/** Reports what the lines of a spectrum say. Safe for use by several threads. */
+public final class LineReporter {
+
+    private final VelocityFinder velocities;
+
+    /**
+     * A reporter.
+     *
+     * @param catalogue where the lines at rest and the telluric regions are looked up
+     */
+    public LineReporter(FeatureCatalogue catalogue) {
+        this.velocities = new VelocityFinder(catalogue);
+    }
+
+    /**
+     * Reports on a spectrum.
+     *
+     * @param prepared the spectrum
+     * @param measurements what was measured on it
+     * @return its lines and its radial velocity
+     */
+    public LineReport report(PreparedSpectrum prepared, Measurements measurements) {
+        List<LineMeasurement> lines =
+                measurements.all().stream()
+                        .filter(m -> m.feature().kind() == Kind.EQUIVALENT_WIDTH)
+                        .map(m -> LineMeasurement.of(m.feature(), m.result()))
+                        .toList();
+        return new LineReport(lines, velocities.find(prepared));
+    }
+}

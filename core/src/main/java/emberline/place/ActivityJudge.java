@@ -1,0 +1,140 @@
+package emberline.place;
+
+import emberline.catalogue.ActivityFactor;
+import emberline.catalogue.ActivityFactor.Quantity;
+import emberline.catalogue.Feature;
+import emberline.catalogue.FeatureCatalogue;
+import emberline.catalogue.Kind;
+import emberline.catalogue.Purpose;
+import emberline.catalogue.RestLine;
+import emberline.catalogue.Role;
+import emberline.measure.Measurement.Measured;
+import emberline.measure.Measurements;
+import emberline.spectrum.Finding;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/**
+ * Judges activity by H alpha: of the definitions of its equivalent width that were measured, the
+ * one with the widest line window is taken, which loses least light at low resolution.
+ */
+final class ActivityJudge {
+
+    /** Emission or a limit is given where the width reaches this many times its error. */
+    private static final double SEEN = 3;
+
+    private static final double DEX = 1 / Math.log(10);
+
+    private final List<Feature> widths;
+    private final List<ChiCurve> curves;
+    private final List<ActivityFactor> saturation;
+
+    ActivityJudge(FeatureCatalogue catalogue) {
+        List<Double> hydrogen =
+                catalogue.restLines().stream()
+                        .filter(line -> line.species().equals("H I"))
+                        .map(RestLine::vacuumMicron)
+                        .toList();
+        this.widths =
+                catalogue.features().stream()
+                        .filter(f -> f.kind() == Kind.EQUIVALENT_WIDTH)
+                        .filter(f -> f.purpose() == Purpose.ACTIVITY && f.species().equals("H"))
+                        .filter(f -> f.windows(Role.LINE).size() == 1)
+                        .filter(f -> hydrogen.stream().anyMatch(micron -> holds(f, micron)))
+                        .sorted(Comparator.comparingDouble(f -> -f.window(Role.LINE).widthMicron()))
+                        .toList();
+        this.curves = ChiCurve.all(catalogue);
+        this.saturation =
+                catalogue.activityFactors().stream()
+                        .filter(factor -> factor.quantity() == Quantity.SATURATION)
+                        .toList();
+    }
+
+    private static boolean holds(Feature feature, double micron) {
+        return feature.window(Role.LINE).lowMicron() < micron
+                && micron < feature.window(Role.LINE).highMicron();
+    }
+
+    /** The activity of an object of a type. */
+    Activity judge(Measurements measurements, TypeEstimate type) {
+        Optional<Feature> line =
+                widths.stream().filter(f -> measurements.measured(f.id()).isPresent()).findFirst();
+        if (line.isEmpty()) {
+            return Activity.none("H alpha was not measured");
+        }
+        Measured width = measurements.measured(line.get().id()).orElseThrow();
+        List<ActivityLevel> levels = new ArrayList<>();
+        for (ChiCurve curve : curves) {
+            if (curve.covers(type.typeNumber())) {
+                level(curve, width, type).ifPresent(levels::add);
+            }
+        }
+        String reason =
+                levels.isEmpty()
+                        ? "no published chi covers the type "
+                                + type.code()
+                                + ", or the width has no error"
+                        : "";
+        return new Activity(line, levels, reason);
+    }
+
+    /** The level by one curve; empty where neither emission nor noise gives a number. */
+    private static Optional<ActivityLevel> level(
+            ChiCurve curve, Measured width, TypeEstimate type) {
+        double emission = -width.value();
+        double logChi = curve.logChi(type.typeNumber());
+        boolean seen = emission > 0 && emission >= SEEN * width.oneSigma();
+        if (!seen) {
+            return width.oneSigma() > 0
+                    ? Optional.of(
+                            new ActivityLevel(
+                                    curve.source(),
+                                    logChi + Math.log10(SEEN * width.oneSigma()),
+                                    OptionalDouble.empty()))
+                    : Optional.empty();
+        }
+        double byWidth = DEX * width.oneSigma() / emission;
+        double byType =
+                (curve.logChi(type.typeNumber() + type.sigmaSubclass())
+                                - curve.logChi(type.typeNumber() - type.sigmaSubclass()))
+                        / 2;
+        double byChi = curve.sigmaDex(type.typeNumber());
+        return Optional.of(
+                new ActivityLevel(
+                        curve.source(),
+                        logChi + Math.log10(emission),
+                        OptionalDouble.of(
+                                Math.sqrt(byWidth * byWidth + byType * byType + byChi * byChi))));
+    }
+
+    /** What the observer should know: emission above the saturation of chromospheres. */
+    List<Finding> findings(Activity activity) {
+        List<Finding> findings = new ArrayList<>();
+        for (ActivityFactor limit : saturation) {
+            activity.levels().stream()
+                    .filter(level -> !level.isUpperLimit() && level.logRatio() >= limit.value())
+                    .findFirst()
+                    .ifPresent(
+                            level ->
+                                    findings.add(
+                                            Finding.note(
+                                                    "halpha-above-saturation",
+                                                    String.format(
+                                                            Locale.ROOT,
+                                                            "log L(H alpha) / L(bol) is %.2f (chi of"
+                                                                    + " %s), at or above %.1f where"
+                                                                    + " chromospheres saturate (%s):"
+                                                                    + " accretion or a flare is"
+                                                                    + " possible",
+                                                            level.logRatio(),
+                                                            level.source().shortCite(),
+                                                            limit.value(),
+                                                            limit.source().shortCite()))));
+        }
+        return findings;
+    }
+}
