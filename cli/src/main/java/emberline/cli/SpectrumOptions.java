@@ -54,6 +54,13 @@ final class SpectrumOptions {
     private double rv;
 
     @Option(
+            names = "--to-rest",
+            description =
+                    "Shift each spectrum to rest by the radial velocity of its own lines, where"
+                            + " the list states none.")
+    private boolean toRest;
+
+    @Option(
             names = "--seed",
             paramLabel = "N",
             defaultValue = "" + SurveySettings.DEFAULT_SEED,
@@ -86,6 +93,7 @@ final class SpectrumOptions {
         return SurveySettings.withDefaults()
                 .withThreads(threads)
                 .withSeed(seed)
+                .withMeasuredRest(toRest)
                 .withPreparing(stated);
     }
 

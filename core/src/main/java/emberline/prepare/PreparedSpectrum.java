@@ -3,6 +3,7 @@ package emberline.prepare;
 import emberline.spectrum.Finding;
 import emberline.spectrum.ResolvingPower;
 import emberline.spectrum.Spectrum;
+import java.util.ArrayList;
 import java.util.List;
 
 /**
@@ -23,5 +24,17 @@ public record PreparedSpectrum(
     /** Copies the list. */
     public PreparedSpectrum {
         findings = List.copyOf(findings);
+    }
+
+    /**
+     * This spectrum with one more finding.
+     *
+     * @param finding what was found
+     * @return a new value
+     */
+    public PreparedSpectrum with(Finding finding) {
+        List<Finding> more = new ArrayList<>(findings);
+        more.add(finding);
+        return new PreparedSpectrum(spectrum, resolvingPower, noise, more);
     }
 }

@@ -4,6 +4,7 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurements;
 import emberline.measure.Measurer;
 import emberline.measure.Measuring;
+import emberline.measure.line.LineReport;
 import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
@@ -20,7 +21,9 @@ import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * The whole chain for one object: read, prepare, measure, place. An object that fails gets a result
@@ -35,6 +38,7 @@ public final class Chain {
     private final Placer placer;
     private final Preparing defaults;
     private final long seed;
+    private final boolean toMeasuredRest;
 
     /**
      * A chain.
@@ -49,6 +53,7 @@ public final class Chain {
         this.placer = new Placer(catalogue);
         this.defaults = settings.preparing();
         this.seed = settings.seed();
+        this.toMeasuredRest = settings.toMeasuredRest();
     }
 
     /**
@@ -63,7 +68,7 @@ public final class Chain {
         List<String> troubles = new ArrayList<>();
         for (String path : candidate.spectra()) {
             try {
-                spectra.add(measure(path, folder.resolve(path), stated(candidate)));
+                spectra.add(measure(path, reader.read(folder.resolve(path)), stated(candidate)));
             } catch (UnreadableSpectrumException e) {
                 troubles.add(e.getMessage());
             } catch (InvalidPathException e) {
@@ -96,18 +101,37 @@ public final class Chain {
                 List.of());
     }
 
-    private SpectrumResult measure(String path, Path file, Preparing stated)
-            throws UnreadableSpectrumException {
-        Observation observation = reader.read(file);
+    private SpectrumResult measure(String path, Observation observation, Preparing stated) {
         PreparedSpectrum prepared = preparer.prepare(observation, stated);
         Measurements measurements = measurer.measure(prepared);
+        LineReport seen = lines.report(prepared, measurements);
+        OptionalDouble velocity =
+                stated.radialVelocityKms().isPresent()
+                        ? OptionalDouble.empty()
+                        : seen.velocity().significantKms();
+        if (velocity.isPresent() && toMeasuredRest) {
+            return measure(path, observation, stated.withRadialVelocityKms(velocity.getAsDouble()));
+        }
         return new SpectrumResult(
                 path,
                 observation.format(),
                 observation.sha256(),
-                prepared,
+                velocity.isPresent()
+                        ? prepared.with(velocityLeftIn(velocity.getAsDouble()))
+                        : prepared,
                 measurements,
-                lines.report(prepared, measurements));
+                seen);
+    }
+
+    private static Finding velocityLeftIn(double velocityKms) {
+        return Finding.note(
+                "velocity-left-in",
+                String.format(
+                        Locale.ROOT,
+                        "the lines show a radial velocity of %.0f km/s, which was not taken out;"
+                                + " it moves narrow windows by %.1f Angstrom at 1.25 micron",
+                        velocityKms,
+                        velocityKms / 299_792.458 * 12_500));
     }
 
     private ObjectResult placed(

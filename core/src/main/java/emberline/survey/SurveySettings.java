@@ -8,8 +8,9 @@ import emberline.prepare.Preparing;
  * @param preparing what the observer states about every spectrum for which the list says nothing
  * @param threads number of threads, at least 1
  * @param seed start of all random draws
+ * @param toMeasuredRest whether the velocity that lines show is taken out where none is stated
  */
-public record SurveySettings(Preparing preparing, int threads, long seed) {
+public record SurveySettings(Preparing preparing, int threads, long seed, boolean toMeasuredRest) {
 
     /** The seed where none is given. */
     public static final long DEFAULT_SEED = 20_260_101L;
@@ -28,7 +29,10 @@ public record SurveySettings(Preparing preparing, int threads, long seed) {
      */
     public static SurveySettings withDefaults() {
         return new SurveySettings(
-                Preparing.withDefaults(), Runtime.getRuntime().availableProcessors(), DEFAULT_SEED);
+                Preparing.withDefaults(),
+                Runtime.getRuntime().availableProcessors(),
+                DEFAULT_SEED,
+                false);
     }
 
     /**
@@ -38,7 +42,7 @@ public record SurveySettings(Preparing preparing, int threads, long seed) {
      * @return new settings
      */
     public SurveySettings withThreads(int number) {
-        return new SurveySettings(preparing, number, seed);
+        return new SurveySettings(preparing, number, seed, toMeasuredRest);
     }
 
     /**
@@ -48,7 +52,7 @@ public record SurveySettings(Preparing preparing, int threads, long seed) {
      * @return new settings
      */
     public SurveySettings withSeed(long start) {
-        return new SurveySettings(preparing, threads, start);
+        return new SurveySettings(preparing, threads, start, toMeasuredRest);
     }
 
     /**
@@ -58,6 +62,16 @@ public record SurveySettings(Preparing preparing, int threads, long seed) {
      * @return new settings
      */
     public SurveySettings withPreparing(Preparing stated) {
-        return new SurveySettings(stated, threads, seed);
+        return new SurveySettings(stated, threads, seed, toMeasuredRest);
+    }
+
+    /**
+     * These settings with spectra shifted to rest by the velocity of their lines, or not.
+     *
+     * @param shift true to shift where no velocity is stated and the lines show one
+     * @return new settings
+     */
+    public SurveySettings withMeasuredRest(boolean shift) {
+        return new SurveySettings(preparing, threads, seed, shift);
     }
 }

@@ -38,4 +38,17 @@ public record RadialVelocity(
                 v -> OptionalDouble.of(Math.hypot(v.oneSigma(), scaleSigmaKms)),
                 why -> OptionalDouble.empty());
     }
+
+    /**
+     * The velocity, where it is told from zero by three of its total errors.
+     *
+     * @return velocity (km/s), or empty where it was not measured or is not told from zero
+     */
+    public OptionalDouble significantKms() {
+        if (kms instanceof Measurement.Measured measured
+                && Math.abs(measured.value()) > 3 * totalSigmaKms().orElseThrow()) {
+            return OptionalDouble.of(measured.value());
+        }
+        return OptionalDouble.empty();
+    }
 }

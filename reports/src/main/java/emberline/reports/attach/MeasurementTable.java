@@ -98,7 +98,7 @@ public final class MeasurementTable {
             map.put("status", result.status().word());
             map.put("reason", result.reason());
             map.put("findings", result.findings().stream().map(ObjectJson::finding).toList());
-            map.put("features", all(result).stream().map(ObjectJson::feature).toList());
+            map.put("features", result.best().map(ObjectJson::features).orElse(List.of()));
             objects.add(map);
         }
         return JsonText.of(objects.size() == 1 ? objects.get(0) : objects);

@@ -1,14 +1,17 @@
 package emberline.reports.attach;
 
+import emberline.catalogue.Feature;
 import emberline.measure.FeatureMeasurement;
 import emberline.measure.Measurement;
 import emberline.measure.Measurements;
+import emberline.measure.Measurements.Interval68;
 import emberline.place.GravityScore;
 import emberline.place.Placement;
 import emberline.place.RelationEstimate;
 import emberline.place.TypeEstimate;
 import emberline.prepare.BandSignal;
 import emberline.prepare.NoiseModel;
+import emberline.prepare.Quality;
 import emberline.reports.attach.ResultColumn.Content;
 import emberline.spectrum.Finding;
 import emberline.spectrum.Spectrum;
@@ -28,6 +31,9 @@ import java.util.OptionalDouble;
  * the table. The same result gives the same bytes.
  */
 public final class ObjectJson {
+
+    /** Intervals come from draws where the signal is low; any fixed start will do. */
+    private static final long INTERVAL_SEED = 1;
 
     private ObjectJson() {}
 
@@ -120,18 +126,30 @@ public final class ObjectJson {
                 : null;
     }
 
-    private static List<Map<String, Object>> features(Measurements measurements) {
-        return measurements.all().stream().map(ObjectJson::feature).toList();
+    /** Every feature of an object. */
+    static List<Map<String, Object>> features(Measurements measurements) {
+        return measurements.all().stream()
+                .map(measurement -> feature(measurement, measurements))
+                .toList();
     }
 
     /** One feature: its value with its error, or why there is none. */
-    static Map<String, Object> feature(FeatureMeasurement measurement) {
+    private static Map<String, Object> feature(
+            FeatureMeasurement measurement, Measurements measurements) {
+        Feature feature = measurement.feature();
         Map<String, Object> map = new LinkedHashMap<>();
-        map.put("feature", measurement.feature().id());
-        map.put("value", value(measurement.feature(), measurement.result()));
-        map.put("sigma", sigma(measurement.feature(), measurement.result()));
+        map.put("feature", feature.id());
+        map.put("value", value(feature, measurement.result()));
+        map.put("sigma", sigma(feature, measurement.result()));
+        Optional<Interval68> interval =
+                measurement.result() instanceof Measurement.Measured
+                        ? Optional.of(measurements.interval68(feature.id(), INTERVAL_SEED))
+                        : Optional.empty();
+        map.put("lo68", number(interval.map(i -> Digits.feature(feature, i.low()))));
+        map.put("hi68", number(interval.map(i -> Digits.feature(feature, i.high()))));
         map.put("unit", FeatureText.unit(measurement.feature()));
         map.put("coverage", JsonText.number(Digits.fixed(measurement.coverage(), 3)));
+        map.put("telluric_share", JsonText.number(Digits.fixed(measurement.telluricShare(), 3)));
         OptionalDouble smoothed = measurement.smoothedToResolvingPower();
         map.put(
                 "smoothed_to",
@@ -158,6 +176,7 @@ public final class ObjectJson {
         Optional<BandSignal> signal = BandSignal.best(spectrum);
         map.put("snr", number(signal.map(s -> Digits.signal(s.medianSignalToNoise()))));
         map.put("snr_band", signal.map(s -> word(s.range())).orElse(""));
+        map.put("quality", quality(Quality.of(result.prepared())));
         map.put(
                 "resolution",
                 JsonText.number(Digits.significant(result.prepared().resolvingPower().value())));
@@ -171,11 +190,27 @@ public final class ObjectJson {
         return map;
     }
 
-    private static Object value(emberline.catalogue.Feature feature, Measurement result) {
+    private static Map<String, Object> quality(Quality quality) {
+        Map<String, Object> map = new LinkedHashMap<>();
+        map.put("grade", quality.grade().word());
+        map.put("reason", quality.reason());
+        List<Map<String, Object>> bands = new ArrayList<>();
+        for (BandSignal signal : quality.bands()) {
+            Map<String, Object> band = new LinkedHashMap<>();
+            band.put("band", word(signal.range()));
+            band.put("coverage", JsonText.number(Digits.fixed(signal.coverage(), 3)));
+            band.put("snr", JsonText.number(Digits.signal(signal.medianSignalToNoise())));
+            bands.add(band);
+        }
+        map.put("bands", bands);
+        return map;
+    }
+
+    private static Object value(Feature feature, Measurement result) {
         return JsonText.number(result.fold(v -> Digits.feature(feature, v.value()), n -> ""));
     }
 
-    private static Object sigma(emberline.catalogue.Feature feature, Measurement result) {
+    private static Object sigma(Feature feature, Measurement result) {
         return JsonText.number(result.fold(v -> Digits.feature(feature, v.oneSigma()), n -> ""));
     }
 

@@ -3,6 +3,7 @@ package emberline.reports.attach;
 import emberline.place.Placement;
 import emberline.place.TypeEstimate;
 import emberline.prepare.BandSignal;
+import emberline.prepare.Quality;
 import emberline.reports.attach.ResultColumn.Content;
 import emberline.spectrum.Finding;
 import emberline.survey.ObjectResult;
@@ -122,6 +123,14 @@ public final class ResultColumns {
                                 leading(r)
                                         .flatMap(s -> BandSignal.best(s.prepared().spectrum()))
                                         .map(s -> Digits.signal(s.medianSignalToNoise()))
+                                        .orElse("")));
+        columns.add(
+                text(
+                        "quality",
+                        "grade of the best spectrum: good, usable, poor or unusable",
+                        r ->
+                                leading(r)
+                                        .map(s -> Quality.of(s.prepared()).grade().word())
                                         .orElse("")));
         columns.add(
                 number(

@@ -33,6 +33,9 @@ import java.util.OptionalDouble;
 /** The pages after the first: every measurement, every relation, findings, provenance, sources. */
 final class DetailPages {
 
+    /** Share of a window in telluric bands from which a feature is marked. */
+    private static final double MOSTLY_TELLURIC = 0.5;
+
     private final ReportDocument document;
     private final FeatureCatalogue catalogue;
     private final ReportSettings settings;
@@ -107,7 +110,8 @@ final class DetailPages {
                 "Value ± one sigma from the pixel noise; Å: equivalent width in angstrom. Right:"
                         + " the type by a published relation, bold where it was combined, or the"
                         + " gravity score (g). A dash: measured only. *: definition quoted from"
-                        + " memory, not yet checked in the paper.",
+                        + " memory, not yet checked in the paper. †: more than half of a window lies"
+                        + " in a telluric band.",
                 0);
         Map<Band, List<FeatureMeasurement>> byBand = new LinkedHashMap<>();
         for (Band band : Band.values()) {
@@ -137,7 +141,9 @@ final class DetailPages {
         Feature feature = measurement.feature();
         Measured value = (Measured) measurement.result();
         String unit = feature.kind() == emberline.catalogue.Kind.BAND_INDEX ? "" : " Å";
-        String known = feature.howKnown() == HowKnown.FROM_MEMORY ? "*" : "";
+        String known =
+                (feature.howKnown() == HowKnown.FROM_MEMORY ? "*" : "")
+                        + (measurement.telluricShare() > MOSTLY_TELLURIC ? "†" : "");
         String number =
                 Digits.feature(feature, value.value()).replace('-', '\u2212')
                         + " ± "

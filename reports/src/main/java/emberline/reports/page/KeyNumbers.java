@@ -4,6 +4,7 @@ import emberline.measure.Measurement.Measured;
 import emberline.place.GravityVerdict;
 import emberline.place.TypeEstimate;
 import emberline.prepare.BandSignal;
+import emberline.prepare.Quality;
 import emberline.reports.attach.Digits;
 import emberline.reports.attach.ResultColumns;
 import emberline.spectrum.Candidate;
@@ -100,6 +101,8 @@ final class KeyNumbers {
                                                 + s.range().words().replace("the optical", "opt")
                                                 + ")")
                         .collect(Collectors.joining(", "));
+        Quality quality = Quality.of(leading.get().prepared());
+        entries.add(new Entry("Quality", quality.grade().word() + ": " + quality.reason()));
         entries.add(new Entry("S/N per pixel", signal.isEmpty() ? "not known" : signal));
         double resolvingPower = leading.get().prepared().resolvingPower().value();
         entries.add(
