@@ -23,7 +23,8 @@ import picocli.CommandLine.Spec;
             MeasureCommand.class,
             PlaceCommand.class,
             ReportCommand.class,
-            CatalogueCommand.class
+            CatalogueCommand.class,
+            CalibrateCommand.class
         },
         mixinStandardHelpOptions = true,
         versionProvider = ProgramVersion.class,

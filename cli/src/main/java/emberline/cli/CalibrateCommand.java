@@ -1,0 +1,90 @@
+package emberline.cli;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.place.reference.ReferenceTable;
+import emberline.read.CandidateList;
+import emberline.read.CandidateListReader;
+import emberline.reports.attach.AtomicFile;
+import emberline.survey.Chain;
+import emberline.survey.ReferenceMaker;
+import emberline.survey.SurveyRunner;
+import emberline.survey.SurveySettings;
+import java.io.IOException;
+import java.io.StringWriter;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.concurrent.Callable;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+
+/** {@code calibrate}: measures a list of known types into a reference table. */
+@Command(
+        name = "calibrate",
+        description = {
+            "Measures a list of spectra of known type, gravity and kind and writes the reference"
+                    + " table (values and errors, no pixels).",
+            "The list needs known_type_number, known_gravity and known_kind beside name and"
+                    + " spectrum; tier, group and dataset are used where they are there."
+        },
+        mixinStandardHelpOptions = true)
+final class CalibrateCommand implements Callable<Integer> {
+
+    @Spec private CommandSpec spec;
+    @Mixin private SpectrumOptions spectrumOptions;
+    @Mixin private CatalogueOption catalogueOption;
+
+    @Parameters(paramLabel = "LIST", description = "The list of known objects.")
+    private Path list;
+
+    @Option(
+            names = "--out",
+            paramLabel = "DIR",
+            required = true,
+            description = "Folder for the table; made if it does not stand there.")
+    private Path out;
+
+    @Option(
+            names = "--threads",
+            paramLabel = "N",
+            description = "Number of threads (default: one a processor).")
+    private int threads = Runtime.getRuntime().availableProcessors();
+
+    @Override
+    public Integer call() throws IOException, InterruptedException {
+        SurveySettings settings = spectrumOptions.settings(threads);
+        FeatureCatalogue catalogue = catalogueOption.load();
+        CandidateList candidates = new CandidateListReader().read(list);
+        Chain chain = new Chain(catalogue, spectrumOptions.measuring(), settings);
+        ReferenceMaker maker = new ReferenceMaker();
+        new SurveyRunner(chain, settings.threads()).run(candidates, result -> result, maker::add);
+        ReferenceTable table = maker.table();
+        StringWriter text = new StringWriter();
+        table.write(
+                text,
+                List.of(
+                        "Reference table of Emberline "
+                                + ProgramVersion.number()
+                                + ": calibrate "
+                                + list.getFileName()
+                                + ".",
+                        "Our own measurements on public spectra; types, gravities and kinds as"
+                                + " published; `source` names the data set.",
+                        "Values of indices with one-sigma errors from the pixel noise; no pixels."));
+        Files.createDirectories(out);
+        AtomicFile.write(out.resolve("reference.csv"), text.toString());
+        spec.commandLine()
+                .getErr()
+                .println(
+                        table.rows().size()
+                                + " spectra with "
+                                + table.features().size()
+                                + " features written to "
+                                + out.resolve("reference.csv"));
+        return ExitCode.DONE;
+    }
+}

@@ -1,0 +1,74 @@
+package emberline.survey;
+
+import emberline.measure.FeatureMeasurement;
+import emberline.measure.Measurement.Measured;
+import emberline.place.reference.ReferenceRow;
+import emberline.place.reference.ReferenceTable;
+import emberline.spectrum.Candidate;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import java.util.TreeSet;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+
+/**
+ * Makes a reference table from the results of a list with known types, gravities and kinds. Fed
+ * object by object in the order of the list.
+ */
+public final class ReferenceMaker {
+
+    private final List<ReferenceRow> rows = new ArrayList<>();
+    private final Set<String> wanted = new TreeSet<>(ReferenceTable.standardFeatures());
+
+    /** A maker without rows. */
+    public ReferenceMaker() {}
+
+    /**
+     * Adds an object; one that could not be measured adds nothing.
+     *
+     * @param result its result; the list says what it is in {@code known_type_number}, {@code
+     *     known_gravity}, {@code known_kind}, {@code tier}, {@code group} and {@code dataset}
+     */
+    public void add(ObjectResult result) {
+        if (result.best().isEmpty()) {
+            return;
+        }
+        Candidate candidate = result.candidate();
+        Map<String, Measured> features = new LinkedHashMap<>();
+        for (FeatureMeasurement one : result.best().get().all()) {
+            if (one.result() instanceof Measured value && wanted.contains(one.feature().id())) {
+                features.put(one.feature().id(), value);
+            }
+        }
+        rows.add(
+                new ReferenceRow(
+                        candidate.name(),
+                        candidate.text("group").orElseGet(() -> group(candidate.name())),
+                        candidate.number("known_type_number"),
+                        candidate.text("known_gravity").orElse(""),
+                        candidate.text("known_kind").orElse(""),
+                        candidate.text("tier").orElse(""),
+                        candidate.text("dataset").orElse(""),
+                        result.spectra().get(0).prepared().resolvingPower().value(),
+                        features));
+    }
+
+    /** Spectra of one object are numbered in brackets, or differ in the digits of a coordinate. */
+    private static String group(String name) {
+        String plain = name.replaceFirst(" \\(.*\\)$", "");
+        Matcher coordinate = Pattern.compile("J(\\d{4})\\S*?([+-]\\d{2})").matcher(plain);
+        return coordinate.find() ? "J" + coordinate.group(1) + coordinate.group(2) : plain;
+    }
+
+    /**
+     * The table so far.
+     *
+     * @return a table with the features that the product's reference table holds
+     */
+    public ReferenceTable table() {
+        return new ReferenceTable(List.copyOf(wanted), rows);
+    }
+}
