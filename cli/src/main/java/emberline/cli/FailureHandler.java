@@ -11,7 +11,7 @@ final class FailureHandler implements IExecutionExceptionHandler {
 
     @Override
     public int handleExecutionException(
-            Exception failure, CommandLine commandLine, ParseResult parsed) throws Exception {
+            Exception failure, CommandLine commandLine, ParseResult parsed) {
         if (failure instanceof UnreadableListException) {
             commandLine.getErr().println(failure.getMessage());
             return ExitCode.NOTHING_READ;
@@ -20,6 +20,12 @@ final class FailureHandler implements IExecutionExceptionHandler {
             commandLine.getErr().println(OutputTrouble.message(trouble));
             return ExitCode.NOT_WRITTEN;
         }
-        throw failure;
+        commandLine
+                .getErr()
+                .println(
+                        "internal error: "
+                                + failure
+                                + "; please report it with the command and its input");
+        return ExitCode.NOT_WRITTEN;
     }
 }

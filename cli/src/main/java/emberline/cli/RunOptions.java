@@ -19,6 +19,11 @@ final class RunOptions {
                 settings.preparing().resolvingPower().isPresent()
                         ? Double.toString(settings.preparing().resolvingPower().getAsDouble())
                         : "");
+        options.put(
+                "velocity_kms",
+                settings.preparing().radialVelocityKms().isPresent()
+                        ? Double.toString(settings.preparing().radialVelocityKms().getAsDouble())
+                        : "");
         options.put("site", measuring.site().word());
         options.put(
                 "av_mag",

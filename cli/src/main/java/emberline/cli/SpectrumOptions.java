@@ -2,6 +2,7 @@ package emberline.cli;
 
 import emberline.measure.Measuring;
 import emberline.measure.Site;
+import emberline.prepare.ExtinctionLaw;
 import emberline.prepare.Preparing;
 import emberline.spectrum.Medium;
 import emberline.survey.SurveySettings;
@@ -47,11 +48,18 @@ final class SpectrumOptions {
     private Double avMag;
 
     @Option(
-            names = "--rv",
+            names = "--extinction-ratio",
             paramLabel = "R_V",
-            defaultValue = "3.1",
-            description = "Ratio of total to selective extinction (default ${DEFAULT-VALUE}).")
-    private double rv;
+            description = "Ratio of total to selective extinction, with --av (default 3.1).")
+    private Double rv;
+
+    @Option(
+            names = "--velocity",
+            paramLabel = "KMS",
+            description =
+                    "Radial velocity to take out where the list states none (km/s, positive away"
+                            + " from us).")
+    private Double velocityKms;
 
     @Option(
             names = "--to-rest",
@@ -83,8 +91,14 @@ final class SpectrumOptions {
             }
             stated = stated.withResolvingPower(resolution);
         }
+        if (velocityKms != null) {
+            stated = stated.withRadialVelocityKms(velocity());
+        }
         if (avMag != null) {
             stated = stated.withExtinction(extinction());
+        } else if (rv != null) {
+            throw new ParameterException(
+                    spec.commandLine(), "--extinction-ratio: expected --av beside it");
         }
         if (threads < 1) {
             throw new ParameterException(
@@ -99,10 +113,21 @@ final class SpectrumOptions {
 
     private Preparing.Extinction extinction() {
         try {
-            return new Preparing.Extinction(avMag, rv);
+            return new Preparing.Extinction(avMag, rv == null ? ExtinctionLaw.DIFFUSE_RV : rv);
         } catch (IllegalArgumentException e) {
-            throw new ParameterException(spec.commandLine(), "--av, --rv: " + e.getMessage());
+            throw new ParameterException(
+                    spec.commandLine(), "--av, --extinction-ratio: " + e.getMessage());
         }
+    }
+
+    private double velocity() {
+        if (!(Math.abs(velocityKms) < 30_000)) {
+            throw new ParameterException(
+                    spec.commandLine(),
+                    "--velocity: expected a number between -30000 and 30000 but was "
+                            + velocityKms);
+        }
+        return velocityKms;
     }
 
     /** How features are measured. */

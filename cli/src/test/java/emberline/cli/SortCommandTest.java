@@ -206,6 +206,10 @@ class SortCommandTest {
         "--threads, 0, at least 1",
         "--resolution, -5, positive",
         "--medium, water, medium",
+        "--velocity, 40000, between",
+        "--extinction-ratio, 3.1, --av",
+        "--av, -2, expected 0",
+        "--site, moon, site",
         "--seed, x, seed"
     })
     void wrongOptionsAreExplained(String option, String value, String word) throws IOException {

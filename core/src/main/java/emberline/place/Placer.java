@@ -66,16 +66,15 @@ public final class Placer {
                             "the type holds only if the object is a late dwarf: giants, reddened"
                                     + " stars and galaxies are not told apart by these relations"));
         }
-        boolean alone =
-                verdict.gravityClass().isPresent()
-                        && verdict.scores().stream().filter(s -> s.score().isPresent()).count()
-                                == 1;
-        if (alone) {
+        List<GravityScore> scored =
+                verdict.scores().stream().filter(score -> score.score().isPresent()).toList();
+        if (verdict.gravityClass().isPresent() && scored.size() == 1) {
             findings.add(
                     Finding.caution(
                             "gravity-by-one-feature",
-                            "the gravity class rests on H-cont alone, which dust and metallicity"
-                                    + " move too"));
+                            "the gravity class rests on "
+                                    + scored.get(0).feature().symbol()
+                                    + " alone, which dust and metallicity move too"));
         }
         findings.addAll(ofActivity);
         return findings;

@@ -166,6 +166,7 @@ final class PublishedWitness {
             if (late) {
                 return setAside(
                         estimate,
+                        Use.SHOWN,
                         "the index turns back there: "
                                 + judge.relation().id()
                                 + " gives "
@@ -229,13 +230,14 @@ final class PublishedWitness {
                 ? estimate
                 : setAside(
                         estimate,
+                        Use.DISAGREES,
                         String.format(
                                 Locale.ROOT, "%.1f subclasses from where the others agree", off));
     }
 
-    private static RelationEstimate setAside(RelationEstimate estimate, String reason) {
+    private static RelationEstimate setAside(RelationEstimate estimate, Use use, String reason) {
         return new RelationEstimate(
-                estimate.relation(), estimate.index(), estimate.type(), Use.SHOWN, reason);
+                estimate.relation(), estimate.index(), estimate.type(), use, reason);
     }
 
     /**
@@ -293,10 +295,7 @@ final class PublishedWitness {
                                     + combined.get(0).relation().id()
                                     + "; nothing confirms its branch"));
         }
-        long aside =
-                all.stream()
-                        .filter(e -> e.use() == Use.SHOWN && e.reason().contains("others agree"))
-                        .count();
+        long aside = all.stream().filter(e -> e.use() == Use.DISAGREES).count();
         if (aside >= combined.size()) {
             findings.add(
                     Finding.warning(

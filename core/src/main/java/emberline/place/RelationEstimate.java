@@ -21,8 +21,10 @@ public record RelationEstimate(
     public enum Use {
         /** It entered the combined type. */
         COMBINED,
-        /** It is valid, but another relation was preferred; shown for comparison. */
+        /** It is valid, but not among those that are combined; shown for comparison. */
         SHOWN,
+        /** It is among those that are combined, but lies far from where the others agree. */
+        DISAGREES,
         /** It lies outside its valid range. */
         OUTSIDE_RANGE,
         /** Its index was not measured. */

@@ -61,9 +61,30 @@ public final class Chain {
      *
      * @param candidate the object
      * @param folder the folder to which the paths of its spectra are relative
-     * @return the result, whatever happened
+     * @return the result, whatever happened; a fault of the product itself is a failed object too
      */
     public ObjectResult run(Candidate candidate, Path folder) {
+        try {
+            return attempt(candidate, folder);
+        } catch (RuntimeException e) { // must not end a night's run
+            return internalError(candidate, e);
+        }
+    }
+
+    /**
+     * The result of an object on which the product itself failed.
+     *
+     * @param candidate the object
+     * @param fault what happened
+     * @return a result with status {@link Status#FAILED}
+     */
+    static ObjectResult internalError(Candidate candidate, RuntimeException fault) {
+        return failed(
+                candidate,
+                "internal error: " + fault + "; please report it with the spectrum, and go on");
+    }
+
+    private ObjectResult attempt(Candidate candidate, Path folder) {
         List<SpectrumResult> spectra = new ArrayList<>();
         List<String> troubles = new ArrayList<>();
         for (String path : candidate.spectra()) {

@@ -11,6 +11,7 @@ import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
 import java.util.concurrent.Future;
+import java.util.concurrent.TimeUnit;
 
 /**
  * Takes a candidate list through the chain on several threads and hands the results on in the order
@@ -32,6 +33,9 @@ public final class SurveyRunner {
      * @param threads number of threads, at least 1
      */
     public SurveyRunner(Chain chain, int threads) {
+        if (threads < 1) {
+            throw new IllegalArgumentException(threads + " threads: expected at least 1");
+        }
         this.chain = chain;
         this.threads = threads;
     }
@@ -91,12 +95,13 @@ public final class SurveyRunner {
             while (rows.hasNext() || !flying.isEmpty()) {
                 while (rows.hasNext() && flying.size() < AHEAD * threads) {
                     ListedCandidate row = rows.next();
-                    flying.add(workers.submit(() -> output.make(result(row, folder))));
+                    flying.add(workers.submit(() -> made(output, result(row, folder))));
                 }
                 sink.take(finished(flying.remove()));
             }
         } finally {
             workers.shutdownNow();
+            workers.awaitTermination(1, TimeUnit.MINUTES);
         }
     }
 
@@ -104,10 +109,17 @@ public final class SurveyRunner {
         if (row.problem().isPresent()) {
             return Chain.failed(row.candidate(), row.problem().get());
         }
+        return chain.run(row.candidate(), folder);
+    }
+
+    /**
+     * The output of a result; where making it fails by a fault of the product, that of a failure.
+     */
+    private static <T> T made(Output<T> output, ObjectResult result) throws IOException {
         try {
-            return chain.run(row.candidate(), folder);
-        } catch (RuntimeException e) { // a fault of the product must not end a night's run
-            return Chain.failed(row.candidate(), "internal error, please report it: " + e);
+            return output.make(result);
+        } catch (RuntimeException e) {
+            return output.make(Chain.internalError(result.candidate(), e));
         }
     }
 

@@ -156,9 +156,11 @@ class RealSurveyTest {
                         .toList();
         List<Placed> veryLow = known(judged, "VL-G");
         long found = veryLow.stream().filter(p -> p.gravity().get() == GravityClass.VL_G).count();
+        assertTrue(veryLow.size() >= 35, veryLow.size() + " VL-G judged");
         assertTrue(found >= 0.7 * veryLow.size(), found + " of " + veryLow.size() + " VL-G");
         List<Placed> field = known(judged, "FLD-G");
         long kept = field.stream().filter(p -> p.gravity().get() == GravityClass.FLD_G).count();
+        assertTrue(field.size() >= 7, field.size() + " FLD-G judged");
         assertTrue(kept >= 0.7 * field.size(), kept + " of " + field.size() + " FLD-G");
     }
 

@@ -90,7 +90,7 @@ public final class PosteriorChart {
                         .toList();
         List<RelationEstimate> shown = new ArrayList<>(used);
         type.estimates().stream()
-                .filter(e -> e.use() == Use.SHOWN && e.type().isPresent())
+                .filter(e -> e.use() != Use.COMBINED && e.type().isPresent())
                 .filter(
                         e ->
                                 Double.isNaN(centre)

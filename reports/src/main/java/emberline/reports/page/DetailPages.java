@@ -236,6 +236,7 @@ final class DetailPages {
                     8);
         }
         relationGroup(flow, "Combined", Use.COMBINED, estimates, sources);
+        relationGroup(flow, "In disagreement, not combined", Use.DISAGREES, estimates, sources);
         relationGroup(flow, "Shown, not combined", Use.SHOWN, estimates, sources);
         relationGroup(
                 flow,

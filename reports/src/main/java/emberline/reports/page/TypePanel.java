@@ -2,7 +2,6 @@ package emberline.reports.page;
 
 import emberline.catalogue.FeatureCatalogue;
 import emberline.place.Placement;
-import emberline.place.RelationEstimate.Use;
 import emberline.reports.chart.Chart;
 import emberline.reports.chart.PosteriorChart;
 import emberline.reports.paint.Frame;
@@ -47,7 +46,7 @@ final class TypePanel {
     int rows() {
         long rows =
                 result.placement().orElseThrow().published().estimates().stream()
-                        .filter(e -> e.use() == Use.COMBINED || e.use() == Use.SHOWN)
+                        .filter(e -> e.type().isPresent())
                         .count();
         return (int) Math.max(FEWEST_ROWS, Math.min(MOST_ROWS, rows));
     }
@@ -77,8 +76,7 @@ final class TypePanel {
             throws IOException {
         Placement placement = result.placement().orElseThrow();
         boolean any =
-                placement.published().estimates().stream()
-                        .anyMatch(e -> e.use() == Use.COMBINED || e.use() == Use.SHOWN);
+                placement.published().estimates().stream().anyMatch(e -> e.type().isPresent());
         sheet.text(styles.heading(), FirstPage.MARGIN, y + 7, HEADING);
         if (any) {
             Chart chart = PosteriorChart.of(placement.published(), catalogue, rows);
