@@ -3,10 +3,12 @@ package emberline.cli;
 import emberline.catalogue.Band;
 import emberline.catalogue.Feature;
 import emberline.catalogue.FeatureCatalogue;
+import emberline.catalogue.Relation;
 import emberline.reports.attach.CatalogueTable;
 import emberline.reports.attach.TableFormat;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -31,7 +33,7 @@ final class CatalogueCommand implements Callable<Integer> {
     @Parameters(
             paramLabel = "ID",
             arity = "0..1",
-            description = "One definition, e.g. reid1995/tio5.")
+            description = "One definition or relation in full, e.g. reid1995/tio5.")
     private String id;
 
     @Option(
@@ -56,8 +58,13 @@ final class CatalogueCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         FeatureCatalogue catalogue = catalogueOption.load();
+        if (id != null && (band != null || molecule != null)) {
+            throw new ParameterException(
+                    spec.commandLine(),
+                    "an id stands for itself: expected no --band or --molecule");
+        }
         if (id != null) {
-            spec.commandLine().getOut().print(CatalogueTable.printOne(one(catalogue), catalogue));
+            spec.commandLine().getOut().print(one(catalogue));
         } else {
             spec.commandLine().getOut().print(CatalogueTable.print(chosen(catalogue), format));
         }
@@ -65,17 +72,25 @@ final class CatalogueCommand implements Callable<Integer> {
         return ExitCode.DONE;
     }
 
-    private Feature one(FeatureCatalogue catalogue) {
-        return catalogue
-                .feature(id.toLowerCase(Locale.ROOT))
-                .orElseThrow(
-                        () ->
-                                new ParameterException(
-                                        spec.commandLine(),
-                                        "no definition "
-                                                + id
-                                                + ": expected an id as 'catalogue' lists them"
-                                                + nearest(catalogue)));
+    /** What is printed of one definition or relation. */
+    private String one(FeatureCatalogue catalogue) {
+        String wanted = id.toLowerCase(Locale.ROOT);
+        Optional<Feature> feature = catalogue.feature(wanted);
+        Optional<Relation> relation =
+                catalogue.relations().stream().filter(r -> r.id().equals(wanted)).findFirst();
+        if (feature.isPresent() && format != TableFormat.TEXT) {
+            return CatalogueTable.print(List.of(feature.get()), format);
+        }
+        if (feature.isEmpty() && relation.isEmpty()) {
+            throw new ParameterException(
+                    spec.commandLine(),
+                    "no definition or relation "
+                            + id
+                            + ": expected an id as 'catalogue' lists them"
+                            + nearest(catalogue));
+        }
+        return feature.map(f -> CatalogueTable.printOne(f, catalogue)).orElse("")
+                + relation.map(CatalogueTable::printOne).orElse("");
     }
 
     /** Definitions with the same symbol in other papers, as a suggestion. */

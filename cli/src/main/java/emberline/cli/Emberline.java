@@ -49,7 +49,10 @@ public final class Emberline implements Runnable {
         PrintWriter out = new PrintWriter(System.out, false, StandardCharsets.UTF_8);
         PrintWriter err = new PrintWriter(System.err, true, StandardCharsets.UTF_8);
         int code = commandLine(out, err).execute(arguments);
-        out.flush();
+        if (out.checkError()) {
+            err.println("standard output: cannot be written; check where it goes, then run again");
+            code = ExitCode.NOT_WRITTEN;
+        }
         System.exit(code);
     }
 

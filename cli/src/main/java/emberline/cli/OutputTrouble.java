@@ -27,7 +27,9 @@ final class OutputTrouble {
                     + " --out.";
         }
         if (trouble instanceof NoSuchFileException) {
-            return where + ": vanished while it was written. Run again.";
+            return where
+                    + ": cannot be made there, or vanished while it was written. Choose another --out,"
+                    + " or run again.";
         }
         return where
                 + ": cannot be written: "

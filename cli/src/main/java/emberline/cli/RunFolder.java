@@ -14,7 +14,11 @@ import java.io.Closeable;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.HashSet;
+import java.util.List;
 import java.util.Optional;
+import java.util.Set;
+import java.util.stream.Stream;
 
 /**
  * The output folder of a run over a list: {@code results.csv}, {@code objects/}, {@code reports/},
@@ -29,6 +33,7 @@ final class RunFolder implements Closeable {
     private final SurveyPage page;
     private final RunJson run;
     private final Optional<ReportWriter> reports;
+    private final int objects;
     private boolean complete;
 
     /**
@@ -44,6 +49,7 @@ final class RunFolder implements Closeable {
             throws IOException {
         this.folder = folder;
         this.run = run;
+        this.objects = list.rows().size();
         this.names =
                 SafeFileNames.of(list.rows().stream().map(row -> row.candidate().name()).toList());
         Files.createDirectories(folder);
@@ -89,6 +95,36 @@ final class RunFolder implements Closeable {
         table.close();
         page.close();
         AtomicFile.write(folder.resolve("run.json"), run.text());
+    }
+
+    /**
+     * Files of objects that an earlier run left in this folder and this run did not write.
+     *
+     * @return how many
+     * @throws IOException if the folder cannot be listed
+     */
+    long leftovers() throws IOException {
+        Set<String> own = new HashSet<>();
+        for (int row = 0; row < objects; row++) {
+            own.add(names.stem(row));
+        }
+        long left = 0;
+        for (String part : List.of("objects", "reports")) {
+            Path inside = folder.resolve(part);
+            if (Files.isDirectory(inside)) {
+                try (Stream<Path> files = Files.list(inside)) {
+                    left +=
+                            files.map(file -> file.getFileName().toString())
+                                    .filter(name -> name.matches(".*\\.(json|pdf)"))
+                                    .filter(
+                                            name ->
+                                                    !own.contains(
+                                                            name.replaceFirst("\\.[^.]*$", "")))
+                                    .count();
+                }
+            }
+        }
+        return left;
     }
 
     @Override

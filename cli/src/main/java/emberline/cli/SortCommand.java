@@ -89,6 +89,15 @@ final class SortCommand implements Callable<Integer> {
                                 tell(result, progress);
                             });
             folder.complete();
+            long left = folder.leftovers();
+            if (left > 0) {
+                progress.say(
+                        out
+                                + ": holds "
+                                + left
+                                + " files of objects of an earlier run, which are not in this list;"
+                                + " remove them, or give each list a folder of its own");
+            }
         }
         progress.finish(summary(candidates.rows().size()));
         return ExitCode.of(candidates.rows().size(), counts.getOrDefault(Status.FAILED, 0L));

@@ -81,9 +81,25 @@ class CommandsTest {
         CommandRun run = CommandRun.of("catalogue", "allers2013/ki_j");
         assertEquals(ExitCode.DONE, run.code());
         for (String word :
-                List.of("Allers", "from memory", "continuum_1", "vacuum", "scored from type 6")) {
+                List.of("Allers", "from memory", "continuum_1", "vacuum", "gravity at M6")) {
             assertTrue(run.out().contains(word), run.out());
         }
+    }
+
+    @Test
+    void catalogueShowsARelationWithItsCoefficients() {
+        CommandRun run = CommandRun.of("catalogue", "burgasser2007/h2o-j");
+        assertEquals(ExitCode.DONE, run.code());
+        for (String word : List.of("19.49", "10.0 + 1.0 times", "rms", "Burgasser")) {
+            assertTrue(run.out().contains(word), run.out());
+        }
+        assertTrue(
+                CommandRun.of("catalogue", "reid1995/tio2", "--format", "json")
+                        .out()
+                        .startsWith("["));
+        assertEquals(
+                ExitCode.WRONG_USAGE,
+                CommandRun.of("catalogue", "reid1995/tio5", "--band", "H").code());
     }
 
     @ParameterizedTest

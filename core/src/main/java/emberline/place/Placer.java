@@ -52,11 +52,14 @@ public final class Placer {
                 type,
                 verdict,
                 halpha,
-                findings(type, verdict, activity.findings(halpha)));
+                findings(measurements, type, verdict, activity.findings(halpha)));
     }
 
     private static List<Finding> findings(
-            PublishedType type, GravityVerdict verdict, List<Finding> ofActivity) {
+            Measurements measurements,
+            PublishedType type,
+            GravityVerdict verdict,
+            List<Finding> ofActivity) {
         List<Finding> findings = new ArrayList<>();
         if (type.type().isPresent()) {
             findings.addAll(type.findings());
@@ -76,7 +79,37 @@ public final class Placer {
                                     + scored.get(0).feature().symbol()
                                     + " alone, which dust and metallicity move too"));
         }
+        if (verdict.gravityClass().isPresent() && !isMostProbable(verdict)) {
+            findings.add(
+                    Finding.caution(
+                            "gravity-class-unsure",
+                            "the published scores give "
+                                    + verdict.gravityClass().get().label()
+                                    + ", but with noise and type uncertainty another class is more"
+                                    + " probable"));
+        }
+        if (type.type().isPresent() && BandCheck.showsNone(measurements)) {
+            findings.add(
+                    Finding.warning(
+                            "no-bands",
+                            "no water, methane, iron hydride or potassium band is seen: the"
+                                    + " relations give a type to any smooth spectrum, and it means"
+                                    + " nothing here"));
+        }
         findings.addAll(ofActivity);
         return findings;
+    }
+
+    private static boolean isMostProbable(GravityVerdict verdict) {
+        double field = verdict.pFieldGravity().orElse(0);
+        double intermediate = verdict.pIntermediateGravity().orElse(0);
+        double veryLow = verdict.pVeryLowGravity().orElse(0);
+        double ofClass =
+                switch (verdict.gravityClass().orElseThrow()) {
+                    case FLD_G -> field;
+                    case INT_G -> intermediate;
+                    case VL_G -> veryLow;
+                };
+        return ofClass >= Math.max(field, Math.max(intermediate, veryLow));
     }
 }

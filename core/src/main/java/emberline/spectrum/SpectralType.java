@@ -52,7 +52,7 @@ public record SpectralType(double number) implements Comparable<SpectralType> {
      * @return for instance {@code L3.5} or {@code T0}
      */
     public String code() {
-        return code(Math.rint(number * 2) / 2);
+        return code(Math.rint(number * 2) / 2 + 0.0); // no negative zero
     }
 
     /**
@@ -61,7 +61,7 @@ public record SpectralType(double number) implements Comparable<SpectralType> {
      * @return for instance {@code L3.4}
      */
     public String fineCode() {
-        return code(Math.rint(number * 10) / 10);
+        return code(Math.rint(number * 10) / 10 + 0.0);
     }
 
     private static String code(double rounded) {

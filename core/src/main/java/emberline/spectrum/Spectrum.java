@@ -9,7 +9,7 @@ import java.util.Arrays;
  *
  * <p>A pixel covers the interval between the midpoints to its neighbours, but never reaches further
  * than 0.75 of the local spacing to either side, so that a gap in the data stays a gap. The local
- * spacing is the upper median of the six nearest distances between neighbouring pixels.
+ * spacing is the fourth smallest of the six nearest distances between neighbouring pixels.
  */
 public final class Spectrum {
 
@@ -182,8 +182,8 @@ public final class Spectrum {
     }
 
     /**
-     * The spacing of pixels around one: the upper median of the six nearest distances between
-     * neighbours (fewer at the ends).
+     * The spacing of pixels around one: of the six nearest distances between neighbours (fewer at
+     * the ends) the fourth smallest, so that neither a gap nor an alternating spacing decides.
      *
      * @param pixel index from 0
      * @return spacing (micron), positive
@@ -196,7 +196,7 @@ public final class Spectrum {
             steps[i - first] = wavelengthMicron[i + 1] - wavelengthMicron[i];
         }
         Arrays.sort(steps);
-        return steps[steps.length / 2];
+        return steps[Math.min((steps.length + 1) / 2, steps.length - 1)];
     }
 
     /**

@@ -4,10 +4,12 @@ import emberline.catalogue.Feature;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.FeatureWindow;
 import emberline.catalogue.GravityThreshold;
+import emberline.catalogue.GravityThreshold.LowGravityIf;
 import emberline.catalogue.Part;
 import emberline.catalogue.Relation;
 import emberline.catalogue.Source;
 import emberline.catalogue.Window;
+import emberline.spectrum.SpectralType;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -97,10 +99,7 @@ public final class CatalogueTable {
         line(
                 text,
                 "  how known",
-                feature.howKnown().name().toLowerCase(Locale.ROOT).replace('_', ' ')
-                        + ", "
-                        + feature.confidencePercent()
-                        + "% sure");
+                words(feature.howKnown()) + ", " + feature.confidencePercent() + "% sure");
         line(
                 text,
                 "  printed in",
@@ -140,23 +139,61 @@ public final class CatalogueTable {
     private static void relations(StringBuilder text, Feature feature, FeatureCatalogue catalogue) {
         for (Relation relation : catalogue.relations()) {
             if (relation.feature().equals(feature.id())) {
-                line(
-                        text,
-                        "  relation",
-                        relation.id()
-                                + ": "
-                                + relation.quantity().name().toLowerCase(Locale.ROOT)
-                                + ", rms "
-                                + (relation.rms().isPresent()
-                                        ? relation.rms().getAsDouble()
-                                        : "not printed")
-                                + ", on spectra of known type: "
-                                + relation.verdict()
-                                        .name()
-                                        .toLowerCase(Locale.ROOT)
-                                        .replace('_', ' '));
+                line(text, "  relation", relation.id() + ", " + words(relation.quantity()));
             }
         }
+    }
+
+    /**
+     * One relation with its coefficients, ranges and source.
+     *
+     * @param relation the relation
+     * @return text of several lines, with a line end
+     */
+    public static String printOne(Relation relation) {
+        StringBuilder text = new StringBuilder();
+        line(text, relation.id(), words(relation.quantity()) + " from " + relation.feature());
+        String argument = relation.argumentOffset() == 0 ? "x" : "x - " + relation.argumentOffset();
+        line(
+                text,
+                "  coefficients",
+                relation.coefficients() + ", ascending powers of " + argument + ", as printed");
+        if (relation.printedScaleOffset() != 0 || relation.printedScaleFactor() != 1) {
+            line(
+                    text,
+                    "  common scale",
+                    relation.printedScaleOffset()
+                            + " + "
+                            + relation.printedScaleFactor()
+                            + " times the printed value");
+        }
+        line(text, "  index range", range(relation.validIndexMin(), relation.validIndexMax()));
+        line(text, "  type range", range(relation.validTypeMin(), relation.validTypeMax()));
+        line(
+                text,
+                "  rms",
+                relation.rms().isPresent() ? "" + relation.rms().getAsDouble() : "not printed");
+        line(text, "  made for", words(relation.population()) + " objects");
+        line(text, "  on known types", words(relation.verdict()));
+        line(text, "  source", cite(relation.source(), relation.place()));
+        line(
+                text,
+                "  how known",
+                words(relation.howKnown()) + ", " + relation.confidencePercent() + "% sure");
+        if (!relation.note().isBlank()) {
+            line(text, "  note", relation.note());
+        }
+        return text.toString();
+    }
+
+    private static String range(OptionalDouble low, OptionalDouble high) {
+        return (low.isPresent() ? "" + low.getAsDouble() : "open")
+                + " to "
+                + (high.isPresent() ? "" + high.getAsDouble() : "open");
+    }
+
+    private static String words(Enum<?> constant) {
+        return constant.name().toLowerCase(Locale.ROOT).replace('_', ' ');
     }
 
     private static void thresholds(
@@ -165,17 +202,22 @@ public final class CatalogueTable {
                 catalogue.gravityThresholds().stream()
                         .filter(threshold -> threshold.feature().equals(feature.id()))
                         .toList();
-        if (!scored.isEmpty()) {
+        for (GravityThreshold limit : scored) {
             line(
                     text,
-                    "  gravity",
+                    "  gravity at " + new SpectralType(limit.typeNumber()).code(),
                     String.format(
                             Locale.ROOT,
-                            "scored from type %.0f to %.0f, source %s",
-                            scored.get(0).typeNumber(),
-                            scored.get(scored.size() - 1).typeNumber(),
-                            scored.get(0).source().key()));
+                            "INT-G %s, VL-G %s (%s)",
+                            side(limit, limit.intermediate()),
+                            side(limit, limit.veryLow()),
+                            limit.source().key()));
         }
+    }
+
+    private static String side(GravityThreshold limit, double value) {
+        String sign = limit.lowGravityIf() == LowGravityIf.BELOW ? "<= " : ">= ";
+        return sign + String.format(Locale.ROOT, "%.3f", value);
     }
 
     private static String cite(Source source, String place) {

@@ -329,8 +329,12 @@ final class DetailPages {
                             ? styles.table().in(document.theme().accent())
                             : styles.table();
             flow.paragraph(
-                    style, severity + " (" + finding.code() + "): " + finding.text() + ".", 8);
+                    style, severity + " (" + finding.code() + "): " + sentence(finding.text()), 8);
         }
+    }
+
+    private static String sentence(String text) {
+        return text.endsWith(".") ? text : text + ".";
     }
 
     private void provenance(Flow flow, ObjectResult result) {

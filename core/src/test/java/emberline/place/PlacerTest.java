@@ -1,0 +1,69 @@
+package emberline.place;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.measure.Measurements;
+import emberline.measure.Measurer;
+import emberline.measure.Measuring;
+import emberline.prepare.NoiseModel;
+import emberline.prepare.PreparedSpectrum;
+import emberline.spectrum.Finding;
+import emberline.spectrum.ResolvingPower;
+import emberline.spectrum.ResolvingPower.Basis;
+import emberline.spectrum.Spectrum;
+import java.util.Arrays;
+import java.util.List;
+import org.junit.jupiter.api.Test;
+
+class PlacerTest {
+
+    private static final FeatureCatalogue CATALOGUE = FeatureCatalogue.standard();
+
+    private static Measurements flat(double low, double high) {
+        int size = (int) ((high - low) / 2e-3);
+        double[] wavelengths = new double[size];
+        double[] flux = new double[size];
+        double[] noise = new double[size];
+        Arrays.fill(flux, 1);
+        Arrays.fill(noise, 0.01);
+        for (int i = 0; i < size; i++) {
+            wavelengths[i] = low + i * 2e-3;
+        }
+        return new Measurer(CATALOGUE, Measuring.withDefaults())
+                .measure(
+                        new PreparedSpectrum(
+                                Spectrum.of(wavelengths, flux, noise),
+                                new ResolvingPower(120, Basis.GIVEN),
+                                NoiseModel.INDEPENDENT,
+                                List.of()));
+    }
+
+    private static List<String> codes(Placement placement) {
+        return placement.findings().stream().map(Finding::code).toList();
+    }
+
+    /** Every ratio of a constant is 1, which is within the range of some relations. */
+    @Test
+    void aSpectrumWithoutBandsIsSaidToHaveNone() {
+        Placement placement = new Placer(CATALOGUE).place(flat(0.8, 2.4), 1);
+        assertTrue(placement.type().isPresent());
+        assertTrue(codes(placement).contains("no-bands"), codes(placement).toString());
+    }
+
+    @Test
+    void tooLittleToSayThatThereAreNoBands() {
+        Placement placement = new Placer(CATALOGUE).place(flat(1.45, 1.8), 1);
+        assertTrue(!codes(placement).contains("no-bands"), codes(placement).toString());
+    }
+
+    @Test
+    void theSameSeedGivesTheSamePlacement() {
+        Placer placer = new Placer(CATALOGUE);
+        Measurements flat = flat(0.8, 2.4);
+        assertEquals(
+                placer.place(flat, 5).gravity().pVeryLowGravity(),
+                placer.place(flat, 5).gravity().pVeryLowGravity());
+    }
+}
