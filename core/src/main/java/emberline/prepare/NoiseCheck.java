@@ -22,6 +22,9 @@ final class NoiseCheck {
     /** Factor within which scatter and correlation must agree on the noise. */
     private static final double SAME_STORY = 1.5;
 
+    /** Factor by which lines may add to the scatter of all pixels over the quietest. */
+    private static final double LINE_FREE = 1.25;
+
     private NoiseCheck() {}
 
     /**
@@ -69,11 +72,16 @@ final class NoiseCheck {
 
     /**
      * Noise whose sigma is too small. The scatter is all that is known of it then, so what shared
-     * noise takes from the scatter is put back, as where the sigma is estimated.
+     * noise takes from the scatter is put back, as where the sigma is estimated. Sharing is
+     * believed where it makes the scatter of all pixels and that of the quietest tell the same
+     * noise; lines look like sharing too, but are missing from the quietest part.
      */
     private static Settled scaled(
             double[] flux, double[] sigma, double quiet, List<Finding> findings) {
-        NoiseCorrelation correlation = NoiseCorrelation.of(flux, sigma);
+        NoiseCorrelation seen = NoiseCorrelation.of(flux, sigma);
+        double everywhere = PixelScatter.inUnitsOf(flux, sigma) * seen.scatterDeficit();
+        boolean shared = everywhere < LINE_FREE * quiet * seen.thirdDeficit();
+        NoiseCorrelation correlation = shared ? seen : NoiseCorrelation.NONE;
         double scale = quiet * correlation.thirdDeficit();
         for (int i = 0; i < sigma.length; i++) {
             sigma[i] *= scale;
