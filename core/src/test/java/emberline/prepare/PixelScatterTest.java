@@ -68,7 +68,7 @@ class PixelScatterTest {
         int size = 3000;
         double[] flux = noise(size, 0.01, 3);
         Random random = new Random(4);
-        for (int line = 0; line < 300; line++) {
+        for (int line = 0; line < 900; line++) {
             double centre = 600 + random.nextDouble() * (size - 600);
             for (int i = 600; i < size; i++) {
                 double x = (i - centre) / 1.06;
