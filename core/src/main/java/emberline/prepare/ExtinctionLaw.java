@@ -112,7 +112,8 @@ public final class ExtinctionLaw {
 
     private static void check(double rv) {
         if (!(rv >= 2 && rv <= 6)) {
-            throw new IllegalArgumentException("R_V = " + rv + ": expected 2 to 6");
+            throw new IllegalArgumentException(
+                    "R_V = " + rv + ": expected 2 to 6. Use 3.1 where it is not known.");
         }
     }
 
@@ -129,7 +130,8 @@ public final class ExtinctionLaw {
                     "wavelength "
                             + wavelengthMicron
                             + " micron: expected at least "
-                            + SHORTEST_MICRON);
+                            + SHORTEST_MICRON
+                            + ", where the law is known. Leave shorter wavelengths out.");
         }
         return curve.at(1 / wavelengthMicron);
     }

@@ -1,8 +1,8 @@
 package emberline.prepare;
 
-import emberline.read.Observation;
 import emberline.spectrum.Finding;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -13,7 +13,7 @@ import java.util.Optional;
  */
 final class NoiseCheck {
 
-    /** Stated noise is scaled where the scatter exceeds it by more than this factor. */
+    /** Stated noise is scaled where even the quiet scatter exceeds it by more than this factor. */
     private static final double TOO_SMALL = 3;
 
     /** Stated noise is remarked on where the scatter is below it by more than this factor. */
@@ -21,6 +21,9 @@ final class NoiseCheck {
 
     /** Factor within which scatter and correlation must agree on the noise. */
     private static final double SAME_STORY = 1.5;
+
+    /** Factor by which lines may add to the scatter of all pixels over the quietest. */
+    private static final double LINE_FREE = 1.25;
 
     private NoiseCheck() {}
 
@@ -34,12 +37,19 @@ final class NoiseCheck {
     @SuppressWarnings("ArrayRecordComponent") // handed on within the package, never compared
     record Settled(double[] sigma, NoiseModel model, List<Finding> findings) {}
 
-    static Settled settle(Observation observation, double[] flux) {
-        Optional<double[]> stated = observation.fluxSigmas().filter(NoiseCheck::isUsable);
+    /**
+     * Settles the noise.
+     *
+     * @param inFile the sigma of the file, as many as fluxes; empty where it has none
+     * @param flux fluxes; NaN marks bad pixels
+     * @return the noise, with a finding for everything that was assumed or changed
+     */
+    static Settled settle(Optional<double[]> inFile, double[] flux) {
+        Optional<double[]> stated = inFile.filter(NoiseCheck::isUsable);
         if (stated.isEmpty()) {
-            return estimated(flux, observation.fluxSigmas().isPresent());
+            return estimated(flux, inFile.isPresent());
         }
-        double[] sigma = stated.get();
+        double[] sigma = stated.get().clone();
         int zero = 0;
         for (int i = 0; i < sigma.length; i++) {
             if (!(sigma[i] > 0)) {
@@ -54,22 +64,45 @@ final class NoiseCheck {
                             "pixels-without-sigma",
                             zero + " pixels have no positive sigma and count as bad"));
         }
-        double ratio = PixelScatter.inUnitsOf(flux, sigma);
-        if (ratio > TOO_SMALL) {
-            for (int i = 0; i < sigma.length; i++) {
-                sigma[i] *= ratio;
-            }
-            findings.add(
-                    Finding.caution(
-                            "sigma-too-small",
-                            String.format(
-                                    Locale.ROOT,
-                                    "the pixels scatter %.1f times more than their stated sigma;"
-                                            + " the sigma was multiplied by that",
-                                    ratio)));
-            return new Settled(sigma, new NoiseModel(false, ratio, 0, 0), findings);
+        double quiet = PixelScatter.quietInUnitsOf(flux, sigma);
+        return quiet > TOO_SMALL
+                ? scaled(flux, sigma, quiet, findings)
+                : withCorrelation(flux, sigma, PixelScatter.inUnitsOf(flux, sigma), findings);
+    }
+
+    /**
+     * Noise whose sigma is too small. The scatter is all that is known of it then, so what shared
+     * noise takes from the scatter is put back, as where the sigma is estimated. Sharing is
+     * believed where it makes the scatter of all pixels and that of the quietest tell the same
+     * noise; lines look like sharing too, but are missing from the quietest part.
+     */
+    private static Settled scaled(
+            double[] flux, double[] sigma, double quiet, List<Finding> findings) {
+        NoiseCorrelation seen = NoiseCorrelation.of(flux, sigma);
+        double everywhere = PixelScatter.inUnitsOf(flux, sigma) * seen.scatterDeficit();
+        boolean shared = everywhere < LINE_FREE * quiet * seen.thirdDeficit();
+        NoiseCorrelation correlation = shared ? seen : NoiseCorrelation.NONE;
+        double scale = quiet * correlation.thirdDeficit();
+        for (int i = 0; i < sigma.length; i++) {
+            sigma[i] *= scale;
         }
-        return withCorrelation(flux, sigma, ratio, findings);
+        findings.add(
+                Finding.caution(
+                        "sigma-too-small",
+                        String.format(
+                                Locale.ROOT,
+                                "even where the spectrum is smoothest the pixels scatter %.1f times"
+                                        + " more than their stated sigma; the sigma was multiplied"
+                                        + " by %.1f",
+                                quiet,
+                                scale)));
+        if (correlation.lag1() > 0) {
+            findings.add(correlated(correlation));
+        }
+        return new Settled(
+                sigma,
+                new NoiseModel(false, scale, correlation.lag1(), correlation.lag2()),
+                findings);
     }
 
     /**
@@ -128,6 +161,18 @@ final class NoiseCheck {
     private static Settled estimated(double[] flux, boolean stated) {
         String why = stated ? "the sigma column is mostly empty" : "the file states no sigma";
         double[] sigma = PixelScatter.sigma(flux);
+        if (!Arrays.stream(sigma).anyMatch(s -> s > 0)) {
+            return new Settled(
+                    sigma,
+                    new NoiseModel(true, 1, 0, 0),
+                    List.of(
+                            Finding.warning(
+                                    "noise-unknown",
+                                    why
+                                            + " and most neighbouring pixels do not differ, so that"
+                                            + " it cannot be estimated: nothing is measured; use a"
+                                            + " file with a sigma column")));
+        }
         NoiseCorrelation correlation = NoiseCorrelation.of(flux, sigma);
         for (int i = 0; i < sigma.length; i++) {
             sigma[i] *= correlation.scatterDeficit();

@@ -17,15 +17,21 @@ import java.util.Arrays;
  * Spectral structure that a few pixels resolve looks like shared noise; the estimate is therefore
  * good only where noise rules the second differences.
  *
+ * <p>Correlations that stop at lag two are those of some noise only where the power 1 + 2 r1 cos t
+ * + 2 r2 cos 2t is nowhere negative; estimates outside are moved to the nearest r2 that allows it.
+ *
  * @param lag1 correlation of neighbours, 0 to {@value #MOST_LAG1}
  * @param lag2 correlation of next-but-one neighbours, 0 to {@value #MOST_LAG2}
  */
 record NoiseCorrelation(double lag1, double lag2) {
 
-    static final double MOST_LAG1 = 0.75;
+    static final double MOST_LAG1 = 0.70;
     static final double MOST_LAG2 = 0.45;
 
     static final NoiseCorrelation NONE = new NoiseCorrelation(0, 0);
+
+    /** Allowance for rounding in the power. */
+    private static final double ROUNDING = 1e-9;
 
     /** Second differences beyond this many times their median size are lines or bad pixels. */
     private static final double CLIP = 5;
@@ -72,11 +78,36 @@ record NoiseCorrelation(double lag1, double lag2) {
         if (!(lag1 > SIGNIFICANT * error)) {
             return NONE;
         }
-        double first = Math.min(lag1, MOST_LAG1);
-        // a correlation of pixels must have no negative power at any frequency
-        double most = Math.min(MOST_LAG2, first * first + 0.1);
-        double clipped = Math.max(0, Math.min(lag2, most));
-        return new NoiseCorrelation(first, clipped);
+        return possible(lag1, lag2);
+    }
+
+    /**
+     * The correlations nearest to an estimate that noise can have: r1 is cut at {@value
+     * #MOST_LAG1}, then r2 is moved into the range that this r1 allows. The lower end of that range
+     * is r1 - 1/2 up to r1 = 2/3; beyond, and at the upper end, it is where 1 - 2 r2 - r1^2 / (4
+     * r2) = 0.
+     */
+    static NoiseCorrelation possible(double lag1, double lag2) {
+        double first = Math.max(0, Math.min(lag1, MOST_LAG1));
+        double root = Math.sqrt(1 - 2 * first * first);
+        double least = first <= 2.0 / 3 ? Math.max(0, first - 0.5) : (1 - root) / 4;
+        double most = Math.min((1 + root) / 4, Math.min(MOST_LAG2, first * first + 0.1));
+        return new NoiseCorrelation(first, Math.max(least, Math.min(lag2, most)));
+    }
+
+    /**
+     * Whether noise can have these correlations and none beyond: its power is nowhere negative.
+     *
+     * @param lag1 correlation of neighbours
+     * @param lag2 correlation of next-but-one neighbours
+     * @return false also for NaN
+     */
+    static boolean isPossible(double lag1, double lag2) {
+        double least = 1 + 2 * lag2 - 2 * Math.abs(lag1);
+        if (Math.abs(lag1) < 4 * lag2) {
+            least = Math.min(least, 1 - 2 * lag2 - lag1 * lag1 / (4 * lag2));
+        }
+        return least >= -ROUNDING;
     }
 
     /** Mean product of second differences at a lag, over those that are not outliers. */
@@ -92,8 +123,15 @@ record NoiseCorrelation(double lag1, double lag2) {
         return sum / count;
     }
 
-    /** Factor by which a sigma from second differences of independent pixels is too small. */
+    /**
+     * Factor by which a sigma from second differences of independent pixels is too small; finite.
+     */
     double scatterDeficit() {
         return Math.sqrt(6 / (6 - 8 * lag1 + 2 * lag2));
+    }
+
+    /** The same for third differences, whose variance is 20 - 30 r1 + 12 r2. */
+    double thirdDeficit() {
+        return Math.sqrt(20 / (20 - 30 * lag1 + 12 * lag2));
     }
 }

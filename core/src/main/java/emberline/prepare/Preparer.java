@@ -1,6 +1,7 @@
 package emberline.prepare;
 
 import emberline.read.Observation;
+import emberline.read.UnreadableSpectrumException;
 import emberline.spectrum.AirToVacuum;
 import emberline.spectrum.Finding;
 import emberline.spectrum.Medium;
@@ -33,24 +34,95 @@ public final class Preparer {
      * @param observation what the file holds
      * @param stated what the observer states about it
      * @return the prepared spectrum with all findings, those of reading first
+     * @throws UnreadableSpectrumException if fewer than two pixels lie where wavelengths in air and
+     *     extinction are known; its message says what to do
      */
-    public PreparedSpectrum prepare(Observation observation, Preparing stated) {
+    public PreparedSpectrum prepare(Observation observation, Preparing stated)
+            throws UnreadableSpectrumException {
         List<Finding> findings = new ArrayList<>(observation.findings());
-        double[] wavelengths = observation.wavelengthsMicron();
-        if (medium(observation, stated, findings) == Medium.AIR) {
-            for (int i = 0; i < wavelengths.length; i++) {
-                wavelengths[i] = AirToVacuum.vacuumMicron(wavelengths[i]);
-            }
-        }
-        stated.radialVelocityKms().ifPresent(velocity -> toRest(wavelengths, velocity, findings));
-        double[] flux = observation.fluxes();
-        NoiseCheck.Settled noise = NoiseCheck.settle(observation, flux);
+        double[] wavelengths = wavelengths(observation, stated, findings);
+        int size = observation.size();
+        int cut = size - wavelengths.length;
+        double[] flux = Arrays.copyOfRange(observation.fluxes(), cut, size);
+        NoiseCheck.Settled noise =
+                NoiseCheck.settle(
+                        observation.fluxSigmas().map(s -> Arrays.copyOfRange(s, cut, size)), flux);
         findings.addAll(noise.findings());
         double[] sigma = noise.sigma();
         stated.extinction().ifPresent(e -> deredden(wavelengths, flux, sigma, e, findings));
         Spectrum spectrum = Spectrum.of(wavelengths, flux, sigma);
         ResolvingPower resolvingPower = resolvingPower(observation, stated, spectrum, findings);
         return new PreparedSpectrum(spectrum, resolvingPower, noise.model(), findings);
+    }
+
+    /**
+     * The wavelengths in vacuum and at rest, without those at the short end that cannot be
+     * converted.
+     */
+    private static double[] wavelengths(
+            Observation observation, Preparing stated, List<Finding> findings)
+            throws UnreadableSpectrumException {
+        double[] wavelengths = observation.wavelengthsMicron();
+        if (medium(observation, stated, findings) == Medium.AIR) {
+            wavelengths =
+                    cutBelow(
+                            AirToVacuum.SHORTEST_MICRON,
+                            "the refractive index of air",
+                            wavelengths,
+                            observation,
+                            findings);
+            for (int i = 0; i < wavelengths.length; i++) {
+                wavelengths[i] = AirToVacuum.vacuumMicron(wavelengths[i]);
+            }
+        }
+        if (stated.radialVelocityKms().isPresent()) {
+            toRest(wavelengths, stated.radialVelocityKms().getAsDouble(), findings);
+        }
+        if (stated.extinction().isPresent()) {
+            wavelengths =
+                    cutBelow(
+                            ExtinctionLaw.SHORTEST_MICRON,
+                            "the extinction law",
+                            wavelengths,
+                            observation,
+                            findings);
+        }
+        return wavelengths;
+    }
+
+    private static double[] cutBelow(
+            double limitMicron,
+            String law,
+            double[] wavelengths,
+            Observation observation,
+            List<Finding> findings)
+            throws UnreadableSpectrumException {
+        int cut = 0;
+        while (cut < wavelengths.length && wavelengths[cut] < limitMicron) {
+            cut++;
+        }
+        int left = wavelengths.length - cut;
+        if (left < 2) {
+            throw new UnreadableSpectrumException(
+                    observation.source(),
+                    left + " of " + wavelengths.length + " pixels from " + limitMicron + " micron",
+                    "at least two pixels where " + law + " is known",
+                    "Check the unit of the wavelengths, or state no air wavelengths and no"
+                            + " extinction.");
+        }
+        if (cut > 0) {
+            findings.add(
+                    Finding.note(
+                            "pixels-cut",
+                            cut
+                                    + (cut == 1 ? " pixel" : " pixels")
+                                    + " below "
+                                    + limitMicron
+                                    + " micron, where "
+                                    + law
+                                    + " is not known, cut off"));
+        }
+        return Arrays.copyOfRange(wavelengths, cut, wavelengths.length);
     }
 
     private static Medium medium(
@@ -105,11 +177,7 @@ public final class Preparer {
             List<Finding> findings) {
         ExtinctionLaw law = ExtinctionLaw.fitzpatrick1999(extinction.rv());
         for (int i = 0; i < flux.length; i++) {
-            double factor =
-                    wavelengths[i] < ExtinctionLaw.SHORTEST_MICRON
-                            ? Double.NaN
-                            : Math.pow(
-                                    10, 0.4 * extinction.avMag() * law.relativeTo(wavelengths[i]));
+            double factor = Math.pow(10, 0.4 * extinction.avMag() * law.relativeTo(wavelengths[i]));
             flux[i] *= factor;
             sigma[i] *= factor;
         }

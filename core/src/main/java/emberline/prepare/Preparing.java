@@ -42,7 +42,8 @@ public record Preparing(
                                 + avMag
                                 + " mag with R_V = "
                                 + rv
-                                + ": expected 0 to 100 and 2 to 6");
+                                + ": expected 0 to 100 and 2 to 6. Give A_V in magnitudes, and R_V = 3.1"
+                                + " where it is not known.");
             }
         }
     }
@@ -55,14 +56,16 @@ public record Preparing(
             throw new IllegalArgumentException(
                     "resolving power "
                             + resolvingPower.getAsDouble()
-                            + ": expected a positive, finite number");
+                            + ": expected a positive, finite number. Give wavelength over the width"
+                            + " of a resolution element, e.g. 2000, or leave it out.");
         }
         if (radialVelocityKms.isPresent()
                 && !(Math.abs(radialVelocityKms.getAsDouble()) < 30_000)) {
             throw new IllegalArgumentException(
                     "radial velocity "
                             + radialVelocityKms.getAsDouble()
-                            + " km/s: expected a number between -30000 and 30000");
+                            + " km/s: expected a number between -30000 and 30000. Give it in km/s,"
+                            + " or leave it out.");
         }
     }
 

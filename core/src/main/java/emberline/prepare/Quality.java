@@ -1,12 +1,14 @@
 package emberline.prepare;
 
 import emberline.prepare.BandSignal.Range;
+import emberline.spectrum.Finding;
 import emberline.spectrum.Finding.Severity;
-import emberline.spectrum.ResolvingPower;
+import emberline.spectrum.Spectrum;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 
 /**
  * Is the spectrum good enough? One grade in words, with its reason and what it rests on.
@@ -26,13 +28,19 @@ public record Quality(Grade grade, String reason, List<BandSignal> bands) {
 
     /** How good a spectrum is for placing an object. */
     public enum Grade {
-        /** At least two bands with a signal-to-noise of 30 a resolution element. */
+        /**
+         * At least two bands with a signal-to-noise of 30 a resolution element, the noise stated by
+         * the file and believed, and no warning.
+         */
         GOOD,
-        /** At least one band with a signal-to-noise of 10: a type, gravity with doubt. */
+        /**
+         * At least one band with a signal-to-noise of 10: a type, gravity with doubt. Also the most
+         * a spectrum gets whose noise was estimated or scaled, or that has a warning.
+         */
         USABLE,
-        /** A signal-to-noise of 3 to 10, or noise not known: a rough type at best. */
+        /** A best signal-to-noise of 3 to 10, or no band covered by 70%: a rough type at best. */
         POOR,
-        /** No band with a signal. */
+        /** A best signal-to-noise below 3, or none known. */
         UNUSABLE;
 
         /**
@@ -63,49 +71,85 @@ public record Quality(Grade grade, String reason, List<BandSignal> bands) {
                         .filter(band -> band.range() != Range.WHOLE)
                         .filter(band -> band.coverage() >= COVERED)
                         .toList();
-        if (covered.isEmpty()) {
-            return new Quality(Grade.POOR, "no band is covered by more than 70%", bands);
+        List<Strength> strengths =
+                (covered.isEmpty() ? bands : covered)
+                        .stream()
+                                .map(band -> new Strength(band.range(), perElement(band, prepared)))
+                                .toList();
+        Optional<Strength> best =
+                strengths.stream().max(Comparator.comparingDouble(Strength::perElement));
+        if (best.isEmpty()) {
+            return new Quality(Grade.UNUSABLE, "no pixels with a known noise", bands);
         }
-        List<Double> signals = new ArrayList<>();
-        for (BandSignal band : covered) {
-            signals.add(perElement(band, prepared));
+        Grade grade = grade(strengths, best.get(), covered.isEmpty());
+        String reason =
+                best.get().words()
+                        + (covered.isEmpty()
+                                ? ", no band is covered by more than 70%"
+                                : ", "
+                                        + covered.size()
+                                        + (covered.size() == 1 ? " band" : " bands")
+                                        + " covered");
+        List<String> doubts = doubts(prepared);
+        if (doubts.isEmpty() || grade == Grade.UNUSABLE) {
+            return new Quality(grade, reason, bands);
         }
-        double best = signals.stream().max(Comparator.naturalOrder()).orElseThrow();
-        String strongest = covered.get(signals.indexOf(best)).range().words();
-        String signal =
-                String.format(
-                        Locale.ROOT,
-                        "signal-to-noise %.0f a resolution element in %s",
-                        best,
-                        strongest);
-        long good = signals.stream().filter(s -> s >= GOOD_SIGNAL).count();
-        Grade grade =
-                best < POOR_SIGNAL
-                        ? Grade.UNUSABLE
-                        : best < USABLE_SIGNAL ? Grade.POOR : good >= 2 ? Grade.GOOD : Grade.USABLE;
-        boolean doubted =
-                prepared.findings().stream().anyMatch(f -> f.severity() == Severity.WARNING)
-                        || prepared.noise().estimated();
-        if (grade == Grade.GOOD && doubted) {
-            return new Quality(
-                    Grade.USABLE, signal + ", but the noise is not known or in doubt", bands);
+        return new Quality(
+                grade == Grade.GOOD ? Grade.USABLE : grade,
+                reason + ", but " + String.join(" and ", doubts),
+                bands);
+    }
+
+    /** The signal-to-noise of a band a resolution element. */
+    private record Strength(Range range, double perElement) {
+
+        String words() {
+            return String.format(
+                    Locale.ROOT,
+                    "signal-to-noise %.0f a resolution element in %s",
+                    perElement,
+                    range.words());
         }
-        return new Quality(grade, signal + ", " + covered.size() + " bands covered", bands);
+    }
+
+    private static Grade grade(List<Strength> strengths, Strength best, boolean nothingCovered) {
+        if (!(best.perElement() >= POOR_SIGNAL)) {
+            return Grade.UNUSABLE;
+        }
+        if (nothingCovered || best.perElement() < USABLE_SIGNAL) {
+            return Grade.POOR;
+        }
+        long good = strengths.stream().filter(s -> s.perElement() >= GOOD_SIGNAL).count();
+        return good >= 2 ? Grade.GOOD : Grade.USABLE;
+    }
+
+    /** What keeps a spectrum from being good whatever its signal, in words. */
+    private static List<String> doubts(PreparedSpectrum prepared) {
+        List<String> doubts = new ArrayList<>();
+        if (prepared.noise().estimated()) {
+            doubts.add("the noise is estimated from the scatter of the pixels");
+        }
+        if (prepared.noise().scale() > 1) {
+            doubts.add("the stated noise was too small and was scaled up");
+        }
+        prepared.findings().stream()
+                .filter(finding -> finding.severity() == Severity.WARNING)
+                .map(Finding::code)
+                .distinct()
+                .forEach(code -> doubts.add("there is a warning (" + code + ")"));
+        return doubts;
     }
 
     /** Signal-to-noise of a band a resolution element, with shared noise counted once. */
     private static double perElement(BandSignal band, PreparedSpectrum prepared) {
-        double middle = band.range().middleMicron();
-        ResolvingPower resolvingPower = prepared.resolvingPower();
-        int pixel =
-                Math.min(
-                        prepared.spectrum().firstAtOrAbove(middle), prepared.spectrum().size() - 1);
-        double pixels =
-                Math.max(
-                        1,
-                        middle
-                                / resolvingPower.value()
-                                / prepared.spectrum().localSpacingMicron(pixel));
+        Spectrum spectrum = prepared.spectrum();
+        double middle =
+                band.range() == Range.WHOLE
+                        ? spectrum.wavelengthMicron(spectrum.size() / 2)
+                        : band.range().middleMicron();
+        int pixel = Math.min(spectrum.firstAtOrAbove(middle), spectrum.size() - 1);
+        double element = middle / prepared.resolvingPower().value();
+        double pixels = Math.max(1, element / spectrum.localSpacingMicron(pixel));
         double sharing = 1 + 2 * (prepared.noise().lag1() + prepared.noise().lag2());
         return band.medianSignalToNoise() * Math.sqrt(Math.max(1, pixels / sharing));
     }

@@ -30,6 +30,9 @@ public final class CandidateListReader {
 
     private static final Set<String> POSITIVE_COLUMNS = Set.of("resolution");
 
+    /** Radial velocities from here on are no star's, and mostly a wrong unit (km/s). */
+    private static final double VELOCITY_LIMIT_KMS = 30_000;
+
     private static final Set<String> NUMBER_COLUMNS =
             Set.of(
                     "resolution",
@@ -212,6 +215,15 @@ public final class CandidateListReader {
                                 + "'; expected a "
                                 + (positive ? "positive " : "")
                                 + "number. Correct it or leave it empty.");
+            }
+            if (column.equals("rv_kms")
+                    && !(Math.abs(candidate.number(column).getAsDouble()) < VELOCITY_LIMIT_KMS)) {
+                return Optional.of(
+                        at(column, candidate.row())
+                                + "'"
+                                + text.get()
+                                + "'; expected a velocity between -30000 and 30000 km/s. Give it in"
+                                + " km/s, not in m/s, or leave it empty.");
             }
         }
         return Optional.empty();

@@ -12,7 +12,7 @@ package emberline.spectrum;
 public final class AirToVacuum {
 
     /** Shortest wavelength for which the formula holds (micron). */
-    private static final double SHORTEST_MICRON = 0.2;
+    public static final double SHORTEST_MICRON = 0.2;
 
     /** Each round shrinks the error by a factor of some 1e5, so four reach the last digit. */
     private static final int ROUNDS = 4;

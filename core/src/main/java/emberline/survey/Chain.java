@@ -122,7 +122,8 @@ public final class Chain {
                 List.of());
     }
 
-    private SpectrumResult measure(String path, Observation observation, Preparing stated) {
+    private SpectrumResult measure(String path, Observation observation, Preparing stated)
+            throws UnreadableSpectrumException {
         PreparedSpectrum prepared = preparer.prepare(observation, stated);
         Measurements measurements = measurer.measure(prepared);
         LineReport seen = lines.report(prepared, measurements);

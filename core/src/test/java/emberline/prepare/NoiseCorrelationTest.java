@@ -1,6 +1,7 @@
 package emberline.prepare;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.Arrays;
@@ -46,6 +47,61 @@ class NoiseCorrelationTest {
             NoiseCorrelation found = NoiseCorrelation.of(smoothed(0, 2000, seed), ones(2000));
             assertTrue(found.lag1() < 0.12, "seed " + seed + ": " + found);
         }
+    }
+
+    /** Any estimate becomes one that noise can have, by a scan of its power in frequency. */
+    @Test
+    void estimatesAreMovedToPossibleCorrelations() {
+        for (int a = 0; a <= 120; a++) {
+            for (int b = -50; b <= 120; b++) {
+                NoiseCorrelation found = NoiseCorrelation.possible(a / 100.0, b / 100.0);
+                assertTrue(leastPower(found.lag1(), found.lag2()) > -1e-9, found.toString());
+                assertTrue(found.scatterDeficit() >= 0.9 && found.scatterDeficit() < 2.7);
+                assertTrue(found.thirdDeficit() >= 0.9 && found.thirdDeficit() < 3.6);
+                assertEquals(
+                        false, new NoiseModel(false, 1, found.lag1(), found.lag2()).estimated());
+            }
+        }
+        assertEquals(new NoiseCorrelation(0.4, 0.1), NoiseCorrelation.possible(0.4, 0.1));
+        // at the clip: the lower end (1 - sqrt(1 - 2 r1^2)) / 4 of what r1 = 0.7 allows
+        assertEquals(0.2146, NoiseCorrelation.possible(0.75, 0).lag2(), 1e-4);
+        assertEquals(0.7, NoiseCorrelation.possible(0.75, 0).lag1());
+    }
+
+    @Test
+    void possibilityIsThatOfNoNegativePower() {
+        for (int a = -100; a <= 100; a++) {
+            for (int b = -100; b <= 100; b++) {
+                double least = leastPower(a / 100.0, b / 100.0);
+                if (Math.abs(least) > 1e-4) { // the scan has a step
+                    assertEquals(
+                            least > 0,
+                            NoiseCorrelation.isPossible(a / 100.0, b / 100.0),
+                            a + ", " + b);
+                }
+            }
+        }
+    }
+
+    private static double leastPower(double lag1, double lag2) {
+        double least = Double.POSITIVE_INFINITY;
+        for (int k = 0; k <= 1000; k++) {
+            double t = Math.PI * k / 1000;
+            least = Math.min(least, 1 + 2 * lag1 * Math.cos(t) + 2 * lag2 * Math.cos(2 * t));
+        }
+        return least;
+    }
+
+    @ParameterizedTest
+    @CsvSource({"0.75, 0", "0.6, 0", "0, 0.6", "NaN, 0", "0, NaN"})
+    void aNoiseModelRefusesImpossibleCorrelations(double lag1, double lag2) {
+        String message =
+                assertThrows(
+                                IllegalArgumentException.class,
+                                () -> new NoiseModel(false, 1, lag1, lag2))
+                        .getMessage();
+        assertTrue(message.contains("lags " + lag1 + " and " + lag2), message);
+        assertTrue(message.contains("expected"), message);
     }
 
     @Test

@@ -68,6 +68,31 @@ class CandidateListReaderTest {
     }
 
     @ParameterizedTest
+    @ValueSource(strings = {"30000", "-30000", "31000.5"})
+    void impossibleVelocitiesAreProblemsOfTheirRow(String velocity) throws IOException {
+        CandidateList list = read("name,spectrum,rv_kms\nA,a.fits,29999\nB,b.fits," + velocity);
+        assertEquals("", problem(list, 1));
+        assertTrue(
+                problem(list, 2)
+                        .startsWith(
+                                "row 2, column rv_kms: '"
+                                        + velocity
+                                        + "'; expected a velocity between -30000 and 30000 km/s. "),
+                problem(list, 2));
+    }
+
+    @ParameterizedTest
+    @ValueSource(strings = {"0", "-0.5"})
+    void resolutionsThatAreNotPositiveAreProblemsOfTheirRow(String value) throws IOException {
+        CandidateList list = read("name,spectrum,resolution\nA,a.fits," + value);
+        assertTrue(
+                problem(list, 1)
+                        .startsWith(
+                                "row 1, column resolution: '" + value + "'; expected a positive"),
+                problem(list, 1));
+    }
+
+    @ParameterizedTest
     @ValueSource(strings = {",", ";", "\t"})
     void separatorIsTold(String separator) throws IOException {
         CandidateList list =

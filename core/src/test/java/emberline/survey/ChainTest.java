@@ -93,6 +93,37 @@ class ChainTest {
     }
 
     @Test
+    void nothingIsMeasuredWithoutAnyNoise() throws IOException {
+        StringBuilder text = new StringBuilder("wavelength_micron,flux\n");
+        for (int i = 0; i < 800; i++) {
+            text.append(String.format(Locale.ROOT, "%.5f,1%n", 0.9 + i * 0.002));
+        }
+        Files.writeString(folder.resolve("constant.csv"), text);
+        ObjectResult result =
+                chain(SurveySettings.withDefaults())
+                        .run(new Candidate("c", 1, List.of("constant.csv"), Map.of()), folder);
+        assertTrue(has(result, "noise-unknown"), result.findings().toString());
+        assertEquals(Status.PARTIAL, result.status());
+        assertTrue(result.placement().orElseThrow().type().isEmpty());
+        assertTrue(result.placement().orElseThrow().gravity().gravityClass().isEmpty());
+    }
+
+    @Test
+    void wavelengthsTooShortForAirFailTheObjectWithAReason() throws IOException {
+        Files.writeString(
+                folder.resolve("short.csv"),
+                "wavelength_micron,flux,sigma\n0.01,1,0.1\n0.02,1,0.1\n0.03,1,0.1\n");
+        ObjectResult result =
+                chain(SurveySettings.withDefaults())
+                        .run(
+                                new Candidate(
+                                        "s", 1, List.of("short.csv"), Map.of("medium", "air")),
+                                folder);
+        assertEquals(Status.FAILED, result.status());
+        assertTrue(result.reason().contains("where the refractive index"), result.reason());
+    }
+
+    @Test
     void severalSpectraGiveTheBestOfEachFeature() throws IOException {
         write("one", alkali(0), Map.of());
         Candidate two =
