@@ -34,6 +34,17 @@ final class MeasuredSpectrum {
         return least;
     }
 
+    /** Least coverage of the line windows over which a formula integrates; 1 if it has none. */
+    double lineCoverage(Formula formula) {
+        double least = 1;
+        for (int row : formula.rows()) {
+            if (operator.functional(row).measure().isIntegral()) {
+                least = Math.min(least, operator.coverage(row));
+            }
+        }
+        return least;
+    }
+
     double value(Formula formula) {
         return formula.value(means);
     }

@@ -144,6 +144,15 @@ public final class Measurer {
                     100 * coverage,
                     100 * settings.minCoverage());
         }
+        double line = measured.lineCoverage(formula);
+        if (line < Measuring.LEAST_LINE_COVERAGE) {
+            return refuse(
+                    Why.NOT_COVERED,
+                    "good pixels cover %.1f%% of the window of the line; an equivalent width"
+                            + " needs %.0f%%",
+                    100 * line,
+                    100 * Measuring.LEAST_LINE_COVERAGE);
+        }
         if (Double.isNaN(signal)) {
             return refuse(Why.NEGATIVE_CONTINUUM, "a continuum is zero or negative");
         }
