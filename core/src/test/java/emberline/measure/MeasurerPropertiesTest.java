@@ -2,6 +2,7 @@ package emberline.measure;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertInstanceOf;
+import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.catalogue.Feature;
@@ -15,8 +16,13 @@ import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurement.NotMeasured;
 import emberline.measure.Measurement.Why;
 import emberline.prepare.PreparedSpectrum;
+import emberline.prepare.Preparer;
+import emberline.prepare.Preparing;
+import emberline.read.Observation;
+import emberline.spectrum.Medium;
 import emberline.spectrum.Spectrum;
 import java.util.List;
+import java.util.Optional;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -78,16 +84,42 @@ class MeasurerPropertiesTest {
     @ValueSource(longs = {1, 2, 3})
     void shiftingTheFrameAndBackChangesNothing(long seed) {
         Spectrum spectrum = rough(seed, 2e-4, 0.02);
+        double kms = 90 * seed;
+        double beta = kms / 299_792.458;
         double[] moved = spectrum.wavelengthsMicron();
         for (int i = 0; i < moved.length; i++) {
-            moved[i] = moved[i] * 1.0003 / 1.0003;
+            moved[i] *= Math.sqrt((1 + beta) / (1 - beta));
         }
         assertSame(
-                TestSpectra.measure(TestSpectra.prepared(spectrum, 2000)),
-                TestSpectra.measure(
-                        TestSpectra.prepared(spectrum.withWavelengthsMicron(moved), 2000)),
-                1e-7,
+                TestSpectra.measure(preparedAtRest(spectrum, spectrum.wavelengthsMicron(), 0)),
+                TestSpectra.measure(preparedAtRest(spectrum, moved, kms)),
+                1e-9,
                 1);
+        Measurements notBack = TestSpectra.measure(preparedAtRest(spectrum, moved, 0));
+        String id = "burgasser2006/h2o-j";
+        assertNotEquals(
+                TestSpectra.value(TestSpectra.measure(TestSpectra.prepared(spectrum, 2000)), id),
+                TestSpectra.value(notBack, id),
+                1e-6);
+    }
+
+    /** Takes a spectrum through the preparing step with a stated velocity. */
+    private static PreparedSpectrum preparedAtRest(
+            Spectrum spectrum, double[] wavelengths, double kms) {
+        Observation observation =
+                Observation.of(
+                        new Observation.Origin("rough.txt", "invented", "00"),
+                        wavelengths,
+                        spectrum.fluxes(),
+                        Optional.of(spectrum.fluxSigmas()),
+                        new Observation.Stated(Optional.of(Medium.VACUUM), Optional.empty()),
+                        List.of());
+        return new Preparer()
+                .prepare(
+                        observation,
+                        Preparing.withDefaults()
+                                .withResolvingPower(2000)
+                                .withRadialVelocityKms(kms));
     }
 
     /** Two half pixels of the same flux with root-two times the noise say the same. */
@@ -114,8 +146,11 @@ class MeasurerPropertiesTest {
                                 Spectrum.of(wavelengths, flux, sigma), resolvingPower));
         int compared = 0;
         for (FeatureMeasurement one : whole.all()) {
+            // a value at the edge of too noisy may fall to either side
             boolean comparable =
-                    one.result() instanceof Measured && one.feature().statistic() == Statistic.MEAN;
+                    one.result() instanceof Measured
+                            && halves.measured(one.feature().id()).isPresent()
+                            && one.feature().statistic() == Statistic.MEAN;
             if (comparable) {
                 Measured value = whole.measured(one.feature().id()).orElseThrow();
                 Measured other = halves.measured(one.feature().id()).orElseThrow();
@@ -127,7 +162,7 @@ class MeasurerPropertiesTest {
                 compared++;
             }
         }
-        assertTrue(compared > 50, compared + " features");
+        assertTrue(compared > 100, compared + " features");
     }
 
     /** A straight continuum without lines has no equivalent width, with softened windows or not. */
@@ -142,8 +177,8 @@ class MeasurerPropertiesTest {
         for (FeatureMeasurement one : measured.all()) {
             if (one.feature().kind() == Kind.EQUIVALENT_WIDTH
                     && one.result() instanceof Measured width) {
-                // a pixel cut by an edge counts with the flux at its centre: 2e-5 of step^2 / 8
-                assertEquals(widthOfNoLine(one.feature()), width.value(), 5e-5, one.feature().id());
+                // a pixel cut by an edge counts with the flux at its centre
+                assertEquals(widthOfNoLine(one.feature()), width.value(), 1e-4, one.feature().id());
                 compared++;
             }
         }
@@ -266,5 +301,55 @@ class MeasurerPropertiesTest {
         for (FeatureMeasurement one : TestSpectra.measure(negative).all()) {
             assertInstanceOf(NotMeasured.class, one.result(), one.feature().id());
         }
+    }
+
+    @Test
+    void withoutNoiseThereIsNoValue() {
+        PreparedSpectrum silent = TestSpectra.of(0.6, 2.5, 2e-4, 2000, 0, micron -> 1 + micron);
+        int unknown = 0;
+        for (FeatureMeasurement one : TestSpectra.measure(silent).all()) {
+            NotMeasured why = assertInstanceOf(NotMeasured.class, one.result(), one.feature().id());
+            unknown += why.why() == Why.NOISE_UNKNOWN ? 1 : 0;
+        }
+        assertTrue(unknown > 100, unknown + " features");
+    }
+
+    /** On a flat flux CaH2 + CaH3 is 2, and the solar TiO5 is not 1; where TiO5 gives 1 it is. */
+    @Test
+    void aShortfallAgainstNothingIsRefused() {
+        Window tio5 =
+                FeatureCatalogue.standard()
+                        .feature("reid1995/tio5")
+                        .orElseThrow()
+                        .window(Role.NUMERATOR);
+        Measurements deep = TestSpectra.measure(withBand(tio5, 0.4));
+        assertTrue(deep.measured("dhital2012/zeta").isPresent(), "a deep band");
+        int refused = 0;
+        for (double depth = 0; depth < 0.1; depth += 0.01) {
+            NotMeasured why =
+                    deepOrNull(TestSpectra.measure(withBand(tio5, depth)), "dhital2012/zeta");
+            if (why != null && why.why() == Why.TOO_NOISY) {
+                assertTrue(why.detail().contains("divides by"), why.detail());
+                refused++;
+            }
+        }
+        assertTrue(refused > 0, "no shortfall was refused");
+    }
+
+    private static NotMeasured deepOrNull(Measurements measured, String id) {
+        return measured.of(id).orElseThrow().result().fold(value -> null, why -> why);
+    }
+
+    private static PreparedSpectrum withBand(Window window, double depth) {
+        return TestSpectra.of(
+                0.6,
+                0.9,
+                1e-4,
+                2000,
+                0.03,
+                micron ->
+                        micron > window.lowMicron() && micron < window.highMicron()
+                                ? 1 - depth
+                                : 1);
     }
 }
