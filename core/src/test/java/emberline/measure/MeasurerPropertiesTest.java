@@ -162,7 +162,7 @@ class MeasurerPropertiesTest {
                 compared++;
             }
         }
-        assertTrue(compared > 100, compared + " features");
+        assertTrue(compared > 80, compared + " features");
     }
 
     /** A straight continuum without lines has no equivalent width, with softened windows or not. */
@@ -314,20 +314,18 @@ class MeasurerPropertiesTest {
         assertTrue(unknown > 100, unknown + " features");
     }
 
-    /** On a flat flux CaH2 + CaH3 is 2, and the solar TiO5 is not 1; where TiO5 gives 1 it is. */
+    /**
+     * On a flat flux CaH2 + CaH3 is 2 and the solar TiO5 near 1: the shortfall divides by noise.
+     */
     @Test
     void aShortfallAgainstNothingIsRefused() {
-        Window tio5 =
-                FeatureCatalogue.standard()
-                        .feature("reid1995/tio5")
-                        .orElseThrow()
-                        .window(Role.NUMERATOR);
-        Measurements deep = TestSpectra.measure(withBand(tio5, 0.4));
+        Window hydrides = new Window(0.6805, 0.7000);
+        Measurements deep = TestSpectra.measure(withBand(hydrides, 0.4));
         assertTrue(deep.measured("dhital2012/zeta").isPresent(), "a deep band");
         int refused = 0;
         for (double depth = 0; depth < 0.1; depth += 0.01) {
             NotMeasured why =
-                    deepOrNull(TestSpectra.measure(withBand(tio5, depth)), "dhital2012/zeta");
+                    deepOrNull(TestSpectra.measure(withBand(hydrides, depth)), "dhital2012/zeta");
             if (why != null && why.why() == Why.TOO_NOISY) {
                 assertTrue(why.detail().contains("divides by"), why.detail());
                 refused++;

@@ -39,7 +39,7 @@ class ShiftedCatalogueTest {
     }
 
     private static String moved(Feature feature) {
-        return "moved/" + feature.id().replace('/', '-');
+        return "moved2026/" + feature.id().replace('/', '-');
     }
 
     private FeatureCatalogue moved(List<Feature> features, double factor) throws Exception {
@@ -59,7 +59,7 @@ class ShiftedCatalogueTest {
                             feature.band(),
                             "VACUUM",
                             "MICRON",
-                            "moved",
+                            "moved2026",
                             "FROM_MEMORY",
                             50,
                             feature.sense(),
@@ -74,7 +74,8 @@ class ShiftedCatalogueTest {
         }
         Files.createDirectories(folder.resolve("features"));
         Files.createDirectories(folder.resolve("windows"));
-        Files.writeString(folder.resolve("sources.csv"), "key,authors,year\nmoved,Example,2026\n");
+        Files.writeString(
+                folder.resolve("sources.csv"), "key,authors,year\nmoved2026,Example,2026\n");
         Files.writeString(folder.resolve("features/moved.csv"), rows);
         Files.writeString(folder.resolve("windows/moved.csv"), windows);
         return STANDARD.with(folder);
