@@ -82,7 +82,7 @@ class MeasurerPropertiesTest {
 
     @ParameterizedTest
     @ValueSource(longs = {1, 2, 3})
-    void shiftingTheFrameAndBackChangesNothing(long seed) {
+    void shiftingTheFrameAndBackChangesNothing(long seed) throws Exception {
         Spectrum spectrum = rough(seed, 2e-4, 0.02);
         double kms = 90 * seed;
         double beta = kms / 299_792.458;
@@ -105,7 +105,7 @@ class MeasurerPropertiesTest {
 
     /** Takes a spectrum through the preparing step with a stated velocity. */
     private static PreparedSpectrum preparedAtRest(
-            Spectrum spectrum, double[] wavelengths, double kms) {
+            Spectrum spectrum, double[] wavelengths, double kms) throws Exception {
         Observation observation =
                 Observation.of(
                         new Observation.Origin("rough.txt", "invented", "00"),
