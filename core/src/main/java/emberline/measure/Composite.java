@@ -3,6 +3,8 @@ package emberline.measure;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
+import java.util.function.DoubleUnaryOperator;
 
 /** A feature made of other features. */
 final class Composite implements Formula {
@@ -18,6 +20,25 @@ final class Composite implements Formula {
 
         /** The derivative by each part. */
         double[] gradient(double[] parts);
+
+        /** What the rule divides by, from the same parts; empty where it does not divide. */
+        default Optional<Rule> divisor() {
+            return Optional.empty();
+        }
+    }
+
+    /** A function of the second part, with its derivative. */
+    private record OfSecond(DoubleUnaryOperator of, DoubleUnaryOperator slope) implements Rule {
+
+        @Override
+        public double value(double[] parts) {
+            return of.applyAsDouble(parts[1]);
+        }
+
+        @Override
+        public double[] gradient(double[] parts) {
+            return new double[] {0, slope.applyAsDouble(parts[1])};
+        }
     }
 
     Composite(List<Formula> parts, Rule rule) {
@@ -55,6 +76,11 @@ final class Composite implements Formula {
             public double[] gradient(double[] parts) {
                 return new double[] {1 / parts[1], -parts[0] / (parts[1] * parts[1])};
             }
+
+            @Override
+            public Optional<Rule> divisor() {
+                return Optional.of(new OfSecond(second -> second, second -> 1));
+            }
         };
     }
 
@@ -75,6 +101,11 @@ final class Composite implements Formula {
                 double[] solar = polynomial(parts[1]);
                 double below = 1 - solar[0];
                 return new double[] {-1 / below, (1 - parts[0]) * solar[1] / (below * below)};
+            }
+
+            @Override
+            public Optional<Rule> divisor() {
+                return Optional.of(new OfSecond(x -> 1 - polynomial(x)[0], x -> -polynomial(x)[1]));
             }
 
             private double[] polynomial(double x) {
@@ -136,5 +167,13 @@ final class Composite implements Formula {
         List<Continuum> continua = new ArrayList<>();
         parts.forEach(part -> continua.addAll(part.continua()));
         return continua;
+    }
+
+    @Override
+    public List<Formula> divisors() {
+        List<Formula> divisors = new ArrayList<>();
+        parts.forEach(part -> divisors.addAll(part.divisors()));
+        rule.divisor().ifPresent(own -> divisors.add(new Composite(parts, own)));
+        return divisors;
     }
 }

@@ -12,6 +12,9 @@ final class EnvelopeMatrix {
     /** A pivot below this share of its diagonal element counts as zero. */
     private static final double SINGULAR = 1e-12;
 
+    /** A pivot below minus this share of its diagonal element is no matter of rounding. */
+    private static final double NEGATIVE = 1e-6;
+
     private final int[] start;
     private final double[][] rows;
 
@@ -41,6 +44,8 @@ final class EnvelopeMatrix {
      * a zero on the diagonal, so that the product still returns this matrix.
      *
      * @return a lower-triangular matrix with the same envelope
+     * @throws IllegalStateException if the matrix is no covariance: a pivot is negative by more
+     *     than rounding can make it
      */
     EnvelopeMatrix cholesky() {
         double[][] factor = new double[rows.length][];
@@ -56,6 +61,19 @@ final class EnvelopeMatrix {
                 row[i - from] = (row[i - from] - dot(row, from, factor[i], start[i], i)) / pivot;
             }
             double rest = row[j - from] - dot(row, from, row, from, j);
+            if (!(rest >= -NEGATIVE * rows[j][j - from])) {
+                throw new IllegalStateException(
+                        "covariance of "
+                                + rows.length
+                                + " window means: row "
+                                + j
+                                + " has the pivot "
+                                + rest
+                                + " on the diagonal element "
+                                + rows[j][j - from]
+                                + "; expected none below zero: check the correlation of the noise"
+                                + " of neighbouring pixels");
+            }
             row[j - from] = rest > SINGULAR * rows[j][j - from] ? Math.sqrt(rest) : 0;
             factor[j] = row;
         }

@@ -9,8 +9,8 @@ import java.util.OptionalDouble;
  * @param feature the definition
  * @param result the value, or the reason why there is none
  * @param coverage least share of a window that good pixels cover, 0 to 1
- * @param continuumSignal least signal-to-noise of a continuum by which the feature divides; 0 where
- *     it was not measured, infinite where there is no noise
+ * @param continuumSignal least signal-to-noise of a continuum, or of a part, by which the feature
+ *     divides; 0 where it was not measured, infinite where there is no noise
  * @param telluricShare largest share of a window that the atmosphere can spoil at the site of the
  *     observation, 0 to 1
  * @param smoothedToResolvingPower the resolving power to which the spectrum was smoothed for this

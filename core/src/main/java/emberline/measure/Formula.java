@@ -45,6 +45,16 @@ sealed interface Formula permits LinearRatio, PowerProduct, Magnitude, Equivalen
     List<Continuum> continua();
 
     /**
+     * What the feature divides by beside its continua, as formulas of their own: it must stand
+     * clear of zero as well, on either side.
+     *
+     * @return none for formulas of functionals alone
+     */
+    default List<Formula> divisors() {
+        return List.of();
+    }
+
+    /**
      * A weighted sum of functionals by which a formula divides.
      *
      * @param rows rows of the sum

@@ -6,13 +6,20 @@ import org.apache.commons.rng.UniformRandomProvider;
 import org.apache.commons.rng.sampling.distribution.ZigguratSampler;
 import org.apache.commons.rng.simple.RandomSource;
 
-/** The window functionals of one spectrum with their covariance; what features are made from. */
+/**
+ * The window functionals of one spectrum with their covariance; what features are made from. Safe
+ * for use by several threads.
+ */
 final class MeasuredSpectrum {
+
+    /** A variance below minus this share of its terms is no matter of rounding. */
+    private static final double NEGATIVE = 1e-6;
 
     private final FormulaBook book;
     private final WindowOperator operator;
     private final double[] means;
     private final EnvelopeMatrix covariance;
+    private EnvelopeMatrix factor;
 
     MeasuredSpectrum(FormulaBook book, WindowOperator operator, PreparedSpectrum prepared) {
         this.book = book;
@@ -34,12 +41,45 @@ final class MeasuredSpectrum {
         return least;
     }
 
+    /** Least coverage of the line windows over which a formula integrates; 1 if it has none. */
+    double lineCoverage(Formula formula) {
+        double least = 1;
+        for (int row : formula.rows()) {
+            if (operator.functional(row).measure().isIntegral()) {
+                least = Math.min(least, operator.coverage(row));
+            }
+        }
+        return least;
+    }
+
     double value(Formula formula) {
         return formula.value(means);
     }
 
     double sigma(Formula formula) {
-        return Math.sqrt(Math.max(0, covariance(formula, formula)));
+        return root(formula.rows(), formula.gradient(means));
+    }
+
+    /** The root of the variance of a weighted sum of functionals. */
+    private double root(int[] rows, double[] weights) {
+        double variance = bilinear(rows, weights, rows, weights);
+        if (variance >= 0 || Double.isNaN(variance)) {
+            return Math.sqrt(variance);
+        }
+        double independent = 0;
+        for (int k = 0; k < rows.length; k++) {
+            independent += weights[k] * weights[k] * covariance.get(rows[k], rows[k]);
+        }
+        if (variance < -NEGATIVE * independent) {
+            throw new IllegalStateException(
+                    "variance "
+                            + variance
+                            + " of a sum of window means whose own variances add up to "
+                            + independent
+                            + ": expected none below zero: check the correlation of the noise of"
+                            + " neighbouring pixels");
+        }
+        return 0;
     }
 
     /** Covariance of two features, to first order. */
@@ -64,14 +104,15 @@ final class MeasuredSpectrum {
     }
 
     double continuumSigma(Formula.Continuum continuum) {
-        return Math.sqrt(
-                Math.max(
-                        0,
-                        bilinear(
-                                continuum.rows(),
-                                continuum.weights(),
-                                continuum.rows(),
-                                continuum.weights())));
+        return root(continuum.rows(), continuum.weights());
+    }
+
+    /** The Cholesky factor of the covariance, made when it is first needed. */
+    private synchronized EnvelopeMatrix factor() {
+        if (factor == null) {
+            factor = covariance.cholesky();
+        }
+        return factor;
     }
 
     /**
@@ -84,13 +125,13 @@ final class MeasuredSpectrum {
      * @return for each formula one value a draw
      */
     double[][] draws(List<Formula> formulas, int count, long seed) {
-        EnvelopeMatrix factor = covariance.cholesky();
+        EnvelopeMatrix lower = factor();
         boolean[] wanted = new boolean[means.length];
         boolean[] carried = new boolean[means.length];
         for (Formula formula : formulas) {
             for (int row : formula.rows()) {
                 wanted[row] = true;
-                for (int k = factor.start(row); k <= row; k++) {
+                for (int k = lower.start(row); k <= row; k++) {
                     carried[k] = true;
                 }
             }
@@ -107,7 +148,7 @@ final class MeasuredSpectrum {
         for (int row = 0; row < means.length; row++) {
             if (wanted[row]) {
                 drawn[row] = new double[count];
-                factor.multiplyRow(deviates, means[row], row, drawn[row]);
+                lower.multiplyRow(deviates, means[row], row, drawn[row]);
             }
         }
         double[][] values = new double[formulas.size()][count];

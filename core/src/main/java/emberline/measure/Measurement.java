@@ -9,7 +9,8 @@ public sealed interface Measurement {
      * A value that was measured.
      *
      * @param value finite, in the unit of the feature
-     * @param oneSigma one-sigma error from the pixel noise, same unit, finite and not negative
+     * @param oneSigma one-sigma error from the pixel noise, same unit, finite and not negative; a
+     *     {@link Measurer} gives none without an error
      */
     record Measured(double value, double oneSigma) implements Measurement {
 
@@ -44,6 +45,8 @@ public sealed interface Measurement {
         NEGATIVE_CONTINUUM("continuum not positive"),
         /** The continuum is lost in the noise. */
         TOO_NOISY("too noisy"),
+        /** The pixels have no noise, so that a value would have no error. */
+        NOISE_UNKNOWN("noise not known"),
         /** The atmosphere lets hardly any light through there. */
         TELLURIC("saturated by tellurics"),
         /** A part of a composite feature was not measured. */

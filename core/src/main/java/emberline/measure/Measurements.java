@@ -3,7 +3,6 @@ package emberline.measure;
 import emberline.measure.Measurement.Measured;
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.Collection;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -19,6 +18,9 @@ public final class Measurements {
     static final double LINEAR = 15;
 
     private static final int INTERVAL_DRAWS = 1000;
+
+    /** Largest share of draws without a value of which an interval is still given. */
+    private static final double MOST_LOST = 0.05;
 
     /** Share of a normal distribution below minus one sigma. */
     private static final double LOW_TAIL = 0.158655253931457;
@@ -122,7 +124,8 @@ public final class Measurements {
      * @param ids measured features
      * @param count number of draws, at least 1
      * @param seed start of the random sequence; the same seed gives the same draws
-     * @return for each feature one value a draw
+     * @return for each feature one value a draw; NaN in draws for which the definition has no
+     *     value, as the logarithm of a negative ratio
      * @throws IllegalArgumentException if one of them was not measured
      */
     public double[][] draws(List<String> ids, int count, long seed) {
@@ -151,25 +154,62 @@ public final class Measurements {
     /**
      * The 68% interval of a measured feature. Where the continuum is well measured it is the value
      * plus and minus one sigma; below a signal-to-noise of {@value #LINEAR} it is taken from draws,
-     * since a ratio is skewed there.
+     * since a ratio is skewed there. Draws for which the definition has no value are left out.
      *
      * @param id a measured feature
      * @param seed start of the random sequence
-     * @return the 68% interval in the unit of the feature
+     * @return the 68% interval in the unit of the feature; empty where more than 5% of the draws
+     *     have no value, so that what is left is a choice
      * @throws IllegalArgumentException if it was not measured
      */
-    public Interval68 interval68(String id, long seed) {
-        FeatureMeasurement measurement = measuredEntry(id).measurement;
-        if (measurement.continuumSignal() >= LINEAR) {
-            Measured value = measured(id).orElseThrow();
-            return new Interval68(
-                    value.value() - value.oneSigma(), value.value() + value.oneSigma());
+    public Optional<Interval68> interval68(String id, long seed) {
+        return Optional.ofNullable(intervals68(List.of(id), seed).get(id));
+    }
+
+    /**
+     * The 68% intervals of all measured features, as {@link #interval68} gives them, from one set
+     * of draws.
+     *
+     * @param seed start of the random sequence
+     * @return intervals by the id of the feature, in the order of the catalogue; those that have
+     *     none are left out
+     */
+    public Map<String, Interval68> intervals68(long seed) {
+        return intervals68(measuredIds(), seed);
+    }
+
+    private Map<String, Interval68> intervals68(List<String> ids, long seed) {
+        List<String> skewed =
+                ids.stream()
+                        .filter(id -> measuredEntry(id).measurement.continuumSignal() < LINEAR)
+                        .toList();
+        double[][] draws = draws(skewed, INTERVAL_DRAWS, seed);
+        Map<String, Interval68> intervals = new LinkedHashMap<>();
+        for (String id : ids) {
+            int drawn = skewed.indexOf(id);
+            if (drawn >= 0) {
+                ofDraws(draws[drawn]).ifPresent(interval -> intervals.put(id, interval));
+            } else {
+                Measured value = measured(id).orElseThrow();
+                intervals.put(
+                        id,
+                        new Interval68(
+                                value.value() - value.oneSigma(),
+                                value.value() + value.oneSigma()));
+            }
         }
-        double[] drawn = draws(List.of(id), INTERVAL_DRAWS, seed)[0];
-        Arrays.sort(drawn);
-        return new Interval68(
-                drawn[(int) (INTERVAL_DRAWS * LOW_TAIL)],
-                drawn[(int) (INTERVAL_DRAWS * (1 - LOW_TAIL))]);
+        return intervals;
+    }
+
+    private static Optional<Interval68> ofDraws(double[] draws) {
+        double[] sorted = Arrays.stream(draws).filter(d -> !Double.isNaN(d)).sorted().toArray();
+        if (sorted.length < (1 - MOST_LOST) * draws.length) {
+            return Optional.empty();
+        }
+        return Optional.of(
+                new Interval68(
+                        sorted[(int) (sorted.length * LOW_TAIL)],
+                        sorted[(int) (sorted.length * (1 - LOW_TAIL))]));
     }
 
     /**
@@ -189,7 +229,7 @@ public final class Measurements {
         return entry;
     }
 
-    private Collection<String> measuredIds() {
+    private List<String> measuredIds() {
         return entries.keySet().stream().filter(id -> measured(id).isPresent()).toList();
     }
 }

@@ -9,6 +9,7 @@ import emberline.measure.Measurement.Why;
 import emberline.prepare.PreparedSpectrum;
 import emberline.spectrum.Spectrum;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -25,6 +26,7 @@ public final class Measurer {
     private final FeatureCatalogue catalogue;
     private final Measuring settings;
     private final TelluricCheck tellurics;
+    private final Map<String, Double> telluricShares = new HashMap<>();
     private final GridCache grids = new GridCache();
 
     /**
@@ -36,7 +38,10 @@ public final class Measurer {
     public Measurer(FeatureCatalogue catalogue, Measuring settings) {
         this.catalogue = catalogue;
         this.settings = settings;
-        this.tellurics = new TelluricCheck(catalogue.telluricRegions(), settings.site());
+        this.tellurics = new TelluricCheck(catalogue, catalogue.telluricRegions(), settings.site());
+        for (Feature feature : catalogue.features()) {
+            telluricShares.put(feature.id(), tellurics.share(feature));
+        }
     }
 
     /**
@@ -97,7 +102,7 @@ public final class Measurer {
         if (refusal == null && formula.isEmpty()) {
             refusal = missingPart(feature, plan);
         }
-        double telluric = tellurics.share(feature);
+        double telluric = telluricShares.get(feature.id());
         OptionalDouble smoothed = plan.applicability().smoothing(feature);
         if (refusal != null) {
             return new FeatureMeasurement(feature, refusal, 0, 0, telluric, smoothed);
@@ -114,7 +119,10 @@ public final class Measurer {
                 smoothed);
     }
 
-    /** Least signal-to-noise of the continua of a formula; NaN where one is not positive. */
+    /**
+     * Least signal-to-noise of the continua of a formula and of what else it divides by; NaN where
+     * a continuum is not positive.
+     */
     private static double continuumSignal(Formula formula, MeasuredSpectrum measured) {
         double least = Double.POSITIVE_INFINITY;
         for (Formula.Continuum continuum : formula.continua()) {
@@ -122,7 +130,16 @@ public final class Measurer {
             double signal = level / measured.continuumSigma(continuum);
             least = level > 0 ? Math.min(least, signal) : Double.NaN;
         }
+        for (Formula divisor : formula.divisors()) {
+            least = Math.min(least, divisorSignal(divisor, measured));
+        }
         return least;
+    }
+
+    private static double divisorSignal(Formula divisor, MeasuredSpectrum measured) {
+        double signal = Math.abs(measured.value(divisor)) / measured.sigma(divisor);
+        // a part that has no value gives the feature none either, whatever it divides by
+        return Double.isNaN(signal) ? Double.POSITIVE_INFINITY : signal;
     }
 
     private static NotMeasured missingPart(Feature feature, Plan plan) {
@@ -144,8 +161,27 @@ public final class Measurer {
                     100 * coverage,
                     100 * settings.minCoverage());
         }
+        double line = measured.lineCoverage(formula);
+        if (line < Measuring.LEAST_LINE_COVERAGE) {
+            return refuse(
+                    Why.NOT_COVERED,
+                    "good pixels cover %.1f%% of the window of the line; an equivalent width"
+                            + " needs %.0f%%",
+                    100 * line,
+                    100 * Measuring.LEAST_LINE_COVERAGE);
+        }
         if (Double.isNaN(signal)) {
             return refuse(Why.NEGATIVE_CONTINUUM, "a continuum is zero or negative");
+        }
+        for (Formula divisor : formula.divisors()) {
+            if (divisorSignal(divisor, measured) < settings.leastContinuumSignal()) {
+                return refuse(
+                        Why.TOO_NOISY,
+                        "it divides by %.3g +- %.2g, which must be %.1f times its error from zero",
+                        measured.value(divisor),
+                        measured.sigma(divisor),
+                        settings.leastContinuumSignal());
+            }
         }
         if (signal < settings.leastContinuumSignal()) {
             return refuse(
@@ -158,6 +194,10 @@ public final class Measurer {
         double sigma = measured.sigma(formula);
         if (!Double.isFinite(value) || !Double.isFinite(sigma)) {
             return refuse(Why.OUTSIDE_VALID_RANGE, "the definition has no value for these fluxes");
+        }
+        if (!(sigma > 0)) {
+            return refuse(
+                    Why.NOISE_UNKNOWN, "the error of every pixel in its windows is given as zero");
         }
         return new Measured(value, sigma);
     }

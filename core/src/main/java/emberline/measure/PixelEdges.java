@@ -66,8 +66,13 @@ final class PixelEdges {
         return Math.max(0, Math.min(high[pixel], highMicron) - Math.max(low[pixel], lowMicron));
     }
 
-    /** Width of a pixel (micron); 0 for a bad one. */
-    double width(int pixel) {
-        return good[pixel] ? high[pixel] - low[pixel] : 0;
+    /** Where a pixel begins (micron). */
+    double low(int pixel) {
+        return low[pixel];
+    }
+
+    /** Where a pixel ends (micron). */
+    double high(int pixel) {
+        return high[pixel];
     }
 }

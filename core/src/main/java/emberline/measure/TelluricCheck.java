@@ -1,7 +1,9 @@
 package emberline.measure;
 
 import emberline.catalogue.Feature;
+import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.FeatureWindow;
+import emberline.catalogue.Part;
 import emberline.catalogue.TelluricRegion;
 import emberline.catalogue.TelluricRegion.Strength;
 import emberline.catalogue.Window;
@@ -21,20 +23,40 @@ final class TelluricCheck {
 
     private static final double MOST_OPAQUE = 0.5;
 
+    private final FeatureCatalogue catalogue;
     private final List<TelluricRegion> regions;
     private final Site site;
 
-    TelluricCheck(List<TelluricRegion> regions, Site site) {
-        this.regions = regions.stream().filter(r -> site.isSpoiledBy(r.strength())).toList();
+    /**
+     * A check.
+     *
+     * @param catalogue where the parts of composite features are looked up
+     * @param regions what the atmosphere can spoil
+     * @param site from where the objects were observed
+     */
+    TelluricCheck(FeatureCatalogue catalogue, List<TelluricRegion> regions, Site site) {
+        this.catalogue = catalogue;
+        this.regions =
+                regions.stream()
+                        .filter(r -> site.isSpoiledBy(r.strength()))
+                        .sorted(Comparator.comparingDouble(r -> r.window().lowMicron()))
+                        .toList();
         this.site = site;
     }
 
-    /** The largest share of a window of the feature that is spoiled, 0 to 1. */
+    /** The largest share of a window of the feature or of its parts that is spoiled, 0 to 1. */
     double share(Feature feature) {
-        return feature.windows().stream()
-                .mapToDouble(part -> share(part.window(), regions))
-                .max()
-                .orElse(0);
+        double largest = 0;
+        for (FeatureWindow part : feature.windows()) {
+            largest = Math.max(largest, share(part.window(), regions));
+        }
+        for (Part part : feature.parts()) {
+            largest =
+                    Math.max(
+                            largest,
+                            catalogue.feature(part.feature()).map(this::share).orElse(0.0));
+        }
+        return largest;
     }
 
     /** Why a feature cannot be measured for the atmosphere; empty where it can. */
@@ -60,14 +82,11 @@ final class TelluricCheck {
         return Optional.empty();
     }
 
-    /** Share of a window in regions. */
+    /** Share of a window in regions, which are sorted by their lower ends. */
     private static double share(Window window, List<TelluricRegion> regions) {
         double covered = 0;
         double upTo = window.lowMicron();
-        for (TelluricRegion region :
-                regions.stream()
-                        .sorted(Comparator.comparingDouble(r -> r.window().lowMicron()))
-                        .toList()) {
+        for (TelluricRegion region : regions) {
             double from = Math.max(upTo, region.window().lowMicron());
             double to = Math.min(window.highMicron(), region.window().highMicron());
             if (to > from) {

@@ -54,19 +54,23 @@ final class WindowOperator {
             int to = edges.firstStartingAtOrAbove(window.highMicron());
             double[] overlap = overlaps(edges, window, from, to);
             coverage[row] = Math.min(1, Arrays.stream(overlap).sum() / window.widthMicron());
-            first[row] = from;
+            int power = functional.measure().power();
             if (functional.smoothedTo().isPresent()) {
                 SmoothedWindow smoothed =
                         new SmoothedWindow(
-                                spectrum,
+                                edges,
                                 window,
                                 resolvingPower,
                                 functional.smoothedTo().getAsDouble());
                 first[row] = smoothed.first();
-                overlap = overlaps(edges, smoothed);
+                boolean moment = functional.measure().isIntegral();
+                overlap = moment ? smoothed.moments(0) : smoothed.integrals();
+                weights[row] = power == 0 ? overlap : smoothed.moments(power);
+            } else {
+                first[row] = from;
+                weights[row] = power == 0 ? overlap : moments(edges, functional, from, to);
             }
-            weights[row] = overlap;
-            weigh(spectrum, functional, first[row], overlap);
+            scale(weights[row], functional, Arrays.stream(overlap).sum());
         }
         return new WindowOperator(List.copyOf(functionals), first, weights, coverage);
     }
@@ -79,30 +83,37 @@ final class WindowOperator {
         return overlap;
     }
 
-    private static double[] overlaps(PixelEdges edges, SmoothedWindow smoothed) {
-        int first = smoothed.first();
-        double[] overlap = new double[Math.max(0, smoothed.end() - first)];
-        for (int k = 0; k < overlap.length; k++) {
-            double width = edges.width(first + k);
-            overlap[k] = width > 0 ? width * smoothed.share(first + k) : 0;
+    /** The integral of a power of x over the part of each pixel that lies in the window. */
+    private static double[] moments(
+            PixelEdges edges, WindowFunctional functional, int from, int to) {
+        Window window = functional.window();
+        double half = window.widthMicron() / 2;
+        int raised = functional.measure().power() + 1;
+        double[] moments = new double[Math.max(0, to - from)];
+        for (int k = 0; k < moments.length; k++) {
+            if (edges.overlap(from + k, window.lowMicron(), window.highMicron()) > 0) {
+                double a = Math.max(edges.low(from + k), window.lowMicron());
+                double b = Math.min(edges.high(from + k), window.highMicron());
+                double low = (a - window.centreMicron()) / half;
+                double high = (b - window.centreMicron()) / half;
+                moments[k] = half * (Math.pow(high, raised) - Math.pow(low, raised)) / raised;
+            }
         }
-        return overlap;
+        return moments;
     }
 
-    /** Turns overlaps into weights, in place; they stay zero where nothing is covered. */
-    private static void weigh(
-            Spectrum spectrum, WindowFunctional functional, int from, double[] overlap) {
-        double covered = Arrays.stream(overlap).sum();
+    /**
+     * Scales weights in place by what is covered: a mean is taken over the covered part, and an
+     * integral goes on in small gaps as on average beside them. Weights stay zero where nothing is
+     * covered.
+     */
+    private static void scale(double[] weights, WindowFunctional functional, double covered) {
         if (!(covered > 0)) {
             return;
         }
-        Window window = functional.window();
-        double norm =
-                functional.measure().isIntegral() ? window.widthMicron() / covered : 1 / covered;
-        double half = window.widthMicron() / 2;
-        for (int k = 0; k < overlap.length; k++) {
-            double x = (spectrum.wavelengthMicron(from + k) - window.centreMicron()) / half;
-            overlap[k] *= norm * Math.pow(x, functional.measure().power());
+        double full = functional.measure().isIntegral() ? functional.window().widthMicron() : 1;
+        for (int k = 0; k < weights.length; k++) {
+            weights[k] *= full / covered;
         }
     }
 

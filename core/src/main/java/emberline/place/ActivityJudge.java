@@ -10,6 +10,8 @@ import emberline.catalogue.RestLine;
 import emberline.catalogue.Role;
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurements;
+import emberline.measure.line.LineMeasurement;
+import emberline.measure.line.LineMeasurement.Detection;
 import emberline.spectrum.Finding;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -23,9 +25,6 @@ import java.util.OptionalDouble;
  * one with the widest line window is taken, which loses least light at low resolution.
  */
 final class ActivityJudge {
-
-    /** Emission or a limit is given where the width reaches this many times its error. */
-    private static final double SEEN = 3;
 
     private static final double DEX = 1 / Math.log(10);
 
@@ -67,48 +66,52 @@ final class ActivityJudge {
             return Activity.none("H alpha was not measured");
         }
         Measured width = measurements.measured(line.get().id()).orElseThrow();
+        LineMeasurement seen = LineMeasurement.of(line.get(), width);
+        if (seen.detection() == Detection.ABSORPTION) {
+            return new Activity(
+                    line,
+                    List.of(),
+                    String.format(
+                            Locale.ROOT,
+                            "H alpha is seen in absorption, %.2f +- %.2f angstrom: no emission to"
+                                    + " give a level or a limit of",
+                            width.value(),
+                            width.oneSigma()));
+        }
         List<ActivityLevel> levels = new ArrayList<>();
         for (ChiCurve curve : curves) {
             if (curve.covers(type.typeNumber())) {
-                level(curve, width, type).ifPresent(levels::add);
+                levels.add(
+                        seen.detection() == Detection.EMISSION
+                                ? emission(curve, width, type)
+                                : limit(curve, seen, type));
             }
         }
-        String reason =
-                levels.isEmpty()
-                        ? "no published chi covers the type "
-                                + type.code()
-                                + ", or the width has no error"
-                        : "";
+        String reason = levels.isEmpty() ? "no published chi covers the type " + type.code() : "";
         return new Activity(line, levels, reason);
     }
 
-    /** The level by one curve; empty where neither emission nor noise gives a number. */
-    private static Optional<ActivityLevel> level(
-            ChiCurve curve, Measured width, TypeEstimate type) {
+    private static ActivityLevel limit(ChiCurve curve, LineMeasurement line, TypeEstimate type) {
+        return new ActivityLevel(
+                curve.source(),
+                curve.logChi(type.typeNumber())
+                        + Math.log10(line.limit3SigmaAngstrom().orElseThrow()),
+                OptionalDouble.empty());
+    }
+
+    private static ActivityLevel emission(ChiCurve curve, Measured width, TypeEstimate type) {
         double emission = -width.value();
         double logChi = curve.logChi(type.typeNumber());
-        boolean seen = emission > 0 && emission >= SEEN * width.oneSigma();
-        if (!seen) {
-            return width.oneSigma() > 0
-                    ? Optional.of(
-                            new ActivityLevel(
-                                    curve.source(),
-                                    logChi + Math.log10(SEEN * width.oneSigma()),
-                                    OptionalDouble.empty()))
-                    : Optional.empty();
-        }
         double byWidth = DEX * width.oneSigma() / emission;
         double byType =
                 (curve.logChi(type.typeNumber() + type.sigmaSubclass())
                                 - curve.logChi(type.typeNumber() - type.sigmaSubclass()))
                         / 2;
         double byChi = curve.sigmaDex(type.typeNumber());
-        return Optional.of(
-                new ActivityLevel(
-                        curve.source(),
-                        logChi + Math.log10(emission),
-                        OptionalDouble.of(
-                                Math.sqrt(byWidth * byWidth + byType * byType + byChi * byChi))));
+        return new ActivityLevel(
+                curve.source(),
+                logChi + Math.log10(emission),
+                OptionalDouble.of(Math.sqrt(byWidth * byWidth + byType * byType + byChi * byChi)));
     }
 
     /** What the observer should know: emission above the saturation of chromospheres. */

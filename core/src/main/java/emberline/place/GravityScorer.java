@@ -169,7 +169,8 @@ final class GravityScorer {
             int count = 0;
             for (int f = 0; f < ids.size(); f++) {
                 Optional<Limits> limits = limits(scored.get(f).feature(), drawnType);
-                if (limits.isPresent()) {
+                // a feature without a value in a draw is not measured in it
+                if (limits.isPresent() && !Double.isNaN(features[f][draw])) {
                     scores[count++] = limits.get().score(features[f][draw]);
                 }
             }

@@ -49,7 +49,7 @@ public final class Chain {
      */
     public Chain(FeatureCatalogue catalogue, Measuring measuring, SurveySettings settings) {
         this.measurer = new Measurer(catalogue, measuring);
-        this.lines = new LineReporter(catalogue);
+        this.lines = new LineReporter(catalogue, measuring.site());
         this.placer = new Placer(catalogue);
         this.defaults = settings.preparing();
         this.seed = settings.seed();

@@ -3,9 +3,11 @@ package emberline.measure;
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurement.Measured;
+import emberline.measure.Measurements.Interval68;
 import emberline.prepare.NoiseModel;
 import emberline.prepare.PreparedSpectrum;
 import emberline.spectrum.ResolvingPower;
@@ -13,6 +15,8 @@ import emberline.spectrum.ResolvingPower.Basis;
 import emberline.spectrum.Spectrum;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
 import java.util.Random;
 import org.apache.commons.math3.stat.correlation.PearsonsCorrelation;
 import org.apache.commons.math3.stat.descriptive.moment.Skewness;
@@ -58,6 +62,24 @@ class DrawsTest {
                 List.of());
     }
 
+    /** White noise smoothed by 1, 2, 1 over the root of 6: lags 4 / 6 and 1 / 6. */
+    private static final NoiseModel SMOOTHED = new NoiseModel(false, 1, 4.0 / 6, 1.0 / 6);
+
+    private static double[] noise(int size, boolean smoothed, Random random) {
+        double[] white = new double[size + 2];
+        for (int i = 0; i < white.length; i++) {
+            white[i] = random.nextGaussian();
+        }
+        double[] noise = new double[size];
+        for (int i = 0; i < size; i++) {
+            noise[i] =
+                    smoothed
+                            ? (white[i] + 2 * white[i + 1] + white[i + 2]) / Math.sqrt(6)
+                            : white[i];
+        }
+        return noise;
+    }
+
     private static double[][] byPixels(PreparedSpectrum prepared, List<String> ids) {
         Measurer measurer =
                 new Measurer(
@@ -68,8 +90,9 @@ class DrawsTest {
         Spectrum spectrum = prepared.spectrum();
         for (int n = 0; n < DRAWS; n++) {
             double[] flux = spectrum.fluxes();
+            double[] noise = noise(flux.length, prepared.noise().equals(SMOOTHED), random);
             for (int i = 0; i < flux.length; i++) {
-                flux[i] += spectrum.fluxSigma(i) * random.nextGaussian();
+                flux[i] += spectrum.fluxSigma(i) * noise[i];
             }
             Measurements measured =
                     measurer.measure(
@@ -86,11 +109,12 @@ class DrawsTest {
     }
 
     @ParameterizedTest
-    @CsvSource({"20", "5", "2"})
-    void drawingWindowMeansIsDrawingPixels(double signalToNoise) {
+    @CsvSource({"20, false", "5, false", "2, false", "20, true"})
+    void drawingWindowMeansIsDrawingPixels(double signalToNoise, boolean smoothed) {
         // at S/N 2 the side windows of a line are too noisy for a continuum
         List<String> features = signalToNoise > 2 ? FEATURES : FEATURES.subList(0, 5);
-        PreparedSpectrum prepared = spectrum(signalToNoise, NoiseModel.INDEPENDENT);
+        PreparedSpectrum prepared =
+                spectrum(signalToNoise, smoothed ? SMOOTHED : NoiseModel.INDEPENDENT);
         double[][] pixels = byPixels(prepared, features);
         double[][] means =
                 new Measurer(
@@ -185,5 +209,55 @@ class DrawsTest {
         assertThrows(
                 IllegalArgumentException.class,
                 () -> measured.draws(List.of("kirkpatrick1999/no-such"), 10, 1));
+    }
+
+    /**
+     * A width on too steep a continuum has no value: such draws are left out, or no interval is
+     * given.
+     */
+    @Test
+    void drawsWithoutValueDoNotShiftTheInterval() {
+        int given = 0;
+        int withheld = 0;
+        for (double signalToNoise : new double[] {20, 5, 2, 1}) {
+            Measurements measured =
+                    new Measurer(
+                                    FeatureCatalogue.standard(),
+                                    Measuring.withDefaults().withLeastContinuumSignal(0))
+                            .measure(spectrum(signalToNoise, NoiseModel.INDEPENDENT));
+            for (FeatureMeasurement one : measured.all()) {
+                if (one.result() instanceof Measured
+                        && one.continuumSignal() < Measurements.LINEAR) {
+                    Optional<Interval68> interval = measured.interval68(one.feature().id(), 1);
+                    double lost =
+                            Arrays.stream(measured.draws(List.of(one.feature().id()), 1000, 1)[0])
+                                            .filter(Double::isNaN)
+                                            .count()
+                                    / 1000.0;
+                    assertEquals(
+                            lost <= 0.05, interval.isPresent(), one.feature().id() + " " + lost);
+                    interval.ifPresent(i -> assertTrue(i.low() < i.high(), one.toString()));
+                    given += interval.isPresent() && lost > 0 ? 1 : 0;
+                    withheld += interval.isPresent() ? 0 : 1;
+                }
+            }
+        }
+        assertTrue(given > 0 && withheld > 0, given + " given, " + withheld + " withheld");
+    }
+
+    /** One feature asked alone has the interval of a normal distribution as all together have. */
+    @Test
+    void allIntervalsHaveOneSetOfDraws() {
+        Measurements measured = TestSpectra.measure(spectrum(4, NoiseModel.INDEPENDENT));
+        Map<String, Interval68> all = measured.intervals68(1);
+        assertEquals(
+                measured.all().stream().filter(m -> m.result() instanceof Measured).count(),
+                all.size());
+        Interval68 alone = measured.interval68("burgasser2006/h2o-j", 1).orElseThrow();
+        Interval68 together = all.get("burgasser2006/h2o-j");
+        // an end of the interval of 1000 draws is known to 0.048 sigma; four times root two
+        double tolerance = 4 * Math.sqrt(2) * 0.048 * (alone.high() - alone.low()) / 2;
+        assertEquals(alone.low(), together.low(), tolerance);
+        assertEquals(alone.high(), together.high(), tolerance);
     }
 }

@@ -136,7 +136,7 @@ class ErrorBarsTest {
             Map<String, int[]> counts) {
         for (String id : ids) {
             if (copy.measured(id).isPresent()) {
-                Measurements.Interval68 interval = copy.interval68(id, seed);
+                Measurements.Interval68 interval = copy.interval68(id, seed).orElseThrow();
                 double value = truth.measured(id).orElseThrow().value();
                 int[] held = counts.computeIfAbsent(id, unseen -> new int[2]);
                 held[0] += value >= interval.low() && value <= interval.high() ? 1 : 0;

@@ -133,6 +133,15 @@ class ActivityJudgeTest {
         assertTrue(judge.findings(activity).isEmpty());
     }
 
+    /** A line seen in absorption is not turned into a limit of emission. */
+    @Test
+    void absorptionGivesNoLimit() {
+        Activity activity = judge.judge(halpha(3, 200), TypeEstimate.normal(5, 0.5));
+        assertTrue(activity.levels().isEmpty());
+        assertTrue(activity.reason().contains("absorption"), activity.reason());
+        assertEquals(Optional.of("lepine2013/ew_halpha"), activity.line().map(f -> f.id()));
+    }
+
     @Test
     void whereThereIsNoneTheReasonIsGiven() {
         Activity late = judge.judge(halpha(-5, 100), TypeEstimate.normal(25, 0.5));

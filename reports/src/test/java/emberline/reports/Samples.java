@@ -4,6 +4,7 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurements;
 import emberline.measure.Measurer;
 import emberline.measure.Measuring;
+import emberline.measure.Site;
 import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
@@ -34,7 +35,7 @@ public final class Samples {
             "3b1f9c0a5d7e42886f1420c9d5ab7730e1c4987f6a2b3c5d8e9f001122334455";
 
     private static final Measurer MEASURER = new Measurer(CATALOGUE, Measuring.withDefaults());
-    private static final LineReporter LINES = new LineReporter(CATALOGUE);
+    private static final LineReporter LINES = new LineReporter(CATALOGUE, Site.DRY);
     private static final Placer PLACER = new Placer(CATALOGUE);
 
     private Samples() {}

@@ -4,7 +4,7 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.Purpose;
 import emberline.catalogue.RestLine;
 import emberline.catalogue.TelluricRegion;
-import emberline.catalogue.TelluricRegion.Strength;
+import emberline.measure.Site;
 import emberline.spectrum.Spectrum;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -14,7 +14,7 @@ import java.util.Optional;
 
 /**
  * Which lines of the catalogue can give a velocity at some resolving power: alone in their window,
- * within the spectrum, and out of the regions in which the atmosphere leaves little light.
+ * within the spectrum, and out of the regions that the atmosphere spoils at the site.
  */
 final class LineChoice {
 
@@ -34,10 +34,11 @@ final class LineChoice {
      * Chooses lines.
      *
      * @param catalogue lines at rest and telluric regions
+     * @param site from where it was observed: which regions the atmosphere spoils there
      * @param spectrum the spectrum that is searched
      * @param resolvingPower its resolving power
      */
-    LineChoice(FeatureCatalogue catalogue, Spectrum spectrum, double resolvingPower) {
+    LineChoice(FeatureCatalogue catalogue, Site site, Spectrum spectrum, double resolvingPower) {
         double element = FittingLine.elementKms(resolvingPower);
         List<FittingLine> lines = single(catalogue.restLines(), element);
         double low = spectrum.wavelengthMicron(0);
@@ -49,7 +50,7 @@ final class LineChoice {
                 continue;
             }
             double neighbour = distanceKms(lines, k);
-            Optional<String> telluric = telluric(catalogue, line);
+            Optional<String> telluric = telluric(catalogue, site, line);
             if (neighbour < BLEND * element) {
                 setAside.add(
                         line.setAside(
@@ -120,12 +121,10 @@ final class LineChoice {
         return nearest;
     }
 
-    private static Optional<String> telluric(FeatureCatalogue catalogue, FittingLine line) {
+    private static Optional<String> telluric(
+            FeatureCatalogue catalogue, Site site, FittingLine line) {
         return catalogue.telluricRegions().stream()
-                .filter(
-                        region ->
-                                region.strength() == Strength.OPAQUE
-                                        || region.strength() == Strength.STRONG)
+                .filter(region -> site.isSpoiledBy(region.strength()))
                 .filter(
                         region ->
                                 region.window().lowMicron() < line.restMicron()

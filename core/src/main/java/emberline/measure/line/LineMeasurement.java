@@ -47,7 +47,7 @@ public record LineMeasurement(
      * @param ew what came of it
      * @return the width with its verdict
      */
-    static LineMeasurement of(Feature feature, Measurement ew) {
+    public static LineMeasurement of(Feature feature, Measurement ew) {
         return ew.fold(
                 width -> weighed(feature, width),
                 why ->

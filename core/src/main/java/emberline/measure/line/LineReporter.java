@@ -3,6 +3,7 @@ package emberline.measure.line;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.Kind;
 import emberline.measure.Measurements;
+import emberline.measure.Site;
 import emberline.prepare.PreparedSpectrum;
 import java.util.List;
 
@@ -15,9 +16,10 @@ public final class LineReporter {
      * A reporter.
      *
      * @param catalogue where the lines at rest and the telluric regions are looked up
+     * @param site from where the objects were observed
      */
-    public LineReporter(FeatureCatalogue catalogue) {
-        this.velocities = new VelocityFinder(catalogue);
+    public LineReporter(FeatureCatalogue catalogue, Site site) {
+        this.velocities = new VelocityFinder(catalogue, site);
     }
 
     /**

@@ -3,6 +3,7 @@ package emberline.measure.line;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurement.NotMeasured;
 import emberline.measure.Measurement.Why;
+import emberline.measure.Site;
 import emberline.prepare.PreparedSpectrum;
 import java.util.ArrayList;
 import java.util.List;
@@ -38,9 +39,11 @@ final class VelocityFinder {
     private static final double WIDEST = 3;
 
     private final FeatureCatalogue catalogue;
+    private final Site site;
 
-    VelocityFinder(FeatureCatalogue catalogue) {
+    VelocityFinder(FeatureCatalogue catalogue, Site site) {
         this.catalogue = catalogue;
+        this.site = site;
     }
 
     RadialVelocity find(PreparedSpectrum prepared) {
@@ -59,7 +62,7 @@ final class VelocityFinder {
                     List.of(),
                     List.of());
         }
-        LineChoice choice = new LineChoice(catalogue, prepared.spectrum(), resolvingPower);
+        LineChoice choice = new LineChoice(catalogue, site, prepared.spectrum(), resolvingPower);
         List<LineSetAside> setAside = new ArrayList<>(choice.setAside());
         if (choice.fitting().size() < LEAST_LINES) {
             return new RadialVelocity(

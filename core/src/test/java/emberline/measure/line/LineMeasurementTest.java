@@ -12,6 +12,7 @@ import emberline.measure.Measurement.Why;
 import emberline.measure.Measurements;
 import emberline.measure.Measurer;
 import emberline.measure.Measuring;
+import emberline.measure.Site;
 import emberline.measure.line.LineMeasurement.Detection;
 import emberline.prepare.PreparedSpectrum;
 import java.util.OptionalDouble;
@@ -65,7 +66,7 @@ class LineMeasurementTest {
         PreparedSpectrum prepared = InventedLines.spectrum(2000, 0, 0.4, 1e6, 5);
         Measurements measurements =
                 new Measurer(CATALOGUE, Measuring.withDefaults()).measure(prepared);
-        LineReport report = new LineReporter(CATALOGUE).report(prepared, measurements);
+        LineReport report = new LineReporter(CATALOGUE, Site.DRY).report(prepared, measurements);
         assertEquals(
                 CATALOGUE.features().stream()
                         .filter(f -> f.kind() == Kind.EQUIVALENT_WIDTH)

@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurement.NotMeasured;
 import emberline.measure.Measurement.Why;
+import emberline.measure.Site;
 import emberline.prepare.PreparedSpectrum;
 import emberline.spectrum.Spectrum;
 import java.util.Arrays;
@@ -19,7 +20,7 @@ class RadialVelocityTest {
 
     private static final int COPIES = 300;
 
-    private final VelocityFinder finder = new VelocityFinder(InventedLines.CATALOGUE);
+    private final VelocityFinder finder = new VelocityFinder(InventedLines.CATALOGUE, Site.DRY);
 
     /**
      * Known velocities come back without bias and with honest errors. Of 300 copies 68.3% should

@@ -10,6 +10,7 @@ import emberline.measure.Measurement.NotMeasured;
 import emberline.measure.Measurement.Why;
 import emberline.measure.Measurer;
 import emberline.measure.Measuring;
+import emberline.measure.Site;
 import emberline.measure.line.LineMeasurement.Detection;
 import emberline.prepare.PreparedSpectrum;
 import emberline.prepare.Preparer;
@@ -32,7 +33,7 @@ class RealLinesTest {
 
     private static final FeatureCatalogue CATALOGUE = FeatureCatalogue.standard();
     private static final Measurer MEASURER = new Measurer(CATALOGUE, Measuring.withDefaults());
-    private static final LineReporter REPORTER = new LineReporter(CATALOGUE);
+    private static final LineReporter REPORTER = new LineReporter(CATALOGUE, Site.DRY);
 
     private static PreparedSpectrum prepared(String path, double resolvingPower) throws Exception {
         return new Preparer()

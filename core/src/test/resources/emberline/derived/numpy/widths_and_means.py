@@ -99,13 +99,21 @@ class Spectrum:
     def width(self, line, continua, form):
         centres = [np.mean(side) for side in continua]
         levels = [self.mean(*side) for side in continua]
-        if form == "mean":
-            continuum = np.full(len(self.flux), np.mean(levels))
-        else:
-            continuum = np.polyval(np.polyfit(np.array(centres) - 1, levels, 1), self.wavelength - 1)
         overlap = self.overlap(*line)
+        if form == "mean":
+            over_continuum = overlap / np.mean(levels)
+        else:
+            # the flux is constant over a pixel, the continuum c is not: the integral of 1 / c over
+            # the part of the pixel in the window is log(c(high) / c(low)) over the slope of c
+            straight = np.polyfit(np.array(centres) - 1, levels, 1)
+            low, high = np.maximum(self.low, line[0]), np.minimum(self.high, line[1])
+            used = overlap > 0
+            over_continuum = np.zeros(len(overlap))
+            over_continuum[used] = np.log(
+                np.polyval(straight, high[used] - 1) / np.polyval(straight, low[used] - 1)
+            ) / straight[0]
         covered = overlap.sum() / (line[1] - line[0])
-        return 1e4 * np.sum(overlap * (1 - self.flux / continuum)) / covered
+        return 1e4 * (np.sum(overlap) - np.sum(self.flux * over_continuum)) / covered
 
 
 def main():

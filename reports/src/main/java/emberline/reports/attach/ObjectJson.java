@@ -128,23 +128,25 @@ public final class ObjectJson {
 
     /** Every feature of an object. */
     static List<Map<String, Object>> features(Measurements measurements) {
+        Map<String, Interval68> intervals = measurements.intervals68(INTERVAL_SEED);
         return measurements.all().stream()
-                .map(measurement -> feature(measurement, measurements))
+                .map(
+                        measurement ->
+                                feature(
+                                        measurement,
+                                        Optional.ofNullable(
+                                                intervals.get(measurement.feature().id()))))
                 .toList();
     }
 
     /** One feature: its value with its error, or why there is none. */
     private static Map<String, Object> feature(
-            FeatureMeasurement measurement, Measurements measurements) {
+            FeatureMeasurement measurement, Optional<Interval68> interval) {
         Feature feature = measurement.feature();
         Map<String, Object> map = new LinkedHashMap<>();
         map.put("feature", feature.id());
         map.put("value", value(feature, measurement.result()));
         map.put("sigma", sigma(feature, measurement.result()));
-        Optional<Interval68> interval =
-                measurement.result() instanceof Measurement.Measured
-                        ? Optional.of(measurements.interval68(feature.id(), INTERVAL_SEED))
-                        : Optional.empty();
         map.put("lo68", number(interval.map(i -> Digits.feature(feature, i.low()))));
         map.put("hi68", number(interval.map(i -> Digits.feature(feature, i.high()))));
         map.put("unit", FeatureText.unit(measurement.feature()));

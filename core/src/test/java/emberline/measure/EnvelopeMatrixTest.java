@@ -1,0 +1,100 @@
+package emberline.measure;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.Random;
+import org.apache.commons.math3.linear.Array2DRowRealMatrix;
+import org.apache.commons.math3.linear.CholeskyDecomposition;
+import org.apache.commons.math3.linear.RealMatrix;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
+
+class EnvelopeMatrixTest {
+
+    private static final int SIZE = 30;
+
+    /** Windows of some pixels each, as rows of a matrix. */
+    private static RealMatrix windows(long seed) {
+        Random random = new Random(seed);
+        RealMatrix windows = new Array2DRowRealMatrix(SIZE, 3 * SIZE);
+        for (int row = 0; row < SIZE; row++) {
+            for (int k = 0; k < 8; k++) {
+                windows.setEntry(row, 2 * row + k, random.nextDouble());
+            }
+        }
+        return windows;
+    }
+
+    private static EnvelopeMatrix of(RealMatrix full) {
+        int size = full.getRowDimension();
+        int[] start = new int[size];
+        double[][] rows = new double[size][];
+        for (int i = 0; i < size; i++) {
+            while (full.getEntry(i, start[i]) == 0 && start[i] < i) {
+                start[i]++;
+            }
+            rows[i] = new double[i - start[i] + 1];
+            for (int j = start[i]; j <= i; j++) {
+                rows[i][j - start[i]] = full.getEntry(i, j);
+            }
+        }
+        return new EnvelopeMatrix(start, rows);
+    }
+
+    private static RealMatrix lower(EnvelopeMatrix factor) {
+        RealMatrix lower = new Array2DRowRealMatrix(factor.size(), factor.size());
+        for (int i = 0; i < factor.size(); i++) {
+            for (int j = 0; j <= i; j++) {
+                lower.setEntry(i, j, factor.get(i, j));
+            }
+        }
+        return lower;
+    }
+
+    private static void assertClose(RealMatrix expected, RealMatrix actual) {
+        assertTrue(
+                expected.subtract(actual).getNorm() < 1e-11 * expected.getNorm(),
+                () -> "differs by " + expected.subtract(actual).getNorm());
+    }
+
+    /** The factor against that of Apache Commons Math, and its product against the matrix. */
+    @ParameterizedTest
+    @ValueSource(longs = {1, 2, 3})
+    void theFactorTimesItsTransposeIsTheMatrix(long seed) {
+        RealMatrix windows = windows(seed);
+        RealMatrix full = windows.multiply(windows.transpose());
+        RealMatrix lower = lower(of(full).cholesky());
+        assertClose(full, lower.multiply(lower.transpose()));
+        assertClose(new CholeskyDecomposition(full).getL(), lower);
+    }
+
+    /** Windows that follow from others have no noise of their own. */
+    @Test
+    void dependentRowsAreReturnedToo() {
+        RealMatrix windows = windows(4);
+        windows.setRow(7, windows.getRow(5));
+        windows.setRowVector(12, windows.getRowVector(10).add(windows.getRowVector(11)));
+        windows.setRow(20, new double[3 * SIZE]);
+        RealMatrix full = windows.multiply(windows.transpose());
+        EnvelopeMatrix factor = of(full).cholesky();
+        for (int row : new int[] {7, 12, 20}) {
+            assertEquals(0, factor.get(row, row));
+        }
+        RealMatrix lower = lower(factor);
+        assertClose(full, lower.multiply(lower.transpose()));
+    }
+
+    /** Three numbers cannot be correlated by 0.9, 0 and 0.9. */
+    @Test
+    void whatIsNoCovarianceIsRefused() {
+        EnvelopeMatrix none =
+                of(
+                        new Array2DRowRealMatrix(
+                                new double[][] {{1, 0.9, 0}, {0.9, 1, 0.9}, {0, 0.9, 1}}));
+        IllegalStateException e = assertThrows(IllegalStateException.class, none::cholesky);
+        assertTrue(e.getMessage().contains("row 2"), e.getMessage());
+    }
+}
