@@ -98,7 +98,7 @@ class ShiftedCatalogueTest {
             wavelengths[i] *= factor;
         }
         Measurements there =
-                new Measurer(moved(features, factor), Measuring.withDefaults())
+                new Measurer(moved(features, factor), Measuring.withDefaults().withSite(Site.SPACE))
                         .measure(
                                 TestSpectra.prepared(
                                         here.spectrum().withWavelengthsMicron(wavelengths), 1500));
