@@ -10,10 +10,10 @@ import java.util.Arrays;
 final class EnvelopeMatrix {
 
     /** A pivot below this share of its diagonal element counts as zero. */
-    private static final double SINGULAR = 1e-12;
+    private static final double SINGULAR = 1e-9;
 
     /** A pivot below minus this share of its diagonal element is no matter of rounding. */
-    private static final double NEGATIVE = 1e-6;
+    private static final double NEGATIVE = 1e-5;
 
     private final int[] start;
     private final double[][] rows;
