@@ -47,19 +47,25 @@ final class Composite implements Formula {
         this.rows = parts.stream().flatMapToInt(part -> Arrays.stream(part.rows())).toArray();
     }
 
-    /** The sum of all parts. */
-    static Rule sum() {
+    /**
+     * The sum of all parts, each times its coefficient.
+     *
+     * @param coefficients one a part
+     */
+    static Rule sum(double[] coefficients) {
         return new Rule() {
             @Override
             public double value(double[] parts) {
-                return Arrays.stream(parts).sum();
+                double sum = 0;
+                for (int p = 0; p < parts.length; p++) {
+                    sum += coefficients[p] * parts[p];
+                }
+                return sum;
             }
 
             @Override
             public double[] gradient(double[] parts) {
-                double[] ones = new double[parts.length];
-                Arrays.fill(ones, 1);
-                return ones;
+                return coefficients.clone();
             }
         };
     }

@@ -244,7 +244,11 @@ final class FormulaBook {
         }
         Composite.Rule rule =
                 switch (feature.form()) {
-                    case SUM_OF_FEATURES -> Composite.sum();
+                    case SUM_OF_FEATURES, LINEAR_COMBINATION_OF_FEATURES ->
+                            Composite.sum(
+                                    feature.parts().stream()
+                                            .mapToDouble(Part::coefficient)
+                                            .toArray());
                     case RATIO_OF_FEATURES -> Composite.ratio();
                     case METALLICITY_SHORTFALL ->
                             Composite.shortfall(solarCurve(feature).coefficients());

@@ -28,7 +28,6 @@ import java.util.OptionalDouble;
  */
 public record ReferenceTable(List<String> features, List<ReferenceRow> rows) {
 
-    private static final String RESOURCE = "/emberline/place/reference.csv";
     private static final String FEATURES = "/emberline/place/reference-features.csv";
     private static final String SIGMA = " sigma";
     private static final List<String> LABELS =
@@ -46,20 +45,6 @@ public record ReferenceTable(List<String> features, List<ReferenceRow> rows) {
     public ReferenceTable {
         features = List.copyOf(features);
         rows = List.copyOf(rows);
-    }
-
-    /**
-     * The table that comes with the product.
-     *
-     * @return the table, read anew
-     */
-    public static ReferenceTable standard() {
-        try (InputStream stream = ReferenceTable.class.getResourceAsStream(RESOURCE);
-                Reader reader = new InputStreamReader(stream, StandardCharsets.UTF_8)) {
-            return read(reader);
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
-        }
     }
 
     /**

@@ -114,34 +114,7 @@ public final class ResultColumns {
                         "one-sigma error of the type by the published relations",
                         r -> published(r).map(t -> Digits.type(t.sigmaSubclass())).orElse("")));
         addGravity(columns);
-        columns.add(
-                number(
-                        "snr",
-                        "",
-                        "median signal-to-noise per pixel in the band that is covered best",
-                        r ->
-                                leading(r)
-                                        .flatMap(s -> BandSignal.best(s.prepared().spectrum()))
-                                        .map(s -> Digits.signal(s.medianSignalToNoise()))
-                                        .orElse("")));
-        columns.add(
-                text(
-                        "quality",
-                        "grade of the best spectrum: good, usable, poor or unusable",
-                        r ->
-                                leading(r)
-                                        .map(s -> Quality.of(s.prepared()).grade().word())
-                                        .orElse("")));
-        columns.add(
-                number(
-                        "resolution",
-                        "",
-                        "resolving power of the spectrum with the highest signal-to-noise",
-                        r ->
-                                leading(r)
-                                        .map(s -> s.prepared().resolvingPower().value())
-                                        .map(Digits::significant)
-                                        .orElse("")));
+        addSpectrum(columns);
         columns.add(
                 text(
                         "findings",
@@ -175,6 +148,37 @@ public final class ResultColumns {
         columns.add(typeNumber("type_hi68", "upper end of the 68% interval", TypeEstimate::hi68));
         columns.add(typeNumber("type_lo95", "lower end of the 95% interval", TypeEstimate::lo95));
         columns.add(typeNumber("type_hi95", "upper end of the 95% interval", TypeEstimate::hi95));
+    }
+
+    private static void addSpectrum(List<ResultColumn> columns) {
+        columns.add(
+                number(
+                        "snr",
+                        "",
+                        "median signal-to-noise per pixel in the band that is covered best",
+                        r ->
+                                leading(r)
+                                        .flatMap(s -> BandSignal.best(s.prepared().spectrum()))
+                                        .map(s -> Digits.signal(s.medianSignalToNoise()))
+                                        .orElse("")));
+        columns.add(
+                text(
+                        "quality",
+                        "grade of the best spectrum: good, usable, poor or unusable",
+                        r ->
+                                leading(r)
+                                        .map(s -> Quality.of(s.prepared()).grade().word())
+                                        .orElse("")));
+        columns.add(
+                number(
+                        "resolution",
+                        "",
+                        "resolving power of the spectrum with the highest signal-to-noise",
+                        r ->
+                                leading(r)
+                                        .map(s -> s.prepared().resolvingPower().value())
+                                        .map(Digits::significant)
+                                        .orElse("")));
     }
 
     private static void addGravity(List<ResultColumn> columns) {
