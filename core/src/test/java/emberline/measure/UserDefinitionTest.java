@@ -25,7 +25,7 @@ class UserDefinitionTest {
                 """
                 id,symbol,kind,form,species,band,medium,window_unit,source,how_known,\
                 confidence_percent,sense,purpose
-                mine2026/mix,mix,BAND_INDEX,LINEAR_COMBINATION_OF_FEATURES,H2O,J_H,,NONE,\
+                mine2026/mix,mix,BAND_INDEX,LINEAR_COMBINATION_OF_FEATURES,H2O,J_H,UNSTATED,NONE,\
                 mine2026,DERIVED,90,UNSTATED,TYPE
                 """);
         Files.writeString(
