@@ -52,6 +52,7 @@ public class MeasuringBench {
     private Measurer measurer;
     private List<String> measured;
     private byte[] fits;
+    private long perturbations;
 
     /** Makes the spectrum and warms the grid cache, as a survey on one instrument does. */
     @Setup
@@ -105,9 +106,20 @@ public class MeasuringBench {
         return measurer.measure(prepared).draws(measured, DRAWS, 1);
     }
 
-    /** One of 1000 perturbations of the pixels, every feature measured again. */
+    /** One of 1000 perturbations of the pixels, measured again with the windows already found. */
     @Benchmark
     public Measurements onePerturbation() {
+        return measurer.measure(perturbed(prepared.resolvingPower()));
+    }
+
+    /** The same with the windows found anew on the pixels, as without the kept operator. */
+    @Benchmark
+    public Measurements onePerturbationAnew() {
+        double unlikeTheLast = prepared.resolvingPower().value() * (1 + 1e-9 * ++perturbations);
+        return measurer.measure(perturbed(new ResolvingPower(unlikeTheLast, Basis.GIVEN)));
+    }
+
+    private PreparedSpectrum perturbed(ResolvingPower resolvingPower) {
         UniformRandomProvider random = RandomSource.XO_RO_SHI_RO_128_PP.create(1);
         ZigguratSampler.NormalizedGaussian normal = ZigguratSampler.NormalizedGaussian.of(random);
         Spectrum spectrum = prepared.spectrum();
@@ -115,12 +127,11 @@ public class MeasuringBench {
         for (int i = 0; i < flux.length; i++) {
             flux[i] += spectrum.fluxSigma(i) * normal.sample();
         }
-        return measurer.measure(
-                new PreparedSpectrum(
-                        spectrum.withFluxes(flux, spectrum.fluxSigmas()),
-                        prepared.resolvingPower(),
-                        prepared.noise(),
-                        List.of()));
+        return new PreparedSpectrum(
+                spectrum.withFluxes(flux, spectrum.fluxSigmas()),
+                resolvingPower,
+                prepared.noise(),
+                List.of());
     }
 
     /** Reading the same spectrum from a FITS image in memory. */

@@ -16,10 +16,14 @@ final class WindowOperator {
     /** Root of pi over 2: the noise of a median in units of that of the mean, normal noise. */
     private static final double MEDIAN_NOISE = Math.sqrt(Math.PI / 2);
 
+    /** Over how many pixels neighbours share noise. */
+    private static final int LAGS = 2;
+
     private final List<WindowFunctional> functionals;
     private final int[] first;
     private final double[][] weights;
     private final double[] coverage;
+    private final int[] earliestNeighbour;
 
     private WindowOperator(
             List<WindowFunctional> functionals,
@@ -30,6 +34,26 @@ final class WindowOperator {
         this.first = first;
         this.weights = weights;
         this.coverage = coverage;
+        this.earliestNeighbour = earliestNeighbours(first, weights);
+    }
+
+    /** For each row the first row that may share noise with it: two pixels apart at most. */
+    private static int[] earliestNeighbours(int[] first, double[][] weights) {
+        int size = first.length;
+        int[] furthestEnd = new int[size];
+        for (int row = 0; row < size; row++) {
+            int end = first[row] + weights[row].length;
+            furthestEnd[row] = row == 0 ? end : Math.max(furthestEnd[row - 1], end);
+        }
+        int[] earliest = new int[size];
+        for (int row = 0; row < size; row++) {
+            int column = row;
+            while (column > 0 && furthestEnd[column - 1] + LAGS > first[row]) {
+                column--;
+            }
+            earliest[row] = column;
+        }
+        return earliest;
     }
 
     /**
@@ -200,22 +224,25 @@ final class WindowOperator {
         double[][] noisy = new double[size][];
         double[][] mixed = new double[size][];
         int[] lowest = new int[size];
+        boolean shared = noise.lag1() != 0 || noise.lag2() != 0;
+        int pad = shared ? LAGS : 0;
         for (int row = 0; row < size; row++) {
             noisy[row] = timesSigma(spectrum, row);
-            mixed[row] = mix(noisy[row], noise.lag1(), noise.lag2());
+            mixed[row] = shared ? mix(noisy[row], noise.lag1(), noise.lag2()) : noisy[row];
         }
         double[][] elements = new double[size][];
         for (int row = 0; row < size; row++) {
-            double[] full = new double[row + 1];
+            int from = earliestNeighbour[row];
+            double[] near = new double[row + 1 - from];
             int start = row;
-            for (int column = row; column >= 0; column--) {
-                full[column] = overlapSum(row, column, noisy, mixed);
-                if (full[column] != 0) {
+            for (int column = row; column >= from; column--) {
+                near[column - from] = overlapSum(row, column, noisy, mixed, pad);
+                if (near[column - from] != 0) {
                     start = column;
                 }
             }
             lowest[row] = start;
-            elements[row] = Arrays.copyOfRange(full, start, row + 1);
+            elements[row] = Arrays.copyOfRange(near, start - from, row + 1 - from);
         }
         return new EnvelopeMatrix(lowest, elements);
     }
@@ -234,7 +261,7 @@ final class WindowOperator {
 
     /** A row times the correlation of the pixels; two elements longer at either end. */
     private static double[] mix(double[] row, double lag1, double lag2) {
-        double[] mixed = new double[row.length + 4];
+        double[] mixed = new double[row.length + 2 * LAGS];
         for (int k = 0; k < row.length; k++) {
             mixed[k + 2] += row[k];
             mixed[k + 1] += lag1 * row[k];
@@ -245,13 +272,21 @@ final class WindowOperator {
         return mixed;
     }
 
-    private double overlapSum(int a, int b, double[][] noisy, double[][] mixed) {
-        int startMixed = first[a] - 2;
-        int from = Math.max(startMixed, first[b]);
-        int to = Math.min(startMixed + mixed[a].length, first[b] + noisy[b].length);
+    /**
+     * Sum of products of two rows over the pixels that both have.
+     *
+     * @param pad how many elements the mixed rows are longer at either end
+     */
+    private double overlapSum(int a, int b, double[][] noisy, double[][] mixed, int pad) {
+        double[] one = mixed[a];
+        double[] two = noisy[b];
+        int startOne = first[a] - pad;
+        int startTwo = first[b];
+        int from = Math.max(startOne, startTwo);
+        int to = Math.min(startOne + one.length, startTwo + two.length);
         double sum = 0;
         for (int i = from; i < to; i++) {
-            sum += mixed[a][i - startMixed] * noisy[b][i - first[b]];
+            sum += one[i - startOne] * two[i - startTwo];
         }
         return sum;
     }
