@@ -3,48 +3,18 @@ package emberline.cli;
 import emberline.reports.attach.PlacementTable;
 import emberline.reports.attach.TableFormat;
 import emberline.survey.ObjectResult;
-import java.nio.file.Path;
 import java.util.List;
-import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
-import picocli.CommandLine.Mixin;
-import picocli.CommandLine.Model.CommandSpec;
-import picocli.CommandLine.Option;
-import picocli.CommandLine.Parameters;
-import picocli.CommandLine.Spec;
 
 /** {@code place}: see its description. */
 @Command(
         name = "place",
         description = "Places spectra on the sequence of spectral types and prints a table.",
         mixinStandardHelpOptions = true)
-final class PlaceCommand implements Callable<Integer> {
-
-    @Spec private CommandSpec spec;
-    @Mixin private SpectrumOptions spectrumOptions;
-    @Mixin private CatalogueOption catalogueOption;
-
-    @Parameters(paramLabel = "SPECTRUM", arity = "1..*", description = "Files of spectra.")
-    private List<Path> spectra;
-
-    @Option(
-            names = "--format",
-            paramLabel = "text|csv|json",
-            defaultValue = "text",
-            description = "Form of the table (default ${DEFAULT-VALUE}).")
-    private TableFormat format;
+final class PlaceCommand extends SpectraTableCommand {
 
     @Override
-    public Integer call() {
-        List<ObjectResult> results =
-                SingleSpectra.run(
-                        spectra,
-                        catalogueOption.load(),
-                        spectrumOptions.measuring(),
-                        spectrumOptions.settings(1),
-                        spec.commandLine().getErr());
-        spec.commandLine().getOut().print(PlacementTable.print(results, format));
-        spec.commandLine().getOut().flush();
-        return SingleSpectra.exitCode(results);
+    String table(List<ObjectResult> results, TableFormat asked) {
+        return PlacementTable.print(results, asked);
     }
 }

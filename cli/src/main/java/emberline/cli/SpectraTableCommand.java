@@ -1,0 +1,47 @@
+package emberline.cli;
+
+import emberline.reports.attach.TableFormat;
+import emberline.survey.ObjectResult;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.concurrent.Callable;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+
+/** A command that takes spectra through the chain and prints a table of their results. */
+abstract class SpectraTableCommand implements Callable<Integer> {
+
+    @Spec private CommandSpec spec;
+    @Mixin private SpectrumOptions spectrumOptions;
+    @Mixin private CatalogueOption catalogueOption;
+
+    @Parameters(paramLabel = "SPECTRUM", arity = "1..*", description = "Files of spectra.")
+    private List<Path> spectra;
+
+    @Option(
+            names = "--format",
+            paramLabel = "text|csv|json",
+            defaultValue = "text",
+            description = "Form of the table (default ${DEFAULT-VALUE}).")
+    private TableFormat format;
+
+    /** The table of the results in a format, with a line end. */
+    abstract String table(List<ObjectResult> results, TableFormat asked);
+
+    @Override
+    public Integer call() {
+        List<ObjectResult> results =
+                SingleSpectra.run(
+                        spectra,
+                        catalogueOption.load(),
+                        spectrumOptions.measuring(),
+                        spectrumOptions.settings(1),
+                        spec.commandLine().getErr());
+        spec.commandLine().getOut().print(table(results, format));
+        spec.commandLine().getOut().flush();
+        return SingleSpectra.exitCode(results);
+    }
+}
