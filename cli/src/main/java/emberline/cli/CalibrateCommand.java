@@ -7,6 +7,7 @@ import emberline.read.CandidateListReader;
 import emberline.reports.attach.AtomicFile;
 import emberline.survey.Chain;
 import emberline.survey.ReferenceMaker;
+import emberline.survey.Status;
 import emberline.survey.SurveyRunner;
 import emberline.survey.SurveySettings;
 import java.io.IOException;
@@ -54,6 +55,8 @@ final class CalibrateCommand implements Callable<Integer> {
             description = "Number of threads (default: one a processor).")
     private int threads = Runtime.getRuntime().availableProcessors();
 
+    private long failed;
+
     @Override
     public Integer call() throws IOException, InterruptedException {
         SurveySettings settings = spectrumOptions.settings(threads);
@@ -61,7 +64,17 @@ final class CalibrateCommand implements Callable<Integer> {
         CandidateList candidates = new CandidateListReader().read(list);
         Chain chain = new Chain(catalogue, spectrumOptions.measuring(), settings);
         ReferenceMaker maker = new ReferenceMaker();
-        new SurveyRunner(chain, settings.threads()).run(candidates, result -> result, maker::add);
+        new SurveyRunner(chain, settings.threads())
+                .run(
+                        candidates,
+                        result -> result,
+                        result -> {
+                            if (result.status() == Status.FAILED) {
+                                failed++;
+                                SingleSpectra.tellFailure(result, spec.commandLine().getErr());
+                            }
+                            maker.add(result);
+                        });
         ReferenceTable table = maker.table();
         StringWriter text = new StringWriter();
         table.write(
@@ -85,6 +98,6 @@ final class CalibrateCommand implements Callable<Integer> {
                                 + table.features().size()
                                 + " features written to "
                                 + out.resolve("reference.csv"));
-        return ExitCode.DONE;
+        return ExitCode.of(candidates.rows().size(), failed);
     }
 }

@@ -58,10 +58,15 @@ final class SingleSpectra {
         return stem.isBlank() ? name : stem;
     }
 
+    /** Says that an object failed and why. */
+    static void tellFailure(ObjectResult result, PrintWriter err) {
+        err.println(result.candidate().name() + ": failed: " + result.reason());
+    }
+
     private static void tell(ObjectResult result, PrintWriter err) {
         String name = result.candidate().name();
         if (result.status() == Status.FAILED) {
-            err.println(name + ": failed: " + result.reason());
+            tellFailure(result, err);
             return;
         }
         for (Finding finding : result.findings()) {

@@ -42,4 +42,17 @@ class CalibrateCommandTest {
         assertEquals(ExitCode.NOTHING_READ, run.code());
         assertTrue(run.err().contains("no.csv"), run.err());
     }
+
+    @Test
+    void anObjectThatFailsIsNamedAndNotSilentlyLeftOut() throws Exception {
+        Path list = folder.resolve("known.csv");
+        Path spectra = DemoRun.survey().toAbsolutePath().resolveSibling("spectra");
+        try (var files = Files.list(spectra)) {
+            Path good = files.filter(f -> f.toString().endsWith(".csv")).findFirst().orElseThrow();
+            Files.writeString(list, "name,spectrum\nA," + good + "\nB,gone.csv\n");
+        }
+        CommandRun run = CommandRun.of("calibrate", list, "--out", folder);
+        assertEquals(ExitCode.SOME_FAILED, run.code(), run.err());
+        assertTrue(run.err().contains("B: failed: ") && run.err().contains("gone.csv"), run.err());
+    }
 }

@@ -20,7 +20,8 @@ import java.util.Optional;
  */
 public final class Preparer {
 
-    private static final double SPEED_OF_LIGHT_KMS = 299_792.458;
+    /** The speed of light (km/s), exact by definition of the metre. */
+    public static final double SPEED_OF_LIGHT_KMS = 299_792.458;
 
     /** Pixels that a resolution element is taken to span where nothing else is known. */
     private static final double PIXELS_PER_ELEMENT = 2;

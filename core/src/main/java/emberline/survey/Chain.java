@@ -153,7 +153,7 @@ public final class Chain {
                         "the lines show a radial velocity of %.0f km/s, which was not taken out;"
                                 + " it moves narrow windows by %.1f Angstrom at 1.25 micron",
                         velocityKms,
-                        velocityKms / 299_792.458 * 12_500));
+                        velocityKms / Preparer.SPEED_OF_LIGHT_KMS * 12_500));
     }
 
     private ObjectResult placed(

@@ -1,5 +1,7 @@
 package emberline.measure.line;
 
+import emberline.prepare.Preparer;
+
 /**
  * A line whose centre can be fitted on a spectrum of some resolving power.
  *
@@ -14,8 +16,6 @@ package emberline.measure.line;
 record FittingLine(
         String species, double restMicron, boolean emits, double elementKms, double halfWindowKms) {
 
-    private static final double SPEED_OF_LIGHT_KMS = 299_792.458;
-
     /** Full width at half maximum of a Gaussian in units of its sigma. */
     private static final double WIDTH_TO_SIGMA = 2 * Math.sqrt(2 * Math.log(2));
 
@@ -27,18 +27,18 @@ record FittingLine(
     /** The velocity at which light of the line is received at a wavelength (relativistic). */
     double velocityKms(double micron) {
         double square = Math.pow(micron / restMicron, 2);
-        return SPEED_OF_LIGHT_KMS * (square - 1) / (square + 1);
+        return Preparer.SPEED_OF_LIGHT_KMS * (square - 1) / (square + 1);
     }
 
     /** The wavelength at which the line is received at a velocity (micron). */
     double receivedMicron(double kms) {
-        double beta = kms / SPEED_OF_LIGHT_KMS;
+        double beta = kms / Preparer.SPEED_OF_LIGHT_KMS;
         return restMicron * Math.sqrt((1 + beta) / (1 - beta));
     }
 
     /** One resolution element as a velocity. */
     static double elementKms(double resolvingPower) {
-        return SPEED_OF_LIGHT_KMS / resolvingPower;
+        return Preparer.SPEED_OF_LIGHT_KMS / resolvingPower;
     }
 
     LineSetAside setAside(String reason) {
