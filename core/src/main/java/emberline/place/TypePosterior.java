@@ -47,7 +47,7 @@ public final class TypePosterior {
         int size = -1;
         for (GravityClass gravity : GravityClass.values()) {
             double[] ofClass = weights.get(gravity);
-            if (ofClass == null || ofClass.length == 0 || size >= 0 && ofClass.length != size) {
+            if (ofClass == null || ofClass.length == 0 || (size >= 0 && ofClass.length != size)) {
                 throw new IllegalArgumentException(
                         "weights of " + gravity.label() + ": expected as many as grid points");
             }
