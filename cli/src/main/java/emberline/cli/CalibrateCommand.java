@@ -1,10 +1,14 @@
 package emberline.cli;
 
 import emberline.catalogue.FeatureCatalogue;
+import emberline.place.calibrated.CalibrationFiles;
+import emberline.place.calibrated.Calibrator;
 import emberline.place.reference.ReferenceTable;
 import emberline.read.CandidateList;
 import emberline.read.CandidateListReader;
 import emberline.reports.attach.AtomicFile;
+import emberline.reports.attach.UnseenSummary;
+import emberline.reports.attach.UnseenTable;
 import emberline.survey.Chain;
 import emberline.survey.ReferenceMaker;
 import emberline.survey.Status;
@@ -15,6 +19,7 @@ import java.io.StringWriter;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Map;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -76,20 +81,22 @@ final class CalibrateCommand implements Callable<Integer> {
                             maker.add(result);
                         });
         ReferenceTable table = maker.table();
-        StringWriter text = new StringWriter();
-        table.write(
-                text,
-                List.of(
-                        "Reference table of Emberline "
-                                + ProgramVersion.number()
-                                + ": calibrate "
-                                + list.getFileName()
-                                + ".",
-                        "Our own measurements on public spectra; types, gravities and kinds as"
-                                + " published; `source` names the data set.",
-                        "Values of indices with one-sigma errors from the pixel noise; no pixels."));
         Files.createDirectories(out);
+        StringWriter text = new StringWriter();
+        table.write(text, remarks("Values with one-sigma errors from the pixel noise; no pixels."));
         AtomicFile.write(out.resolve("reference.csv"), text.toString());
+        Calibrator.Outcome learned = new Calibrator(table, catalogue).calibrate();
+        Map<String, String> files =
+                CalibrationFiles.text(
+                        learned.calibration(), remarks("Learned from reference.csv."));
+        for (Map.Entry<String, String> file : files.entrySet()) {
+            AtomicFile.write(out.resolve(file.getKey()), file.getValue());
+        }
+        AtomicFile.write(
+                out.resolve("cross-validated.csv"),
+                UnseenTable.text(
+                        learned.unseen(),
+                        remarks("Each object placed by loci that were learned without it.")));
         spec.commandLine()
                 .getErr()
                 .println(
@@ -98,6 +105,15 @@ final class CalibrateCommand implements Callable<Integer> {
                                 + table.features().size()
                                 + " features written to "
                                 + out.resolve("reference.csv"));
+        spec.commandLine().getOut().print(UnseenSummary.text(learned.unseen()));
         return ExitCode.of(candidates.rows().size(), failed);
+    }
+
+    private List<String> remarks(String what) {
+        return List.of(
+                "Emberline " + ProgramVersion.number() + ": calibrate " + list.getFileName() + ".",
+                "Our own measurements on public spectra; types, gravities and kinds as published;"
+                        + " `source` in reference.csv names the data set.",
+                what);
     }
 }

@@ -119,6 +119,24 @@ public final class Measurements {
     }
 
     /**
+     * The covariance of several measured features, from the pixels that they share, to first order.
+     *
+     * @param ids measured features
+     * @return symmetric matrix in the order of the features, in the units of both
+     * @throws IllegalArgumentException if one of them was not measured
+     */
+    public double[][] covariance(List<String> ids) {
+        double[][] matrix = new double[ids.size()][ids.size()];
+        for (int a = 0; a < matrix.length; a++) {
+            for (int b = 0; b <= a; b++) {
+                matrix[a][b] = covariance(ids.get(a), ids.get(b));
+                matrix[b][a] = matrix[a][b];
+            }
+        }
+        return matrix;
+    }
+
+    /**
      * Draws of measured features from their joint distribution under the pixel noise.
      *
      * @param ids measured features

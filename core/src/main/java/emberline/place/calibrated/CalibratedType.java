@@ -1,0 +1,31 @@
+package emberline.place.calibrated;
+
+import emberline.place.TypePosterior;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * What the calibrated witness says.
+ *
+ * @param posterior probability of type and gravity class; empty where too little was measured
+ * @param reason why there is none; empty where there is one
+ * @param contributions what each feature did, in the order of the calibration
+ */
+public record CalibratedType(
+        Optional<TypePosterior> posterior, String reason, List<Contribution> contributions) {
+
+    /** Copies the list. */
+    public CalibratedType {
+        contributions = List.copyOf(contributions);
+    }
+
+    /**
+     * No statement.
+     *
+     * @param reason why
+     * @return a result without posterior
+     */
+    public static CalibratedType none(String reason) {
+        return new CalibratedType(Optional.empty(), reason, List.of());
+    }
+}

@@ -1,0 +1,176 @@
+package emberline.place.calibrated;
+
+import emberline.place.calibrated.TrainingSet.Point;
+import java.util.Arrays;
+import java.util.List;
+
+/**
+ * Fits the locus of one feature: at every knot a local linear regression of the value on type and
+ * gravity, with weights that fall off with the difference in type and with the residual. Where
+ * spectra are scarce the kernel widens.
+ */
+final class LocusFit {
+
+    /** One-sigma width of the kernel where there are enough spectra (subclass). */
+    private static final double BANDWIDTH = 1.6;
+
+    /** Greatest width that is still widened (subclass). */
+    private static final double WIDEST = 6;
+
+    /** The kernel widens until its weights add up to this many spectra. */
+    private static final double ENOUGH = 8;
+
+    /** Weight of the prior that gravity does nothing. */
+    private static final double GRAVITY_RIDGE = 0.09;
+
+    private static final int ROUNDS = 4;
+
+    /** Residuals beyond this many sigma lose more than half of their weight. */
+    private static final double SOFT_LIMIT = 2;
+
+    /** What the soft weights take off the variance of normal residuals. */
+    private static final double SOFT_LOSS = 1.25;
+
+    /** Largest share of the variance that is ascribed to noise. */
+    private static final double MOST_NOISE = 0.7;
+
+    /** Gravity is known to matter, and has been calibrated, between these types only. */
+    private static final double[] GRAVITY_RANGE = {2, 4, 18, 20};
+
+    private LocusFit() {}
+
+    /** Mean, gravity shift, scatter at one knot. */
+    private record AtKnot(double mean, double shift, double scatter) {}
+
+    /**
+     * Fits a locus.
+     *
+     * @param feature id of the feature
+     * @param points what was measured on spectra of known type
+     * @return the locus
+     */
+    static Locus fit(String feature, List<Point> points) {
+        double[] mean = new double[TypeKnots.COUNT];
+        double[] shift = new double[TypeKnots.COUNT];
+        double[] scatter = new double[TypeKnots.COUNT];
+        double[] weights = new double[points.size()];
+        for (int k = 0; k < TypeKnots.COUNT; k++) {
+            double type = TypeKnots.typeNumber(k);
+            kernel(points, type, weights);
+            AtKnot fit = local(points, type, weights);
+            mean[k] = fit.mean;
+            shift[k] = fit.shift * gravityMatters(type);
+            scatter[k] = fit.scatter;
+        }
+        return new Locus(feature, mean, shift, scatter);
+    }
+
+    private static double gravityMatters(double type) {
+        double rise = (type - GRAVITY_RANGE[0]) / (GRAVITY_RANGE[1] - GRAVITY_RANGE[0]);
+        double fall = (GRAVITY_RANGE[3] - type) / (GRAVITY_RANGE[3] - GRAVITY_RANGE[2]);
+        return Math.max(0, Math.min(1, Math.min(rise, fall)));
+    }
+
+    private static void kernel(List<Point> points, double type, double[] weights) {
+        double width = BANDWIDTH;
+        while (true) {
+            double sum = 0;
+            for (int i = 0; i < weights.length; i++) {
+                double u = (points.get(i).typeNumber() - type) / width;
+                weights[i] = Math.exp(-0.5 * u * u) * points.get(i).weight();
+                sum += weights[i];
+            }
+            if (sum >= ENOUGH || width > WIDEST) {
+                return;
+            }
+            width *= 1.25;
+        }
+    }
+
+    private static AtKnot local(List<Point> points, double type, double[] kernel) {
+        double[] robust = new double[kernel.length];
+        Arrays.fill(robust, 1);
+        double[] beta = new double[3];
+        double variance = 0;
+        double noise = 0;
+        double effective = 1;
+        for (int round = 0; round < ROUNDS; round++) {
+            beta = regress(points, type, kernel, robust);
+            double sum = 0;
+            double squares = 0;
+            double spread = 0;
+            double ofNoise = 0;
+            for (int i = 0; i < kernel.length; i++) {
+                Point point = points.get(i);
+                double w = kernel[i] * robust[i];
+                double r = residual(point, type, beta);
+                sum += w;
+                squares += w * w;
+                spread += w * (r * r + point.ownScatter() * point.ownScatter());
+                ofNoise += w * point.oneSigma() * point.oneSigma();
+            }
+            variance = spread / sum;
+            noise = ofNoise / sum;
+            effective = sum * sum / squares;
+            double sigma = Math.sqrt(variance) + 1e-6;
+            for (int i = 0; i < kernel.length; i++) {
+                double u = residual(points.get(i), type, beta) / (SOFT_LIMIT * sigma);
+                robust[i] = 1 / (1 + u * u);
+            }
+        }
+        double corrected = variance * SOFT_LOSS * effective / Math.max(effective - 2, 1);
+        double intrinsic = corrected - Math.min(noise, MOST_NOISE * corrected);
+        return new AtKnot(beta[0], beta[2], Math.sqrt(Math.max(intrinsic, 1e-8)));
+    }
+
+    private static double residual(Point point, double type, double[] beta) {
+        return point.value()
+                - beta[0]
+                - beta[1] * (point.typeNumber() - type)
+                - beta[2] * point.lowGravity();
+    }
+
+    /** Weighted least squares for mean, slope and gravity shift, with weak priors on the last. */
+    private static double[] regress(
+            List<Point> points, double type, double[] kernel, double[] robust) {
+        double[][] normal = new double[3][4];
+        for (int i = 0; i < kernel.length; i++) {
+            double w = kernel[i] * robust[i];
+            if (w < 1e-6) {
+                continue;
+            }
+            Point point = points.get(i);
+            double[] row = {1, point.typeNumber() - type, point.lowGravity(), point.value()};
+            for (int a = 0; a < 3; a++) {
+                for (int b = 0; b < 4; b++) {
+                    normal[a][b] += w * row[a] * row[b];
+                }
+            }
+        }
+        normal[0][0] += 1e-9;
+        normal[1][1] += 5e-5 * normal[0][0] + 1e-9;
+        normal[2][2] += GRAVITY_RIDGE;
+        return solve(normal);
+    }
+
+    /** Solves three normal equations by elimination; they are positive definite. */
+    private static double[] solve(double[][] a) {
+        for (int p = 0; p < 3; p++) {
+            for (int row = p + 1; row < 3; row++) {
+                double factor = a[row][p] / a[p][p];
+                for (int col = p; col < 4; col++) {
+                    a[row][col] -= factor * a[p][col];
+                }
+            }
+        }
+        double[] x = new double[3];
+        for (int p = 2; p >= 0; p--) {
+            double sum = a[p][3];
+            for (int col = p + 1; col < 3; col++) {
+                sum -= a[p][col] * x[col];
+            }
+            x[p] = sum / a[p][p];
+        }
+        return x;
+    }
+}

@@ -1,0 +1,88 @@
+package emberline.place.calibrated;
+
+import emberline.measure.Measurement.Measured;
+import emberline.measure.Measurements;
+import emberline.place.reference.ReferenceRow;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+
+/** The values of one object that have a locus, with the covariance of their noise. */
+final class Sample {
+
+    private final List<Locus> loci = new ArrayList<>();
+    private final List<Integer> places = new ArrayList<>();
+    private final List<Measured> values = new ArrayList<>();
+    private double[][] noise = {};
+
+    private Sample() {}
+
+    /**
+     * What was measured on an object.
+     *
+     * @param calibration the loci
+     * @param measurements all features
+     * @return the sample, perhaps empty
+     */
+    static Sample of(Calibration calibration, Measurements measurements) {
+        Sample sample = new Sample();
+        for (int i = 0; i < calibration.loci().size(); i++) {
+            sample.add(calibration, i, measurements.measured(calibration.loci().get(i).feature()));
+        }
+        sample.noise = measurements.covariance(sample.loci.stream().map(Locus::feature).toList());
+        return sample;
+    }
+
+    /**
+     * A row of the reference table, whose noise is known feature by feature only.
+     *
+     * @param calibration the loci
+     * @param row the row
+     * @return the sample, perhaps empty
+     */
+    static Sample of(Calibration calibration, ReferenceRow row) {
+        Sample sample = new Sample();
+        for (int i = 0; i < calibration.loci().size(); i++) {
+            sample.add(calibration, i, row.feature(calibration.loci().get(i).feature()));
+        }
+        sample.noise = new double[sample.size()][sample.size()];
+        for (int f = 0; f < sample.size(); f++) {
+            sample.noise[f][f] = Math.pow(sample.values.get(f).oneSigma(), 2);
+        }
+        return sample;
+    }
+
+    private void add(Calibration calibration, int place, Optional<Measured> value) {
+        if (value.isPresent() && Double.isFinite(value.get().oneSigma())) {
+            loci.add(calibration.loci().get(place));
+            places.add(place);
+            values.add(value.get());
+        }
+    }
+
+    int size() {
+        return loci.size();
+    }
+
+    Locus locus(int f) {
+        return loci.get(f);
+    }
+
+    /** Index of a feature among all loci of the calibration. */
+    int place(int f) {
+        return places.get(f);
+    }
+
+    Measured measured(int f) {
+        return values.get(f);
+    }
+
+    double value(int f) {
+        return values.get(f).value();
+    }
+
+    /** Covariance of the noise of two features. */
+    double noise(int f, int other) {
+        return noise[f][other];
+    }
+}
