@@ -37,6 +37,7 @@ final class RunOptions {
                         .extinction()
                         .map(extinction -> Double.toString(extinction.rv()))
                         .orElse(""));
+        options.put("prior", settings.prior().word());
         options.put("to_rest", Boolean.toString(settings.toMeasuredRest()));
         options.put("reports", reports ? "pdf" : "none");
         return options;

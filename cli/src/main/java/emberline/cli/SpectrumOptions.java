@@ -2,6 +2,7 @@ package emberline.cli;
 
 import emberline.measure.Measuring;
 import emberline.measure.Site;
+import emberline.place.calibrated.TypePriors;
 import emberline.prepare.ExtinctionLaw;
 import emberline.prepare.Preparing;
 import emberline.spectrum.Medium;
@@ -69,6 +70,16 @@ final class SpectrumOptions {
     private boolean toRest;
 
     @Option(
+            names = "--prior",
+            paramLabel = "flat|volume|magnitude",
+            defaultValue = "flat",
+            description =
+                    "What is thought of types before a spectrum is looked at: every type alike,"
+                            + " space densities, or a sample limited in J (default"
+                            + " ${DEFAULT-VALUE}).")
+    private TypePriors prior;
+
+    @Option(
             names = "--seed",
             paramLabel = "N",
             defaultValue = "" + SurveySettings.DEFAULT_SEED,
@@ -107,6 +118,7 @@ final class SpectrumOptions {
         return SurveySettings.withDefaults()
                 .withThreads(threads)
                 .withSeed(seed)
+                .withPrior(prior)
                 .withMeasuredRest(toRest)
                 .withPreparing(stated);
     }

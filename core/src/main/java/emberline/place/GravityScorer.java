@@ -61,7 +61,17 @@ final class GravityScorer {
         }
     }
 
-    GravityVerdict judge(Measurements measurements, TypeEstimate type, long seed) {
+    /**
+     * Scores an object.
+     *
+     * @param measurements its features
+     * @param type its type
+     * @param seed start of the draws
+     * @param withProbabilities whether to draw probabilities; without them the class has none
+     * @return the verdict of the scores
+     */
+    GravityVerdict judge(
+            Measurements measurements, TypeEstimate type, long seed, boolean withProbabilities) {
         List<GravityScore> scores = new ArrayList<>();
         for (Feature feature : thresholds.keySet()) {
             scores.add(score(feature, measurements, type.typeNumber()));
@@ -86,14 +96,22 @@ final class GravityScorer {
         }
         GravityClass byMedian =
                 classOf(scored.stream().mapToInt(s -> s.score().getAsInt()).toArray());
-        Map<GravityClass, Double> shares = probabilities(measurements, scored, type, seed);
+        Map<GravityClass, Double> shares =
+                withProbabilities ? probabilities(measurements, scored, type, seed) : Map.of();
         return new GravityVerdict(
                 Optional.of(byMedian),
-                OptionalDouble.of(shares.get(GravityClass.FLD_G)),
-                OptionalDouble.of(shares.get(GravityClass.INT_G)),
-                OptionalDouble.of(shares.get(GravityClass.VL_G)),
+                share(shares, GravityClass.FLD_G),
+                share(shares, GravityClass.INT_G),
+                share(shares, GravityClass.VL_G),
                 "",
-                scores);
+                scores,
+                Optional.of(byMedian));
+    }
+
+    private static OptionalDouble share(Map<GravityClass, Double> shares, GravityClass gravity) {
+        return shares.containsKey(gravity)
+                ? OptionalDouble.of(shares.get(gravity))
+                : OptionalDouble.empty();
     }
 
     private GravityScore score(Feature feature, Measurements measurements, double typeNumber) {

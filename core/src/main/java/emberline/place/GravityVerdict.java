@@ -5,15 +5,18 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
- * The gravity class by the published low-resolution scores.
+ * The gravity class: the most probable one of the posterior where the calibrated witness can tell,
+ * else that of the published low-resolution scores.
  *
- * @param gravityClass the class as the published scheme gives it; empty where it is not judged
+ * @param gravityClass the adopted class; empty where it is not judged
  * @param pFieldGravity probability of FLD-G with noise and type uncertainty carried through, 0 to
  *     1; empty where the class is not judged
  * @param pIntermediateGravity probability of INT-G
  * @param pVeryLowGravity probability of VL-G
  * @param reason why the class is not judged; empty where it is
- * @param scores the features of the scheme, scored or not
+ * @param scores the features of the published scheme, scored or not
+ * @param byScores the class as the published scheme gives it, the type taken as known; empty where
+ *     the scheme does not apply
  */
 public record GravityVerdict(
         Optional<GravityClass> gravityClass,
@@ -21,7 +24,8 @@ public record GravityVerdict(
         OptionalDouble pIntermediateGravity,
         OptionalDouble pVeryLowGravity,
         String reason,
-        List<GravityScore> scores) {
+        List<GravityScore> scores,
+        Optional<GravityClass> byScores) {
 
     /** Copies the list. */
     public GravityVerdict {
@@ -42,6 +46,23 @@ public record GravityVerdict(
                 OptionalDouble.empty(),
                 OptionalDouble.empty(),
                 reason,
-                scores);
+                scores,
+                Optional.empty());
+    }
+
+    /**
+     * The probability of the adopted class.
+     *
+     * @return 0 to 1, or empty where no class is adopted
+     */
+    public OptionalDouble pOfClass() {
+        if (gravityClass.isEmpty()) {
+            return OptionalDouble.empty();
+        }
+        return switch (gravityClass.get()) {
+            case FLD_G -> pFieldGravity;
+            case INT_G -> pIntermediateGravity;
+            case VL_G -> pVeryLowGravity;
+        };
     }
 }

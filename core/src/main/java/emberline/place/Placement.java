@@ -1,5 +1,6 @@
 package emberline.place;
 
+import emberline.place.calibrated.CalibratedType;
 import emberline.spectrum.Finding;
 import java.util.List;
 import java.util.Optional;
@@ -10,6 +11,7 @@ import java.util.Optional;
  * @param type the adopted type; empty where none could be given
  * @param typeReason why there is no type; empty where there is one
  * @param published the first witness: the published relations
+ * @param calibrated the second witness: the loci of spectra of known type
  * @param gravity the gravity class
  * @param activity the activity by H alpha
  * @param findings what the observer should know about the placement
@@ -18,6 +20,7 @@ public record Placement(
         Optional<TypeEstimate> type,
         String typeReason,
         PublishedType published,
+        CalibratedType calibrated,
         GravityVerdict gravity,
         Activity activity,
         List<Finding> findings) {

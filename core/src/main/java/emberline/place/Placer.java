@@ -2,25 +2,51 @@ package emberline.place;
 
 import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurements;
+import emberline.place.calibrated.CalibratedType;
+import emberline.place.calibrated.CalibratedWitness;
+import emberline.place.calibrated.Calibration;
+import emberline.place.calibrated.TypePrior;
+import emberline.place.calibrated.TypePriors;
 import emberline.spectrum.Finding;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
 
 /** Places an object on the sequence of spectral types and judges its gravity class and activity. */
 public final class Placer {
 
+    /** Two witnesses disagree where their types stand this many of their joint sigma apart. */
+    private static final double DISAGREEMENT = 2;
+
+    /** A gravity class less probable than this is unsure. */
+    private static final double SURE = 0.7;
+
     private final PublishedWitness published;
-    private final GravityScorer gravity;
+    private final CalibratedWitness calibrated;
+    private final GravityJudge gravity;
     private final ActivityJudge activity;
+
+    /**
+     * A placer with the product's calibration, every type equally probable beforehand.
+     *
+     * @param catalogue the relations and thresholds to use; the one with which was measured
+     */
+    public Placer(FeatureCatalogue catalogue) {
+        this(catalogue, Calibration.standard(), TypePriors.FLAT.load());
+    }
 
     /**
      * A placer.
      *
      * @param catalogue the relations and thresholds to use; the one with which was measured
+     * @param calibration the loci of features
+     * @param prior what is thought of type and gravity before
      */
-    public Placer(FeatureCatalogue catalogue) {
+    public Placer(FeatureCatalogue catalogue, Calibration calibration, TypePrior prior) {
         this.published = new PublishedWitness(catalogue);
-        this.gravity = new GravityScorer(catalogue);
+        this.calibrated = new CalibratedWitness(calibration, prior);
+        this.gravity = new GravityJudge(catalogue);
         this.activity = new ActivityJudge(catalogue);
     }
 
@@ -33,45 +59,87 @@ public final class Placer {
      * @return type, gravity and activity, or the reasons why there are none
      */
     public Placement place(Measurements measurements, long seed) {
-        PublishedType type = published.witness(measurements);
+        PublishedType byRelations = published.witness(measurements);
+        CalibratedType byLoci = calibrated.witness(measurements);
+        Optional<TypeEstimate> type =
+                byLoci.posterior().map(TypePosterior::estimate).or(byRelations::type);
         GravityVerdict verdict =
-                type.type()
-                        .map(estimate -> gravity.judge(measurements, estimate, seed))
+                type.map(estimate -> gravity.judge(measurements, estimate, byLoci, seed))
                         .orElseGet(
                                 () ->
                                         GravityVerdict.notJudged(
                                                 "no type, and the limits depend on the type",
                                                 List.of()));
         Activity halpha =
-                type.type()
-                        .map(estimate -> activity.judge(measurements, estimate))
+                type.map(estimate -> activity.judge(measurements, estimate))
                         .orElseGet(() -> Activity.none("no type, and chi depends on the type"));
+        List<Finding> findings = new ArrayList<>(ofType(measurements, type, byRelations, byLoci));
+        findings.addAll(ofGravity(verdict, byLoci));
+        findings.addAll(activity.findings(halpha));
         return new Placement(
-                type.type(),
-                type.type().isPresent() ? "" : type.scheme(),
                 type,
+                type.isPresent() ? "" : byRelations.scheme() + "; " + byLoci.reason(),
+                byRelations,
+                byLoci,
                 verdict,
                 halpha,
-                findings(measurements, type, verdict, activity.findings(halpha)));
+                findings);
     }
 
-    private static List<Finding> findings(
+    private static List<Finding> ofType(
             Measurements measurements,
-            PublishedType type,
-            GravityVerdict verdict,
-            List<Finding> ofActivity) {
+            Optional<TypeEstimate> type,
+            PublishedType byRelations,
+            CalibratedType byLoci) {
         List<Finding> findings = new ArrayList<>();
-        if (type.type().isPresent()) {
-            findings.addAll(type.findings());
+        if (type.isEmpty()) {
+            return findings;
+        }
+        findings.addAll(byRelations.findings());
+        if (byLoci.posterior().isEmpty()) {
+            findings.add(Finding.note("published-relations-only", byLoci.reason()));
+        } else if (byRelations.type().isPresent()) {
+            TypeEstimate one = byRelations.type().get();
+            TypeEstimate two = type.get();
+            double apart =
+                    Math.abs(one.typeNumber() - two.typeNumber())
+                            / Math.hypot(one.sigmaSubclass(), two.sigmaSubclass());
+            if (apart > DISAGREEMENT) {
+                findings.add(
+                        Finding.caution(
+                                "witnesses-disagree",
+                                String.format(
+                                        Locale.ROOT,
+                                        "the published relations give %s, spectra of known type %s:"
+                                                + " %.1f of their joint sigma apart",
+                                        one.code(),
+                                        two.code(),
+                                        apart)));
+            }
+        }
+        findings.add(
+                Finding.caution(
+                        "kind-not-judged",
+                        "the type holds only if the object is a late dwarf: giants, reddened stars"
+                                + " and galaxies are not told apart here"));
+        if (BandCheck.showsNone(measurements)) {
             findings.add(
-                    Finding.caution(
-                            "kind-not-judged",
-                            "the type holds only if the object is a late dwarf: giants, reddened"
-                                    + " stars and galaxies are not told apart by these relations"));
+                    Finding.warning(
+                            "no-bands",
+                            "no water, methane, iron hydride or potassium band is seen: any smooth"
+                                    + " spectrum gets a type, and it means nothing here"));
+        }
+        return findings;
+    }
+
+    private static List<Finding> ofGravity(GravityVerdict verdict, CalibratedType byLoci) {
+        List<Finding> findings = new ArrayList<>();
+        if (verdict.gravityClass().isEmpty()) {
+            return findings;
         }
         List<GravityScore> scored =
                 verdict.scores().stream().filter(score -> score.score().isPresent()).toList();
-        if (verdict.gravityClass().isPresent() && scored.size() == 1) {
+        if (scored.size() == 1 && byLoci.posterior().isEmpty()) {
             findings.add(
                     Finding.caution(
                             "gravity-by-one-feature",
@@ -79,37 +147,26 @@ public final class Placer {
                                     + scored.get(0).feature().symbol()
                                     + " alone, which dust and metallicity move too"));
         }
-        if (verdict.gravityClass().isPresent() && !isMostProbable(verdict)) {
+        double probability = verdict.pOfClass().orElse(0);
+        if (probability < SURE) {
             findings.add(
                     Finding.caution(
                             "gravity-class-unsure",
-                            "the published scores give "
-                                    + verdict.gravityClass().get().label()
-                                    + ", but with noise and type uncertainty another class is more"
-                                    + " probable"));
+                            String.format(
+                                    Locale.ROOT,
+                                    "%s is given with a probability of %.2f only",
+                                    verdict.gravityClass().get().label(),
+                                    probability)));
         }
-        if (type.type().isPresent() && BandCheck.showsNone(measurements)) {
+        if (verdict.byScores().isPresent() && !verdict.byScores().equals(verdict.gravityClass())) {
             findings.add(
-                    Finding.warning(
-                            "no-bands",
-                            "no water, methane, iron hydride or potassium band is seen: the"
-                                    + " relations give a type to any smooth spectrum, and it means"
-                                    + " nothing here"));
+                    Finding.note(
+                            "gravity-scores-differ",
+                            "the published scores give "
+                                    + verdict.byScores().get().label()
+                                    + ", the posterior "
+                                    + verdict.gravityClass().get().label()));
         }
-        findings.addAll(ofActivity);
         return findings;
-    }
-
-    private static boolean isMostProbable(GravityVerdict verdict) {
-        double field = verdict.pFieldGravity().orElse(0);
-        double intermediate = verdict.pIntermediateGravity().orElse(0);
-        double veryLow = verdict.pVeryLowGravity().orElse(0);
-        double ofClass =
-                switch (verdict.gravityClass().orElseThrow()) {
-                    case FLD_G -> field;
-                    case INT_G -> intermediate;
-                    case VL_G -> veryLow;
-                };
-        return ofClass >= Math.max(field, Math.max(intermediate, veryLow));
     }
 }

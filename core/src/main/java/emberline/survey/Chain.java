@@ -8,6 +8,7 @@ import emberline.measure.line.LineReport;
 import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
+import emberline.place.calibrated.Calibration;
 import emberline.prepare.PreparedSpectrum;
 import emberline.prepare.Preparer;
 import emberline.prepare.Preparing;
@@ -50,7 +51,7 @@ public final class Chain {
     public Chain(FeatureCatalogue catalogue, Measuring measuring, SurveySettings settings) {
         this.measurer = new Measurer(catalogue, measuring);
         this.lines = new LineReporter(catalogue, measuring.site());
-        this.placer = new Placer(catalogue);
+        this.placer = new Placer(catalogue, Calibration.standard(), settings.prior().load());
         this.defaults = settings.preparing();
         this.seed = settings.seed();
         this.toMeasuredRest = settings.toMeasuredRest();

@@ -1,5 +1,6 @@
 package emberline.survey;
 
+import emberline.place.calibrated.TypePriors;
 import emberline.prepare.Preparing;
 
 /**
@@ -8,9 +9,11 @@ import emberline.prepare.Preparing;
  * @param preparing what the observer states about every spectrum for which the list says nothing
  * @param threads number of threads, at least 1
  * @param seed start of all random draws
+ * @param prior what is thought of types and gravities before a spectrum is looked at
  * @param toMeasuredRest whether the velocity that lines show is taken out where none is stated
  */
-public record SurveySettings(Preparing preparing, int threads, long seed, boolean toMeasuredRest) {
+public record SurveySettings(
+        Preparing preparing, int threads, long seed, TypePriors prior, boolean toMeasuredRest) {
 
     /** The seed where none is given. */
     public static final long DEFAULT_SEED = 20_260_101L;
@@ -32,6 +35,7 @@ public record SurveySettings(Preparing preparing, int threads, long seed, boolea
                 Preparing.withDefaults(),
                 Runtime.getRuntime().availableProcessors(),
                 DEFAULT_SEED,
+                TypePriors.FLAT,
                 false);
     }
 
@@ -42,7 +46,7 @@ public record SurveySettings(Preparing preparing, int threads, long seed, boolea
      * @return new settings
      */
     public SurveySettings withThreads(int number) {
-        return new SurveySettings(preparing, number, seed, toMeasuredRest);
+        return new SurveySettings(preparing, number, seed, prior, toMeasuredRest);
     }
 
     /**
@@ -52,7 +56,7 @@ public record SurveySettings(Preparing preparing, int threads, long seed, boolea
      * @return new settings
      */
     public SurveySettings withSeed(long start) {
-        return new SurveySettings(preparing, threads, start, toMeasuredRest);
+        return new SurveySettings(preparing, threads, start, prior, toMeasuredRest);
     }
 
     /**
@@ -62,7 +66,7 @@ public record SurveySettings(Preparing preparing, int threads, long seed, boolea
      * @return new settings
      */
     public SurveySettings withPreparing(Preparing stated) {
-        return new SurveySettings(stated, threads, seed, toMeasuredRest);
+        return new SurveySettings(stated, threads, seed, prior, toMeasuredRest);
     }
 
     /**
@@ -72,6 +76,16 @@ public record SurveySettings(Preparing preparing, int threads, long seed, boolea
      * @return new settings
      */
     public SurveySettings withMeasuredRest(boolean shift) {
-        return new SurveySettings(preparing, threads, seed, shift);
+        return new SurveySettings(preparing, threads, seed, prior, shift);
+    }
+
+    /**
+     * These settings with another prior.
+     *
+     * @param before what is thought of types before a spectrum is looked at
+     * @return new settings
+     */
+    public SurveySettings withPrior(TypePriors before) {
+        return new SurveySettings(preparing, threads, seed, before, toMeasuredRest);
     }
 }

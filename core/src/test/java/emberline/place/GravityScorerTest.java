@@ -54,7 +54,8 @@ class GravityScorerTest {
     }
 
     private static GravityVerdict judge(Measurements measurements, double type) {
-        return new GravityScorer(CATALOGUE).judge(measurements, TypeEstimate.normal(type, 0.5), 1);
+        return new GravityScorer(CATALOGUE)
+                .judge(measurements, TypeEstimate.normal(type, 0.5), 1, true);
     }
 
     /**

@@ -10,9 +10,14 @@ import java.util.Optional;
  * @param posterior probability of type and gravity class; empty where too little was measured
  * @param reason why there is none; empty where there is one
  * @param contributions what each feature did, in the order of the calibration
+ * @param gravitySeparationSigma how far the measured features set very low gravity apart from field
+ *     gravity at the type found, in sigma of scatter and noise; 0 where nothing is known
  */
 public record CalibratedType(
-        Optional<TypePosterior> posterior, String reason, List<Contribution> contributions) {
+        Optional<TypePosterior> posterior,
+        String reason,
+        List<Contribution> contributions,
+        double gravitySeparationSigma) {
 
     /** Copies the list. */
     public CalibratedType {
@@ -26,6 +31,6 @@ public record CalibratedType(
      * @return a result without posterior
      */
     public static CalibratedType none(String reason) {
-        return new CalibratedType(Optional.empty(), reason, List.of());
+        return new CalibratedType(Optional.empty(), reason, List.of(), 0);
     }
 }

@@ -95,10 +95,13 @@ public final class CalibratedWitness {
         double[] inflation = new double[sample.size()];
         KnotLikelihood[] knots = fit(sample, inflation);
         Map<GravityClass, double[]> grid = onGrid(knots);
+        TypePosterior alone = posterior(grid, false);
+        KnotLikelihood nearest = knots[(int) Math.round(mean(alone) / TypeKnots.STEP)];
         return new CalibratedType(
                 Optional.of(posterior(grid, true)),
                 "",
-                contributions(sample, knots, inflation, posterior(grid, false)));
+                nearest == null ? List.of() : contributions(sample, nearest, inflation, alone),
+                nearest == null ? 0 : nearest.gravitySeparationSigma());
     }
 
     /**
@@ -272,22 +275,24 @@ public final class CalibratedWitness {
         return blurred;
     }
 
-    private static List<Contribution> contributions(
-            Sample sample, KnotLikelihood[] knots, double[] inflation, TypePosterior found) {
-        double type = 0;
-        double lowGravity = 0;
+    private static double mean(TypePosterior found) {
+        double mean = 0;
         for (int i = 0; i < found.size(); i++) {
-            type += found.probability(i) * found.typeNumber(i);
+            mean += found.probability(i) * found.typeNumber(i);
         }
+        return mean;
+    }
+
+    private static List<Contribution> contributions(
+            Sample sample, KnotLikelihood nearest, double[] inflation, TypePosterior found) {
+        double type = mean(found);
+        double lowGravity = 0;
         for (GravityClass gravity : GravityClass.values()) {
             lowGravity += found.probability(gravity) * lowGravity(gravity);
         }
-        int knot = (int) Math.round(type / TypeKnots.STEP);
+        double steps = type / TypeKnots.STEP;
+        KnotLikelihood.Pull[] pulls = nearest.pulls(steps - Math.round(steps), lowGravity);
         List<Contribution> contributions = new ArrayList<>();
-        if (knots[knot] == null) {
-            return contributions;
-        }
-        KnotLikelihood.Pull[] pulls = knots[knot].pulls(type / TypeKnots.STEP - knot, lowGravity);
         for (int f = 0; f < sample.size(); f++) {
             Locus locus = sample.locus(f);
             double sigma = Math.hypot(locus.scatter(type), Math.sqrt(sample.noise(f, f)));

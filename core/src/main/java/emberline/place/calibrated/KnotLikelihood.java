@@ -117,6 +117,19 @@ final class KnotLikelihood {
     }
 
     /**
+     * How far very low gravity stands apart from field gravity at this knot.
+     *
+     * @return distance in sigma of scatter and noise
+     */
+    double gravitySeparationSigma() {
+        double sum = 0;
+        for (double one : shift[1]) {
+            sum += one * one;
+        }
+        return Math.sqrt(sum);
+    }
+
+    /**
      * How far each feature moves the type of a normal fit around this knot.
      *
      * @param lowGravity 0 field, 0.5 intermediate, 1 very low
