@@ -14,14 +14,19 @@ final class LocusFit {
     /** One-sigma width of the kernel where there are enough spectra (subclass). */
     private static final double BANDWIDTH = 1.6;
 
+    /** From L9 on, where methane sets in and relations anchor the loci, the kernel is narrower. */
+    private static final double METHANE_BANDWIDTH = 0.9;
+
+    private static final double METHANE_FROM = 19;
+
     /** Greatest width that is still widened (subclass). */
     private static final double WIDEST = 6;
 
     /** The kernel widens until its weights add up to this many spectra. */
-    private static final double ENOUGH = 8;
+    private static final double ENOUGH = 5;
 
     /** Weight of the prior that gravity does nothing. */
-    private static final double GRAVITY_RIDGE = 0.09;
+    private static final double GRAVITY_RIDGE = 0.3;
 
     private static final int ROUNDS = 4;
 
@@ -72,7 +77,7 @@ final class LocusFit {
     }
 
     private static void kernel(List<Point> points, double type, double[] weights) {
-        double width = BANDWIDTH;
+        double width = type >= METHANE_FROM ? METHANE_BANDWIDTH : BANDWIDTH;
         while (true) {
             double sum = 0;
             for (int i = 0; i < weights.length; i++) {

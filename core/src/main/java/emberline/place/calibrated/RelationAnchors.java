@@ -24,7 +24,7 @@ final class RelationAnchors {
     private static final double STEP = 0.5;
 
     /** Weight of an anchor, one spectrum of the best tier having weight 1. */
-    private static final double WEIGHT = 0.5;
+    private static final double WEIGHT = 1;
 
     /** Number of cells in which a relation is searched for a type. */
     private static final int CELLS = 2000;

@@ -17,7 +17,7 @@ final class ResidualCorrelation {
      * What is kept of the correlations found. Chosen by cross-validation: a few hundred dwarfs do
      * not determine thousands of correlations, and their errors cost more than they tell.
      */
-    private static final double KEPT = 0.3;
+    private static final double KEPT = 0.25;
 
     /** Residuals are cut at this many sigma. */
     private static final double CUT = 3;

@@ -54,6 +54,11 @@ public final class ObjectJson {
         map.put("findings", result.findings().stream().map(ObjectJson::finding).toList());
         map.put("type_reason", result.placement().map(Placement::typeReason).orElse(""));
         map.put("published_scheme", result.placement().map(p -> p.published().scheme()).orElse(""));
+        map.put(
+                "calibrated",
+                result.placement()
+                        .map(p -> (Object) CalibratedJson.map(p.calibrated()))
+                        .orElse(null));
         map.put("gravity_reason", result.placement().map(p -> p.gravity().reason()).orElse(""));
         map.put("relations", result.placement().map(ObjectJson::relations).orElse(List.of()));
         map.put("gravity_scores", result.placement().map(ObjectJson::scores).orElse(List.of()));

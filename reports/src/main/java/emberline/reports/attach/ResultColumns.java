@@ -185,8 +185,8 @@ public final class ResultColumns {
         columns.add(
                 text(
                         "gravity",
-                        "gravity class by the published scores: FLD-G, INT-G or VL-G; empty where"
-                                + " it is not judged",
+                        "most probable gravity class: FLD-G, INT-G or VL-G; empty where it is not"
+                                + " judged",
                         r ->
                                 r.placement()
                                         .flatMap(p -> p.gravity().gravityClass())
@@ -199,6 +199,15 @@ public final class ResultColumns {
                         "p_intg", "probability of INT-G", p -> p.gravity().pIntermediateGravity()));
         columns.add(
                 gravityShare("p_vlg", "probability of VL-G", p -> p.gravity().pVeryLowGravity()));
+        columns.add(
+                text(
+                        "published_gravity",
+                        "gravity class by the published scores, the type taken as known",
+                        r ->
+                                r.placement()
+                                        .flatMap(p -> p.gravity().byScores())
+                                        .map(g -> g.label())
+                                        .orElse("")));
     }
 
     private static Optional<TypeEstimate> adopted(ObjectResult result) {

@@ -113,7 +113,10 @@ class ChartTest {
                         .filter(p -> p.tone() == Tone.RESULT)
                         .findFirst()
                         .orElseThrow();
-        assertEquals(placement.type().orElseThrow().typeNumber(), result.points().get(0).x(), 0);
+        assertEquals(
+                placement.published().type().orElseThrow().typeNumber(),
+                result.points().get(0).x(),
+                0);
         assertEquals(chart.y().ticks().size(), 1 + used.points().size() + aside(chart));
     }
 
