@@ -38,6 +38,7 @@ final class RunOptions {
                         .map(extinction -> Double.toString(extinction.rv()))
                         .orElse(""));
         options.put("prior", settings.prior().word());
+        options.put("fit_reddening", Boolean.toString(settings.fitReddening()));
         options.put("to_rest", Boolean.toString(settings.toMeasuredRest()));
         options.put("reports", reports ? "pdf" : "none");
         return options;

@@ -55,6 +55,11 @@ final class SpectrumOptions {
     private Double rv;
 
     @Option(
+            names = "--fit-reddening",
+            description = "Fit type and extinction together (0 to 15 mag in V, R_V 3.1).")
+    private boolean fitReddening;
+
+    @Option(
             names = "--velocity",
             paramLabel = "KMS",
             description =
@@ -111,6 +116,11 @@ final class SpectrumOptions {
             throw new ParameterException(
                     spec.commandLine(), "--extinction-ratio: expected --av beside it");
         }
+        if (fitReddening && avMag != null) {
+            throw new ParameterException(
+                    spec.commandLine(),
+                    "--fit-reddening: expected no --av beside it, which states the extinction");
+        }
         if (threads < 1) {
             throw new ParameterException(
                     spec.commandLine(), "--threads: expected at least 1 but was " + threads);
@@ -119,6 +129,7 @@ final class SpectrumOptions {
                 .withThreads(threads)
                 .withSeed(seed)
                 .withPrior(prior)
+                .withReddeningFit(fitReddening)
                 .withMeasuredRest(toRest)
                 .withPreparing(stated);
     }

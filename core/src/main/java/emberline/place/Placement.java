@@ -1,6 +1,7 @@
 package emberline.place;
 
 import emberline.place.calibrated.CalibratedType;
+import emberline.place.reddening.ReddeningFit;
 import emberline.spectrum.Finding;
 import java.util.List;
 import java.util.Optional;
@@ -12,6 +13,7 @@ import java.util.Optional;
  * @param typeReason why there is no type; empty where there is one
  * @param published the first witness: the published relations
  * @param calibrated the second witness: the loci of spectra of known type
+ * @param reddening type and extinction fitted together, where that was asked for
  * @param gravity the gravity class
  * @param activity the activity by H alpha
  * @param findings what the observer should know about the placement
@@ -21,6 +23,7 @@ public record Placement(
         String typeReason,
         PublishedType published,
         CalibratedType calibrated,
+        Optional<ReddeningFit> reddening,
         GravityVerdict gravity,
         Activity activity,
         List<Finding> findings) {

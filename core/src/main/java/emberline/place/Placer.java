@@ -7,11 +7,14 @@ import emberline.place.calibrated.CalibratedWitness;
 import emberline.place.calibrated.Calibration;
 import emberline.place.calibrated.TypePrior;
 import emberline.place.calibrated.TypePriors;
+import emberline.place.reddening.ReddeningFit;
+import emberline.place.reddening.ReddeningFitter;
 import emberline.spectrum.Finding;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.function.DoubleFunction;
 
 /** Places an object on the sequence of spectral types and judges its gravity class and activity. */
 public final class Placer {
@@ -59,8 +62,32 @@ public final class Placer {
      * @return type, gravity and activity, or the reasons why there are none
      */
     public Placement place(Measurements measurements, long seed) {
+        return place(measurements, Optional.empty(), seed);
+    }
+
+    /**
+     * Fits type and extinction together.
+     *
+     * @param measuredAt the features once an extinction in V (mag) is taken out
+     * @return the fit; empty where too little was measured
+     */
+    public Optional<ReddeningFit> fitReddening(DoubleFunction<Measurements> measuredAt) {
+        return new ReddeningFitter(calibrated).fit(measuredAt);
+    }
+
+    /**
+     * Places an object whose extinction was fitted.
+     *
+     * @param measurements its features, with the most probable extinction taken out
+     * @param reddening the fit, whose posterior goes before that of the features; empty where none
+     *     was made
+     * @param seed start of the random draws for the gravity probabilities
+     * @return type, gravity and activity, or the reasons why there are none
+     */
+    public Placement place(Measurements measurements, Optional<ReddeningFit> reddening, long seed) {
         PublishedType byRelations = published.witness(measurements);
-        CalibratedType byLoci = calibrated.witness(measurements);
+        CalibratedType alone = calibrated.witness(measurements);
+        CalibratedType byLoci = reddening.map(fit -> alone.with(fit.posterior())).orElse(alone);
         Optional<TypeEstimate> type =
                 byLoci.posterior().map(TypePosterior::estimate).or(byRelations::type);
         GravityVerdict verdict =
@@ -81,6 +108,7 @@ public final class Placer {
                 type.isPresent() ? "" : byRelations.scheme() + "; " + byLoci.reason(),
                 byRelations,
                 byLoci,
+                reddening,
                 verdict,
                 halpha,
                 findings);

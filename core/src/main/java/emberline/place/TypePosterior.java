@@ -2,6 +2,7 @@ package emberline.place;
 
 import java.util.Arrays;
 import java.util.EnumMap;
+import java.util.List;
 import java.util.Map;
 
 /**
@@ -67,6 +68,33 @@ public final class TypePosterior {
             joint.put(gravity, ofClass);
         }
         return new TypePosterior(firstTypeNumber, stepSubclass, joint);
+    }
+
+    /**
+     * The mean of several posteriors.
+     *
+     * @param posteriors on the same grid, at least one
+     * @param weights one for each, not negative, at least one of them positive
+     * @return their weighted mean
+     * @throws IllegalArgumentException if the grids differ or the weights cannot be normalised
+     */
+    public static TypePosterior mixture(List<TypePosterior> posteriors, List<Double> weights) {
+        TypePosterior first = posteriors.get(0);
+        Map<GravityClass, double[]> sum = new EnumMap<>(GravityClass.class);
+        for (GravityClass gravity : GravityClass.values()) {
+            double[] ofClass = new double[first.size()];
+            for (int p = 0; p < posteriors.size(); p++) {
+                TypePosterior one = posteriors.get(p);
+                if (one.size() != first.size() || one.firstTypeNumber != first.firstTypeNumber) {
+                    throw new IllegalArgumentException("posteriors on different grids");
+                }
+                for (int i = 0; i < ofClass.length; i++) {
+                    ofClass[i] += weights.get(p) * one.probability(i, gravity);
+                }
+            }
+            sum.put(gravity, ofClass);
+        }
+        return of(first.firstTypeNumber, first.stepSubclass, sum);
     }
 
     /**

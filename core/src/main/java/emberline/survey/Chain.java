@@ -9,6 +9,8 @@ import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
 import emberline.place.calibrated.Calibration;
+import emberline.place.reddening.ReddeningFit;
+import emberline.prepare.ExtinctionLaw;
 import emberline.prepare.PreparedSpectrum;
 import emberline.prepare.Preparer;
 import emberline.prepare.Preparing;
@@ -21,8 +23,10 @@ import emberline.spectrum.Medium;
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 
@@ -39,6 +43,7 @@ public final class Chain {
     private final Placer placer;
     private final Preparing defaults;
     private final long seed;
+    private final boolean fitReddening;
     private final boolean toMeasuredRest;
 
     /**
@@ -54,6 +59,7 @@ public final class Chain {
         this.placer = new Placer(catalogue, Calibration.standard(), settings.prior().load());
         this.defaults = settings.preparing();
         this.seed = settings.seed();
+        this.fitReddening = settings.fitReddening();
         this.toMeasuredRest = settings.toMeasuredRest();
     }
 
@@ -86,11 +92,14 @@ public final class Chain {
     }
 
     private ObjectResult attempt(Candidate candidate, Path folder) {
+        Map<String, Observation> observations = new LinkedHashMap<>();
         List<SpectrumResult> spectra = new ArrayList<>();
         List<String> troubles = new ArrayList<>();
         for (String path : candidate.spectra()) {
             try {
-                spectra.add(measure(path, reader.read(folder.resolve(path)), stated(candidate)));
+                Observation observation = reader.read(folder.resolve(path));
+                spectra.add(measure(path, observation, stated(candidate)));
+                observations.put(path, observation);
             } catch (UnreadableSpectrumException e) {
                 troubles.add(e.getMessage());
             } catch (InvalidPathException e) {
@@ -102,7 +111,45 @@ public final class Chain {
                     candidate,
                     troubles.isEmpty() ? "no spectrum is listed" : String.join(" | ", troubles));
         }
-        return placed(candidate, spectra, troubles);
+        Optional<ReddeningFit> reddening =
+                fitReddening
+                        ? placer.fitReddening(av -> measuredAt(av, candidate, observations))
+                        : Optional.empty();
+        if (reddening.isPresent()) {
+            Preparing freed = stated(candidate).withExtinction(extinction(reddening.get().avMag()));
+            spectra.clear();
+            for (Map.Entry<String, Observation> one : observations.entrySet()) {
+                spectra.add(again(one.getKey(), one.getValue(), freed));
+            }
+        }
+        return placed(candidate, spectra, reddening, troubles);
+    }
+
+    private Measurements measuredAt(
+            double avMag, Candidate candidate, Map<String, Observation> observations) {
+        Preparing freed = stated(candidate).withExtinction(extinction(avMag));
+        List<Measurements> all = new ArrayList<>();
+        for (Observation observation : observations.values()) {
+            try {
+                all.add(measurer.measure(preparer.prepare(observation, freed)));
+            } catch (UnreadableSpectrumException e) {
+                throw new IllegalStateException("prepared before, but not now", e);
+            }
+        }
+        return Measurements.best(all);
+    }
+
+    /** Measures a spectrum that was measured before, with another extinction taken out. */
+    private SpectrumResult again(String path, Observation observation, Preparing freed) {
+        try {
+            return measure(path, observation, freed);
+        } catch (UnreadableSpectrumException e) {
+            throw new IllegalStateException(path + ": prepared before, but not now", e);
+        }
+    }
+
+    private static Preparing.Extinction extinction(double avMag) {
+        return new Preparing.Extinction(avMag, ExtinctionLaw.DIFFUSE_RV);
     }
 
     /**
@@ -158,10 +205,13 @@ public final class Chain {
     }
 
     private ObjectResult placed(
-            Candidate candidate, List<SpectrumResult> spectra, List<String> troubles) {
+            Candidate candidate,
+            List<SpectrumResult> spectra,
+            Optional<ReddeningFit> reddening,
+            List<String> troubles) {
         Measurements best =
                 Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
-        Placement placement = placer.place(best, ObjectSeed.of(candidate.name(), seed));
+        Placement placement = placer.place(best, reddening, ObjectSeed.of(candidate.name(), seed));
         List<Finding> findings = new ArrayList<>();
         spectra.forEach(spectrum -> findings.addAll(spectrum.prepared().findings()));
         for (String trouble : troubles) {
@@ -175,6 +225,7 @@ public final class Chain {
                                     + " spectra were measured apart; of each feature the"
                                     + " measurement with the smallest error was placed"));
         }
+        reddening.ifPresent(fit -> findings.add(fitted(fit)));
         findings.addAll(placement.findings());
         List<String> reasons = new ArrayList<>(troubles);
         if (placement.type().isEmpty()) {
@@ -188,6 +239,19 @@ public final class Chain {
                 Optional.of(best),
                 Optional.of(placement),
                 findings);
+    }
+
+    private static Finding fitted(ReddeningFit fit) {
+        return Finding.note(
+                "reddening-fitted",
+                String.format(
+                        Locale.ROOT,
+                        "extinction in V fitted together with the type: %.1f mag (68%%: %.1f to"
+                                + " %.1f); %.1f mag was taken out before measuring",
+                        fit.avMag(),
+                        fit.lo68Mag(),
+                        fit.hi68Mag(),
+                        fit.avMag()));
     }
 
     /** What is stated about the spectra of a candidate: the list goes before the defaults. */

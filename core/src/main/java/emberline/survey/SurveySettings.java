@@ -10,10 +10,16 @@ import emberline.prepare.Preparing;
  * @param threads number of threads, at least 1
  * @param seed start of all random draws
  * @param prior what is thought of types and gravities before a spectrum is looked at
+ * @param fitReddening whether type and extinction are fitted together
  * @param toMeasuredRest whether the velocity that lines show is taken out where none is stated
  */
 public record SurveySettings(
-        Preparing preparing, int threads, long seed, TypePriors prior, boolean toMeasuredRest) {
+        Preparing preparing,
+        int threads,
+        long seed,
+        TypePriors prior,
+        boolean fitReddening,
+        boolean toMeasuredRest) {
 
     /** The seed where none is given. */
     public static final long DEFAULT_SEED = 20_260_101L;
@@ -36,6 +42,7 @@ public record SurveySettings(
                 Runtime.getRuntime().availableProcessors(),
                 DEFAULT_SEED,
                 TypePriors.FLAT,
+                false,
                 false);
     }
 
@@ -46,7 +53,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withThreads(int number) {
-        return new SurveySettings(preparing, number, seed, prior, toMeasuredRest);
+        return new SurveySettings(preparing, number, seed, prior, fitReddening, toMeasuredRest);
     }
 
     /**
@@ -56,7 +63,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withSeed(long start) {
-        return new SurveySettings(preparing, threads, start, prior, toMeasuredRest);
+        return new SurveySettings(preparing, threads, start, prior, fitReddening, toMeasuredRest);
     }
 
     /**
@@ -66,7 +73,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withPreparing(Preparing stated) {
-        return new SurveySettings(stated, threads, seed, prior, toMeasuredRest);
+        return new SurveySettings(stated, threads, seed, prior, fitReddening, toMeasuredRest);
     }
 
     /**
@@ -76,7 +83,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withMeasuredRest(boolean shift) {
-        return new SurveySettings(preparing, threads, seed, prior, shift);
+        return new SurveySettings(preparing, threads, seed, prior, fitReddening, shift);
     }
 
     /**
@@ -86,6 +93,16 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withPrior(TypePriors before) {
-        return new SurveySettings(preparing, threads, seed, before, toMeasuredRest);
+        return new SurveySettings(preparing, threads, seed, before, fitReddening, toMeasuredRest);
+    }
+
+    /**
+     * These settings with type and extinction fitted together, or not.
+     *
+     * @param fit true to fit
+     * @return new settings
+     */
+    public SurveySettings withReddeningFit(boolean fit) {
+        return new SurveySettings(preparing, threads, seed, prior, fit, toMeasuredRest);
     }
 }

@@ -101,7 +101,8 @@ public final class CalibratedWitness {
                 Optional.of(posterior(grid, true)),
                 "",
                 nearest == null ? List.of() : contributions(sample, nearest, inflation, alone),
-                nearest == null ? 0 : nearest.gravitySeparationSigma());
+                nearest == null ? 0 : nearest.gravitySeparationSigma(),
+                logEvidence(grid));
     }
 
     /**
@@ -245,6 +246,16 @@ public final class CalibratedWitness {
             grid.put(gravity, log);
         }
         return grid;
+    }
+
+    private static double logEvidence(Map<GravityClass, double[]> log) {
+        double best = best(log);
+        double sum =
+                log.values().stream()
+                        .flatMapToDouble(Arrays::stream)
+                        .map(value -> Math.exp(value - best))
+                        .sum();
+        return best + Math.log(sum);
     }
 
     private TypePosterior posterior(Map<GravityClass, double[]> log, boolean withLabelError) {

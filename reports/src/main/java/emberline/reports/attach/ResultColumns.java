@@ -2,6 +2,7 @@ package emberline.reports.attach;
 
 import emberline.place.Placement;
 import emberline.place.TypeEstimate;
+import emberline.place.reddening.ReddeningFit;
 import emberline.prepare.BandSignal;
 import emberline.prepare.Quality;
 import emberline.reports.attach.ResultColumn.Content;
@@ -114,6 +115,7 @@ public final class ResultColumns {
                         "one-sigma error of the type by the published relations",
                         r -> published(r).map(t -> Digits.type(t.sigmaSubclass())).orElse("")));
         addGravity(columns);
+        addReddening(columns);
         addSpectrum(columns);
         columns.add(
                 text(
@@ -148,6 +150,25 @@ public final class ResultColumns {
         columns.add(typeNumber("type_hi68", "upper end of the 68% interval", TypeEstimate::hi68));
         columns.add(typeNumber("type_lo95", "lower end of the 95% interval", TypeEstimate::lo95));
         columns.add(typeNumber("type_hi95", "upper end of the 95% interval", TypeEstimate::hi95));
+    }
+
+    private static void addReddening(List<ResultColumn> columns) {
+        columns.add(reddening("a_v", "extinction in V fitted with the type", ReddeningFit::avMag));
+        columns.add(reddening("a_v_lo68", "lower end of its 68% interval", ReddeningFit::lo68Mag));
+        columns.add(reddening("a_v_hi68", "upper end of its 68% interval", ReddeningFit::hi68Mag));
+    }
+
+    private static ResultColumn reddening(
+            String name, String description, ToDoubleFunction<ReddeningFit> part) {
+        return number(
+                name,
+                "mag",
+                description,
+                r ->
+                        r.placement()
+                                .flatMap(Placement::reddening)
+                                .map(fit -> Digits.type(part.applyAsDouble(fit)))
+                                .orElse(""));
     }
 
     private static void addSpectrum(List<ResultColumn> columns) {
