@@ -4,7 +4,9 @@ import emberline.catalogue.Band;
 import emberline.catalogue.Feature;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.Relation;
+import emberline.catalogue.RestLine;
 import emberline.reports.attach.CatalogueTable;
+import emberline.reports.attach.RestLineTable;
 import emberline.reports.attach.TableFormat;
 import java.util.List;
 import java.util.Locale;
@@ -22,8 +24,8 @@ import picocli.CommandLine.Spec;
 @Command(
         name = "catalogue",
         description =
-                "Lists the definitions of bands and lines with their sources, or prints one in"
-                        + " full.",
+                "Lists the definitions of bands and lines with their sources, or the rest"
+                        + " wavelengths of lines, or prints one definition in full.",
         mixinStandardHelpOptions = true)
 final class CatalogueCommand implements Callable<Integer> {
 
@@ -49,6 +51,11 @@ final class CatalogueCommand implements Callable<Integer> {
     private String molecule;
 
     @Option(
+            names = "--lines",
+            description = "The rest wavelengths of atomic lines instead of definitions.")
+    private boolean lines;
+
+    @Option(
             names = "--format",
             paramLabel = "text|csv|json",
             defaultValue = "text",
@@ -58,12 +65,14 @@ final class CatalogueCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         FeatureCatalogue catalogue = catalogueOption.load();
-        if (id != null && (band != null || molecule != null)) {
+        if (id != null && (band != null || molecule != null || lines)) {
             throw new ParameterException(
                     spec.commandLine(),
-                    "an id stands for itself: expected no --band or --molecule");
+                    "an id stands for itself: expected no --band, --molecule or --lines");
         }
-        if (id != null) {
+        if (lines) {
+            spec.commandLine().getOut().print(RestLineTable.print(restLines(catalogue), format));
+        } else if (id != null) {
             spec.commandLine().getOut().print(one(catalogue));
         } else {
             spec.commandLine().getOut().print(CatalogueTable.print(chosen(catalogue), format));
@@ -103,6 +112,37 @@ final class CatalogueCommand implements Callable<Integer> {
                         .limit(4)
                         .toList();
         return similar.isEmpty() ? "" : ", perhaps " + String.join(" or ", similar);
+    }
+
+    /** The lines of the catalogue, or those of an element in any ionisation. */
+    private List<RestLine> restLines(FeatureCatalogue catalogue) {
+        if (band != null) {
+            throw new ParameterException(
+                    spec.commandLine(), "lines belong to no band: expected no --band with --lines");
+        }
+        List<RestLine> chosen =
+                catalogue.restLines().stream()
+                        .filter(line -> molecule == null || isOf(line.species(), molecule))
+                        .toList();
+        if (chosen.isEmpty()) {
+            throw new ParameterException(
+                    spec.commandLine(),
+                    "no line of "
+                            + molecule
+                            + ": expected one of "
+                            + catalogue.restLines().stream()
+                                    .map(RestLine::species)
+                                    .distinct()
+                                    .sorted()
+                                    .toList());
+        }
+        return chosen;
+    }
+
+    /** Whether a species such as {@code K I} is the one asked for, with or without its stage. */
+    private static boolean isOf(String species, String asked) {
+        return species.equalsIgnoreCase(asked)
+                || species.substring(0, species.indexOf(' ')).equalsIgnoreCase(asked);
     }
 
     private List<Feature> chosen(FeatureCatalogue catalogue) {

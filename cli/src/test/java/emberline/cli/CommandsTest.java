@@ -3,6 +3,7 @@ package emberline.cli;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import emberline.catalogue.FeatureCatalogue;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
@@ -74,6 +75,29 @@ class CommandsTest {
         assertTrue(water.out().lines().count() < 30);
         assertTrue(water.out().contains("burgasser2006/h2o-h"));
         assertTrue(!water.out().contains("ch4"));
+    }
+
+    @Test
+    void catalogueListsRestLines() {
+        CommandRun all = CommandRun.of("catalogue", "--lines", "--format", "csv");
+        assertEquals(ExitCode.DONE, all.code());
+        assertEquals(FeatureCatalogue.standard().restLines().size() + 1, all.out().lines().count());
+        assertTrue(all.out().startsWith("species,vacuum_micron,purpose,source,"), all.out());
+        // H alpha, 6562.80 angstrom in air, 6564.61 in vacuum
+        assertTrue(all.out().contains("H I,0.656461"), all.out());
+        CommandRun potassium = CommandRun.of("catalogue", "--lines", "--molecule", "k");
+        assertTrue(potassium.out().lines().skip(1).allMatch(line -> line.startsWith("K I ")));
+        assertTrue(potassium.out().lines().count() > 4, potassium.out());
+        CommandRun json = CommandRun.of("catalogue", "--lines", "--format", "json");
+        assertTrue(json.out().contains("\"vacuum_micron\""), json.out());
+        for (String[] wrong :
+                new String[][] {
+                    {"catalogue", "--lines", "--band", "J"},
+                    {"catalogue", "--lines", "reid1995/tio5"},
+                    {"catalogue", "--lines", "--molecule", "Xx"}
+                }) {
+            assertEquals(ExitCode.WRONG_USAGE, CommandRun.of((Object[]) wrong).code());
+        }
     }
 
     @Test

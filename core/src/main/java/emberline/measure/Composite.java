@@ -18,6 +18,17 @@ final class Composite implements Formula {
         /** The value from the values of the parts. */
         double value(double[] parts);
 
+        /** The value for many draws at once, for each part one number a draw. */
+        default void values(double[][] parts, int count, double[] out) {
+            double[] one = new double[parts.length];
+            for (int n = 0; n < count; n++) {
+                for (int p = 0; p < one.length; p++) {
+                    one[p] = parts[p][n];
+                }
+                out[n] = value(one);
+            }
+        }
+
         /** The derivative by each part. */
         double[] gradient(double[] parts);
 
@@ -61,6 +72,18 @@ final class Composite implements Formula {
                     sum += coefficients[p] * parts[p];
                 }
                 return sum;
+            }
+
+            @Override
+            public void values(double[][] parts, int count, double[] out) {
+                Arrays.fill(out, 0, count, 0);
+                for (int p = 0; p < parts.length; p++) {
+                    double coefficient = coefficients[p];
+                    double[] part = parts[p];
+                    for (int n = 0; n < count; n++) {
+                        out[n] += coefficient * part[n];
+                    }
+                }
             }
 
             @Override
@@ -154,18 +177,12 @@ final class Composite implements Formula {
     }
 
     @Override
-    public void values(double[][] draws, double[] out) {
-        double[][] drawn = new double[parts.size()][out.length];
+    public void values(double[][] draws, int count, double[] out) {
+        double[][] drawn = new double[parts.size()][count];
         for (int p = 0; p < drawn.length; p++) {
-            parts.get(p).values(draws, drawn[p]);
+            parts.get(p).values(draws, count, drawn[p]);
         }
-        double[] one = new double[drawn.length];
-        for (int n = 0; n < out.length; n++) {
-            for (int p = 0; p < drawn.length; p++) {
-                one[p] = drawn[p][n];
-            }
-            out[n] = rule.value(one);
-        }
+        rule.values(drawn, count, out);
     }
 
     @Override

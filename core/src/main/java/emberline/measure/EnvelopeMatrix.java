@@ -1,7 +1,5 @@
 package emberline.measure;
 
-import java.util.Arrays;
-
 /**
  * A symmetric matrix of which each row is stored from its first non-zero element to the diagonal.
  * Covariances of window means are of this kind once the windows are sorted: windows far apart share
@@ -90,23 +88,56 @@ final class EnvelopeMatrix {
     }
 
     /**
-     * This lower-triangular matrix times columns of numbers, plus a mean, for chosen rows.
+     * One row of this lower-triangular matrix times columns of numbers, plus a mean. The result
+     * takes the place of the column of the same number, so that a product is made in place from the
+     * last row to the first.
      *
-     * @param columns for each row of the matrix as many numbers as there are draws
-     * @param mean what is added to each row
+     * @param columns for each row of the matrix one number a draw; where the row has no weight it
+     *     may be null
+     * @param count how many draws
      * @param row which row
-     * @param out as many numbers as there are draws; overwritten
+     * @param mean what is added
      */
-    void multiplyRow(double[][] columns, double mean, int row, double[] out) {
-        Arrays.fill(out, mean);
-        for (int k = start[row]; k <= row; k++) {
-            double weight = rows[row][k - start[row]];
-            if (weight != 0) {
-                double[] column = columns[k];
-                for (int n = 0; n < out.length; n++) {
-                    out[n] += weight * column[n];
-                }
+    void multiplyRow(double[][] columns, int count, int row, double mean) {
+        double[] out = columns[row];
+        double[] weights = rows[row];
+        double own = weights[row - start[row]];
+        for (int n = 0; n < count; n++) {
+            out[n] = mean + own * out[n];
+        }
+        int[] others = new int[row - start[row]];
+        int size = 0;
+        for (int k = 0; k < others.length; k++) {
+            if (weights[k] != 0) {
+                others[size++] = k;
             }
+        }
+        int k = 0;
+        for (; k + 3 < size; k += 4) {
+            addFour(columns, count, row, others, k);
+        }
+        for (; k < size; k++) {
+            double weight = weights[others[k]];
+            double[] column = columns[start[row] + others[k]];
+            for (int n = 0; n < count; n++) {
+                out[n] += weight * column[n];
+            }
+        }
+    }
+
+    /** Adds four weighted columns at once, which saves going over the sum four times. */
+    private void addFour(double[][] columns, int count, int row, int[] others, int at) {
+        double[] out = columns[row];
+        double a = rows[row][others[at]];
+        double b = rows[row][others[at + 1]];
+        double c = rows[row][others[at + 2]];
+        double d = rows[row][others[at + 3]];
+        double[] columnA = columns[start[row] + others[at]];
+        double[] columnB = columns[start[row] + others[at + 1]];
+        double[] columnC = columns[start[row] + others[at + 2]];
+        double[] columnD = columns[start[row] + others[at + 3]];
+        for (int n = 0; n < count; n++) {
+            out[n] += a * columnA[n] + b * columnB[n] + c * columnC[n] + d * columnD[n];
         }
     }
 

@@ -108,13 +108,29 @@ final class EquivalentWidth implements Formula {
     }
 
     @Override
-    public void values(double[][] draws, double[] out) {
-        double[] y = new double[Arrays.stream(rows).max().orElse(0) + 1];
-        for (int n = 0; n < out.length; n++) {
-            for (int row : rows) {
-                y[row] = draws[row][n];
+    public void values(double[][] draws, int count, double[] out) {
+        int[] sides = Arrays.copyOfRange(rows, moments, rows.length);
+        double[] centre = new double[count];
+        double[] slope = new double[count];
+        new Continuum(sides, atCentre).values(draws, count, centre);
+        new Continuum(sides, perHalfWidth).values(draws, count, slope);
+        double[] integral = new double[count];
+        for (int n = 0; n < count; n++) {
+            slope[n] /= centre[n];
+        }
+        for (int k = moments - 1; k >= 0; k--) {
+            double[] moment = draws[rows[k]];
+            for (int n = 0; n < count; n++) {
+                integral[n] = moment[n] - slope[n] * integral[n];
             }
-            out[n] = value(y);
+        }
+        for (int n = 0; n < count; n++) {
+            out[n] = ANGSTROM_PER_MICRON * (widthMicron - integral[n] / centre[n]);
+        }
+        for (int n = 0; n < count; n++) {
+            if (!(Math.abs(slope[n]) <= STEEPEST)) {
+                out[n] = Double.NaN;
+            }
         }
     }
 

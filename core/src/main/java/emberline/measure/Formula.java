@@ -30,11 +30,11 @@ sealed interface Formula permits LinearRatio, PowerProduct, Magnitude, Equivalen
     /**
      * The value for many draws of the functionals at once.
      *
-     * @param draws for each row as many numbers as there are draws; rows not in {@link #rows()} may
-     *     be null
-     * @param out one value a draw; overwritten
+     * @param draws for each row one number a draw; rows not in {@link #rows()} may be null
+     * @param count how many draws
+     * @param out as many values; overwritten
      */
-    void values(double[][] draws, double[] out);
+    void values(double[][] draws, int count, double[] out);
 
     /**
      * The continua of the feature: sums of functionals that must stand clear of zero for the
@@ -69,6 +69,22 @@ sealed interface Formula permits LinearRatio, PowerProduct, Magnitude, Equivalen
                 sum += weights[k] * y[rows[k]];
             }
             return sum;
+        }
+
+        /** The sum for many draws of the functionals at once, as a formula has its values. */
+        void values(double[][] draws, int count, double[] out) {
+            double[] drawn = draws[rows[0]];
+            double weight = weights[0];
+            for (int n = 0; n < count; n++) {
+                out[n] = weight * drawn[n];
+            }
+            for (int k = 1; k < rows.length; k++) {
+                drawn = draws[rows[k]];
+                weight = weights[k];
+                for (int n = 0; n < count; n++) {
+                    out[n] += weight * drawn[n];
+                }
+            }
         }
     }
 }

@@ -37,9 +37,9 @@ final class Magnitude implements Formula {
     }
 
     @Override
-    public void values(double[][] draws, double[] out) {
-        ratio.values(draws, out);
-        for (int n = 0; n < out.length; n++) {
+    public void values(double[][] draws, int count, double[] out) {
+        ratio.values(draws, count, out);
+        for (int n = 0; n < count; n++) {
             out[n] = POGSON * Math.log(out[n]);
         }
     }

@@ -2,9 +2,6 @@ package emberline.measure;
 
 import emberline.prepare.PreparedSpectrum;
 import java.util.List;
-import org.apache.commons.rng.UniformRandomProvider;
-import org.apache.commons.rng.sampling.distribution.ZigguratSampler;
-import org.apache.commons.rng.simple.RandomSource;
 
 /**
  * The window functionals of one spectrum with their covariance; what features are made from. Safe
@@ -125,35 +122,22 @@ final class MeasuredSpectrum {
      * @return for each formula one value a draw
      */
     double[][] draws(List<Formula> formulas, int count, long seed) {
-        EnvelopeMatrix lower = factor();
         boolean[] wanted = new boolean[means.length];
-        boolean[] carried = new boolean[means.length];
         for (Formula formula : formulas) {
             for (int row : formula.rows()) {
                 wanted[row] = true;
-                for (int k = lower.start(row); k <= row; k++) {
-                    carried[k] = true;
-                }
             }
         }
-        UniformRandomProvider random = RandomSource.XO_RO_SHI_RO_128_PP.create(seed);
-        ZigguratSampler.NormalizedGaussian normal = ZigguratSampler.NormalizedGaussian.of(random);
-        double[][] deviates = new double[means.length][];
-        for (int row = 0; row < means.length; row++) {
-            if (carried[row]) {
-                deviates[row] = normal.samples(count).toArray();
-            }
-        }
-        double[][] drawn = new double[means.length][];
-        for (int row = 0; row < means.length; row++) {
-            if (wanted[row]) {
-                drawn[row] = new double[count];
-                lower.multiplyRow(deviates, means[row], row, drawn[row]);
-            }
-        }
+        FunctionalDraws draws = new FunctionalDraws(factor(), means, wanted, seed);
         double[][] values = new double[formulas.size()][count];
-        for (int f = 0; f < values.length; f++) {
-            formulas.get(f).values(drawn, values[f]);
+        double[] some = new double[FunctionalDraws.BLOCK];
+        for (int from = 0; from < count; from += some.length) {
+            int size = Math.min(some.length, count - from);
+            double[][] drawn = draws.next();
+            for (int f = 0; f < values.length; f++) {
+                formulas.get(f).values(drawn, size, some);
+                System.arraycopy(some, 0, values[f], from, size);
+            }
         }
         return values;
     }

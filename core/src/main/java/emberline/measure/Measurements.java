@@ -7,6 +7,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import org.apache.commons.math3.util.KthSelector;
 
 /**
  * What came of all features of a catalogue on one spectrum, or on the spectra of one object, with
@@ -21,6 +22,9 @@ public final class Measurements {
 
     /** Largest share of draws without a value of which an interval is still given. */
     private static final double MOST_LOST = 0.05;
+
+    /** How many pivots of the first selection the second may use. */
+    private static final int PIVOTS = 511;
 
     /** Share of a normal distribution below minus one sigma. */
     private static final double LOW_TAIL = 0.158655253931457;
@@ -220,14 +224,25 @@ public final class Measurements {
     }
 
     private static Optional<Interval68> ofDraws(double[] draws) {
-        double[] sorted = Arrays.stream(draws).filter(d -> !Double.isNaN(d)).sorted().toArray();
-        if (sorted.length < (1 - MOST_LOST) * draws.length) {
+        double[] valued = new double[draws.length];
+        int size = 0;
+        for (double draw : draws) {
+            if (!Double.isNaN(draw)) {
+                valued[size++] = draw;
+            }
+        }
+        if (size < (1 - MOST_LOST) * draws.length) {
             return Optional.empty();
         }
+        // two numbers are wanted by rank: sorting all would cost several times the drawing
+        double[] work = Arrays.copyOf(valued, size);
+        int[] pivots = new int[PIVOTS];
+        Arrays.fill(pivots, -1);
+        KthSelector selector = new KthSelector();
         return Optional.of(
                 new Interval68(
-                        sorted[(int) (sorted.length * LOW_TAIL)],
-                        sorted[(int) (sorted.length * (1 - LOW_TAIL))]));
+                        selector.select(work, pivots, (int) (size * LOW_TAIL)),
+                        selector.select(work, pivots, (int) (size * (1 - LOW_TAIL)))));
     }
 
     /**

@@ -12,7 +12,8 @@ import java.util.Optional;
  *
  * @param range the band
  * @param coverage share of the band that good pixels cover, 0 to 1
- * @param medianSignalToNoise median of flux over sigma; may be negative where there is no signal
+ * @param medianSignalToNoise median of flux over sigma, at least 0: a median below zero is no
+ *     signal
  */
 public record BandSignal(Range range, double coverage, double medianSignalToNoise) {
 
@@ -131,6 +132,6 @@ public record BandSignal(Range range, double coverage, double medianSignalToNois
         }
         double width = range.highMicron - range.lowMicron;
         double coverage = range == Range.WHOLE ? 1 : Math.min(1, covered / width);
-        return Optional.of(new BandSignal(range, coverage, median));
+        return Optional.of(new BandSignal(range, coverage, Math.max(0, median)));
     }
 }

@@ -26,6 +26,9 @@ public final class Preparer {
     /** Pixels that a resolution element is taken to span where nothing else is known. */
     private static final double PIXELS_PER_ELEMENT = 2;
 
+    /** How far a resolving power may exceed what the sampling allows: one pixel an element. */
+    private static final double MOST_BEYOND_SAMPLING = 2;
+
     /** A preparer; it has no settings of its own. */
     public Preparer() {}
 
@@ -195,18 +198,19 @@ public final class Preparer {
 
     private static ResolvingPower resolvingPower(
             Observation observation, Preparing stated, Spectrum spectrum, List<Finding> findings) {
+        double sampled = fromSampling(spectrum);
         if (stated.resolvingPower().isPresent()) {
-            return new ResolvingPower(stated.resolvingPower().getAsDouble(), Basis.GIVEN);
+            findings.removeIf(
+                    finding -> finding.code().equals(Observation.RESOLVING_POWER_FROM_HEADER));
+            double value = stated.resolvingPower().getAsDouble();
+            warnOfSampling(value, sampled, "stated", findings);
+            return new ResolvingPower(value, Basis.GIVEN);
         }
         if (observation.resolvingPower().isPresent()) {
-            return observation.resolvingPower().get();
+            ResolvingPower header = observation.resolvingPower().get();
+            warnOfSampling(header.value(), sampled, "of the header", findings);
+            return header;
         }
-        double[] perPixel = new double[spectrum.size()];
-        for (int i = 0; i < perPixel.length; i++) {
-            perPixel[i] = spectrum.wavelengthMicron(i) / spectrum.localSpacingMicron(i);
-        }
-        Arrays.sort(perPixel);
-        double estimate = perPixel[perPixel.length / 2] / PIXELS_PER_ELEMENT;
         findings.add(
                 Finding.caution(
                         "resolution-estimated",
@@ -214,7 +218,35 @@ public final class Preparer {
                                 Locale.ROOT,
                                 "resolving power is not stated; %.0f was taken from the sampling"
                                         + " (two pixels a resolution element), an upper limit",
-                                estimate)));
-        return new ResolvingPower(estimate, Basis.SAMPLING);
+                                sampled)));
+        return new ResolvingPower(sampled, Basis.SAMPLING);
+    }
+
+    /** The resolving power of two pixels an element, in the middle of all pixels. */
+    private static double fromSampling(Spectrum spectrum) {
+        double[] perPixel = new double[spectrum.size()];
+        for (int i = 0; i < perPixel.length; i++) {
+            perPixel[i] = spectrum.wavelengthMicron(i) / spectrum.localSpacingMicron(i);
+        }
+        Arrays.sort(perPixel);
+        return perPixel[perPixel.length / 2] / PIXELS_PER_ELEMENT;
+    }
+
+    private static void warnOfSampling(
+            double value, double sampled, String whose, List<Finding> findings) {
+        if (value > MOST_BEYOND_SAMPLING * sampled) {
+            findings.add(
+                    Finding.caution(
+                            "resolution-beyond-sampling",
+                            String.format(
+                                    Locale.ROOT,
+                                    "the resolving power %s is %.0f, but the pixels sample no more"
+                                            + " than about %.0f (two pixels a resolution element):"
+                                            + " check the list or the --resolution option, or"
+                                            + " whether the spectrum was binned",
+                                    whose,
+                                    value,
+                                    sampled)));
+        }
     }
 }

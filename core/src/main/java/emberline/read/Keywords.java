@@ -74,7 +74,7 @@ interface Keywords {
             if (value.isPresent() && isResolvingPower(key, value.get())) {
                 findings.add(
                         Finding.note(
-                                "resolving-power-from-header",
+                                Observation.RESOLVING_POWER_FROM_HEADER,
                                 "Resolving power "
                                         + Math.round(value.get())
                                         + " taken from keyword "

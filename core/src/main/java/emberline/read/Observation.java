@@ -13,6 +13,9 @@ import java.util.Optional;
  */
 public final class Observation {
 
+    /** Code of the finding that the resolving power was taken from the header. */
+    public static final String RESOLVING_POWER_FROM_HEADER = "resolving-power-from-header";
+
     private final String source;
     private final String format;
     private final String sha256;

@@ -245,19 +245,61 @@ class DrawsTest {
         assertTrue(given > 0 && withheld > 0, given + " given, " + withheld + " withheld");
     }
 
-    /** One feature asked alone has the interval of a normal distribution as all together have. */
+    /** What a feature gets depends neither on what else is asked nor on how many draws are. */
     @Test
-    void allIntervalsHaveOneSetOfDraws() {
+    void drawsOfAFeatureAreItsOwn() {
         Measurements measured = TestSpectra.measure(spectrum(4, NoiseModel.INDEPENDENT));
+        double[] among = measured.draws(FEATURES.subList(0, 5), 1000, 1)[2];
+        double[] alone = measured.draws(List.of(FEATURES.get(2)), 1000, 1)[0];
+        double[] fewer = measured.draws(List.of(FEATURES.get(2)), 333, 1)[0];
+        assertArrayEquals(among, alone);
+        assertArrayEquals(Arrays.copyOf(among, 333), fewer);
         Map<String, Interval68> all = measured.intervals68(1);
         assertEquals(
                 measured.all().stream().filter(m -> m.result() instanceof Measured).count(),
                 all.size());
-        Interval68 alone = measured.interval68("burgasser2006/h2o-j", 1).orElseThrow();
-        Interval68 together = all.get("burgasser2006/h2o-j");
-        // an end of the interval of 1000 draws is known to 0.048 sigma; four times root two
-        double tolerance = 4 * Math.sqrt(2) * 0.048 * (alone.high() - alone.low()) / 2;
-        assertEquals(alone.low(), together.low(), tolerance);
-        assertEquals(alone.high(), together.high(), tolerance);
+        assertEquals(
+                measured.interval68("burgasser2006/h2o-j", 1).orElseThrow(),
+                all.get("burgasser2006/h2o-j"));
+    }
+
+    /** A formula has two ways to a value, one draw and many: they agree for every feature. */
+    @Test
+    void drawsOfEveryFeatureLieAroundItsValue() {
+        Measurements measured = TestSpectra.measure(spectrum(1e5, NoiseModel.INDEPENDENT));
+        List<String> ids =
+                measured.all().stream()
+                        .filter(m -> m.result() instanceof Measured)
+                        .map(m -> m.feature().id())
+                        .toList();
+        double[][] draws = measured.draws(ids, 1000, 2);
+        assertTrue(ids.size() > 100, ids.size() + " features");
+        for (int k = 0; k < ids.size(); k++) {
+            Measured one = measured.measured(ids.get(k)).orElseThrow();
+            double mean = Arrays.stream(draws[k]).average().orElseThrow();
+            assertEquals(one.value(), mean, 4.5 * one.oneSigma() / Math.sqrt(1000), ids.get(k));
+            assertEquals(
+                    one.oneSigma(),
+                    new StandardDeviation().evaluate(draws[k]),
+                    0.12 * one.oneSigma(),
+                    ids.get(k));
+        }
+    }
+
+    /** Deviates are used twice, a block of draws apart: no feature of one band may notice. */
+    @Test
+    void drawsAreIndependentOfEachOther() {
+        Measurements measured = TestSpectra.measure(spectrum(20, NoiseModel.INDEPENDENT));
+        int size = 100 * FunctionalDraws.BLOCK;
+        for (double[] draws : measured.draws(FEATURES, size, 9)) {
+            for (int lag : new int[] {1, FunctionalDraws.BLOCK, 2 * FunctionalDraws.BLOCK}) {
+                assertEquals(
+                        0,
+                        correlation(
+                                Arrays.copyOf(draws, size - lag),
+                                Arrays.copyOfRange(draws, lag, size)),
+                        4 / Math.sqrt(size));
+            }
+        }
     }
 }

@@ -71,6 +71,26 @@ class EnvelopeMatrixTest {
         assertClose(new CholeskyDecomposition(full).getL(), lower);
     }
 
+    /** A product made in place, row by row, against Apache Commons Math. */
+    @Test
+    void multiplyingInPlaceIsMultiplying() {
+        RealMatrix windows = windows(6);
+        windows.setRow(7, windows.getRow(5));
+        EnvelopeMatrix factor = of(windows.multiply(windows.transpose())).cholesky();
+        RealMatrix columns = windows(7).getSubMatrix(0, SIZE - 1, 0, 4);
+        double[][] inPlace = columns.getData();
+        for (int row = SIZE - 1; row >= 0; row--) {
+            factor.multiplyRow(inPlace, 5, row, row);
+        }
+        RealMatrix expected = lower(factor).multiply(columns);
+        for (int row = 0; row < SIZE; row++) {
+            for (int n = 0; n < 5; n++) {
+                expected.addToEntry(row, n, row);
+            }
+        }
+        assertClose(expected, new Array2DRowRealMatrix(inPlace));
+    }
+
     /** Windows that follow from others have no noise of their own. */
     @Test
     void dependentRowsAreReturnedToo() {

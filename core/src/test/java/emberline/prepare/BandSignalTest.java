@@ -36,6 +36,16 @@ class BandSignalTest {
         assertTrue(BandSignal.best(flat(1.0, 2.5, 300, Double.NaN, 1)).isEmpty());
     }
 
+    /** Where the sky was taken away twice, the flux is negative; a signal is not. */
+    @Test
+    void aSignalIsNeverNegative() {
+        Spectrum negative = flat(1.0, 2.5, 300, -20, 0.5);
+        assertEquals(5, BandSignal.of(negative).size()); // Y, J, H, K and the whole
+        BandSignal.of(negative)
+                .forEach(
+                        signal -> assertEquals(0, signal.medianSignalToNoise(), signal.toString()));
+    }
+
     private static Spectrum flat(double low, double high, int pixels, double flux, double sigma) {
         double[] wavelengths = new double[pixels];
         for (int i = 0; i < pixels; i++) {

@@ -5,17 +5,23 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.read.Observation;
+import emberline.read.SpectrumReader;
 import emberline.read.UnreadableSpectrumException;
 import emberline.spectrum.AirToVacuum;
 import emberline.spectrum.Finding;
 import emberline.spectrum.Medium;
 import emberline.spectrum.ResolvingPower;
 import emberline.spectrum.ResolvingPower.Basis;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.DoubleUnaryOperator;
+import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 
@@ -126,6 +132,51 @@ class PreparerTest {
         // 1.25 micron over two pixels of 5e-5 micron
         assertEquals(12_500, sampled.resolvingPower().value(), 20);
         assertTrue(codes(sampled).contains("resolution-estimated"));
+    }
+
+    /** 1.25 micron over two pixels of 5e-5 micron is 12,500: twice that is a pixel an element. */
+    @Test
+    void aResolvingPowerBeyondTheSamplingIsDoubted() throws Exception {
+        String code = "resolution-beyond-sampling";
+        Observation flat = flat(1.2, 1.3, Medium.VACUUM);
+        assertTrue(!codes(prepare(flat, NOTHING.withResolvingPower(24_000))).contains(code));
+        PreparedSpectrum beyond = prepare(flat, NOTHING.withResolvingPower(26_000));
+        assertEquals(26_000, beyond.resolvingPower().value());
+        Finding finding =
+                beyond.findings().stream()
+                        .filter(f -> f.code().equals(code))
+                        .findFirst()
+                        .orElseThrow();
+        assertEquals(Finding.Severity.CAUTION, finding.severity());
+        assertTrue(finding.text().contains("is 26000, but"), finding.text());
+        Observation header =
+                observed(
+                        1.2,
+                        1.3,
+                        x -> 1,
+                        Optional.of(Medium.VACUUM),
+                        Optional.of(new ResolvingPower(30_000, Basis.HEADER)));
+        assertTrue(codes(prepare(header, NOTHING)).contains(code));
+        assertTrue(!codes(prepare(header, NOTHING.withResolvingPower(9000))).contains(code));
+        assertTrue(!codes(prepare(flat, NOTHING)).contains(code));
+    }
+
+    /** A note on the header would speak of a number that is not used. */
+    @Test
+    void theNoteOnTheHeaderGoesWhereTheObserverIsFollowed(@TempDir Path folder) throws Exception {
+        Path file = folder.resolve("header.txt");
+        Files.writeString(
+                file,
+                "# RESOLVING_POWER = 800\n# wavelength(micron) flux sigma\n"
+                        + IntStream.range(0, 200)
+                                .mapToObj(i -> (1.2 + 5e-4 * i) + " 1.0 0.1\n")
+                                .collect(Collectors.joining()));
+        Observation read = new SpectrumReader().read(file);
+        String code = Observation.RESOLVING_POWER_FROM_HEADER;
+        assertTrue(codes(prepare(read, NOTHING)).contains(code));
+        PreparedSpectrum given = prepare(read, NOTHING.withResolvingPower(900));
+        assertEquals(new ResolvingPower(900, Basis.GIVEN), given.resolvingPower());
+        assertTrue(!codes(given).contains(code), codes(given).toString());
     }
 
     @Test

@@ -5,7 +5,6 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import emberline.SharedSpectra;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.Kind;
-import emberline.catalogue.Purpose;
 import emberline.measure.FeatureMeasurement;
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurements;
@@ -20,13 +19,21 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.TreeMap;
+import org.apache.commons.math3.stat.descriptive.rank.Percentile;
 import org.junit.jupiter.api.Test;
 
 /**
- * The same object seen by two instruments of different resolution must give the same indices. The
- * two spectra also differ by slit losses, telluric correction and the object's own weather, which
- * the pixel noise does not hold: hence the allowance of 0.02 beside the errors. Colours are left
- * out: they compare bands far apart, and measure the flux calibration of the two instruments.
+ * The same object seen by two instruments of different resolution must give the same indices: for
+ * each index that is valid at both, the median over the objects of what the difference exceeds two
+ * combined sigma by is at most 0.02. The two spectra also differ by slit losses, telluric
+ * correction and the object's own weather, which the pixel noise does not hold: hence the
+ * allowance.
+ *
+ * <p>Colours pass as the others do, but for less reason: they compare bands far apart, so that they
+ * measure the flux calibration between the orders of the two instruments. In half of the objects
+ * they agree within their errors, in the rest they exceed them by up to 0.23 ({@code
+ * testi2001/skj}), and the medians of {@code burgasser2002/h-j}, {@code testi2001/shj} and {@code
+ * testi2001/skj} stand at 0.016.
  */
 class ResolutionsAgreeTest {
 
@@ -68,7 +75,6 @@ class ResolutionsAgreeTest {
                 String id = one.feature().id();
                 boolean both =
                         one.feature().kind() == Kind.BAND_INDEX
-                                && one.feature().purpose() != Purpose.COLOUR
                                 && coarse.measured(id).isPresent()
                                 && fine.measured(id).isPresent();
                 if (both) {
@@ -84,15 +90,19 @@ class ResolutionsAgreeTest {
         List<String> off = new ArrayList<>();
         int judged = 0;
         for (Map.Entry<String, List<Double>> entry : excess.entrySet()) {
-            List<Double> sorted = entry.getValue().stream().sorted().toList();
-            if (sorted.size() >= 3) {
+            if (entry.getValue().size() >= 3) {
                 judged++;
-                double median = sorted.get(sorted.size() / 2);
+                double median =
+                        new Percentile(50)
+                                .evaluate(
+                                        entry.getValue().stream()
+                                                .mapToDouble(Double::doubleValue)
+                                                .toArray());
                 if (median > 0.02) {
                     off.add(String.format(Locale.ROOT, "%s %.3f", entry.getKey(), median));
                 }
             }
         }
-        assertTrue(judged > 40 && off.isEmpty(), judged + " judged, off: " + off);
+        assertTrue(judged > 50 && off.isEmpty(), judged + " judged, off: " + off);
     }
 }

@@ -6,10 +6,12 @@ import java.io.IOException;
 import java.io.StringWriter;
 import java.io.UncheckedIOException;
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.regex.Pattern;
 
-/** Rows of text under a header, as aligned columns or as CSV. Columns of numbers align right. */
+/** Rows of text under a header, as aligned columns, CSV or JSON. Columns of numbers align right. */
 final class AlignedTable {
 
     private static final String GAP = "  ";
@@ -29,6 +31,27 @@ final class AlignedTable {
 
     boolean isEmpty() {
         return rows.isEmpty();
+    }
+
+    /** The table in a form; as JSON an array of objects whose values are all text. */
+    String print(TableFormat format) {
+        return switch (format) {
+            case JSON -> json();
+            case CSV -> csv();
+            case TEXT -> text();
+        };
+    }
+
+    private String json() {
+        List<Map<String, Object>> objects = new ArrayList<>();
+        for (List<String> row : rows) {
+            Map<String, Object> object = new LinkedHashMap<>();
+            for (int c = 0; c < header.size(); c++) {
+                object.put(header.get(c), row.get(c));
+            }
+            objects.add(object);
+        }
+        return JsonText.of(objects) + "\n";
     }
 
     String csv() {

@@ -10,11 +10,8 @@ import emberline.catalogue.Relation;
 import emberline.catalogue.Source;
 import emberline.catalogue.Window;
 import emberline.spectrum.SpectralType;
-import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
-import java.util.Map;
 import java.util.OptionalDouble;
 
 /** The catalogue as a table, and one definition in full. */
@@ -44,21 +41,9 @@ public final class CatalogueTable {
      * @return the printed table, with a line end
      */
     public static String print(List<Feature> features, TableFormat format) {
-        if (format == TableFormat.JSON) {
-            List<Map<String, Object>> objects = new ArrayList<>();
-            for (Feature feature : features) {
-                Map<String, Object> object = new LinkedHashMap<>();
-                List<String> row = row(feature);
-                for (int k = 0; k < HEADER.size(); k++) {
-                    object.put(HEADER.get(k), row.get(k));
-                }
-                objects.add(object);
-            }
-            return JsonText.of(objects) + "\n";
-        }
         AlignedTable table = new AlignedTable(HEADER);
         features.forEach(feature -> table.add(row(feature)));
-        return format == TableFormat.CSV ? table.csv() : table.text();
+        return table.print(format);
     }
 
     private static List<String> row(Feature feature) {
