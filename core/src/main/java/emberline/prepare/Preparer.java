@@ -201,12 +201,7 @@ public final class Preparer {
         if (observation.resolvingPower().isPresent()) {
             return observation.resolvingPower().get();
         }
-        double[] perPixel = new double[spectrum.size()];
-        for (int i = 0; i < perPixel.length; i++) {
-            perPixel[i] = spectrum.wavelengthMicron(i) / spectrum.localSpacingMicron(i);
-        }
-        Arrays.sort(perPixel);
-        double estimate = perPixel[perPixel.length / 2] / PIXELS_PER_ELEMENT;
+        double estimate = samplingPower(spectrum);
         findings.add(
                 Finding.caution(
                         "resolution-estimated",
@@ -216,5 +211,15 @@ public final class Preparer {
                                         + " (two pixels a resolution element), an upper limit",
                                 estimate)));
         return new ResolvingPower(estimate, Basis.SAMPLING);
+    }
+
+    /** The resolving power that the sampling allows: an upper limit. */
+    static double samplingPower(Spectrum spectrum) {
+        double[] perPixel = new double[spectrum.size()];
+        for (int i = 0; i < perPixel.length; i++) {
+            perPixel[i] = spectrum.wavelengthMicron(i) / spectrum.localSpacingMicron(i);
+        }
+        Arrays.sort(perPixel);
+        return perPixel[perPixel.length / 2] / PIXELS_PER_ELEMENT;
     }
 }

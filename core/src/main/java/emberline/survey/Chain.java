@@ -9,6 +9,9 @@ import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
 import emberline.place.calibrated.Calibration;
+import emberline.prepare.Degrader;
+import emberline.prepare.Degrader.Degraded;
+import emberline.prepare.Degrading;
 import emberline.prepare.PreparedSpectrum;
 import emberline.prepare.Preparer;
 import emberline.prepare.Preparing;
@@ -36,7 +39,9 @@ public final class Chain {
     private final Preparer preparer = new Preparer();
     private final Measurer measurer;
     private final LineReporter lines;
-    private final Placer placer;
+    private final PlacerChoice placers;
+    private final Degrader degrader = new Degrader();
+    private final Degrading degrading;
     private final Preparing defaults;
     private final long seed;
     private final boolean toMeasuredRest;
@@ -49,9 +54,31 @@ public final class Chain {
      * @param settings what holds for all objects
      */
     public Chain(FeatureCatalogue catalogue, Measuring measuring, SurveySettings settings) {
+        this(
+                catalogue,
+                measuring,
+                settings,
+                PlacerChoice.always(
+                        new Placer(catalogue, Calibration.standard(), settings.prior().load())));
+    }
+
+    /**
+     * A chain that chooses a placer for each object.
+     *
+     * @param catalogue what is measured
+     * @param measuring how it is measured
+     * @param settings what holds for all objects
+     * @param placers by what each object is placed; made for the same catalogue
+     */
+    public Chain(
+            FeatureCatalogue catalogue,
+            Measuring measuring,
+            SurveySettings settings,
+            PlacerChoice placers) {
         this.measurer = new Measurer(catalogue, measuring);
         this.lines = new LineReporter(catalogue, measuring.site());
-        this.placer = new Placer(catalogue, Calibration.standard(), settings.prior().load());
+        this.placers = placers;
+        this.degrading = settings.degrading();
         this.defaults = settings.preparing();
         this.seed = settings.seed();
         this.toMeasuredRest = settings.toMeasuredRest();
@@ -90,7 +117,13 @@ public final class Chain {
         List<String> troubles = new ArrayList<>();
         for (String path : candidate.spectra()) {
             try {
-                spectra.add(measure(path, reader.read(folder.resolve(path)), stated(candidate)));
+                Degraded degraded =
+                        degrader.degrade(
+                                reader.read(folder.resolve(path)),
+                                stated(candidate),
+                                degrading,
+                                ObjectSeed.of(candidate.name() + "; " + path, seed));
+                spectra.add(measure(path, degraded.observation(), degraded.stated()));
             } catch (UnreadableSpectrumException e) {
                 troubles.add(e.getMessage());
             } catch (InvalidPathException e) {
@@ -161,7 +194,8 @@ public final class Chain {
             Candidate candidate, List<SpectrumResult> spectra, List<String> troubles) {
         Measurements best =
                 Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
-        Placement placement = placer.place(best, ObjectSeed.of(candidate.name(), seed));
+        Placement placement =
+                placers.placerFor(candidate).place(best, ObjectSeed.of(candidate.name(), seed));
         List<Finding> findings = new ArrayList<>();
         spectra.forEach(spectrum -> findings.addAll(spectrum.prepared().findings()));
         for (String trouble : troubles) {

@@ -1,6 +1,7 @@
 package emberline.survey;
 
 import emberline.place.calibrated.TypePriors;
+import emberline.prepare.Degrading;
 import emberline.prepare.Preparing;
 
 /**
@@ -11,9 +12,15 @@ import emberline.prepare.Preparing;
  * @param seed start of all random draws
  * @param prior what is thought of types and gravities before a spectrum is looked at
  * @param toMeasuredRest whether the velocity that lines show is taken out where none is stated
+ * @param degrading how spectra are made worse before they are prepared
  */
 public record SurveySettings(
-        Preparing preparing, int threads, long seed, TypePriors prior, boolean toMeasuredRest) {
+        Preparing preparing,
+        int threads,
+        long seed,
+        TypePriors prior,
+        boolean toMeasuredRest,
+        Degrading degrading) {
 
     /** The seed where none is given. */
     public static final long DEFAULT_SEED = 20_260_101L;
@@ -36,7 +43,8 @@ public record SurveySettings(
                 Runtime.getRuntime().availableProcessors(),
                 DEFAULT_SEED,
                 TypePriors.FLAT,
-                false);
+                false,
+                Degrading.none());
     }
 
     /**
@@ -46,7 +54,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withThreads(int number) {
-        return new SurveySettings(preparing, number, seed, prior, toMeasuredRest);
+        return new SurveySettings(preparing, number, seed, prior, toMeasuredRest, degrading);
     }
 
     /**
@@ -56,7 +64,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withSeed(long start) {
-        return new SurveySettings(preparing, threads, start, prior, toMeasuredRest);
+        return new SurveySettings(preparing, threads, start, prior, toMeasuredRest, degrading);
     }
 
     /**
@@ -66,7 +74,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withPreparing(Preparing stated) {
-        return new SurveySettings(stated, threads, seed, prior, toMeasuredRest);
+        return new SurveySettings(stated, threads, seed, prior, toMeasuredRest, degrading);
     }
 
     /**
@@ -76,7 +84,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withMeasuredRest(boolean shift) {
-        return new SurveySettings(preparing, threads, seed, prior, shift);
+        return new SurveySettings(preparing, threads, seed, prior, shift, degrading);
     }
 
     /**
@@ -86,6 +94,16 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withPrior(TypePriors before) {
-        return new SurveySettings(preparing, threads, seed, before, toMeasuredRest);
+        return new SurveySettings(preparing, threads, seed, before, toMeasuredRest, degrading);
+    }
+
+    /**
+     * These settings with spectra that are made worse first.
+     *
+     * @param how by how much
+     * @return new settings
+     */
+    public SurveySettings withDegrading(Degrading how) {
+        return new SurveySettings(preparing, threads, seed, prior, toMeasuredRest, how);
     }
 }
