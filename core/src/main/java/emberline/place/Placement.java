@@ -1,18 +1,20 @@
 package emberline.place;
 
 import emberline.place.calibrated.CalibratedType;
+import emberline.place.metallicity.MetallicityVerdict;
 import emberline.spectrum.Finding;
 import java.util.List;
 import java.util.Optional;
 
 /**
- * Where an object stands: its type, gravity and activity with what they rest on.
+ * Where an object stands: its type, gravity, metallicity and activity with what they rest on.
  *
  * @param type the adopted type; empty where none could be given
  * @param typeReason why there is no type; empty where there is one
  * @param published the first witness: the published relations
  * @param calibrated the second witness: the loci of spectra of known type
  * @param gravity the gravity class
+ * @param metallicity the metallicity class
  * @param activity the activity by H alpha
  * @param findings what the observer should know about the placement
  */
@@ -22,6 +24,7 @@ public record Placement(
         PublishedType published,
         CalibratedType calibrated,
         GravityVerdict gravity,
+        MetallicityVerdict metallicity,
         Activity activity,
         List<Finding> findings) {
 

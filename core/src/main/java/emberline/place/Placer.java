@@ -7,13 +7,18 @@ import emberline.place.calibrated.CalibratedWitness;
 import emberline.place.calibrated.Calibration;
 import emberline.place.calibrated.TypePrior;
 import emberline.place.calibrated.TypePriors;
+import emberline.place.metallicity.MetallicityJudge;
+import emberline.place.metallicity.MetallicityVerdict;
 import emberline.spectrum.Finding;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 
-/** Places an object on the sequence of spectral types and judges its gravity class and activity. */
+/**
+ * Places an object on the sequence of spectral types and judges its gravity class, metallicity class
+ * and activity.
+ */
 public final class Placer {
 
     /** Two witnesses disagree where their types stand this many of their joint sigma apart. */
@@ -25,6 +30,7 @@ public final class Placer {
     private final PublishedWitness published;
     private final CalibratedWitness calibrated;
     private final GravityJudge gravity;
+    private final MetallicityJudge metallicity;
     private final ActivityJudge activity;
 
     /**
@@ -47,6 +53,7 @@ public final class Placer {
         this.published = new PublishedWitness(catalogue);
         this.calibrated = new CalibratedWitness(calibration, prior);
         this.gravity = new GravityJudge(catalogue);
+        this.metallicity = new MetallicityJudge(catalogue);
         this.activity = new ActivityJudge(catalogue);
     }
 
@@ -54,7 +61,7 @@ public final class Placer {
      * Places an object.
      *
      * @param measurements its features
-     * @param seed start of the random draws for the gravity probabilities; the same seed gives the
+     * @param seed start of the random draws for the probabilities; the same seed gives the
      *     same placement
      * @return type, gravity and activity, or the reasons why there are none
      */
@@ -70,11 +77,14 @@ public final class Placer {
                                         GravityVerdict.notJudged(
                                                 "no type, and the limits depend on the type",
                                                 List.of()));
+        MetallicityVerdict metals =
+                metallicity.judge(measurements, type.map(TypeEstimate::type), seed);
         Activity halpha =
                 type.map(estimate -> activity.judge(measurements, estimate))
                         .orElseGet(() -> Activity.none("no type, and chi depends on the type"));
         List<Finding> findings = new ArrayList<>(ofType(measurements, type, byRelations, byLoci));
         findings.addAll(ofGravity(verdict, byLoci));
+        findings.addAll(MetallicityJudge.findings(metals));
         findings.addAll(activity.findings(halpha));
         return new Placement(
                 type,
@@ -82,6 +92,7 @@ public final class Placer {
                 byRelations,
                 byLoci,
                 verdict,
+                metals,
                 halpha,
                 findings);
     }
