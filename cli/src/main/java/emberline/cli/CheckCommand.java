@@ -77,8 +77,7 @@ final class CheckCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws IOException, InterruptedException {
-        SurveySettings settings =
-                listOptions.settings().withDegrading(degradeOptions.degrading());
+        SurveySettings settings = listOptions.settings().withDegrading(degradeOptions.degrading());
         CandidateList candidates = listOptions.read();
         Chain chain = new Chain(listOptions.catalogue(), listOptions.measuring(), settings);
         Progress progress =
@@ -116,16 +115,14 @@ final class CheckCommand implements Callable<Integer> {
                 new LinkedHashMap<>(RunOptions.of(settings, listOptions.measuring(), false));
         options.remove("reports");
         options.putAll(DegradeOptions.record(settings.degrading()));
-        return new CheckJson(
-                ProgramVersion.number(), listName(), options, settings.seed());
+        return new CheckJson(ProgramVersion.number(), listName(), options, settings.seed());
     }
 
     private String listName() {
         return listOptions.file().getFileName().toString();
     }
 
-    private void write(CheckScore score, String json, SurveySettings settings)
-            throws IOException {
+    private void write(CheckScore score, String json, SurveySettings settings) throws IOException {
         Files.createDirectories(out);
         AtomicFile.write(out.resolve("check.json"), json);
         AtomicFile.write(out.resolve("residuals.csv"), CheckTables.residuals(score));

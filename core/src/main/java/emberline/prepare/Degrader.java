@@ -44,8 +44,7 @@ public final class Degrader {
      * @return the degraded observation, with a finding for each step
      * @throws UnreadableSpectrumException if fewer than two pixels are left
      */
-    public Degraded degrade(
-            Observation observation, Preparing stated, Degrading how, long seed)
+    public Degraded degrade(Observation observation, Preparing stated, Degrading how, long seed)
             throws UnreadableSpectrumException {
         Degraded degraded = new Degraded(observation, stated);
         if (how.band().isPresent()) {
@@ -57,8 +56,7 @@ public final class Degrader {
         if (how.signalToNoise().isPresent()) {
             double target = how.signalToNoise().getAsDouble();
             degraded =
-                    new Degraded(
-                            noisier(degraded.observation(), target, seed), degraded.stated());
+                    new Degraded(noisier(degraded.observation(), target, seed), degraded.stated());
         }
         return degraded;
     }
@@ -159,7 +157,9 @@ public final class Degrader {
         double[] wavelengths = observation.wavelengthsMicron();
         double[] flux = observation.fluxes();
         double[] own = observation.fluxSigmas().orElseGet(() -> PixelScatter.sigma(flux));
-        if (!(median(wavelengths, flux, own, 0) > target)) {
+        Spectrum spectrum = Spectrum.of(wavelengths, flux, own);
+        Optional<BandSignal> best = BandSignal.best(spectrum);
+        if (best.isEmpty() || !(best.get().medianSignalToNoise() > target)) {
             Finding kept =
                     Finding.note(
                             "degraded-not",
@@ -170,7 +170,7 @@ public final class Degrader {
                                     target));
             return with(observation, wavelengths, flux, observation.fluxSigmas(), kept);
         }
-        double added = addedSigma(wavelengths, flux, own, target);
+        double added = addedSigma(spectrum, best.get().range(), target);
         UniformRandomProvider random = RandomSource.XO_RO_SHI_RO_128_PP.create(seed);
         ZigguratSampler.NormalizedGaussian normal = ZigguratSampler.NormalizedGaussian.of(random);
         double[] noisy = new double[flux.length];
@@ -192,26 +192,35 @@ public final class Degrader {
                 finding);
     }
 
-    private static double addedSigma(
-            double[] wavelengths, double[] flux, double[] own, double target) {
-        double high = 1;
-        for (double value : flux) {
-            high = Math.max(high, Double.isFinite(value) ? Math.abs(value) : 0);
-        }
+    /** The noise that brings the median of a band down to the target. */
+    private static double addedSigma(Spectrum spectrum, BandSignal.Range range, double target) {
+        int[] pixels = BandSignal.pixels(spectrum, range);
         double low = 0;
-        high /= target;
-        while (median(wavelengths, flux, own, high) > target) {
+        double high =
+                IntStream.of(pixels).mapToDouble(i -> Math.abs(spectrum.flux(i))).max().orElse(1);
+        while (median(spectrum, pixels, high) > target) {
             high *= 2;
         }
         for (int k = 0; k < BISECTIONS; k++) {
             double middle = (low + high) / 2;
-            if (median(wavelengths, flux, own, middle) > target) {
+            if (median(spectrum, pixels, middle) > target) {
                 low = middle;
             } else {
                 high = middle;
             }
         }
         return (low + high) / 2;
+    }
+
+    private static double median(Spectrum spectrum, int[] pixels, double added) {
+        double[] ratios =
+                IntStream.of(pixels)
+                        .mapToDouble(
+                                i -> spectrum.flux(i) / Math.hypot(spectrum.fluxSigma(i), added))
+                        .sorted()
+                        .toArray();
+        int middle = ratios.length / 2;
+        return ratios.length % 2 == 1 ? ratios[middle] : (ratios[middle - 1] + ratios[middle]) / 2;
     }
 
     private static double[] quadratic(double[] sigma, double added) {
@@ -221,13 +230,6 @@ public final class Degrader {
             sum[i] = sigma[i] > 0 ? Math.hypot(sigma[i], added) : sigma[i];
         }
         return sum;
-    }
-
-    private static double median(
-            double[] wavelengths, double[] flux, double[] own, double added) {
-        return BandSignal.best(Spectrum.of(wavelengths, flux, quadratic(own, added)))
-                .map(BandSignal::medianSignalToNoise)
-                .orElse(Double.NaN);
     }
 
     private static Observation with(

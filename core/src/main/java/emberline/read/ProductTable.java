@@ -43,7 +43,8 @@ public final class ProductTable {
         InputStream stream = ProductTable.class.getResourceAsStream(resource);
         if (stream == null) {
             throw new IllegalStateException(
-                    resource + ": not in the product: expected a table of the build. Build it anew.");
+                    resource
+                            + ": not in the product: expected a table of the build. Build it anew.");
         }
         try (CsvReader<NamedCsvRecord> rows =
                 CsvReader.builder()

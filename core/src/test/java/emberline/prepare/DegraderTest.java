@@ -88,6 +88,15 @@ class DegraderTest {
         assertTrue(has(after, "degraded-noise"));
     }
 
+    /** Fluxes in physical units are tiny. */
+    @Test
+    void theScaleOfTheFluxDoesNotMatter() throws UnreadableSpectrumException {
+        Observation before = observation(w -> 1e-17, 1e-19, true);
+        Observation after = degraded(before, Degrading.none().toSignalToNoise(20)).observation();
+        assertEquals(20, signal(after), 0.1);
+        assertEquals(5e-19, after.fluxSigmas().orElseThrow()[100], 1e-20);
+    }
+
     /** Where the file has no sigma, the noise is estimated from the degraded pixels. */
     @Test
     void noiseIsSeenWhereTheFileStatesNone() throws UnreadableSpectrumException {
@@ -128,7 +137,8 @@ class DegraderTest {
         double centre = 1.5;
         double sigma = centre / 3000 / 2.3548;
         Observation before =
-                observation(w -> 1 - 0.8 * Math.exp(-Math.pow((w - centre) / sigma, 2) / 2), 0, true);
+                observation(
+                        w -> 1 - 0.8 * Math.exp(-Math.pow((w - centre) / sigma, 2) / 2), 0, true);
         Degraded after = degraded(before, Degrading.none().toResolvingPower(400));
         double[] w = after.observation().wavelengthsMicron();
         double[] flux = after.observation().fluxes();
@@ -166,12 +176,13 @@ class DegraderTest {
 
     @Test
     void badPixelsDoNotSpread() throws UnreadableSpectrumException {
-        Observation before =
-                observation(w -> w > 1.5 && w < 1.5005 ? Double.NaN : 1, 0, true);
-        double[] flux = degraded(before, Degrading.none().toResolvingPower(100)).observation().fluxes();
+        Observation before = observation(w -> w > 1.5 && w < 1.5005 ? Double.NaN : 1, 0, true);
+        double[] flux =
+                degraded(before, Degrading.none().toResolvingPower(100)).observation().fluxes();
         assertTrue(Arrays.stream(flux).allMatch(f -> Math.abs(f - 1) < 1e-9));
         Observation gap = observation(w -> w > 1.5 && w < 1.6 ? Double.NaN : 1, 0, true);
-        double[] with = degraded(gap, Degrading.none().toResolvingPower(100)).observation().fluxes();
+        double[] with =
+                degraded(gap, Degrading.none().toResolvingPower(100)).observation().fluxes();
         assertTrue(Arrays.stream(with).anyMatch(Double::isNaN));
     }
 
@@ -191,9 +202,7 @@ class DegraderTest {
         Degrading optical = Degrading.none().toBand(ObservedBand.OPTICAL);
         Observation infrared = cutBelowOne(before);
         String message =
-                assertThrows(
-                                UnreadableSpectrumException.class,
-                                () -> degraded(infrared, optical))
+                assertThrows(UnreadableSpectrumException.class, () -> degraded(infrared, optical))
                         .getMessage();
         assertTrue(message.contains("0 pixels in the band optical"), message);
     }
@@ -215,8 +224,7 @@ class DegraderTest {
 
     @Test
     void numbersThatAreNotPositiveAreRefused() {
-        assertThrows(
-                IllegalArgumentException.class, () -> Degrading.none().toSignalToNoise(0));
+        assertThrows(IllegalArgumentException.class, () -> Degrading.none().toSignalToNoise(0));
         assertThrows(
                 IllegalArgumentException.class,
                 () -> Degrading.none().toResolvingPower(Double.NaN));

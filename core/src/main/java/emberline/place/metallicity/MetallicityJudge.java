@@ -1,5 +1,6 @@
 package emberline.place.metallicity;
 
+import emberline.catalogue.Band;
 import emberline.catalogue.Feature;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.Form;
@@ -14,10 +15,12 @@ import emberline.spectrum.Finding;
 import emberline.spectrum.SpectralType;
 import java.util.ArrayList;
 import java.util.EnumMap;
+import java.util.EnumSet;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import java.util.stream.Collectors;
 
 /**
@@ -31,10 +34,8 @@ public final class MetallicityJudge {
 
     private static final int DRAWS = 2000;
     private static final String CAH1 = "reid1995/cah1";
+    private static final Set<Band> NEAR_INFRARED = EnumSet.of(Band.J, Band.H, Band.K);
     private static final String TIO5 = "reid1995/tio5";
-
-    /** A feature that shows that the near-infrared is covered. */
-    private static final String NEAR_INFRARED = "burgasser2006/k-j";
 
     /** K5 (subclass): before it TiO is too weak. */
     private static final double FIRST_TYPE = -2;
@@ -81,7 +82,7 @@ public final class MetallicityJudge {
             Measurements measurements, Optional<SpectralType> type, long seed) {
         List<ZetaReading> readings =
                 zetas.stream().map(zeta -> reading(zeta, measurements, seed)).toList();
-        String hint = measurements.measured(NEAR_INFRARED).isPresent() ? NO_HINT : "";
+        String hint = coversNearInfrared(measurements) ? NO_HINT : "";
         Map<Name, Double> probabilities = mean(readings);
         Optional<Name> likeliest =
                 probabilities.entrySet().stream()
@@ -97,6 +98,12 @@ public final class MetallicityJudge {
                         Optional.empty(), reason, Map.of(), readings, hint, VALID_RANGE);
     }
 
+    private static boolean coversNearInfrared(Measurements measurements) {
+        return measurements.all().stream()
+                .filter(m -> NEAR_INFRARED.contains(m.feature().band()))
+                .anyMatch(m -> m.result() instanceof Measured);
+    }
+
     private ZetaReading reading(Feature zeta, Measurements measurements, long seed) {
         Measurement value =
                 measurements
@@ -105,7 +112,8 @@ public final class MetallicityJudge {
                         .orElseThrow(
                                 () ->
                                         new IllegalArgumentException(
-                                                zeta.id() + ": expected it among the measurements"));
+                                                zeta.id()
+                                                        + ": expected it among the measurements"));
         List<MetallicityClass> classes = classes(zeta);
         if (!(value instanceof Measured measured)) {
             Measurement.NotMeasured why = (Measurement.NotMeasured) value;
@@ -198,8 +206,11 @@ public final class MetallicityJudge {
         if (readings.isEmpty()) {
             return "the catalogue has no zeta";
         }
+        if (readings.stream().noneMatch(r -> r.zeta() instanceof Measured)) {
+            return "the optical bands of TiO and CaH (0.68 to 0.72 micron) were not all measured";
+        }
         if (readings.stream().noneMatch(ZetaReading::isUsed)) {
-            return "zeta of TiO5, CaH2 and CaH3: " + readings.get(0).reason();
+            return "zeta does not apply: " + readings.get(0).reason();
         }
         if (type.isEmpty()) {
             return "no type, and L dwarfs look like subdwarfs in these indices";

@@ -63,8 +63,7 @@ public record CheckScore(
      * @return the score
      */
     public static CheckScore of(List<ScoredObject> objects) {
-        List<ScoredObject> late =
-                objects.stream().filter(o -> o.known().isLateDwarf()).toList();
+        List<ScoredObject> late = objects.stream().filter(o -> o.known().isLateDwarf()).toList();
         List<ScoredObject> good =
                 late.stream().filter(o -> GOOD_OR_FAIR.contains(o.tier())).toList();
         List<TypeScore> types = new ArrayList<>();
@@ -160,8 +159,7 @@ public record CheckScore(
                                         || Math.abs(o.pull().orElseThrow()) > OFF_SIGMA)
                 .sorted(
                         Comparator.comparingDouble(
-                                        (ScoredObject o) ->
-                                                -Math.abs(o.difference().orElseThrow()))
+                                        (ScoredObject o) -> -Math.abs(o.difference().orElseThrow()))
                                 .thenComparing(ScoredObject::name))
                 .toList();
     }

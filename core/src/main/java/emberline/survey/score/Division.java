@@ -33,9 +33,20 @@ public record Division(String title, List<TypeScore> scores) {
 
     private static final List<Range> FINE_TYPES =
             List.of(
-                    types(-9, 2), types(2, 4), types(4, 6), types(6, 8), types(8, 10),
-                    types(10, 12), types(12, 14), types(14, 16), types(16, 18), types(18, 20),
-                    types(20, 23), types(23, 26), types(26, 30), y());
+                    types(-9, 2),
+                    types(2, 4),
+                    types(4, 6),
+                    types(6, 8),
+                    types(8, 10),
+                    types(10, 12),
+                    types(12, 14),
+                    types(14, 16),
+                    types(16, 18),
+                    types(18, 20),
+                    types(20, 23),
+                    types(23, 26),
+                    types(26, 30),
+                    y());
 
     private static final List<Range> RESOLUTIONS =
             List.of(
@@ -69,10 +80,7 @@ public record Division(String title, List<TypeScore> scores) {
                 byWord("tier", objects, ScoredObject::tier),
                 inRanges("resolving power", objects, RESOLUTIONS, ScoredObject::resolvingPower),
                 inRanges(
-                        "signal-to-noise per pixel",
-                        objects,
-                        SIGNALS,
-                        ScoredObject::signalToNoise),
+                        "signal-to-noise per pixel", objects, SIGNALS, ScoredObject::signalToNoise),
                 byWord("gravity as listed", objects, o -> o.known().gravity()),
                 byWord("data set", objects, ScoredObject::dataset));
     }

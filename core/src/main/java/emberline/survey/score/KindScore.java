@@ -31,10 +31,8 @@ public record KindScore(
     private static final String LATE_DWARF = "late dwarf";
 
     static KindScore of(List<ScoredObject> objects) {
-        List<ScoredObject> late =
-                objects.stream().filter(o -> o.known().isLateDwarf()).toList();
-        List<ScoredObject> other =
-                objects.stream().filter(o -> !o.known().holdsDwarf()).toList();
+        List<ScoredObject> late = objects.stream().filter(o -> o.known().isLateDwarf()).toList();
+        List<ScoredObject> other = objects.stream().filter(o -> !o.known().holdsDwarf()).toList();
         return new KindScore(
                 Confusion.of(
                         objects,

@@ -64,8 +64,7 @@ public record TypeScore(String label, int objects, int typed, Optional<Figures> 
                 Arrays.stream(off).average().orElseThrow(),
                 Math.sqrt(Arrays.stream(off).map(x -> x * x).average().orElseThrow()),
                 median(Arrays.stream(off).map(Math::abs).toArray()),
-                MAD_TO_SIGMA
-                        * median(Arrays.stream(off).map(x -> Math.abs(x - middle)).toArray()),
+                MAD_TO_SIGMA * median(Arrays.stream(off).map(x -> Math.abs(x - middle)).toArray()),
                 median(
                         typed.stream()
                                 .mapToDouble(o -> o.found().type().orElseThrow().sigmaSubclass())

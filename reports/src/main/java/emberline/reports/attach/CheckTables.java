@@ -154,7 +154,13 @@ public final class CheckTables {
         AlignedTable table =
                 new AlignedTable(
                         List.of(
-                                "name", "known", "found", "sigma", "off", "pull", "dataset",
+                                "name",
+                                "known",
+                                "found",
+                                "sigma",
+                                "off",
+                                "pull",
+                                "dataset",
                                 "findings"));
         for (ScoredObject object : outliers) {
             TypeEstimate found = object.found().type().orElseThrow();
@@ -182,12 +188,31 @@ public final class CheckTables {
         AlignedTable table =
                 new AlignedTable(
                         List.of(
-                                "name", "group", "dataset", "tier", "status", "reason",
-                                "known_kind", "kind", "known_type_number", "type_number",
-                                "type_sigma", "type_lo68", "type_hi68", "type_lo95", "type_hi95",
-                                "difference", "pull", "known_gravity", "gravity",
-                                "known_metallicity", "metallicity", "resolution", "snr",
-                                "counts_for_types", "findings"));
+                                "name",
+                                "group",
+                                "dataset",
+                                "tier",
+                                "status",
+                                "reason",
+                                "known_kind",
+                                "kind",
+                                "known_type_number",
+                                "type_number",
+                                "type_sigma",
+                                "type_lo68",
+                                "type_hi68",
+                                "type_lo95",
+                                "type_hi95",
+                                "difference",
+                                "pull",
+                                "known_gravity",
+                                "gravity",
+                                "known_metallicity",
+                                "metallicity",
+                                "resolution",
+                                "snr",
+                                "counts_for_types",
+                                "findings"));
         for (ScoredObject object : score.objects()) {
             table.add(residual(object));
         }

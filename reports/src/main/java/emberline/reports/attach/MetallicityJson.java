@@ -52,8 +52,7 @@ final class MetallicityJson {
         return reading.zeta() instanceof Measured measured
                 ? JsonText.number(
                         Digits.feature(
-                                reading.feature(),
-                                value ? measured.value() : measured.oneSigma()))
+                                reading.feature(), value ? measured.value() : measured.oneSigma()))
                 : null;
     }
 }

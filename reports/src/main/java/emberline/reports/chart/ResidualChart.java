@@ -101,10 +101,7 @@ public final class ResidualChart {
             double[] off =
                     typed.stream()
                             .filter(o -> o.known().typeNumber().orElseThrow() >= start)
-                            .filter(
-                                    o ->
-                                            o.known().typeNumber().orElseThrow()
-                                                    < start + CLASS_WIDTH)
+                            .filter(o -> o.known().typeNumber().orElseThrow() < start + CLASS_WIDTH)
                             .mapToDouble(o -> o.difference().orElseThrow())
                             .sorted()
                             .toArray();

@@ -4,6 +4,7 @@ import emberline.reports.attach.Digits;
 import emberline.reports.chart.ResidualChart;
 import emberline.reports.paint.Frame;
 import emberline.survey.score.CheckScore;
+import emberline.survey.score.Confusion;
 import emberline.survey.score.Division;
 import emberline.survey.score.TypeScore;
 import emberline.survey.score.TypeScore.Figures;
@@ -23,9 +24,18 @@ public final class CheckReport {
     private static final float GUTTER = 22;
     private static final float DIFFERENCES_TALL = 232;
     private static final float SMALL_TALL = 136;
-    private static final Frame WIDE = new Frame(34, 4, 4, 25);
+    private static final Frame WIDE = new Frame(34, 4, 9, 25);
     private static final Color BOX = new Color(0xF3F5F8);
     private static final float BOX_PAD = 7;
+
+    /** Right ends of the columns of figures (point from the margin). */
+    private static final float[] COLUMNS = {150, 190, 232, 276, 330, 376, 420, 462, 505};
+
+    private static final String[] NAMES = {
+        "objects", "typed", "bias", "rms", "median off", "scatter", "sigma", "in 68%", "in 95%"
+    };
+
+    private static final float GRAVITY_SHIFT = 4;
 
     private static final String LIMITS =
             "Published types are good to half a subclass or so, and infrared and optical types of"
@@ -112,9 +122,7 @@ public final class CheckReport {
                                             + " all other dwarfs. Diamonds: median of two subclasses"
                                             + " with the middle 68%. Triangles point to what lies"
                                             + " outside.",
-                                    left,
-                                    y,
-                                    width)
+                                    left, y, width)
                             + 10;
             float half = (width - GUTTER) / 2;
             float second = left + half + GUTTER;
@@ -134,9 +142,7 @@ public final class CheckReport {
                                     "Share of known types inside an interval. Curve: normal errors of"
                                             + " the stated size; diamonds: the stated 68% and 95%"
                                             + " intervals.",
-                                    second,
-                                    y,
-                                    half)
+                                    second, y, half)
                             + 11;
             float limitsTop = limitsTop();
             figures(score, y, limitsTop - 6);
@@ -146,8 +152,7 @@ public final class CheckReport {
 
         private float head(CheckScore score, String list, String degraded) throws IOException {
             float y = FirstPage.TOP + 14;
-            String title =
-                    document.lines().fit(styles.name(), "Check of " + list, width - 140);
+            String title = document.lines().fit(styles.name(), "Check of " + list, width - 140);
             sheet.text(styles.name(), FirstPage.MARGIN, y, title);
             sheet.textRight(
                     styles.subhead(),
@@ -198,16 +203,11 @@ public final class CheckReport {
 
         /** The figures by range of type and by tier, as many rows as there is room for. */
         private void figures(CheckScore score, float from, float end) throws IOException {
-            float[] columns = {150, 190, 232, 276, 330, 376, 420, 462, 505};
-            String[] names = {
-                "objects", "typed", "bias", "rms", "median off", "scatter", "sigma", "in 68%",
-                "in 95%"
-            };
             float y = from;
             sheet.text(styles.heading(), FirstPage.MARGIN, y, "Figures (subclass)");
-            for (int c = 0; c < names.length; c++) {
+            for (int c = 0; c < COLUMNS.length; c++) {
                 Style quiet = styles.table().in(document.theme().quiet());
-                sheet.textRight(quiet, FirstPage.MARGIN + columns[c], y, names[c]);
+                sheet.textRight(quiet, FirstPage.MARGIN + COLUMNS[c], y, NAMES[c]);
             }
             sheet.rule(FirstPage.MARGIN, right, y + 3, document.theme().rule(), 0.5f);
             y += 11.5f;
@@ -226,49 +226,66 @@ public final class CheckReport {
                                                             s.figures())));
                 }
             }
+            List<List<String>> lines = new ArrayList<>();
             for (TypeScore row : rows) {
-                if (y > end) {
-                    return;
+                lines.add(cells(row));
+            }
+            y = table(lines, COLUMNS, y, end);
+            gravity(score.gravity(), y + 8, end);
+        }
+
+        /** Rows of a label and numbers; what finds no room is said to stand elsewhere. */
+        private float table(List<List<String>> rows, float[] columns, float from, float end)
+                throws IOException {
+            float y = from;
+            for (int r = 0; r < rows.size(); r++) {
+                boolean last = y + styles.table().leadingPoint() > end;
+                if (last && r < rows.size() - 1) {
+                    String left = rows.size() - r + " more rows stand in check.json";
+                    sheet.text(styles.note(), FirstPage.MARGIN, y, left);
+                    return y + styles.table().leadingPoint();
                 }
-                String label = document.lines().fit(styles.table(), row.label(), 118);
+                List<String> row = rows.get(r);
+                String label = document.lines().fit(styles.table(), row.get(0), 118);
                 sheet.text(styles.table(), FirstPage.MARGIN, y, label);
-                List<String> cells = cells(row);
-                for (int c = 0; c < cells.size(); c++) {
+                for (int c = 1; c < row.size(); c++) {
                     sheet.textRight(
-                            styles.table(), FirstPage.MARGIN + columns[c], y, cells.get(c));
+                            styles.table(), FirstPage.MARGIN + columns[c - 1], y, row.get(c));
                 }
                 y += styles.table().leadingPoint() + 0.4f;
             }
-            gravity(score, y + 3, end);
+            return y;
         }
 
-        private void gravity(CheckScore score, float from, float end) throws IOException {
-            List<String> pieces = new ArrayList<>();
-            for (Map.Entry<String, List<Integer>> row : score.gravity().rows().entrySet()) {
-                List<String> counts = new ArrayList<>();
-                for (int c = 0; c < row.getValue().size(); c++) {
-                    if (row.getValue().get(c) > 0) {
-                        counts.add(row.getValue().get(c) + " " + score.gravity().found().get(c));
-                    }
-                }
-                pieces.add(row.getKey() + ": " + String.join(", ", counts));
-            }
-            if (pieces.isEmpty()) {
+        /** Known gravity classes against those found, where there is room. */
+        private void gravity(Confusion gravity, float from, float end) throws IOException {
+            if (gravity.rows().isEmpty() || from + 3 * styles.table().leadingPoint() > end) {
                 return;
             }
-            String text = "Gravity, M6 to L7, listed: found. " + String.join("; ", pieces) + ".";
-            float y = from;
-            for (String line : document.lines().wrap(styles.table(), text, width)) {
-                if (y > end) {
-                    return;
-                }
-                sheet.text(styles.table(), FirstPage.MARGIN, y, line);
-                y += styles.table().leadingPoint();
+            sheet.text(styles.heading(), FirstPage.MARGIN, from, "Gravity as listed, M6 to L7");
+            for (int c = 0; c < gravity.found().size() && c < COLUMNS.length; c++) {
+                sheet.textRight(
+                        styles.table().in(document.theme().quiet()),
+                        FirstPage.MARGIN + COLUMNS[c] + GRAVITY_SHIFT,
+                        from,
+                        gravity.found().get(c));
             }
+            sheet.rule(FirstPage.MARGIN, right, from + 3, document.theme().rule(), 0.5f);
+            List<List<String>> rows = new ArrayList<>();
+            for (Map.Entry<String, List<Integer>> known : gravity.rows().entrySet()) {
+                List<String> cells = new ArrayList<>(List.of(known.getKey()));
+                known.getValue().forEach(count -> cells.add(count.toString()));
+                rows.add(cells);
+            }
+            float[] columns = COLUMNS.clone();
+            for (int c = 0; c < columns.length; c++) {
+                columns[c] += GRAVITY_SHIFT;
+            }
+            table(rows, columns, from + 11.5f, end);
         }
 
         private List<String> cells(TypeScore score) {
-            List<String> cells = new ArrayList<>();
+            List<String> cells = new ArrayList<>(List.of(score.label()));
             cells.add(Integer.toString(score.objects()));
             cells.add(Integer.toString(score.typed()));
             score.figures()
@@ -304,8 +321,7 @@ public final class CheckReport {
             float tall = settings.paper().heightPoint() - FirstPage.FOOT - 8 - top;
             sheet.box(FirstPage.MARGIN, top, width, tall, BOX);
             float y = top + BOX_PAD + 6.5f;
-            sheet.text(
-                    styles.heading(), FirstPage.MARGIN + BOX_PAD, y, "What this cannot tell");
+            sheet.text(styles.heading(), FirstPage.MARGIN + BOX_PAD, y, "What this cannot tell");
             y += styles.heading().leadingPoint();
             for (String line : limitsLines()) {
                 sheet.text(styles.body(), FirstPage.MARGIN + BOX_PAD, y, line);
