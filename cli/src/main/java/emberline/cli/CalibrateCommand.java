@@ -99,7 +99,11 @@ final class CalibrateCommand implements Callable<Integer> {
 
     private List<String> remarks(String what) {
         return List.of(
-                "Emberline " + ProgramVersion.number() + ": calibrate " + listOptions.file().getFileName() + ".",
+                "Emberline "
+                        + ProgramVersion.number()
+                        + ": calibrate "
+                        + listOptions.file().getFileName()
+                        + ".",
                 "Our own measurements on public spectra; types, gravities and kinds as published;"
                         + " `source` in reference.csv names the data set.",
                 what);

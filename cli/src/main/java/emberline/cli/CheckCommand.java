@@ -1,5 +1,8 @@
 package emberline.cli;
 
+import emberline.catalogue.FeatureCatalogue;
+import emberline.measure.Measuring;
+import emberline.prepare.Degrading;
 import emberline.read.CandidateList;
 import emberline.reports.attach.AtomicFile;
 import emberline.reports.attach.CheckJson;
@@ -9,6 +12,9 @@ import emberline.reports.attach.ResultColumns;
 import emberline.reports.page.CheckReport;
 import emberline.reports.page.ReportSettings;
 import emberline.survey.Chain;
+import emberline.survey.HeldOutPlacers;
+import emberline.survey.PlacerChoice;
+import emberline.survey.ReferenceMaker;
 import emberline.survey.Status;
 import emberline.survey.SurveyRunner;
 import emberline.survey.SurveySettings;
@@ -49,6 +55,15 @@ final class CheckCommand implements Callable<Integer> {
     @Mixin private DegradeOptions degradeOptions;
 
     @Option(
+            names = "--leave-out",
+            description =
+                    "Learn the calibration from this list, in ten folds, and place each object by"
+                            + " one that has not seen it; takes the list twice. Without it the"
+                            + " product's own calibration is used, and objects from which that was"
+                            + " learned flatter the scores.")
+    private boolean leaveOut;
+
+    @Option(
             names = "--format",
             paramLabel = "text|json",
             defaultValue = "text",
@@ -79,7 +94,7 @@ final class CheckCommand implements Callable<Integer> {
     public Integer call() throws IOException, InterruptedException {
         SurveySettings settings = listOptions.settings().withDegrading(degradeOptions.degrading());
         CandidateList candidates = listOptions.read();
-        Chain chain = new Chain(listOptions.catalogue(), listOptions.measuring(), settings);
+        Chain chain = chain(candidates, settings);
         Progress progress =
                 new Progress(
                         spec.commandLine().getErr(),
@@ -110,10 +125,28 @@ final class CheckCommand implements Callable<Integer> {
         return ExitCode.of(objects.size(), score.failed());
     }
 
+    /** The chain that is scored; with {@code --leave-out} it is learned from the list first. */
+    private Chain chain(CandidateList candidates, SurveySettings settings)
+            throws IOException, InterruptedException {
+        FeatureCatalogue catalogue = listOptions.catalogue();
+        Measuring measuring = listOptions.measuring();
+        if (!leaveOut) {
+            return new Chain(catalogue, measuring, settings);
+        }
+        SurveySettings asObserved = settings.withDegrading(Degrading.none());
+        ReferenceMaker maker = new ReferenceMaker();
+        new SurveyRunner(new Chain(catalogue, measuring, asObserved), settings.threads())
+                .run(candidates, result -> result, maker::add);
+        PlacerChoice unseen =
+                HeldOutPlacers.learned(maker.table(), catalogue, settings.prior().load());
+        return new Chain(catalogue, measuring, settings, unseen);
+    }
+
     private CheckJson json(SurveySettings settings) {
         Map<String, String> options =
                 new LinkedHashMap<>(RunOptions.of(settings, listOptions.measuring(), false));
         options.remove("reports");
+        options.put("leave_out", Boolean.toString(leaveOut));
         options.putAll(DegradeOptions.record(settings.degrading()));
         return new CheckJson(ProgramVersion.number(), listName(), options, settings.seed());
     }

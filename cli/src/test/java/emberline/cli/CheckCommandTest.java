@@ -28,8 +28,8 @@ class CheckCommandTest {
         List<String> truth = Files.readAllLines(DemoRun.survey().resolveSibling("truth.csv"));
         int written = 0;
         for (int k = 1; k < truth.size() && written < 4; k++) {
-            String[] known = truth.get(k).split(",");
-            String[] listed = survey.get(k).split(",");
+            String[] known = truth.get(k).split(",", -1);
+            String[] listed = survey.get(k).split(",", -1);
             if (known[1].equals("late dwarf") && known[7].equals("prism")) {
                 double type = Double.parseDouble(known[2]);
                 Path file = spectra.resolveSibling(listed[1]);

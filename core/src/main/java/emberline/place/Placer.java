@@ -16,8 +16,8 @@ import java.util.Locale;
 import java.util.Optional;
 
 /**
- * Places an object on the sequence of spectral types and judges its gravity class, metallicity class
- * and activity.
+ * Places an object on the sequence of spectral types and judges its gravity class, metallicity
+ * class and activity.
  */
 public final class Placer {
 
@@ -61,8 +61,8 @@ public final class Placer {
      * Places an object.
      *
      * @param measurements its features
-     * @param seed start of the random draws for the probabilities; the same seed gives the
-     *     same placement
+     * @param seed start of the random draws for the probabilities; the same seed gives the same
+     *     placement
      * @return type, gravity and activity, or the reasons why there are none
      */
     public Placement place(Measurements measurements, long seed) {

@@ -113,7 +113,7 @@ class CheckReportTest {
         String json = new CheckJson("0.1.0", "list.csv", Map.of(), 7).text(score);
         String line =
                 text.lines().filter(l -> l.startsWith("all dwarfs")).findFirst().orElseThrow();
-        String[] cells = line.split(" {2,}");
+        String[] cells = line.split(" {2,}", -1);
         assertTrue(
                 json.contains(
                         "{\"label\": \"all dwarfs\", \"objects\": "
