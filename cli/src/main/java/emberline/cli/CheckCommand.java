@@ -119,7 +119,10 @@ final class CheckCommand implements Callable<Integer> {
         }
         spec.commandLine()
                 .getOut()
-                .print(format == ScoreFormat.JSON ? json : CheckTables.text(score));
+                .print(
+                        format == ScoreFormat.JSON
+                                ? json
+                                : CheckTables.text(score, remark(settings)));
         spec.commandLine().getOut().flush();
         progress.finish(objects.size() + (objects.size() == 1 ? " object" : " objects"));
         return ExitCode.of(objects.size(), score.failed());
@@ -162,15 +165,26 @@ final class CheckCommand implements Callable<Integer> {
         if (CheckReport.canReport(score)) {
             ReportSettings paper = ReportSettings.of(ProgramVersion.number(), settings.seed());
             ByteArrayOutputStream pdf = new ByteArrayOutputStream();
-            new CheckReport(paper).write(score, listName(), degraded(settings), pdf);
+            new CheckReport(paper).write(score, listName(), remark(settings), pdf);
             AtomicFile.write(out.resolve("check.pdf"), pdf.toByteArray());
         }
     }
 
-    private static String degraded(SurveySettings settings) {
-        return DegradeOptions.record(settings.degrading()).entrySet().stream()
-                .filter(option -> !option.getValue().isEmpty())
-                .map(option -> option.getKey().replace("degrade_", "") + " " + option.getValue())
-                .collect(Collectors.joining(", "));
+    /** What must be known to read the scores. */
+    private String remark(SurveySettings settings) {
+        String degraded =
+                DegradeOptions.record(settings.degrading()).entrySet().stream()
+                        .filter(option -> !option.getValue().isEmpty())
+                        .map(
+                                option ->
+                                        option.getKey().replace("degrade_", "")
+                                                + " "
+                                                + option.getValue())
+                        .collect(Collectors.joining(", "));
+        return (leaveOut
+                        ? "Each object was placed by what was learned without it."
+                        : "Placed by the product's own calibration, which objects it was learned"
+                                + " from flatter.")
+                + (degraded.isEmpty() ? "" : " Spectra degraded: " + degraded + ".");
     }
 }

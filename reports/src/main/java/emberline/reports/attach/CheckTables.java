@@ -38,14 +38,17 @@ public final class CheckTables {
      * The tables for a terminal.
      *
      * @param score the score of a list
+     * @param remark what is to be said of the run, in sentences; may be blank
      * @return text with a line end
      */
-    public static String text(CheckScore score) {
+    public static String text(CheckScore score, String remark) {
         StringBuilder text = new StringBuilder();
         text.append(score.objects().size())
                 .append(" objects, ")
                 .append(score.failed())
-                .append(" of them failed.\n");
+                .append(" of them failed.")
+                .append(remark.isBlank() ? "" : " " + remark)
+                .append('\n');
         heading(text, "Types of dwarfs, found minus known (subclasses)");
         text.append(
                 "median_off: of the absolute difference; scatter: 1.48 times the median deviation"

@@ -22,7 +22,7 @@ import java.util.Map;
 public final class CheckReport {
 
     private static final float GUTTER = 22;
-    private static final float DIFFERENCES_TALL = 232;
+    private static final float DIFFERENCES_TALL = 214;
     private static final float SMALL_TALL = 136;
     private static final Frame WIDE = new Frame(34, 4, 9, 25);
     private static final Color BOX = new Color(0xF3F5F8);
@@ -71,12 +71,12 @@ public final class CheckReport {
      *
      * @param score a score of which there {@link #canReport is anything to draw}
      * @param list the name of the list
-     * @param degraded how the spectra were degraded, in words; blank where they were not
+     * @param remark what is to be said of the run, in sentences; may be blank
      * @param stream where the PDF goes; it is not closed
      * @throws IOException if it cannot be written
      * @throws IllegalArgumentException if there is nothing to draw
      */
-    public void write(CheckScore score, String list, String degraded, OutputStream stream)
+    public void write(CheckScore score, String list, String remark, OutputStream stream)
             throws IOException {
         if (!canReport(score)) {
             throw new IllegalArgumentException(
@@ -85,9 +85,9 @@ public final class CheckReport {
         room.print(
                 document -> {
                     try (Sheet sheet = new Sheet(document, settings.paper())) {
-                        new Page(document, sheet).write(score, list, degraded);
+                        new Page(document, sheet).write(score, list, remark);
                     }
-                    List<String> parts = new ArrayList<>(List.of(list, degraded));
+                    List<String> parts = new ArrayList<>(List.of(list, remark));
                     score.objects().forEach(object -> parts.add(object.toString()));
                     PdfIdentity.stamp(document.pdf(), "Check of " + list, parts, settings);
                 },
@@ -109,8 +109,8 @@ public final class CheckReport {
             this.styles = document.styles();
         }
 
-        void write(CheckScore score, String list, String degraded) throws IOException {
-            float y = head(score, list, degraded);
+        void write(CheckScore score, String list, String remark) throws IOException {
+            float y = head(score, list, remark);
             float left = FirstPage.MARGIN;
             sheet.text(styles.heading(), left, y, "Found minus known type");
             sheet.chart(
@@ -150,7 +150,7 @@ public final class CheckReport {
             foot();
         }
 
-        private float head(CheckScore score, String list, String degraded) throws IOException {
+        private float head(CheckScore score, String list, String remark) throws IOException {
             float y = FirstPage.TOP + 14;
             String title = document.lines().fit(styles.name(), "Check of " + list, width - 140);
             sheet.text(styles.name(), FirstPage.MARGIN, y, title);
@@ -163,8 +163,8 @@ public final class CheckReport {
             y += 21;
             TypeScore last = score.types().get(score.types().size() - 1);
             String words = sentence(last.figures().isPresent() ? last : score.types().get(0));
-            String spectra = degraded.isBlank() ? "" : " Spectra degraded: " + degraded + ".";
-            for (String line : document.lines().wrap(styles.finding(), words + spectra, width)) {
+            for (String line :
+                    document.lines().wrap(styles.finding(), words + " " + remark, width)) {
                 sheet.text(styles.finding(), FirstPage.MARGIN, y, line);
                 y += styles.finding().leadingPoint();
             }

@@ -67,7 +67,7 @@ class CheckReportTest {
     private static byte[] pdf(CheckScore score, Paper paper, String list) throws IOException {
         ByteArrayOutputStream bytes = new ByteArrayOutputStream();
         new CheckReport(ReportSettings.of("0.1.0", 7).withPaper(paper))
-                .write(score, list, "snr 20.0, resolution 100.0, band H", bytes);
+                .write(score, list, "Spectra degraded: snr 20.0, resolution 100.0, band H.", bytes);
         return bytes.toByteArray();
     }
 
@@ -102,14 +102,14 @@ class CheckReportTest {
         CheckScore none = CheckScore.of(List.of());
         assertFalse(CheckReport.canReport(none));
         assertThrows(IllegalArgumentException.class, () -> pdf(none, Paper.A4, "none.csv"));
-        assertTrue(CheckTables.text(none).contains("The kind is not judged."));
+        assertTrue(CheckTables.text(none, "").contains("The kind is not judged."));
     }
 
     /** Tables and JSON carry the same digits, and formulas do not reach a spreadsheet. */
     @Test
     void tablesAndJsonTellTheSame() {
         CheckScore score = score(120);
-        String text = CheckTables.text(score);
+        String text = CheckTables.text(score, "As observed.");
         String json = new CheckJson("0.1.0", "list.csv", Map.of(), 7).text(score);
         String line =
                 text.lines().filter(l -> l.startsWith("all dwarfs")).findFirst().orElseThrow();
