@@ -5,7 +5,6 @@ import emberline.place.calibrated.CalibrationFiles;
 import emberline.place.calibrated.Calibrator;
 import emberline.place.reference.ReferenceTable;
 import emberline.read.CandidateList;
-import emberline.read.CandidateListReader;
 import emberline.reports.attach.AtomicFile;
 import emberline.reports.attach.UnseenSummary;
 import emberline.reports.attach.UnseenTable;
@@ -25,7 +24,6 @@ import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
-import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 
 /** {@code calibrate}: measures a list of known types into a reference table. */
@@ -41,11 +39,7 @@ import picocli.CommandLine.Spec;
 final class CalibrateCommand implements Callable<Integer> {
 
     @Spec private CommandSpec spec;
-    @Mixin private SpectrumOptions spectrumOptions;
-    @Mixin private CatalogueOption catalogueOption;
-
-    @Parameters(paramLabel = "LIST", description = "The list of known objects.")
-    private Path list;
+    @Mixin private ListOptions listOptions;
 
     @Option(
             names = "--out",
@@ -54,20 +48,14 @@ final class CalibrateCommand implements Callable<Integer> {
             description = "Folder for the table; made if it does not stand there.")
     private Path out;
 
-    @Option(
-            names = "--threads",
-            paramLabel = "N",
-            description = "Number of threads (default: one a processor).")
-    private int threads = Runtime.getRuntime().availableProcessors();
-
     private long failed;
 
     @Override
     public Integer call() throws IOException, InterruptedException {
-        SurveySettings settings = spectrumOptions.settings(threads);
-        FeatureCatalogue catalogue = catalogueOption.load();
-        CandidateList candidates = new CandidateListReader().read(list);
-        Chain chain = new Chain(catalogue, spectrumOptions.measuring(), settings);
+        SurveySettings settings = listOptions.settings();
+        FeatureCatalogue catalogue = listOptions.catalogue();
+        CandidateList candidates = listOptions.read();
+        Chain chain = new Chain(catalogue, listOptions.measuring(), settings);
         ReferenceMaker maker = new ReferenceMaker();
         new SurveyRunner(chain, settings.threads())
                 .run(
@@ -111,7 +99,11 @@ final class CalibrateCommand implements Callable<Integer> {
 
     private List<String> remarks(String what) {
         return List.of(
-                "Emberline " + ProgramVersion.number() + ": calibrate " + list.getFileName() + ".",
+                "Emberline "
+                        + ProgramVersion.number()
+                        + ": calibrate "
+                        + listOptions.file().getFileName()
+                        + ".",
                 "Our own measurements on public spectra; types, gravities and kinds as published;"
                         + " `source` in reference.csv names the data set.",
                 what);

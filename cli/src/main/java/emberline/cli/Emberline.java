@@ -24,7 +24,8 @@ import picocli.CommandLine.Spec;
             PlaceCommand.class,
             ReportCommand.class,
             CatalogueCommand.class,
-            CalibrateCommand.class
+            CalibrateCommand.class,
+            CheckCommand.class
         },
         mixinStandardHelpOptions = true,
         versionProvider = ProgramVersion.class,

@@ -2,7 +2,6 @@ package emberline.cli;
 
 import emberline.catalogue.FeatureCatalogue;
 import emberline.read.CandidateList;
-import emberline.read.CandidateListReader;
 import emberline.reports.attach.RunJson;
 import emberline.reports.page.PdfReport;
 import emberline.reports.page.ReportSettings;
@@ -22,7 +21,6 @@ import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
-import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 
 /** {@code sort}: takes a candidate list through the whole chain. */
@@ -38,13 +36,7 @@ import picocli.CommandLine.Spec;
 final class SortCommand implements Callable<Integer> {
 
     @Spec private CommandSpec spec;
-    @Mixin private SpectrumOptions spectrumOptions;
-    @Mixin private CatalogueOption catalogueOption;
-
-    @Parameters(
-            paramLabel = "LIST",
-            description = "The candidate list: CSV, ECSV, VOTable or FITS.")
-    private Path list;
+    @Mixin private ListOptions listOptions;
 
     @Option(
             names = "--out",
@@ -53,12 +45,6 @@ final class SortCommand implements Callable<Integer> {
             description = "Folder for the results; made if it does not stand there.")
     private Path out;
 
-    @Option(
-            names = "--threads",
-            paramLabel = "N",
-            description = "Number of threads (default: one a processor).")
-    private int threads = Runtime.getRuntime().availableProcessors();
-
     @Option(names = "--no-reports", description = "Write no PDF reports.")
     private boolean noReports;
 
@@ -66,10 +52,10 @@ final class SortCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws IOException, InterruptedException {
-        SurveySettings settings = spectrumOptions.settings(threads);
-        FeatureCatalogue catalogue = catalogueOption.load();
-        CandidateList candidates = new CandidateListReader().read(list);
-        Chain chain = new Chain(catalogue, spectrumOptions.measuring(), settings);
+        SurveySettings settings = listOptions.settings();
+        FeatureCatalogue catalogue = listOptions.catalogue();
+        CandidateList candidates = listOptions.read();
+        Chain chain = new Chain(catalogue, listOptions.measuring(), settings);
         Progress progress =
                 new Progress(
                         spec.commandLine().getErr(),
@@ -136,8 +122,8 @@ final class SortCommand implements Callable<Integer> {
     private RunJson record(SurveySettings settings) throws IOException {
         return new RunJson(
                 ProgramVersion.number(),
-                RunOptions.of(settings, spectrumOptions.measuring(), !noReports),
+                RunOptions.of(settings, listOptions.measuring(), !noReports),
                 settings.seed(),
-                FileChecksum.sha256(list));
+                FileChecksum.sha256(listOptions.file()));
     }
 }

@@ -1,16 +1,10 @@
 package emberline.place;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.Quantity;
 import emberline.catalogue.Relation;
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
+import emberline.read.ProductTable;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -41,27 +35,14 @@ final class ConsensusTable {
     static ConsensusTable of(FeatureCatalogue catalogue) {
         List<String> known =
                 catalogue.relations(Quantity.SPECTRAL_TYPE).stream().map(Relation::id).toList();
+        ProductTable table = ProductTable.at(RESOURCE);
         Map<String, Member> members = new LinkedHashMap<>();
-        try (InputStream stream = ConsensusTable.class.getResourceAsStream(RESOURCE);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(
-                                        new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-            for (NamedCsvRecord row : rows) {
-                String relation = row.getField("relation");
-                if (!known.contains(relation)) {
-                    throw new IllegalStateException(
-                            RESOURCE
-                                    + ", line "
-                                    + row.getStartingLineNumber()
-                                    + ": the catalogue has no type relation "
-                                    + relation);
-                }
-                members.put(relation, member(row));
+        for (NamedCsvRecord row : table.rows()) {
+            String relation = row.getField("relation");
+            if (!known.contains(relation)) {
+                throw table.fault(row, "the catalogue has no type relation " + relation);
             }
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
+            members.put(relation, member(row));
         }
         return new ConsensusTable(members);
     }

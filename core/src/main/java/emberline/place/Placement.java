@@ -1,13 +1,14 @@
 package emberline.place;
 
 import emberline.place.calibrated.CalibratedType;
+import emberline.place.metallicity.MetallicityVerdict;
 import emberline.place.reddening.ReddeningFit;
 import emberline.spectrum.Finding;
 import java.util.List;
 import java.util.Optional;
 
 /**
- * Where an object stands: its type, gravity and activity with what they rest on.
+ * Where an object stands: its type, gravity, metallicity and activity with what they rest on.
  *
  * @param type the adopted type; empty where none could be given
  * @param typeReason why there is no type; empty where there is one
@@ -15,6 +16,7 @@ import java.util.Optional;
  * @param calibrated the second witness: the loci of spectra of known type
  * @param reddening type and extinction fitted together, where that was asked for
  * @param gravity the gravity class
+ * @param metallicity the metallicity class
  * @param activity the activity by H alpha
  * @param findings what the observer should know about the placement
  */
@@ -25,6 +27,7 @@ public record Placement(
         CalibratedType calibrated,
         Optional<ReddeningFit> reddening,
         GravityVerdict gravity,
+        MetallicityVerdict metallicity,
         Activity activity,
         List<Finding> findings) {
 

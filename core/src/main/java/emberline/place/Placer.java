@@ -7,6 +7,8 @@ import emberline.place.calibrated.CalibratedWitness;
 import emberline.place.calibrated.Calibration;
 import emberline.place.calibrated.TypePrior;
 import emberline.place.calibrated.TypePriors;
+import emberline.place.metallicity.MetallicityJudge;
+import emberline.place.metallicity.MetallicityVerdict;
 import emberline.place.reddening.ReddeningFit;
 import emberline.place.reddening.ReddeningFitter;
 import emberline.spectrum.Finding;
@@ -16,7 +18,10 @@ import java.util.Locale;
 import java.util.Optional;
 import java.util.function.DoubleFunction;
 
-/** Places an object on the sequence of spectral types and judges its gravity class and activity. */
+/**
+ * Places an object on the sequence of spectral types and judges its gravity class, metallicity
+ * class and activity.
+ */
 public final class Placer {
 
     /** Two witnesses disagree where their types stand this many of their joint sigma apart. */
@@ -28,6 +33,7 @@ public final class Placer {
     private final PublishedWitness published;
     private final CalibratedWitness calibrated;
     private final GravityJudge gravity;
+    private final MetallicityJudge metallicity;
     private final ActivityJudge activity;
 
     /**
@@ -50,6 +56,7 @@ public final class Placer {
         this.published = new PublishedWitness(catalogue);
         this.calibrated = new CalibratedWitness(calibration, prior);
         this.gravity = new GravityJudge(catalogue);
+        this.metallicity = new MetallicityJudge(catalogue);
         this.activity = new ActivityJudge(catalogue);
     }
 
@@ -57,8 +64,8 @@ public final class Placer {
      * Places an object.
      *
      * @param measurements its features
-     * @param seed start of the random draws for the gravity probabilities; the same seed gives the
-     *     same placement
+     * @param seed start of the random draws for the probabilities; the same seed gives the same
+     *     placement
      * @return type, gravity and activity, or the reasons why there are none
      */
     public Placement place(Measurements measurements, long seed) {
@@ -97,11 +104,14 @@ public final class Placer {
                                         GravityVerdict.notJudged(
                                                 "no type, and the limits depend on the type",
                                                 List.of()));
+        MetallicityVerdict metals =
+                metallicity.judge(measurements, type.map(TypeEstimate::type), seed);
         Activity halpha =
                 type.map(estimate -> activity.judge(measurements, estimate))
                         .orElseGet(() -> Activity.none("no type, and chi depends on the type"));
         List<Finding> findings = new ArrayList<>(ofType(measurements, type, byRelations, byLoci));
         findings.addAll(ofGravity(verdict, byLoci));
+        findings.addAll(MetallicityJudge.findings(metals));
         findings.addAll(activity.findings(halpha));
         return new Placement(
                 type,
@@ -110,6 +120,7 @@ public final class Placer {
                 byLoci,
                 reddening,
                 verdict,
+                metals,
                 halpha,
                 findings);
     }

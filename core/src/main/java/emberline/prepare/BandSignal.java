@@ -5,6 +5,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.IntStream;
 
 /**
  * The signal-to-noise of a spectrum in one band: the median of flux over one-sigma noise of the
@@ -104,6 +105,15 @@ public record BandSignal(Range range, double coverage, double medianSignalToNois
             }
         }
         return Optional.ofNullable(best);
+    }
+
+    /** The good pixels with a sigma above zero in a band. */
+    static int[] pixels(Spectrum spectrum, Range range) {
+        int first = spectrum.firstAtOrAbove(range.lowMicron);
+        int end = Math.min(spectrum.firstAtOrAbove(range.highMicron), spectrum.size());
+        return IntStream.range(first, Math.max(first, end))
+                .filter(i -> spectrum.isGood(i) && spectrum.fluxSigma(i) > 0)
+                .toArray();
     }
 
     private static Optional<BandSignal> in(Spectrum spectrum, Range range) {

@@ -1,13 +1,7 @@
 package emberline.prepare;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
+import emberline.read.ProductTable;
 import java.util.ArrayList;
 import java.util.List;
 import org.apache.commons.math3.analysis.interpolation.SplineInterpolator;
@@ -151,28 +145,19 @@ public final class ExtinctionLaw {
 
     private static List<Term> terms() {
         List<Term> terms = new ArrayList<>();
-        try (InputStream stream = ExtinctionLaw.class.getResourceAsStream(RESOURCE);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(
-                                        new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-            for (NamedCsvRecord row : rows) {
-                double[] coefficients = new double[8];
-                for (int k = 0; k < coefficients.length; k++) {
-                    String cell = row.getField("c" + k);
-                    coefficients[k] = cell.isBlank() ? 0 : Double.parseDouble(cell);
-                }
-                String at = row.getField("at_micron");
-                terms.add(
-                        new Term(
-                                row.getField("law"),
-                                row.getField("term"),
-                                at.isBlank() ? Double.NaN : Double.parseDouble(at),
-                                coefficients));
+        for (NamedCsvRecord row : ProductTable.at(RESOURCE).rows()) {
+            double[] coefficients = new double[8];
+            for (int k = 0; k < coefficients.length; k++) {
+                String cell = row.getField("c" + k);
+                coefficients[k] = cell.isBlank() ? 0 : Double.parseDouble(cell);
             }
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
+            String at = row.getField("at_micron");
+            terms.add(
+                    new Term(
+                            row.getField("law"),
+                            row.getField("term"),
+                            at.isBlank() ? Double.NaN : Double.parseDouble(at),
+                            coefficients));
         }
         return terms;
     }

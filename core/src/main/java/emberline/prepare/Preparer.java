@@ -198,7 +198,7 @@ public final class Preparer {
 
     private static ResolvingPower resolvingPower(
             Observation observation, Preparing stated, Spectrum spectrum, List<Finding> findings) {
-        double sampled = fromSampling(spectrum);
+        double sampled = samplingPower(spectrum);
         if (stated.resolvingPower().isPresent()) {
             findings.removeIf(
                     finding -> finding.code().equals(Observation.RESOLVING_POWER_FROM_HEADER));
@@ -222,16 +222,6 @@ public final class Preparer {
         return new ResolvingPower(sampled, Basis.SAMPLING);
     }
 
-    /** The resolving power of two pixels an element, in the middle of all pixels. */
-    private static double fromSampling(Spectrum spectrum) {
-        double[] perPixel = new double[spectrum.size()];
-        for (int i = 0; i < perPixel.length; i++) {
-            perPixel[i] = spectrum.wavelengthMicron(i) / spectrum.localSpacingMicron(i);
-        }
-        Arrays.sort(perPixel);
-        return perPixel[perPixel.length / 2] / PIXELS_PER_ELEMENT;
-    }
-
     private static void warnOfSampling(
             double value, double sampled, String whose, List<Finding> findings) {
         if (value > MOST_BEYOND_SAMPLING * sampled) {
@@ -248,5 +238,15 @@ public final class Preparer {
                                     value,
                                     sampled)));
         }
+    }
+
+    /** The resolving power that the sampling allows: an upper limit. */
+    static double samplingPower(Spectrum spectrum) {
+        double[] perPixel = new double[spectrum.size()];
+        for (int i = 0; i < perPixel.length; i++) {
+            perPixel[i] = spectrum.wavelengthMicron(i) / spectrum.localSpacingMicron(i);
+        }
+        Arrays.sort(perPixel);
+        return perPixel[perPixel.length / 2] / PIXELS_PER_ELEMENT;
     }
 }

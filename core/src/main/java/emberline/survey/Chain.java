@@ -10,6 +10,9 @@ import emberline.place.Placement;
 import emberline.place.Placer;
 import emberline.place.calibrated.Calibration;
 import emberline.place.reddening.ReddeningFit;
+import emberline.prepare.Degrader;
+import emberline.prepare.Degrader.Degraded;
+import emberline.prepare.Degrading;
 import emberline.prepare.ExtinctionLaw;
 import emberline.prepare.PreparedSpectrum;
 import emberline.prepare.Preparer;
@@ -40,7 +43,9 @@ public final class Chain {
     private final Preparer preparer = new Preparer();
     private final Measurer measurer;
     private final LineReporter lines;
-    private final Placer placer;
+    private final PlacerChoice placers;
+    private final Degrader degrader = new Degrader();
+    private final Degrading degrading;
     private final Preparing defaults;
     private final long seed;
     private final boolean fitReddening;
@@ -54,9 +59,31 @@ public final class Chain {
      * @param settings what holds for all objects
      */
     public Chain(FeatureCatalogue catalogue, Measuring measuring, SurveySettings settings) {
+        this(
+                catalogue,
+                measuring,
+                settings,
+                PlacerChoice.always(
+                        new Placer(catalogue, Calibration.standard(), settings.prior().load())));
+    }
+
+    /**
+     * A chain that chooses a placer for each object.
+     *
+     * @param catalogue what is measured
+     * @param measuring how it is measured
+     * @param settings what holds for all objects
+     * @param placers by what each object is placed; made for the same catalogue
+     */
+    public Chain(
+            FeatureCatalogue catalogue,
+            Measuring measuring,
+            SurveySettings settings,
+            PlacerChoice placers) {
         this.measurer = new Measurer(catalogue, measuring);
         this.lines = new LineReporter(catalogue, measuring.site());
-        this.placer = new Placer(catalogue, Calibration.standard(), settings.prior().load());
+        this.placers = placers;
+        this.degrading = settings.degrading();
         this.defaults = settings.preparing();
         this.seed = settings.seed();
         this.fitReddening = settings.fitReddening();
@@ -92,14 +119,19 @@ public final class Chain {
     }
 
     private ObjectResult attempt(Candidate candidate, Path folder) {
-        Map<String, Observation> observations = new LinkedHashMap<>();
+        Map<String, Degraded> used = new LinkedHashMap<>();
         List<SpectrumResult> spectra = new ArrayList<>();
         List<String> troubles = new ArrayList<>();
         for (String path : candidate.spectra()) {
             try {
-                Observation observation = reader.read(folder.resolve(path));
-                spectra.add(measure(path, observation, stated(candidate)));
-                observations.put(path, observation);
+                Degraded degraded =
+                        degrader.degrade(
+                                reader.read(folder.resolve(path)),
+                                stated(candidate),
+                                degrading,
+                                ObjectSeed.of(candidate.name() + "; " + path, seed));
+                spectra.add(measure(path, degraded.observation(), degraded.stated()));
+                used.put(path, degraded);
             } catch (UnreadableSpectrumException e) {
                 troubles.add(e.getMessage());
             } catch (InvalidPathException e) {
@@ -113,25 +145,20 @@ public final class Chain {
         }
         Optional<ReddeningFit> reddening =
                 fitReddening
-                        ? placer.fitReddening(av -> measuredAt(av, candidate, observations))
+                        ? placers.placerFor(candidate).fitReddening(av -> measuredAt(av, used))
                         : Optional.empty();
         if (reddening.isPresent()) {
-            Preparing freed = stated(candidate).withExtinction(extinction(reddening.get().avMag()));
             spectra.clear();
-            for (Map.Entry<String, Observation> one : observations.entrySet()) {
-                spectra.add(again(one.getKey(), one.getValue(), freed));
-            }
+            used.forEach((path, one) -> spectra.add(again(path, one, reddening.get().avMag())));
         }
         return placed(candidate, spectra, reddening, troubles);
     }
 
-    private Measurements measuredAt(
-            double avMag, Candidate candidate, Map<String, Observation> observations) {
-        Preparing freed = stated(candidate).withExtinction(extinction(avMag));
+    private Measurements measuredAt(double avMag, Map<String, Degraded> used) {
         List<Measurements> all = new ArrayList<>();
-        for (Observation observation : observations.values()) {
+        for (Degraded one : used.values()) {
             try {
-                all.add(measurer.measure(preparer.prepare(observation, freed)));
+                all.add(measurer.measure(preparer.prepare(one.observation(), freed(one, avMag))));
             } catch (UnreadableSpectrumException e) {
                 throw new IllegalStateException("prepared before, but not now", e);
             }
@@ -140,16 +167,17 @@ public final class Chain {
     }
 
     /** Measures a spectrum that was measured before, with another extinction taken out. */
-    private SpectrumResult again(String path, Observation observation, Preparing freed) {
+    private SpectrumResult again(String path, Degraded one, double avMag) {
         try {
-            return measure(path, observation, freed);
+            return measure(path, one.observation(), freed(one, avMag));
         } catch (UnreadableSpectrumException e) {
             throw new IllegalStateException(path + ": prepared before, but not now", e);
         }
     }
 
-    private static Preparing.Extinction extinction(double avMag) {
-        return new Preparing.Extinction(avMag, ExtinctionLaw.DIFFUSE_RV);
+    private static Preparing freed(Degraded one, double avMag) {
+        return one.stated()
+                .withExtinction(new Preparing.Extinction(avMag, ExtinctionLaw.DIFFUSE_RV));
     }
 
     /**
@@ -211,7 +239,9 @@ public final class Chain {
             List<String> troubles) {
         Measurements best =
                 Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
-        Placement placement = placer.place(best, reddening, ObjectSeed.of(candidate.name(), seed));
+        Placement placement =
+                placers.placerFor(candidate)
+                        .place(best, reddening, ObjectSeed.of(candidate.name(), seed));
         List<Finding> findings = new ArrayList<>();
         spectra.forEach(spectrum -> findings.addAll(spectrum.prepared().findings()));
         for (String trouble : troubles) {

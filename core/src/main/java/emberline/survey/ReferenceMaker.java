@@ -11,8 +11,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import java.util.TreeSet;
-import java.util.regex.Matcher;
-import java.util.regex.Pattern;
 
 /**
  * Makes a reference table from the results of a list with known types, gravities and kinds. Fed
@@ -46,7 +44,7 @@ public final class ReferenceMaker {
         rows.add(
                 new ReferenceRow(
                         candidate.name(),
-                        candidate.text("group").orElseGet(() -> group(candidate.name())),
+                        ObjectGroup.of(candidate),
                         candidate.number("known_type_number"),
                         candidate.text("known_gravity").orElse(""),
                         candidate.text("known_kind").orElse(""),
@@ -54,13 +52,6 @@ public final class ReferenceMaker {
                         candidate.text("dataset").orElse(""),
                         result.spectra().get(0).prepared().resolvingPower().value(),
                         features));
-    }
-
-    /** Spectra of one object are numbered in brackets, or differ in the digits of a coordinate. */
-    private static String group(String name) {
-        String plain = name.replaceFirst(" \\(.*\\)$", "");
-        Matcher coordinate = Pattern.compile("J(\\d{4})\\S*?([+-]\\d{2})").matcher(plain);
-        return coordinate.find() ? "J" + coordinate.group(1) + coordinate.group(2) : plain;
     }
 
     /**

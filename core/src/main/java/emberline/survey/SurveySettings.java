@@ -1,6 +1,7 @@
 package emberline.survey;
 
 import emberline.place.calibrated.TypePriors;
+import emberline.prepare.Degrading;
 import emberline.prepare.Preparing;
 
 /**
@@ -12,6 +13,7 @@ import emberline.prepare.Preparing;
  * @param prior what is thought of types and gravities before a spectrum is looked at
  * @param fitReddening whether type and extinction are fitted together
  * @param toMeasuredRest whether the velocity that lines show is taken out where none is stated
+ * @param degrading how spectra are made worse before they are prepared
  */
 public record SurveySettings(
         Preparing preparing,
@@ -19,7 +21,8 @@ public record SurveySettings(
         long seed,
         TypePriors prior,
         boolean fitReddening,
-        boolean toMeasuredRest) {
+        boolean toMeasuredRest,
+        Degrading degrading) {
 
     /** The seed where none is given. */
     public static final long DEFAULT_SEED = 20_260_101L;
@@ -43,7 +46,8 @@ public record SurveySettings(
                 DEFAULT_SEED,
                 TypePriors.FLAT,
                 false,
-                false);
+                false,
+                Degrading.none());
     }
 
     /**
@@ -53,7 +57,8 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withThreads(int number) {
-        return new SurveySettings(preparing, number, seed, prior, fitReddening, toMeasuredRest);
+        return new SurveySettings(
+                preparing, number, seed, prior, fitReddening, toMeasuredRest, degrading);
     }
 
     /**
@@ -63,7 +68,8 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withSeed(long start) {
-        return new SurveySettings(preparing, threads, start, prior, fitReddening, toMeasuredRest);
+        return new SurveySettings(
+                preparing, threads, start, prior, fitReddening, toMeasuredRest, degrading);
     }
 
     /**
@@ -73,7 +79,8 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withPreparing(Preparing stated) {
-        return new SurveySettings(stated, threads, seed, prior, fitReddening, toMeasuredRest);
+        return new SurveySettings(
+                stated, threads, seed, prior, fitReddening, toMeasuredRest, degrading);
     }
 
     /**
@@ -83,7 +90,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withMeasuredRest(boolean shift) {
-        return new SurveySettings(preparing, threads, seed, prior, fitReddening, shift);
+        return new SurveySettings(preparing, threads, seed, prior, fitReddening, shift, degrading);
     }
 
     /**
@@ -93,7 +100,19 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withPrior(TypePriors before) {
-        return new SurveySettings(preparing, threads, seed, before, fitReddening, toMeasuredRest);
+        return new SurveySettings(
+                preparing, threads, seed, before, fitReddening, toMeasuredRest, degrading);
+    }
+
+    /**
+     * These settings with spectra that are made worse first.
+     *
+     * @param how by how much
+     * @return new settings
+     */
+    public SurveySettings withDegrading(Degrading how) {
+        return new SurveySettings(
+                preparing, threads, seed, prior, fitReddening, toMeasuredRest, how);
     }
 
     /**
@@ -103,6 +122,6 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withReddeningFit(boolean fit) {
-        return new SurveySettings(preparing, threads, seed, prior, fit, toMeasuredRest);
+        return new SurveySettings(preparing, threads, seed, prior, fit, toMeasuredRest, degrading);
     }
 }

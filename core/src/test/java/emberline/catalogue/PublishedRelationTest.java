@@ -78,14 +78,26 @@ class PublishedRelationTest {
         double zeta = (1 - TestTable.number(row, "tio5")) / (1 - solar);
         assertEquals(TestTable.number(row, "zeta"), zeta, 6e-5);
         double type = relation("lepine2007/cah2+cah3").value(sum);
-        List<MetallicityClass> classes =
-                CATALOGUE.metallicityClasses().stream().filter(c -> c.contains(zeta)).toList();
+        List<MetallicityClass> classes = metallicityClasses("lepine2007/zeta", zeta);
         assertEquals(1, classes.size());
+        double again =
+                (1 - TestTable.number(row, "tio5"))
+                        / (1 - relation("dhital2012/tio5-solar").value(sum));
+        assertEquals(
+                classes.get(0).name(),
+                metallicityClasses("dhital2012/zeta", again).get(0).name(),
+                "the recalibration gives the published class too");
         String number = String.valueOf(Math.rint(type * 2) / 2);
         assertEquals(row.getField("published_type"), classes.get(0).name().prefix() + "M" + number);
         boolean dwarf = classes.get(0).name() == MetallicityClass.Name.DWARF;
         double limit = relation("gizis1997/cah1-limit").value(TestTable.number(row, "tio5"));
         assertEquals(dwarf, TestTable.number(row, "cah1") >= limit);
+    }
+
+    private static List<MetallicityClass> metallicityClasses(String feature, double zeta) {
+        return CATALOGUE.metallicityClasses().stream()
+                .filter(one -> one.feature().equals(feature) && one.contains(zeta))
+                .toList();
     }
 
     static Stream<NamedCsvRecord> subdwarfs() throws IOException {

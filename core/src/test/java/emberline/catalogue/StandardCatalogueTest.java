@@ -41,7 +41,7 @@ class StandardCatalogueTest {
         assertEquals(37, catalogue.gravityThresholds().size());
         assertEquals(96, catalogue.typeBoundaries().size());
         assertEquals(6, catalogue.pairPlanes().size());
-        assertEquals(4, catalogue.metallicityClasses().size());
+        assertEquals(8, catalogue.metallicityClasses().size());
         assertEquals(56, catalogue.sources().size());
         assertEquals(22, catalogue.activityFactors().size());
         assertEquals(40, catalogue.restLines().size());

@@ -60,12 +60,16 @@ public final class Calibrator {
      *
      * @param calibration from all objects
      * @param unseen all dwarfs of known type, each placed without having been learned from
+     * @param withoutGroup by the name of a group the calibration that has not seen its spectra;
+     *     groups from which nothing was learned are absent
      */
-    public record Outcome(Calibration calibration, List<Unseen> unseen) {
+    public record Outcome(
+            Calibration calibration, List<Unseen> unseen, Map<String, Calibration> withoutGroup) {
 
-        /** Copies the list. */
+        /** Copies the collections. */
         public Outcome {
             unseen = List.copyOf(unseen);
+            withoutGroup = Map.copyOf(withoutGroup);
         }
     }
 
@@ -104,7 +108,10 @@ public final class Calibrator {
                             new CalibratedWitness(learned, prior)
                                     .witness(Sample.of(learned, dwarf.row()))));
         }
-        return new Outcome(learn(training).with(error), unseen);
+        withoutFold.replaceAll((number, learned) -> learned.with(error));
+        Map<String, Calibration> withoutGroup = new LinkedHashMap<>();
+        fold.forEach((group, number) -> withoutGroup.put(group, withoutFold.get(number)));
+        return new Outcome(learn(training).with(error), unseen, withoutGroup);
     }
 
     private Calibration learn(TrainingSet from) {

@@ -6,13 +6,10 @@ import de.siegmar.fastcsv.reader.NamedCsvRecord;
 import de.siegmar.fastcsv.writer.CsvWriter;
 import de.siegmar.fastcsv.writer.LineDelimiter;
 import emberline.measure.Measurement.Measured;
+import emberline.read.ProductTable;
 import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
 import java.io.Reader;
-import java.io.UncheckedIOException;
 import java.io.Writer;
-import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -53,16 +50,9 @@ public record ReferenceTable(List<String> features, List<ReferenceRow> rows) {
      * @return feature ids
      */
     public static List<String> standardFeatures() {
-        try (InputStream stream = ReferenceTable.class.getResourceAsStream(FEATURES);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(
-                                        new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-            return rows.stream().map(row -> row.getField("feature")).toList();
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
-        }
+        return ProductTable.at(FEATURES).rows().stream()
+                .map(row -> row.getField("feature"))
+                .toList();
     }
 
     /**

@@ -62,6 +62,7 @@ public final class ObjectJson {
         map.put("gravity_reason", result.placement().map(p -> p.gravity().reason()).orElse(""));
         map.put("relations", result.placement().map(ObjectJson::relations).orElse(List.of()));
         map.put("gravity_scores", result.placement().map(ObjectJson::scores).orElse(List.of()));
+        result.placement().ifPresent(p -> map.putAll(MetallicityJson.of(p.metallicity())));
         map.put(
                 "activity",
                 result.placement().map(p -> (Object) LineJson.activity(p.activity())).orElse(null));

@@ -23,6 +23,7 @@ public final class PlacementTable {
                     "p_fldg",
                     "p_intg",
                     "p_vlg",
+                    "metallicity",
                     "snr",
                     "resolution");
 
@@ -70,6 +71,11 @@ public final class PlacementTable {
                                         result,
                                         "no gravity class: ",
                                         placement.gravity().reason());
+                                remark(
+                                        text,
+                                        result,
+                                        "no metallicity class: ",
+                                        placement.metallicity().reason());
                             });
         }
         return text.toString();

@@ -116,6 +116,7 @@ public final class ResultColumns {
                         r -> published(r).map(t -> Digits.type(t.sigmaSubclass())).orElse("")));
         addGravity(columns);
         addReddening(columns);
+        addMetallicity(columns);
         addSpectrum(columns);
         columns.add(
                 text(
@@ -214,12 +215,12 @@ public final class ResultColumns {
                                         .map(g -> g.label())
                                         .orElse("")));
         columns.add(
-                gravityShare("p_fldg", "probability of FLD-G", p -> p.gravity().pFieldGravity()));
+                placementShare("p_fldg", "probability of FLD-G", p -> p.gravity().pFieldGravity()));
         columns.add(
-                gravityShare(
+                placementShare(
                         "p_intg", "probability of INT-G", p -> p.gravity().pIntermediateGravity()));
         columns.add(
-                gravityShare("p_vlg", "probability of VL-G", p -> p.gravity().pVeryLowGravity()));
+                placementShare("p_vlg", "probability of VL-G", p -> p.gravity().pVeryLowGravity()));
         columns.add(
                 text(
                         "published_gravity",
@@ -229,6 +230,24 @@ public final class ResultColumns {
                                         .flatMap(p -> p.gravity().byScores())
                                         .map(g -> g.label())
                                         .orElse("")));
+    }
+
+    private static void addMetallicity(List<ResultColumn> columns) {
+        columns.add(
+                text(
+                        "metallicity",
+                        "metallicity class by zeta, if the object is a dwarf: d, sd, esd or usd;"
+                                + " empty where it is not judged",
+                        r ->
+                                r.placement()
+                                        .flatMap(p -> p.metallicity().adopted())
+                                        .map(name -> name.prefix())
+                                        .orElse("")));
+        columns.add(
+                placementShare(
+                        "p_subdwarf",
+                        "probability of sd, esd or usd together",
+                        p -> p.metallicity().pSubdwarf()));
     }
 
     private static Optional<TypeEstimate> adopted(ObjectResult result) {
@@ -258,7 +277,7 @@ public final class ResultColumns {
                 r -> adopted(r).map(t -> Digits.type(part.applyAsDouble(t))).orElse(""));
     }
 
-    private static ResultColumn gravityShare(
+    private static ResultColumn placementShare(
             String name, String description, Function<Placement, OptionalDouble> share) {
         return number(
                 name,

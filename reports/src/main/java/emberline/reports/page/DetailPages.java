@@ -78,6 +78,10 @@ final class DetailPages {
         features(flow, measured, placement, sources);
         notMeasured(flow, all);
         relations(flow, placement, sources);
+        flow.heading("Metallicity class");
+        for (String line : MetallicityText.of(placement.metallicity())) {
+            flow.paragraph(styles.table(), line, 8);
+        }
         findings(flow, result);
         provenance(flow, result);
         flow.heading("Sources");

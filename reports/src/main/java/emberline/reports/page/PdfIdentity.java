@@ -1,7 +1,5 @@
 package emberline.reports.page;
 
-import emberline.survey.ObjectResult;
-import emberline.survey.SpectrumResult;
 import java.awt.color.ColorSpace;
 import java.awt.color.ICC_Profile;
 import java.io.ByteArrayInputStream;
@@ -11,6 +9,7 @@ import java.nio.ByteBuffer;
 import java.nio.charset.StandardCharsets;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
+import java.util.List;
 import javax.xml.transform.TransformerException;
 import org.apache.pdfbox.pdmodel.PDDocument;
 import org.apache.pdfbox.pdmodel.PDDocumentCatalog;
@@ -36,10 +35,15 @@ final class PdfIdentity {
 
     private PdfIdentity() {}
 
-    static void stamp(PDDocument pdf, ObjectResult result, ReportSettings settings)
+    /**
+     * Stamps a document.
+     *
+     * @param named its title
+     * @param parts what its content follows from, besides the settings
+     */
+    static void stamp(PDDocument pdf, String named, List<String> parts, ReportSettings settings)
             throws IOException {
-        String title =
-                result.candidate().name().replaceAll("\\p{Cntrl}", " ") + ": spectral report";
+        String title = named.replaceAll("\\p{Cntrl}", " ");
         String program = "Emberline " + settings.programVersion();
         PDDocumentInformation information = new PDDocumentInformation();
         information.setTitle(title);
@@ -62,7 +66,7 @@ final class PdfIdentity {
         intent.setOutputConditionIdentifier(SRGB);
         intent.setRegistryName("http://www.color.org");
         catalog.addOutputIntent(intent);
-        pdf.setDocumentId(identifier(result, settings));
+        pdf.setDocumentId(identifier(parts, settings));
     }
 
     private static byte[] xmp(String title, String program) throws IOException {
@@ -86,13 +90,12 @@ final class PdfIdentity {
         }
     }
 
-    private static long identifier(ObjectResult result, ReportSettings settings) {
+    private static long identifier(List<String> parts, ReportSettings settings) {
         try {
             MessageDigest digest = MessageDigest.getInstance("SHA-256");
-            add(digest, result.candidate().name());
             add(digest, settings.toString());
-            for (SpectrumResult spectrum : result.spectra()) {
-                add(digest, spectrum.sha256());
+            for (String part : parts) {
+                add(digest, part);
             }
             return ByteBuffer.wrap(digest.digest()).getLong() & Long.MAX_VALUE;
         } catch (NoSuchAlgorithmException e) {

@@ -1,17 +1,11 @@
 package emberline.reports.page;
 
 import emberline.catalogue.FeatureCatalogue;
-import emberline.reports.paint.ChartPainter;
-import emberline.reports.paint.Face;
-import emberline.reports.paint.Theme;
 import emberline.survey.ObjectResult;
-import java.awt.Font;
 import java.io.IOException;
 import java.io.OutputStream;
-import java.util.EnumMap;
+import java.util.ArrayList;
 import java.util.List;
-import java.util.Map;
-import org.apache.fontbox.ttf.TrueTypeFont;
 import org.apache.pdfbox.pdmodel.PDDocument;
 import org.apache.pdfbox.pdmodel.PDPage;
 import org.apache.pdfbox.pdmodel.PDPageContentStream;
@@ -29,10 +23,7 @@ public final class PdfReport {
 
     private final ReportSettings settings;
     private final FeatureCatalogue catalogue;
-    private final FontShelf shelf = new FontShelf();
-    private final Theme theme = Theme.print();
-    private final Map<Face, Font> drawn = new EnumMap<>(Face.class);
-    private final ChartPainter painter;
+    private final PrintRoom room = new PrintRoom();
 
     /**
      * A writer of reports.
@@ -43,9 +34,6 @@ public final class PdfReport {
     public PdfReport(ReportSettings settings, FeatureCatalogue catalogue) {
         this.settings = settings;
         this.catalogue = catalogue;
-        drawn.put(Face.SANS, Face.SANS.awt());
-        drawn.put(Face.SANS_BOLD, Face.SANS_BOLD.awt());
-        this.painter = new ChartPainter(theme, drawn.get(Face.SANS), drawn.get(Face.SANS_BOLD));
     }
 
     /**
@@ -76,21 +64,20 @@ public final class PdfReport {
                             + result.reason()
                             + "; expected a spectrum that was read, measured and placed");
         }
-        Map<Face, TrueTypeFont> files = shelf.borrow();
-        try (PDDocument pdf = new PDDocument()) {
-            ReportDocument document = new ReportDocument(pdf, files, drawn, painter, theme);
-            try (Sheet first = new Sheet(document, settings.paper())) {
-                new FirstPage(document, catalogue, settings.paper()).write(first, result);
-            }
-            List<Flow.Bookmark> sections =
-                    new DetailPages(document, catalogue, settings).write(result);
-            footers(document, result);
-            outline(pdf, sections);
-            PdfIdentity.stamp(pdf, result, settings);
-            pdf.save(stream);
-        } finally {
-            shelf.giveBack(files);
+        room.print(document -> write(document, result), stream);
+    }
+
+    private void write(ReportDocument document, ObjectResult result) throws IOException {
+        try (Sheet first = new Sheet(document, settings.paper())) {
+            new FirstPage(document, catalogue, settings.paper()).write(first, result);
         }
+        List<Flow.Bookmark> sections = new DetailPages(document, catalogue, settings).write(result);
+        footers(document, result);
+        outline(document.pdf(), sections);
+        List<String> parts = new ArrayList<>(List.of(result.candidate().name()));
+        result.spectra().forEach(spectrum -> parts.add(spectrum.sha256()));
+        PdfIdentity.stamp(
+                document.pdf(), result.candidate().name() + ": spectral report", parts, settings);
     }
 
     private void footers(ReportDocument document, ObjectResult result) throws IOException {

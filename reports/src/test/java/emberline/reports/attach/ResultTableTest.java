@@ -26,7 +26,7 @@ class ResultTableTest {
         String expected =
                 "name,status,reason,kind,type,type_number,type_sigma,type_lo68,type_hi68,type_lo95,"
                         + "type_hi95,published_type,published_type_sigma,gravity,p_fldg,p_intg,"
-                        + "p_vlg,snr,quality,resolution,findings";
+                        + "p_vlg,published_gravity,metallicity,p_subdwarf,snr,quality,resolution,findings";
         List<String> names = ResultColumns.standard().stream().map(ResultColumn::name).toList();
         assertEquals(expected, String.join(",", names));
     }

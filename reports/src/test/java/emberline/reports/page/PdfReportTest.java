@@ -5,16 +5,13 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
-import static org.junit.jupiter.api.Assertions.fail;
 import static org.junit.jupiter.api.Assumptions.assumeTrue;
 
 import emberline.reports.RealSpectra;
 import emberline.reports.Samples;
 import emberline.reports.Samples.Bands;
-import emberline.reports.page.PdfText.Box;
 import emberline.spectrum.Finding;
 import emberline.survey.ObjectResult;
-import java.awt.geom.Rectangle2D;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
@@ -73,7 +70,7 @@ class PdfReportTest {
     @ParameterizedTest
     @MethodSource("objects")
     void noTextOverlapsAnotherOrLeavesThePage(ObjectResult object) throws IOException {
-        assertWellSet(pdf(A4, object), Paper.A4);
+        PageLayout.assertWellSet(pdf(A4, object), Paper.A4);
     }
 
     @ParameterizedTest
@@ -81,7 +78,7 @@ class PdfReportTest {
     void bothPapersHoldTheSameContent(Paper paper) throws IOException {
         ReportSettings settings = ReportSettings.of("0.1.0", 7).withPaper(paper);
         byte[] pdf = pdf(new PdfReport(settings, Samples.CATALOGUE), Samples.lDwarf());
-        assertWellSet(pdf, paper);
+        PageLayout.assertWellSet(pdf, paper);
         assertTrue(PdfText.all(pdf).contains("What this cannot tell"));
     }
 
@@ -121,7 +118,8 @@ class PdfReportTest {
                         full.placement(),
                         findings);
         ReportSettings letter = ReportSettings.of("0.1.0", 7).withPaper(Paper.LETTER);
-        assertWellSet(pdf(new PdfReport(letter, Samples.CATALOGUE), warned), Paper.LETTER);
+        PageLayout.assertWellSet(
+                pdf(new PdfReport(letter, Samples.CATALOGUE), warned), Paper.LETTER);
     }
 
     @Test
@@ -139,7 +137,7 @@ class PdfReportTest {
                         "SIMP J1339+1523",
                         "WISE J235402.77+024015.0",
                         "2MASS J01415823-4633574")) {
-            assertWellSet(pdf(A4, RealSpectra.object(rows.get(name))), Paper.A4);
+            PageLayout.assertWellSet(pdf(A4, RealSpectra.object(rows.get(name))), Paper.A4);
         }
     }
 
@@ -247,33 +245,5 @@ class PdfReportTest {
         ByteArrayOutputStream bytes = new ByteArrayOutputStream();
         report.write(object, bytes);
         return bytes.toByteArray();
-    }
-
-    private static void assertWellSet(byte[] pdf, Paper paper) throws IOException {
-        Rectangle2D page =
-                new Rectangle2D.Double(30, 24, paper.widthPoint() - 60, paper.heightPoint() - 54);
-        List<Box> boxes = PdfText.boxes(pdf);
-        assertTrue(boxes.size() > 500, "only " + boxes.size() + " signs");
-        for (int i = 0; i < boxes.size(); i++) {
-            Box box = boxes.get(i);
-            assertTrue(page.contains(box.place()), box + " leaves the page");
-            Rectangle2D place = shrunk(box.place());
-            for (Box other : boxes.subList(0, i)) {
-                boolean overlap =
-                        box.page() == other.page() && place.intersects(shrunk(other.place()));
-                if (overlap) {
-                    fail(box + " overlaps " + other);
-                }
-            }
-        }
-    }
-
-    private static Rectangle2D shrunk(Rectangle2D box) {
-        double by = 0.2;
-        return new Rectangle2D.Double(
-                box.getX() + by,
-                box.getY() + by,
-                box.getWidth() - 2 * by,
-                box.getHeight() - 2 * by);
     }
 }
