@@ -16,7 +16,15 @@ final class AgeEvidence {
     private static final double YOUNG_SHARE_ACTIVE = 0.95;
     private static final double ROOT = Math.sqrt(2 * Math.PI);
 
-    private record ClassRow(double logAge, double[] share) {}
+    private static final class ClassRow {
+        private final double logAge;
+        private final double[] share;
+
+        ClassRow(double logAge, double[] share) {
+            this.logAge = logAge;
+            this.share = share;
+        }
+    }
 
     private record VelocityRow(
             String population, double lowType, double highType, double logMedian, double sigma) {}
@@ -34,9 +42,9 @@ final class AgeEvidence {
                 JudgeTable.rows(
                         "gravity-by-age.csv",
                         row -> {
-                            double[] share = new double[GravityClass.values().length];
+                            double[] share = new double[GravityOrder.COUNT];
                             for (GravityClass gravity : GravityClass.values()) {
-                                share[gravity.ordinal()] =
+                                share[GravityOrder.of(gravity)] =
                                         JudgeTable.number(
                                                 row,
                                                 "p_"
@@ -73,29 +81,29 @@ final class AgeEvidence {
     double[] classShares(double ageMyr) {
         double at = Math.log10(ageMyr);
         int last = classes.size() - 1;
-        if (at <= classes.get(0).logAge()) {
-            return classes.get(0).share().clone();
+        if (at <= classes.get(0).logAge) {
+            return classes.get(0).share.clone();
         }
-        if (at >= classes.get(last).logAge()) {
-            return classes.get(last).share().clone();
+        if (at >= classes.get(last).logAge) {
+            return classes.get(last).share.clone();
         }
         int i = 0;
-        while (classes.get(i + 1).logAge() < at) {
+        while (classes.get(i + 1).logAge < at) {
             i++;
         }
         ClassRow low = classes.get(i);
         ClassRow high = classes.get(i + 1);
-        double part = (at - low.logAge()) / (high.logAge() - low.logAge());
-        double[] share = new double[low.share().length];
+        double part = (at - low.logAge) / (high.logAge - low.logAge);
+        double[] share = new double[low.share.length];
         for (int g = 0; g < share.length; g++) {
-            share[g] = low.share()[g] + part * (high.share()[g] - low.share()[g]);
+            share[g] = low.share[g] + part * (high.share[g] - low.share[g]);
         }
         return share;
     }
 
     /** Part of the objects of an age that lie on the sequence of young objects. */
     static double youngSequence(double[] classShares) {
-        return classShares[GravityClass.VL_G.ordinal()] + classShares[GravityClass.INT_G.ordinal()];
+        return classShares[GravityOrder.of(GravityClass.VL_G)] + classShares[GravityOrder.of(GravityClass.INT_G)];
     }
 
     private VelocityRow row(String population, double type) {

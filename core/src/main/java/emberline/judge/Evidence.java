@@ -75,7 +75,7 @@ public record Evidence(
      */
     public static Evidence ofType(
             double typeNumber, double sigmaSubclass, Optional<GravityClass> gravity) {
-        double third = 1.0 / GravityClass.values().length;
+        double third = 1.0 / GravityOrder.COUNT;
         Map<GravityClass, Double> share = new EnumMap<>(GravityClass.class);
         Map<GravityClass, Double> flat = new EnumMap<>(GravityClass.class);
         for (GravityClass one : GravityClass.values()) {

@@ -12,7 +12,7 @@ import java.util.Optional;
 final class EvidenceCurves {
 
     /** Row of the curves for types without gravity classes. */
-    private static final int NO_CLASS = GravityClass.values().length;
+    private static final int NO_CLASS = GravityOrder.COUNT;
 
     private final Map<Piece, Boolean> counts = new EnumMap<>(Piece.class);
     private final double[][] typeAlone =
@@ -102,6 +102,8 @@ final class EvidenceCurves {
         private final double[] type = new double[NodeTable.TEFF_SIZE];
         private final double[] withClass = new double[NodeTable.TEFF_SIZE];
         private final double[] luminous;
+        private final boolean gravityCounts = counts(Piece.GRAVITY);
+        private final boolean lithiumCounts = counts(Piece.LITHIUM);
         private final double youngSequence;
         private final double halpha;
         private final double velocity;
@@ -149,22 +151,28 @@ final class EvidenceCurves {
             return youngSequence;
         }
 
-        /** The likelihood of each piece at a node, by ordinal; 1 where it does not count. */
+        /**
+         * The likelihood of each piece at a node, in their order; 1 where it does not count. Where
+         * the type rules the node out, that of the type alone.
+         */
         void fill(NodeTable table, int a, int m, double[] factor) {
             double place = table.teffPlace(a, m);
             double typeHere = NodeTable.along(type, place);
-            factor[Piece.TYPE.ordinal()] = typeHere;
-            factor[Piece.GRAVITY.ordinal()] =
-                    counts(Piece.GRAVITY) && typeHere > 0
+            factor[Piece.TYPE.order()] = typeHere;
+            if (typeHere == 0) {
+                return;
+            }
+            factor[Piece.GRAVITY.order()] =
+                    gravityCounts
                             ? NodeTable.along(withClass, place) / typeHere
                             : 1;
-            factor[Piece.LUMINOSITY.ordinal()] =
+            factor[Piece.LUMINOSITY.order()] =
                     luminous == null ? 1 : NodeTable.along(luminous, table.logLPlace(a, m));
-            factor[Piece.LITHIUM.ordinal()] =
-                    counts(Piece.LITHIUM) ? ofLithium(table.lithiumLeft(a, m)) : 1;
-            factor[Piece.AGE.ordinal()] = 1; // stands in the weights of the table
-            factor[Piece.HALPHA.ordinal()] = halpha;
-            factor[Piece.VELOCITY.ordinal()] = velocity;
+            factor[Piece.LITHIUM.order()] =
+                    lithiumCounts ? ofLithium(table.lithiumLeft(a, m)) : 1;
+            factor[Piece.AGE.order()] = 1; // stands in the weights of the table
+            factor[Piece.HALPHA.order()] = halpha;
+            factor[Piece.VELOCITY.order()] = velocity;
         }
 
         private double ofLithium(double left) {

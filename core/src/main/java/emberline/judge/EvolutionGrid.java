@@ -3,6 +3,7 @@ package emberline.judge;
 import java.util.Arrays;
 import java.util.EnumMap;
 import java.util.Map;
+import java.util.NavigableMap;
 import java.util.TreeMap;
 
 /**
@@ -66,7 +67,7 @@ public final class EvolutionGrid {
 
     /** Reads all grids of the product. */
     static Map<Name, EvolutionGrid> all() {
-        Map<Name, TreeMap<Double, TreeMap<Double, Map<Column, Double>>>> tables =
+        Map<Name, NavigableMap<Double, NavigableMap<Double, Map<Column, Double>>>> tables =
                 new EnumMap<>(Name.class);
         JudgeTable.rows(
                 "evolution.csv",
@@ -88,7 +89,7 @@ public final class EvolutionGrid {
         return grids;
     }
 
-    private static EvolutionGrid of(TreeMap<Double, TreeMap<Double, Map<Column, Double>>> table) {
+    private static EvolutionGrid of(NavigableMap<Double, NavigableMap<Double, Map<Column, Double>>> table) {
         double[] ages = table.keySet().stream().mapToDouble(a -> a).toArray();
         double[] masses =
                 table.firstEntry().getValue().keySet().stream().mapToDouble(m -> m).toArray();

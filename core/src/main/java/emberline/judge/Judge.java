@@ -16,6 +16,9 @@ import java.util.Optional;
  */
 public final class Judge {
 
+    /** Fineness of the grids that only show how far models differ. */
+    private static final double COARSE = 0.5;
+
     private static final EvolutionGrid.Name MAIN = EvolutionGrid.Name.MERGED;
 
     private final Judging judging;
@@ -57,7 +60,12 @@ public final class Judge {
                 (name, grid) ->
                         tables.put(
                                 name,
-                                new NodeTable(grid, grids.get(MAIN), stated, numbers, fineness)));
+                                new NodeTable(
+                                        grid,
+                                        grids.get(MAIN),
+                                        stated,
+                                        numbers,
+                                        name == MAIN ? fineness : COARSE * fineness)));
         return tables;
     }
 
@@ -119,7 +127,7 @@ public final class Judge {
     private double[][] curvesOf(LuminosityFinder.Measured measured) {
         double[][] curves = new double[TypeKernel.SEQUENCES.length][];
         for (int s = 0; s < curves.length; s++) {
-            curves[s] = luminosities.curve(measured, s);
+            curves[s] = luminosities.curve(measured.on(TypeKernel.SEQUENCES[s]));
         }
         return curves;
     }

@@ -56,7 +56,15 @@ public record Judgement(
      */
     public String nextStepWords() {
         if (nextSteps.isEmpty() || !nextSteps.get(0).isRecommended()) {
-            return "none of the further observations weighed here could change the decision";
+            return nextSteps.isEmpty() || decision() != Decision.UNDECIDED
+                    ? "none of the further observations weighed here could change the decision"
+                    : String.format(
+                            Locale.ROOT,
+                            "no single further observation is likely to change the decision; most"
+                                    + " would come from: %s (%.2f bit on %s)",
+                            nextSteps.get(0).label(),
+                            nextSteps.get(0).gainBits(),
+                            nextSteps.get(0).aim().word());
         }
         NextStep best = nextSteps.get(0);
         StringBuilder words = new StringBuilder(best.label());

@@ -50,8 +50,8 @@ final class Kinds {
         return yes;
     }
 
-    /** The verdict on a question by the probabilities of the kinds: an ordinal of a decision. */
-    static int verdict(Aim aim, double[] share, Judging judging) {
+    /** The verdict on a question by the probabilities of the kinds: substellar stands for yes. */
+    static Decision verdict(Aim aim, double[] share, Judging judging) {
         if (aim == Aim.SUBSTELLAR) {
             double below = 0;
             double upTo = 0;
@@ -59,13 +59,13 @@ final class Kinds {
                 below += k % MASSES == 0 ? share[k] : 0;
                 upTo += k % MASSES <= 2 ? share[k] : 0;
             }
-            return Limits.decide(below, upTo, judging).ordinal();
+            return Limits.decide(below, upTo, judging);
         }
         boolean[] yes = yes(aim);
         double p = 0;
         for (int k = 0; k < COUNT; k++) {
             p += yes[k] ? share[k] : 0;
         }
-        return Limits.decide(p, p, judging).ordinal();
+        return Limits.decide(p, p, judging);
     }
 }

@@ -31,16 +31,16 @@ final class LedgerMaker {
         List<LedgerEntry> entries = new ArrayList<>();
         double prior = logOdds(open.after(0), bit);
         double now = prior;
-        double end = logOdds(last.after(Piece.values().length), bit);
+        double end = logOdds(last.after(Piece.COUNT), bit);
         for (Piece piece : Piece.values()) {
             if (!curves.counts(piece)) {
                 continue;
             }
             NodePosterior from = piece.compareTo(Piece.AGE) < 0 ? open : last;
-            double then = logOdds(from.after(piece.ordinal() + 1), bit);
+            double then = logOdds(from.after(piece.order() + 1), bit);
             double without =
                     piece == Piece.AGE
-                            ? logOdds(open.after(Piece.values().length), bit)
+                            ? logOdds(open.after(Piece.COUNT), bit)
                             : logOdds(last.without(piece), bit);
             LedgerEntry plain =
                     new LedgerEntry(piece, piece.label(), then - now, end - without, "");

@@ -11,10 +11,16 @@ final class LithiumEvidence {
     private record Row(double type, double width, double seen) {}
 
     private final List<Row> rows;
-    private final JudgeNumbers numbers;
+    private final double half;
+    private final double youngFactor;
+    private final double feigned;
+    private final double feignedMeasured;
 
     LithiumEvidence(JudgeNumbers numbers) {
-        this.numbers = numbers;
+        this.half = numbers.of("lithium-left");
+        this.youngFactor = numbers.of("lithium-young-weak");
+        this.feigned = numbers.of("lithium-false");
+        this.feignedMeasured = numbers.of("lithium-false-measured");
         this.rows =
                 JudgeTable.rows(
                         "lithium.csv",
@@ -69,14 +75,13 @@ final class LithiumEvidence {
 
     /** Factor on the chance for young L dwarfs. */
     double youngFactor(double type, double ageMyr) {
-        return type >= L0 && ageMyr < WEAK_BELOW_MYR ? numbers.of("lithium-young-weak") : 1;
+        return type >= L0 && ageMyr < WEAK_BELOW_MYR ? youngFactor : 1;
     }
 
     /** Probability that the line is seen, by the part of lithium left. */
     double seen(double left, double chance, boolean measured) {
-        double ratio = numbers.of("lithium-left") / Math.max(left, 1e-9);
+        double ratio = half / Math.max(left, 1e-9);
         double visible = chance / (1 + ratio * ratio);
-        double feigned = numbers.of(measured ? "lithium-false-measured" : "lithium-false");
-        return visible + (1 - visible) * feigned;
+        return visible + (1 - visible) * (measured ? feignedMeasured : feigned);
     }
 }

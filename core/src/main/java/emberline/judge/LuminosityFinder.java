@@ -46,15 +46,28 @@ final class LuminosityFinder {
      * @param band from which magnitude
      * @param absoluteMag absolute magnitude (mag)
      * @param absoluteSigma its one-sigma error (mag)
-     * @param logL by sequence as in {@link TypeKernel#SEQUENCES}
-     * @param sigma by sequence
+     * @param field on the field sequence
+     * @param young on the sequence of young objects
      */
     record Measured(
             MagnitudeBand band,
             double absoluteMag,
             double absoluteSigma,
-            double[] logL,
-            double[] sigma) {}
+            LogL field,
+            LogL young) {
+
+        LogL on(Sequence sequence) {
+            return sequence == Sequence.YOUNG ? young : field;
+        }
+    }
+
+    /**
+     * A luminosity.
+     *
+     * @param value log10 of solar
+     * @param sigmaDex one sigma (dex)
+     */
+    record LogL(double value, double sigmaDex) {}
 
     Optional<Measured> find(Evidence evidence, DistanceEstimate distance) {
         for (MagnitudeBand band : ORDER) {
@@ -75,38 +88,40 @@ final class LuminosityFinder {
             MagnitudeBand band, double absolute, Magnitude magnitude, DistanceEstimate distance) {
         double distanceMag = 5 / Math.log(10) * distance.relativeSigma();
         double absoluteSigma = Math.hypot(magnitude.sigmaMag(), distanceMag);
-        double[] logL = new double[TypeKernel.SEQUENCES.length];
-        double[] sigma = new double[TypeKernel.SEQUENCES.length];
-        for (int s = 0; s < logL.length; s++) {
-            Optional<TypeRelation> relation =
-                    relations.at(
-                            Quantity.LOG_L_FROM_MAG, band, TypeKernel.SEQUENCES[s], absolute);
-            if (relation.isEmpty()) {
-                return Optional.empty();
-            }
-            logL[s] = relation.get().at(absolute);
-            double byMag = 0.4 * absoluteSigma;
-            sigma[s] =
-                    Math.sqrt(
-                            Math.pow(relation.get().rms(absolute), 2)
-                                    + floorDex * floorDex
-                                    + byMag * byMag);
-        }
-        return Optional.of(new Measured(band, absolute, absoluteSigma, logL, sigma));
+        Optional<LogL> field = logL(band, Sequence.FIELD, absolute, absoluteSigma);
+        Optional<LogL> young = logL(band, Sequence.YOUNG, absolute, absoluteSigma);
+        return field.isPresent() && young.isPresent()
+                ? Optional.of(
+                        new Measured(band, absolute, absoluteSigma, field.get(), young.get()))
+                : Optional.empty();
+    }
+
+    private Optional<LogL> logL(
+            MagnitudeBand band, Sequence sequence, double absolute, double sigmaMag) {
+        return relations
+                .at(Quantity.LOG_L_FROM_MAG, band, sequence, absolute)
+                .map(
+                        relation -> {
+                            double byMag = 0.4 * sigmaMag;
+                            double rms = relation.rms(absolute);
+                            return new LogL(
+                                    relation.at(absolute),
+                                    Math.sqrt(rms * rms + floorDex * floorDex + byMag * byMag));
+                        });
     }
 
     /**
      * How probable the measurement is at each log L of the axis: alone, or as a pair whose excess
      * is even up to that of two equal objects.
      */
-    double[] curve(Measured measured, int sequence) {
+    double[] curve(LogL measured) {
         double[] curve = new double[NodeTable.LOG_L_SIZE];
-        double sigma = measured.sigma()[sequence];
-        add(curve, measured.logL()[sequence], sigma, 1 - pairs - OUTLIERS);
-        add(curve, measured.logL()[sequence], OUTLIER_DEX, OUTLIERS);
+        double sigma = measured.sigmaDex();
+        add(curve, measured.value(), sigma, 1 - pairs - OUTLIERS);
+        add(curve, measured.value(), OUTLIER_DEX, OUTLIERS);
         for (int k = 0; k < PAIR_STEPS; k++) {
             double excess = excessDex * (k + 0.5) / PAIR_STEPS;
-            add(curve, measured.logL()[sequence] - excess, sigma, pairs / PAIR_STEPS);
+            add(curve, measured.value() - excess, sigma, pairs / PAIR_STEPS);
         }
         return curve;
     }

@@ -90,7 +90,7 @@ final class NextSteps {
         if (!lithiumDone(evidence, mix)) {
             tables.put(FollowUp.LITHIUM, simulator.lithium());
         }
-        if (mix.shareWithClasses() > 0.5 && !stated) {
+        if (mix.allowsClass() && !stated) {
             tables.put(
                     FollowUp.POTASSIUM,
                     simulator.gravity(terms.get(FollowUp.POTASSIUM).accuracy()));

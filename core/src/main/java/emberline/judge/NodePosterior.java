@@ -9,7 +9,7 @@ final class NodePosterior {
     /** Kinds of cells: bit 0 is set below the hydrogen limit, bit 1 below the young age. */
     static final int KINDS = 4;
 
-    private static final int PIECES = Piece.values().length;
+    private static final int PIECES = Piece.COUNT;
 
     private final NodeTable table;
     private final double[][] weight;
@@ -35,7 +35,7 @@ final class NodePosterior {
                 double prior = table.ageWeight(a) * table.massWeight(m);
                 after[0][kind] += prior;
                 here.fill(table, a, m, factor);
-                if (factor[0] == 0 || prior == 0) {
+                if (factor[Piece.TYPE.order()] == 0 || prior == 0) {
                     continue;
                 }
                 weight[a][m] = add(kind, prior, factor, suffix);
@@ -141,7 +141,7 @@ final class NodePosterior {
 
     /** Weights by kind with all evidence but one piece. */
     double[] without(Piece piece) {
-        return without[piece.ordinal()].clone();
+        return without[piece.order()].clone();
     }
 
     /** Quantiles of a quantity of the cells, spread over bins of an axis. */

@@ -43,12 +43,15 @@ final class NodeTable {
 
     private final double[] massEdges;
     private final double[] ageEdges;
+    private final double[] massCentre;
+    private final double[] ageCentre;
     private final double[] massWeight;
     private final double[] ageWeight;
     private final double[][] teff;
     private final double[][] logL;
     private final double[][] logG;
     private final double[][] lithiumLeft;
+    private final double[][] radius;
 
     /**
      * A table.
@@ -57,16 +60,18 @@ final class NodeTable {
      * @param forLithium the grid for lithium
      * @param age what is stated about the age
      * @param numbers limits and slopes of the mass function
-     * @param fineness 1 as usual; 2 halves every step
+     * @param fineness 1 as usual; 2 halves every step; 0.5 doubles it
      */
     NodeTable(
             EvolutionGrid grid,
             EvolutionGrid forLithium,
             AgeStatement age,
             JudgeNumbers numbers,
-            int fineness) {
+            double fineness) {
         this.massEdges = massEdges(numbers, fineness);
-        this.ageEdges = ageEdges(age, numbers.of("young-age"), AGE_CELLS * fineness);
+        this.ageEdges = ageEdges(age, numbers.of("young-age"), (int) Math.round(AGE_CELLS * fineness));
+        this.massCentre = centres(massEdges);
+        this.ageCentre = centres(ageEdges);
         MassFunction function = new MassFunction(numbers);
         this.massWeight = new double[massEdges.length - 1];
         double[] logMass = new double[massWeight.length];
@@ -84,15 +89,25 @@ final class NodeTable {
         this.logL = grid.on(Column.LOG_L, logAge, logMass);
         this.logG = grid.on(Column.LOG_G, logAge, logMass);
         this.lithiumLeft = forLithium.on(Column.LITHIUM, logAge, logMass);
+        this.radius = new double[logAge.length][logMass.length];
         for (int a = 0; a < logAge.length; a++) {
             for (int m = 0; m < logMass.length; m++) {
                 teff[a][m] = Math.pow(10, teff[a][m]);
                 lithiumLeft[a][m] = EvolutionGrid.lithiumLeft(lithiumLeft[a][m]);
+                radius[a][m] = Math.sqrt(mass(m) * Math.pow(10, SOLAR_LOG_G - logG[a][m]));
             }
         }
     }
 
-    private static double[] massEdges(JudgeNumbers numbers, int fineness) {
+    private static double[] centres(double[] edges) {
+        double[] centres = new double[edges.length - 1];
+        for (int i = 0; i < centres.length; i++) {
+            centres[i] = Math.sqrt(edges[i] * edges[i + 1]);
+        }
+        return centres;
+    }
+
+    private static double[] massEdges(JudgeNumbers numbers, double fineness) {
         double[] ends = {
             LEAST_MASS,
             numbers.of("deuterium-limit"),
@@ -105,7 +120,7 @@ final class NodeTable {
         };
         List<Double> edges = new ArrayList<>();
         for (int s = 0; s < CELLS.length; s++) {
-            double[] steps = logSteps(ends[s], ends[s + 1], CELLS[s] * fineness);
+            double[] steps = logSteps(ends[s], ends[s + 1], Math.max(2, (int) Math.round(CELLS[s] * fineness)));
             for (int i = 0; i < steps.length - 1; i++) {
                 edges.add(steps[i]);
             }
@@ -148,12 +163,12 @@ final class NodeTable {
 
     /** Geometric centre of a cell (solar). */
     double mass(int m) {
-        return Math.sqrt(massEdges[m] * massEdges[m + 1]);
+        return massCentre[m];
     }
 
     /** Geometric centre of a cell (Myr). */
     double ageMyr(int a) {
-        return Math.sqrt(ageEdges[a] * ageEdges[a + 1]);
+        return ageCentre[a];
     }
 
     double[] massEdges() {
@@ -201,7 +216,7 @@ final class NodeTable {
 
     /** Radius (solar) from mass and gravity. */
     double radius(int a, int m) {
-        return Math.sqrt(mass(m) * Math.pow(10, SOLAR_LOG_G - logG[a][m]));
+        return radius[a][m];
     }
 
     /** Part of the lithium left, 0 to 1. */

@@ -10,7 +10,7 @@ import java.util.Optional;
 final class OutcomeSimulator {
 
     private static final double NEGLIGIBLE = 1e-9;
-    private static final int CLASSES = GravityClass.values().length;
+    private static final int CLASSES = GravityOrder.COUNT;
     private static final double TYPE_BIN = 10;
     private static final int LOG_L_PER_BIN = 4;
     private static final double PARALLAX_DEX = 0.87;
@@ -149,7 +149,7 @@ final class OutcomeSimulator {
                 new double[TypeKernel.SEQUENCES.length][Kinds.COUNT][NodeTable.TEFF_SIZE];
         for (int a = 0; a < table.ages(); a++) {
             EvidenceCurves.AtAge here = curves.new AtAge(table.ageMyr(a));
-            double[] factor = new double[Piece.values().length];
+            double[] factor = new double[Piece.COUNT];
             double[] weight = {1 - here.youngSequence(), here.youngSequence()};
             for (int m = 0; m < table.masses(); m++) {
                 double p = posterior.probability(a, m);
@@ -161,7 +161,7 @@ final class OutcomeSimulator {
                 int low = (int) place;
                 int kind = kinds.of(table, a, m);
                 for (int s = 0; s < weight.length; s++) {
-                    double share = p * weight[s] / factor[Piece.TYPE.ordinal()];
+                    double share = p * weight[s] / factor[Piece.TYPE.order()];
                     curve[s][kind][low] += share * (1 - (place - low));
                     curve[s][kind][low + 1] += share * (place - low);
                 }

@@ -1,6 +1,6 @@
 package emberline.judge;
 
-import java.util.function.ToIntFunction;
+import java.util.function.Function;
 
 /**
  * Joint probabilities of what an object is (kinds) and what an observation shows (outcomes), from
@@ -61,14 +61,14 @@ final class OutcomeTable {
     }
 
     /** Probability that a verdict by the probabilities of the kinds changes. */
-    double change(ToIntFunction<double[]> verdict) {
+    double change(Function<double[], Decision> verdict) {
         double[] before = new double[joint.length];
         for (int k = 0; k < before.length; k++) {
             for (double one : joint[k]) {
                 before[k] += one;
             }
         }
-        int now = verdict.applyAsInt(normalised(before));
+        Decision now = verdict.apply(normalised(before));
         double all = 0;
         double other = 0;
         for (int o = 0; o < outcomes; o++) {
@@ -78,7 +78,7 @@ final class OutcomeTable {
                 weight += one;
             }
             all += weight;
-            if (weight > 0 && verdict.applyAsInt(normalised(column)) != now) {
+            if (weight > 0 && verdict.apply(normalised(column)) != now) {
                 other += weight;
             }
         }

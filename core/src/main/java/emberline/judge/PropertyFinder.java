@@ -115,8 +115,8 @@ final class PropertyFinder {
     /** A measured luminosity, mixed over the sequences. */
     static Estimate measured(LuminosityFinder.Measured measured, double young) {
         Moments moments = new Moments();
-        moments.add(1 - young, measured.logL()[0], measured.sigma()[0]);
-        moments.add(young, measured.logL()[1], measured.sigma()[1]);
+        moments.add(1 - young, measured.field().value(), measured.field().sigmaDex());
+        moments.add(young, measured.young().value(), measured.young().sigmaDex());
         return moments.estimate().orElseThrow();
     }
 }

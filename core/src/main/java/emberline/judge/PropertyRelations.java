@@ -46,8 +46,7 @@ final class PropertyRelations {
                                     JudgeTable.number(row, "high"),
                                     JudgeTable.number(row, "x0"),
                                     Arrays.copyOf(coefficients, last),
-                                    JudgeTable.number(row, "rms"),
-                                    row.getField("source"));
+                                    JudgeTable.number(row, "rms"));
                     String name =
                             name(row.getField("band"), Sequence.valueOf(row.getField("sequence")));
                     relations

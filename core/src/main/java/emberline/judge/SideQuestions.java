@@ -114,7 +114,7 @@ final class SideQuestions {
                 observation,
                 aim,
                 table.information(new boolean[] {true, false}),
-                table.change(p -> Limits.decide(p[YES], p[YES], judging).ordinal()),
+                table.change(p -> Limits.decide(p[YES], p[YES], judging)),
                 mix);
     }
 }

@@ -2,15 +2,25 @@ package emberline.judge;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Set;
-import java.util.TreeSet;
 
 /** A relation in pieces, each a polynomial with its scatter and its source. */
 final class TypeRelation {
 
     /** One piece, good from {@code low} to {@code high}. */
-    record Piece(
-            double low, double high, double origin, double[] coefficients, double rms, String source) {
+    static final class Piece {
+        private final double low;
+        private final double high;
+        private final double origin;
+        private final double[] coefficients;
+        private final double rms;
+
+        Piece(double low, double high, double origin, double[] coefficients, double rms) {
+            this.low = low;
+            this.high = high;
+            this.origin = origin;
+            this.coefficients = coefficients.clone();
+            this.rms = rms;
+        }
 
         double at(double x) {
             double value = 0;
@@ -29,7 +39,7 @@ final class TypeRelation {
 
     private Piece piece(double x) {
         for (Piece piece : pieces) {
-            if (x >= piece.low() && x <= piece.high()) {
+            if (x >= piece.low && x <= piece.high) {
                 return piece;
             }
         }
@@ -37,7 +47,7 @@ final class TypeRelation {
     }
 
     boolean covers(double x) {
-        return pieces.stream().anyMatch(piece -> x >= piece.low() && x <= piece.high());
+        return pieces.stream().anyMatch(piece -> x >= piece.low && x <= piece.high);
     }
 
     /** The value; only where it covers. */
@@ -47,13 +57,6 @@ final class TypeRelation {
 
     /** One-sigma scatter about it; only where it covers. */
     double rms(double x) {
-        return piece(x).rms();
-    }
-
-    /** Keys of the sources of its pieces. */
-    Set<String> sources() {
-        Set<String> keys = new TreeSet<>();
-        pieces.forEach(piece -> keys.add(piece.source()));
-        return keys;
+        return piece(x).rms;
     }
 }
