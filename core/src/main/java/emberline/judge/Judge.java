@@ -22,7 +22,7 @@ public final class Judge {
     private static final EvolutionGrid.Name MAIN = EvolutionGrid.Name.MERGED;
 
     private final Judging judging;
-    private final JudgeNumbers numbers = new JudgeNumbers();
+    private final JudgeNumbers numbers = JudgeNumbers.standard();
     private final PropertyRelations relations = new PropertyRelations();
     private final TypeKernel kernel = new TypeKernel(relations);
     private final AgeEvidence age = new AgeEvidence(numbers);

@@ -8,10 +8,20 @@ final class JudgeNumbers {
 
     private final Map<String, Double> values = new HashMap<>();
 
-    JudgeNumbers() {
+    private JudgeNumbers() {
         JudgeTable.rows(
                 "settings.csv",
                 row -> values.put(row.getField("id"), JudgeTable.number(row, "value")));
+    }
+
+    /** The numbers of the product. */
+    static JudgeNumbers standard() {
+        return Loaded.STANDARD;
+    }
+
+    /** Read once, when first asked for. */
+    private static final class Loaded {
+        private static final JudgeNumbers STANDARD = new JudgeNumbers();
     }
 
     /** The number of an id; the unit stands in the table. */

@@ -39,6 +39,8 @@ final class NodeTable {
     private static final int[] CELLS = {36, 60, 40, 5, 7, 40, 50};
 
     private static final int AGE_CELLS = 72;
+    private static final double DECADES_OF_AGE = 3;
+    private static final int LEAST_AGE_CELLS = 24;
     private static final double SOLAR_LOG_G = 4.438;
 
     private final double[] massEdges;
@@ -69,7 +71,10 @@ final class NodeTable {
             JudgeNumbers numbers,
             double fineness) {
         this.massEdges = massEdges(numbers, fineness);
-        this.ageEdges = ageEdges(age, numbers.of("young-age"), (int) Math.round(AGE_CELLS * fineness));
+        double range = Math.log10(age.highMyr() / age.lowMyr()) / DECADES_OF_AGE;
+        int ageCells = (int) Math.max(LEAST_AGE_CELLS, Math.round(AGE_CELLS * range));
+        this.ageEdges =
+                ageEdges(age, numbers.of("young-age"), (int) Math.round(ageCells * fineness));
         this.massCentre = centres(massEdges);
         this.ageCentre = centres(ageEdges);
         MassFunction function = new MassFunction(numbers);

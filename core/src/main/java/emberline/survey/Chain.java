@@ -31,7 +31,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
- * The whole chain for one object: read, prepare, measure, place. An object that fails gets a result
+ * The whole chain for one object: read, prepare, measure, place, judge. An object that fails gets a result
  * that says why; no exception leaves the chain for bad data. Safe for use by several threads.
  */
 public final class Chain {
@@ -41,6 +41,7 @@ public final class Chain {
     private final Measurer measurer;
     private final LineReporter lines;
     private final Placer placer;
+    private final JudgingStep judging;
     private final Preparing defaults;
     private final long seed;
     private final boolean fitReddening;
@@ -57,6 +58,7 @@ public final class Chain {
         this.measurer = new Measurer(catalogue, measuring);
         this.lines = new LineReporter(catalogue, measuring.site());
         this.placer = new Placer(catalogue, Calibration.standard(), settings.prior().load());
+        this.judging = new JudgingStep(settings.judging());
         this.defaults = settings.preparing();
         this.seed = settings.seed();
         this.fitReddening = settings.fitReddening();
@@ -231,14 +233,15 @@ public final class Chain {
         if (placement.type().isEmpty()) {
             reasons.add(placement.typeReason());
         }
-        return new ObjectResult(
-                candidate,
-                reasons.isEmpty() ? Status.MEASURED : Status.PARTIAL,
-                String.join(" | ", reasons),
-                spectra,
-                Optional.of(best),
-                Optional.of(placement),
-                findings);
+        return judging.judged(
+                new ObjectResult(
+                        candidate,
+                        reasons.isEmpty() ? Status.MEASURED : Status.PARTIAL,
+                        String.join(" | ", reasons),
+                        spectra,
+                        Optional.of(best),
+                        Optional.of(placement),
+                        findings));
     }
 
     private static Finding fitted(ReddeningFit fit) {

@@ -1,5 +1,6 @@
 package emberline.survey;
 
+import emberline.judge.Judging;
 import emberline.place.calibrated.TypePriors;
 import emberline.prepare.Preparing;
 
@@ -12,6 +13,7 @@ import emberline.prepare.Preparing;
  * @param prior what is thought of types and gravities before a spectrum is looked at
  * @param fitReddening whether type and extinction are fitted together
  * @param toMeasuredRest whether the velocity that lines show is taken out where none is stated
+ * @param judging how objects are judged
  */
 public record SurveySettings(
         Preparing preparing,
@@ -19,7 +21,8 @@ public record SurveySettings(
         long seed,
         TypePriors prior,
         boolean fitReddening,
-        boolean toMeasuredRest) {
+        boolean toMeasuredRest,
+        Judging judging) {
 
     /** The seed where none is given. */
     public static final long DEFAULT_SEED = 20_260_101L;
@@ -43,7 +46,8 @@ public record SurveySettings(
                 DEFAULT_SEED,
                 TypePriors.FLAT,
                 false,
-                false);
+                false,
+                Judging.withDefaults());
     }
 
     /**
@@ -53,7 +57,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withThreads(int number) {
-        return new SurveySettings(preparing, number, seed, prior, fitReddening, toMeasuredRest);
+        return new SurveySettings(preparing, number, seed, prior, fitReddening, toMeasuredRest, judging);
     }
 
     /**
@@ -63,7 +67,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withSeed(long start) {
-        return new SurveySettings(preparing, threads, start, prior, fitReddening, toMeasuredRest);
+        return new SurveySettings(preparing, threads, start, prior, fitReddening, toMeasuredRest, judging);
     }
 
     /**
@@ -73,7 +77,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withPreparing(Preparing stated) {
-        return new SurveySettings(stated, threads, seed, prior, fitReddening, toMeasuredRest);
+        return new SurveySettings(stated, threads, seed, prior, fitReddening, toMeasuredRest, judging);
     }
 
     /**
@@ -83,7 +87,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withMeasuredRest(boolean shift) {
-        return new SurveySettings(preparing, threads, seed, prior, fitReddening, shift);
+        return new SurveySettings(preparing, threads, seed, prior, fitReddening, shift, judging);
     }
 
     /**
@@ -93,7 +97,7 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withPrior(TypePriors before) {
-        return new SurveySettings(preparing, threads, seed, before, fitReddening, toMeasuredRest);
+        return new SurveySettings(preparing, threads, seed, before, fitReddening, toMeasuredRest, judging);
     }
 
     /**
@@ -103,6 +107,17 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withReddeningFit(boolean fit) {
-        return new SurveySettings(preparing, threads, seed, prior, fit, toMeasuredRest);
+        return new SurveySettings(preparing, threads, seed, prior, fit, toMeasuredRest, judging);
+    }
+
+    /**
+     * These settings with objects judged otherwise.
+     *
+     * @param how thresholds, age and aims
+     * @return new settings
+     */
+    public SurveySettings withJudging(Judging how) {
+        return new SurveySettings(
+                preparing, threads, seed, prior, fitReddening, toMeasuredRest, how);
     }
 }
