@@ -39,6 +39,7 @@ final class SortCommand implements Callable<Integer> {
 
     @Spec private CommandSpec spec;
     @Mixin private SpectrumOptions spectrumOptions;
+    @Mixin private JudgingOptions judgingOptions;
     @Mixin private CatalogueOption catalogueOption;
 
     @Parameters(
@@ -66,7 +67,8 @@ final class SortCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws IOException, InterruptedException {
-        SurveySettings settings = spectrumOptions.settings(threads);
+        SurveySettings settings =
+                spectrumOptions.settings(threads).withJudging(judgingOptions.judging());
         FeatureCatalogue catalogue = catalogueOption.load();
         CandidateList candidates = new CandidateListReader().read(list);
         Chain chain = new Chain(catalogue, spectrumOptions.measuring(), settings);

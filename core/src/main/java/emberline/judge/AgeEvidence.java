@@ -103,7 +103,8 @@ final class AgeEvidence {
 
     /** Part of the objects of an age that lie on the sequence of young objects. */
     static double youngSequence(double[] classShares) {
-        return classShares[GravityOrder.of(GravityClass.VL_G)] + classShares[GravityOrder.of(GravityClass.INT_G)];
+        return classShares[GravityOrder.of(GravityClass.VL_G)]
+                + classShares[GravityOrder.of(GravityClass.INT_G)];
     }
 
     private VelocityRow row(String population, double type) {

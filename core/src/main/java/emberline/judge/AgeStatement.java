@@ -83,8 +83,7 @@ public record AgeStatement(
      */
     public static AgeStatement about(String text, double meanMyr, double below, double above) {
         if (!(below > 0) || !(above > 0)) {
-            throw new IllegalArgumentException(
-                    "age '" + text + "': expected an error above zero");
+            throw new IllegalArgumentException("age '" + text + "': expected an error above zero");
         }
         return new AgeStatement(
                 text, meanMyr - TAIL * below, meanMyr + TAIL * above, meanMyr, below, above);

@@ -79,8 +79,7 @@ public enum Aim {
                 return weight;
             }
         } catch (NumberFormatException e) {
-            throw new IllegalArgumentException(
-                    "aim '" + one + "': expected a number after =", e);
+            throw new IllegalArgumentException("aim '" + one + "': expected a number after =", e);
         }
         throw new IllegalArgumentException("aim '" + one + "': expected a positive weight");
     }

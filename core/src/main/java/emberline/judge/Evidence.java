@@ -33,10 +33,7 @@ public record Evidence(
 
     /** Copies the maps and checks the prior. */
     public Evidence {
-        gravityPrior =
-                gravityPrior.isEmpty()
-                        ? Map.of()
-                        : Map.copyOf(new EnumMap<>(gravityPrior));
+        gravityPrior = gravityPrior.isEmpty() ? Map.of() : Map.copyOf(new EnumMap<>(gravityPrior));
         for (GravityClass gravity : GravityClass.values()) {
             if (!gravityPrior.isEmpty() && !(gravityPrior.getOrDefault(gravity, 0.0) > 0)) {
                 throw new IllegalArgumentException(
@@ -127,7 +124,8 @@ public record Evidence(
      * @return new evidence
      */
     public Evidence withAstrometry(Astrometry known) {
-        return new Evidence(type, gravityPrior, lithium, halpha, photometry, known, age, pMetalPoor);
+        return new Evidence(
+                type, gravityPrior, lithium, halpha, photometry, known, age, pMetalPoor);
     }
 
     /**

@@ -1,6 +1,5 @@
 package emberline.judge;
 
-import emberline.place.GravityClass;
 import java.util.EnumMap;
 import java.util.Map;
 import java.util.Optional;
@@ -54,8 +53,7 @@ final class EvidenceCurves {
         counts.put(Piece.AGE, stated);
         counts.put(Piece.GRAVITY, mix.gravityCounts() && !stated);
         counts.put(Piece.LITHIUM, evidence.lithium().outcome() != LithiumTest.Outcome.UNKNOWN);
-        counts.put(
-                Piece.HALPHA, age.halphaCounts(evidence.halpha(), meanType) && !stated);
+        counts.put(Piece.HALPHA, age.halphaCounts(evidence.halpha(), meanType) && !stated);
         counts.put(Piece.VELOCITY, kinematics.isPresent() && !stated);
     }
 
@@ -163,13 +161,10 @@ final class EvidenceCurves {
                 return;
             }
             factor[Piece.GRAVITY.order()] =
-                    gravityCounts
-                            ? NodeTable.along(withClass, place) / typeHere
-                            : 1;
+                    gravityCounts ? NodeTable.along(withClass, place) / typeHere : 1;
             factor[Piece.LUMINOSITY.order()] =
                     luminous == null ? 1 : NodeTable.along(luminous, table.logLPlace(a, m));
-            factor[Piece.LITHIUM.order()] =
-                    lithiumCounts ? ofLithium(table.lithiumLeft(a, m)) : 1;
+            factor[Piece.LITHIUM.order()] = lithiumCounts ? ofLithium(table.lithiumLeft(a, m)) : 1;
             factor[Piece.AGE.order()] = 1; // stands in the weights of the table
             factor[Piece.HALPHA.order()] = halpha;
             factor[Piece.VELOCITY.order()] = velocity;

@@ -58,8 +58,7 @@ public final class EvolutionGrid {
     private final double[] logMassMsun;
     private final Map<Column, double[][]> cells;
 
-    private EvolutionGrid(
-            double[] logAgeMyr, double[] logMassMsun, Map<Column, double[][]> cells) {
+    private EvolutionGrid(double[] logAgeMyr, double[] logMassMsun, Map<Column, double[][]> cells) {
         this.logAgeMyr = logAgeMyr;
         this.logMassMsun = logMassMsun;
         this.cells = cells;
@@ -89,7 +88,8 @@ public final class EvolutionGrid {
         return grids;
     }
 
-    private static EvolutionGrid of(NavigableMap<Double, NavigableMap<Double, Map<Column, Double>>> table) {
+    private static EvolutionGrid of(
+            NavigableMap<Double, NavigableMap<Double, Map<Column, Double>>> table) {
         double[] ages = table.keySet().stream().mapToDouble(a -> a).toArray();
         double[] masses =
                 table.firstEntry().getValue().keySet().stream().mapToDouble(m -> m).toArray();
@@ -122,9 +122,10 @@ public final class EvolutionGrid {
 
     /** The same grid with every second age left out, to see how well it interpolates. */
     EvolutionGrid thinned() {
-        int[] kept = java.util.stream.IntStream.range(0, logAgeMyr.length)
-                .filter(a -> a % 2 == 0 || a == logAgeMyr.length - 1)
-                .toArray();
+        int[] kept =
+                java.util.stream.IntStream.range(0, logAgeMyr.length)
+                        .filter(a -> a % 2 == 0 || a == logAgeMyr.length - 1)
+                        .toArray();
         Map<Column, double[][]> some = new EnumMap<>(Column.class);
         cells.forEach(
                 (column, all) ->
@@ -159,7 +160,8 @@ public final class EvolutionGrid {
             int mass = m;
             MonotoneCurve curve =
                     new MonotoneCurve(
-                            logAgeMyr, Arrays.stream(byMass).mapToDouble(row -> row[mass]).toArray());
+                            logAgeMyr,
+                            Arrays.stream(byMass).mapToDouble(row -> row[mass]).toArray());
             for (int a = 0; a < ages.length; a++) {
                 values[a][m] = curve.at(ages[a]);
             }

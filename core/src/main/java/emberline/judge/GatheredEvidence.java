@@ -212,8 +212,7 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
             return Optional.of(AgeStatement.parse(text.get()));
         } catch (IllegalArgumentException e) {
             findings.add(
-                    Finding.caution(
-                            "age-unusable", "column age was not used: " + e.getMessage()));
+                    Finding.caution("age-unusable", "column age was not used: " + e.getMessage()));
             return Optional.empty();
         }
     }

@@ -115,8 +115,13 @@ public final class Judge {
                         ? new NodePosterior(tables.get(MAIN), curves, numbers)
                         : open;
         return assemble(
-                evidence, mix, curves, new Found(distance, kinematics, luminosity),
-                open, posterior, comparisons(tables, curves));
+                evidence,
+                mix,
+                curves,
+                new Found(distance, kinematics, luminosity),
+                open,
+                posterior,
+                comparisons(tables, curves));
     }
 
     private record Found(
@@ -216,8 +221,7 @@ public final class Judge {
     private Properties physical(
             Evidence evidence, TypeMix mix, NodePosterior posterior, Found found) {
         double young = posterior.onYoungSequence();
-        Map<MagnitudeBand, Estimate> absolute =
-                properties.absoluteMagnitudes(mix);
+        Map<MagnitudeBand, Estimate> absolute = properties.absoluteMagnitudes(mix);
         if (distances.byParallax(evidence.astrometry())) {
             DistanceEstimate distance = found.distance().orElseThrow();
             double distanceMag = 5 / Math.log(10) * distance.relativeSigma();

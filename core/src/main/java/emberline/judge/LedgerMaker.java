@@ -76,8 +76,7 @@ final class LedgerMaker {
                     case TYPE ->
                             "effective temperature by type, field and young sequences mixed by age";
                     case LUMINOSITY -> "parallax and magnitude; an unresolved pair is allowed for";
-                    case AGE ->
-                            "age " + curves.evidence().age().map(AgeStatement::text).orElse("");
+                    case AGE -> "age " + curves.evidence().age().map(AgeStatement::text).orElse("");
                     case GRAVITY ->
                             "how often members of groups of known age get each class; the prior"
                                     + " of the class is divided out";

@@ -50,11 +50,7 @@ final class LuminosityFinder {
      * @param young on the sequence of young objects
      */
     record Measured(
-            MagnitudeBand band,
-            double absoluteMag,
-            double absoluteSigma,
-            LogL field,
-            LogL young) {
+            MagnitudeBand band, double absoluteMag, double absoluteSigma, LogL field, LogL young) {
 
         LogL on(Sequence sequence) {
             return sequence == Sequence.YOUNG ? young : field;
@@ -91,8 +87,7 @@ final class LuminosityFinder {
         Optional<LogL> field = logL(band, Sequence.FIELD, absolute, absoluteSigma);
         Optional<LogL> young = logL(band, Sequence.YOUNG, absolute, absoluteSigma);
         return field.isPresent() && young.isPresent()
-                ? Optional.of(
-                        new Measured(band, absolute, absoluteSigma, field.get(), young.get()))
+                ? Optional.of(new Measured(band, absolute, absoluteSigma, field.get(), young.get()))
                 : Optional.empty();
     }
 

@@ -19,11 +19,7 @@ public final class MassAgePlane {
             int age = cell(table.ageMyr(a), lowMyr, highMyr, AGES);
             for (int m = 0; m < table.masses(); m++) {
                 int mass =
-                        cell(
-                                table.mass(m),
-                                NodeTable.LEAST_MASS,
-                                NodeTable.GREATEST_MASS,
-                                MASSES);
+                        cell(table.mass(m), NodeTable.LEAST_MASS, NodeTable.GREATEST_MASS, MASSES);
                 probability[age][mass] += posterior.probability(a, m);
             }
         }

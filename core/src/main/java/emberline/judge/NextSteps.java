@@ -94,8 +94,7 @@ final class NextSteps {
             tables.put(
                     FollowUp.POTASSIUM,
                     simulator.gravity(terms.get(FollowUp.POTASSIUM).accuracy()));
-            tables.put(
-                    FollowUp.H_SHAPE, simulator.gravity(terms.get(FollowUp.H_SHAPE).accuracy()));
+            tables.put(FollowUp.H_SHAPE, simulator.gravity(terms.get(FollowUp.H_SHAPE).accuracy()));
         }
         if (mix.sigmaType() > TYPE_UNSURE) {
             tables.put(FollowUp.LOW_RESOLUTION, simulator.type(kernel));
@@ -113,8 +112,7 @@ final class NextSteps {
         return switch (evidence.lithium().outcome()) {
             case SEEN -> true;
             case UNKNOWN -> false;
-            case NOT_SEEN ->
-                    evidence.lithium().limitAngstrom() < lithium.width(mix.meanType()) / 2;
+            case NOT_SEEN -> evidence.lithium().limitAngstrom() < lithium.width(mix.meanType()) / 2;
         };
     }
 

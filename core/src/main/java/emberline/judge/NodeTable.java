@@ -125,7 +125,11 @@ final class NodeTable {
         };
         List<Double> edges = new ArrayList<>();
         for (int s = 0; s < CELLS.length; s++) {
-            double[] steps = logSteps(ends[s], ends[s + 1], Math.max(2, (int) Math.round(CELLS[s] * fineness)));
+            double[] steps =
+                    logSteps(
+                            ends[s],
+                            ends[s + 1],
+                            Math.max(2, (int) Math.round(CELLS[s] * fineness)));
             for (int i = 0; i < steps.length - 1; i++) {
                 edges.add(steps[i]);
             }
@@ -199,8 +203,7 @@ final class NodeTable {
 
     /** Place on the axis of temperatures, within its ends. */
     double teffPlace(int a, int m) {
-        return Math.min(
-                TEFF_SIZE - 1.001, Math.max(0, (teff[a][m] - FIRST_TEFF) / TEFF_STEP));
+        return Math.min(TEFF_SIZE - 1.001, Math.max(0, (teff[a][m] - FIRST_TEFF) / TEFF_STEP));
     }
 
     /** log10 of the luminosity (solar). */
@@ -210,8 +213,7 @@ final class NodeTable {
 
     /** Place on the axis of log L, within its ends. */
     double logLPlace(int a, int m) {
-        return Math.min(
-                LOG_L_SIZE - 1.001, Math.max(0, (logL[a][m] - FIRST_LOG_L) / LOG_L_STEP));
+        return Math.min(LOG_L_SIZE - 1.001, Math.max(0, (logL[a][m] - FIRST_LOG_L) / LOG_L_STEP));
     }
 
     /** log10 of the surface gravity (cm/s2). */

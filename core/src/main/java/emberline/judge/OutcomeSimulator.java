@@ -1,6 +1,5 @@
 package emberline.judge;
 
-import emberline.place.GravityClass;
 import java.util.Optional;
 
 /**
@@ -93,9 +92,7 @@ final class OutcomeSimulator {
             for (int g = 0; g < CLASSES; g++) {
                 for (int o = 0; o < CLASSES; o++) {
                     seen[o] +=
-                            share[g]
-                                    / sum
-                                    * (o == g ? accuracy : (1 - accuracy) / (CLASSES - 1));
+                            share[g] / sum * (o == g ? accuracy : (1 - accuracy) / (CLASSES - 1));
                 }
             }
             shares[a] = seen;
@@ -114,11 +111,8 @@ final class OutcomeSimulator {
     OutcomeTable parallax(double relativeError) {
         int bins = NodeTable.LOG_L_SIZE / LOG_L_PER_BIN + 1;
         double[][] sharp = new double[Kinds.COUNT][bins];
-        visit(
-                sharp,
-                (a, m, p, of) -> of[(int) (table.logLPlace(a, m) / LOG_L_PER_BIN)] += p);
-        double sigmaDex =
-                Math.hypot(numbers.of("luminosity-floor"), PARALLAX_DEX * relativeError);
+        visit(sharp, (a, m, p, of) -> of[(int) (table.logLPlace(a, m) / LOG_L_PER_BIN)] += p);
+        double sigmaDex = Math.hypot(numbers.of("luminosity-floor"), PARALLAX_DEX * relativeError);
         double sigma = sigmaDex / (NodeTable.LOG_L_STEP * LOG_L_PER_BIN);
         return new OutcomeTable(blurred(sharp, sigma));
     }
@@ -171,8 +165,7 @@ final class OutcomeSimulator {
         for (int n = 0; n < TypeAxis.SIZE; n++) {
             for (int s = 0; mix.type(n) > 0 && s < TypeKernel.SEQUENCES.length; s++) {
                 for (int k = 0; k < Kinds.COUNT; k++) {
-                    joint[k][(int) (n / TYPE_BIN)] +=
-                            mix.type(n) * kernel.sum(s, n, curve[s][k]);
+                    joint[k][(int) (n / TYPE_BIN)] += mix.type(n) * kernel.sum(s, n, curve[s][k]);
                 }
             }
         }

@@ -35,10 +35,7 @@ final class Priorities {
                             ? chance + ", no further observation would change the decision"
                             : chance
                                     + String.format(
-                                            Locale.ROOT,
-                                            ", %s adds %.2f bit",
-                                            best.label(),
-                                            gain));
+                                            Locale.ROOT, ", %s adds %.2f bit", best.label(), gain));
         }
         return new Priority(score, claims, String.join("; ", words));
     }

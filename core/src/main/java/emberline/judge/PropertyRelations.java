@@ -73,13 +73,11 @@ final class PropertyRelations {
     }
 
     /** A relation of a band at a type or magnitude, the field's where the sequence has none. */
-    Optional<TypeRelation> at(
-            Quantity quantity, MagnitudeBand band, Sequence sequence, double x) {
+    Optional<TypeRelation> at(Quantity quantity, MagnitudeBand band, Sequence sequence, double x) {
         return at(quantity, band.name(), sequence, x);
     }
 
-    private Optional<TypeRelation> at(
-            Quantity quantity, String band, Sequence sequence, double x) {
+    private Optional<TypeRelation> at(Quantity quantity, String band, Sequence sequence, double x) {
         Optional<TypeRelation> own = find(quantity, band, sequence).filter(r -> r.covers(x));
         return own.isPresent()
                 ? own

@@ -49,9 +49,7 @@ final class TypeKernel {
                         Math.floor(
                                 (mean - TAIL * sigma - NodeTable.FIRST_TEFF) / NodeTable.TEFF_STEP);
         int high =
-                (int)
-                        Math.ceil(
-                                (mean + TAIL * sigma - NodeTable.FIRST_TEFF) / NodeTable.TEFF_STEP);
+                (int) Math.ceil((mean + TAIL * sigma - NodeTable.FIRST_TEFF) / NodeTable.TEFF_STEP);
         low = Math.max(0, low);
         high = Math.min(NodeTable.TEFF_SIZE - 1, high);
         first[s][n] = low;

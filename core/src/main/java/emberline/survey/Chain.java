@@ -31,8 +31,9 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
- * The whole chain for one object: read, prepare, measure, place, judge. An object that fails gets a result
- * that says why; no exception leaves the chain for bad data. Safe for use by several threads.
+ * The whole chain for one object: read, prepare, measure, place, judge. An object that fails gets a
+ * result that says why; no exception leaves the chain for bad data. Safe for use by several
+ * threads.
  */
 public final class Chain {
 
