@@ -15,12 +15,15 @@ public final class MassAgePlane {
         double[] ages = table.ageEdgesMyr();
         this.lowMyr = ages[0];
         this.highMyr = ages[ages.length - 1];
+        int[] massCell = new int[table.masses()];
+        for (int m = 0; m < massCell.length; m++) {
+            massCell[m] =
+                    cell(table.mass(m), NodeTable.LEAST_MASS, NodeTable.GREATEST_MASS, MASSES);
+        }
         for (int a = 0; a < table.ages(); a++) {
-            int age = cell(table.ageMyr(a), lowMyr, highMyr, AGES);
-            for (int m = 0; m < table.masses(); m++) {
-                int mass =
-                        cell(table.mass(m), NodeTable.LEAST_MASS, NodeTable.GREATEST_MASS, MASSES);
-                probability[age][mass] += posterior.probability(a, m);
+            double[] ofAge = probability[cell(table.ageMyr(a), lowMyr, highMyr, AGES)];
+            for (int m = 0; m < massCell.length; m++) {
+                ofAge[massCell[m]] += posterior.probability(a, m);
             }
         }
     }
