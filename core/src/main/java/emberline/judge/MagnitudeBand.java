@@ -44,10 +44,9 @@ public enum MagnitudeBand {
     /**
      * The band in words.
      *
-     * @return for instance {@code H (2MASS)} or {@code W2}
+     * @return for instance {@code H 2MASS} or {@code W2}
      */
     public String label() {
-        int gap = name().indexOf('_');
-        return gap < 0 ? name() : name().substring(0, gap) + " (" + name().substring(gap + 1) + ")";
+        return name().replace('_', ' ');
     }
 }

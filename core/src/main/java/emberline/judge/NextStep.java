@@ -29,7 +29,7 @@ public record NextStep(
     private static final double CAN_CHANGE = 0.01;
 
     /** Information (bit) below which an observation is not recommended. */
-    private static final double WORTH_BITS = 0.005;
+    private static final double WORTH_BITS = 0.02;
 
     /**
      * Whether it is worth making: it can change the decision, and it tells something.
