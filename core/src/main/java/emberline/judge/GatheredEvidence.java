@@ -10,6 +10,7 @@ import emberline.place.GravityVerdict;
 import emberline.place.Placement;
 import emberline.place.TypeEstimate;
 import emberline.place.TypePosterior;
+import emberline.place.calibrated.TypePrior;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
 import java.util.ArrayList;
@@ -42,47 +43,102 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
     }
 
     /**
-     * Gathers the evidence of an object by its adopted type and its gravity verdict.
+     * Gathers the evidence of an object.
+     *
+     * <p>Type and gravity come from the posterior of the calibrated witness where there is one,
+     * else the type from the adopted one with normal errors. Where the gravity class rests on the
+     * published scores, their probabilities take the place of those of the posterior.
      *
      * @param candidate the row of the list
      * @param placement type and gravity
      * @param lines the lines of its spectra
+     * @param prior what was thought of type and gravity before, in the posterior of the placement
      * @return the evidence, or empty where there is no type
      */
     public static Optional<GatheredEvidence> of(
-            Candidate candidate, Placement placement, List<LineReport> lines) {
+            Candidate candidate, Placement placement, List<LineReport> lines, TypePrior prior) {
         return placement
                 .type()
-                .map(type -> of(candidate, placement, lines, posterior(type, placement.gravity())));
+                .map(type -> of(candidate, placement, lines, gravity(placement, type, prior)));
     }
 
-    /** The posterior of a type with normal errors and the probabilities of a verdict. */
-    private static TypePosterior posterior(TypeEstimate type, GravityVerdict verdict) {
+    /** A posterior and the prior of the classes in it; no prior where the class says nothing. */
+    private record TypeAndGravity(TypePosterior posterior, Map<GravityClass, Double> prior) {}
+
+    private static TypeAndGravity gravity(Placement placement, TypeEstimate type, TypePrior prior) {
+        GravityVerdict verdict = placement.gravity();
+        Optional<TypePosterior> posterior = placement.calibrated().posterior();
+        if (posterior.isPresent() && isOf(verdict, posterior.get())) {
+            Map<GravityClass, Double> before = new EnumMap<>(GravityClass.class);
+            double sum = 0;
+            for (GravityClass gravity : GravityClass.values()) {
+                sum += prior.density(type.typeNumber(), gravity);
+            }
+            for (GravityClass gravity : GravityClass.values()) {
+                before.put(gravity, prior.density(type.typeNumber(), gravity) / sum);
+            }
+            return new TypeAndGravity(posterior.get(), before);
+        }
         Map<GravityClass, Double> share = new EnumMap<>(GravityClass.class);
+        Map<GravityClass, Double> flat = new EnumMap<>(GravityClass.class);
         double third = 1.0 / GravityOrder.COUNT;
-        share.put(GravityClass.FLD_G, verdict.pFieldGravity().orElse(third));
-        share.put(GravityClass.INT_G, verdict.pIntermediateGravity().orElse(third));
-        share.put(GravityClass.VL_G, verdict.pVeryLowGravity().orElse(third));
-        return NormalType.posterior(type.typeNumber(), type.sigmaSubclass(), share);
+        for (GravityClass gravity : GravityClass.values()) {
+            share.put(gravity, of(verdict, gravity).orElse(third));
+            flat.put(gravity, third);
+        }
+        TypePosterior apart =
+                posterior
+                        .map(joint -> withShares(joint, share))
+                        .orElseGet(
+                                () ->
+                                        NormalType.posterior(
+                                                type.typeNumber(), type.sigmaSubclass(), share));
+        return new TypeAndGravity(apart, verdict.gravityClass().isPresent() ? flat : Map.of());
+    }
+
+    private static OptionalDouble of(GravityVerdict verdict, GravityClass gravity) {
+        return switch (gravity) {
+            case FLD_G -> verdict.pFieldGravity();
+            case INT_G -> verdict.pIntermediateGravity();
+            case VL_G -> verdict.pVeryLowGravity();
+        };
+    }
+
+    /** Whether the probabilities of a verdict are those of a posterior. */
+    private static boolean isOf(GravityVerdict verdict, TypePosterior posterior) {
+        for (GravityClass gravity : GravityClass.values()) {
+            OptionalDouble p = of(verdict, gravity);
+            if (p.isEmpty() || p.getAsDouble() != posterior.probability(gravity)) {
+                return false;
+            }
+        }
+        return true;
+    }
+
+    /** The types of a posterior with other shares of the classes, the same at every type. */
+    private static TypePosterior withShares(TypePosterior joint, Map<GravityClass, Double> share) {
+        Map<GravityClass, double[]> weights = new EnumMap<>(GravityClass.class);
+        for (GravityClass gravity : GravityClass.values()) {
+            double[] ofClass = new double[joint.size()];
+            for (int i = 0; i < ofClass.length; i++) {
+                ofClass[i] = joint.probability(i) * share.get(gravity);
+            }
+            weights.put(gravity, ofClass);
+        }
+        return TypePosterior.of(joint.typeNumber(0), joint.stepSubclass(), weights);
     }
 
     private static GatheredEvidence of(
             Candidate candidate,
             Placement placement,
             List<LineReport> lines,
-            TypePosterior posterior) {
-        Map<GravityClass, Double> prior = new EnumMap<>(GravityClass.class);
-        if (placement.gravity().gravityClass().isPresent()) {
-            for (GravityClass gravity : GravityClass.values()) {
-                prior.put(gravity, 1.0 / GravityOrder.COUNT);
-            }
-        }
+            TypeAndGravity placed) {
         JudgeNumbers numbers = JudgeNumbers.standard();
         List<Finding> findings = new ArrayList<>();
         Evidence evidence =
                 new Evidence(
-                        posterior,
-                        prior,
+                        placed.posterior(),
+                        placed.prior(),
                         lithium(candidate, lines, numbers, findings),
                         halpha(placement, numbers),
                         photometry(candidate, numbers, findings),

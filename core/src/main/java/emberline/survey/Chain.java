@@ -59,7 +59,7 @@ public final class Chain {
         this.measurer = new Measurer(catalogue, measuring);
         this.lines = new LineReporter(catalogue, measuring.site());
         this.placer = new Placer(catalogue, Calibration.standard(), settings.prior().load());
-        this.judging = new JudgingStep(settings.judging());
+        this.judging = new JudgingStep(settings.judging(), settings.prior().load());
         this.defaults = settings.preparing();
         this.seed = settings.seed();
         this.fitReddening = settings.fitReddening();

@@ -5,6 +5,7 @@ import emberline.judge.Judge;
 import emberline.judge.Judgement;
 import emberline.judge.Judging;
 import emberline.place.Placement;
+import emberline.place.calibrated.TypePrior;
 import emberline.spectrum.Finding;
 import java.util.List;
 import java.util.Optional;
@@ -16,9 +17,11 @@ final class JudgingStep {
     private static final String NO_BANDS = "no-bands";
 
     private final Judge judge;
+    private final TypePrior prior;
 
-    JudgingStep(Judging judging) {
+    JudgingStep(Judging judging, TypePrior prior) {
         this.judge = new Judge(judging);
+        this.prior = prior;
     }
 
     /** The object with its judgement, or as it was where there is nothing to judge. */
@@ -31,7 +34,8 @@ final class JudgingStep {
                 GatheredEvidence.of(
                         placed.candidate(),
                         placement,
-                        placed.spectra().stream().map(SpectrumResult::lines).toList());
+                        placed.spectra().stream().map(SpectrumResult::lines).toList(),
+                        prior);
         if (gathered.isEmpty()) {
             return placed;
         }

@@ -7,6 +7,8 @@ import emberline.place.GravityVerdict;
 import emberline.place.Placement;
 import emberline.place.PublishedType;
 import emberline.place.TypeEstimate;
+import emberline.place.calibrated.CalibratedType;
+import emberline.place.calibrated.TypePriors;
 import emberline.spectrum.Candidate;
 import java.util.List;
 import java.util.Optional;
@@ -25,7 +27,7 @@ public final class KnownObject {
      * @param judging thresholds, age and aims
      */
     public KnownObject(Judging judging) {
-        this.judging = new JudgingStep(judging);
+        this.judging = new JudgingStep(judging, TypePriors.FLAT.load());
     }
 
     /**
@@ -46,6 +48,7 @@ public final class KnownObject {
                         Optional.of(type),
                         "",
                         new PublishedType(Optional.empty(), NO_SPECTRUM, List.of(), List.of()),
+                        CalibratedType.none(NO_SPECTRUM),
                         verdict,
                         new Activity(Optional.empty(), List.of(), NO_SPECTRUM),
                         List.of());
@@ -67,7 +70,8 @@ public final class KnownObject {
                 share(gravity, GravityClass.INT_G),
                 share(gravity, GravityClass.VL_G),
                 "",
-                List.of());
+                List.of(),
+                Optional.empty());
     }
 
     private static OptionalDouble share(GravityClass stated, GravityClass one) {

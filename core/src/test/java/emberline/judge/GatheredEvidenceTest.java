@@ -9,6 +9,10 @@ import emberline.place.GravityVerdict;
 import emberline.place.Placement;
 import emberline.place.PublishedType;
 import emberline.place.TypeEstimate;
+import emberline.place.TypePosterior;
+import emberline.place.calibrated.CalibratedType;
+import emberline.place.calibrated.TypePrior;
+import emberline.place.calibrated.TypePriors;
 import emberline.spectrum.Candidate;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -19,11 +23,18 @@ import org.junit.jupiter.api.Test;
 
 class GatheredEvidenceTest {
 
+    private static final TypePrior PRIOR = TypePriors.FLAT.load();
+
     private static Placement placement(GravityVerdict gravity) {
+        return placement(gravity, CalibratedType.none(""));
+    }
+
+    private static Placement placement(GravityVerdict gravity, CalibratedType calibrated) {
         return new Placement(
                 Optional.of(TypeEstimate.normal(12, 0.6)),
                 "",
                 new PublishedType(Optional.empty(), "", List.of(), List.of()),
+                calibrated,
                 gravity,
                 new Activity(Optional.empty(), List.of(), ""),
                 List.of());
@@ -37,7 +48,8 @@ class GatheredEvidenceTest {
         return GatheredEvidence.of(
                         new Candidate("x", 1, List.of(), row),
                         placement(GravityVerdict.notJudged("", List.of())),
-                        List.of())
+                        List.of(),
+                        PRIOR)
                 .orElseThrow();
     }
 
@@ -97,25 +109,61 @@ class GatheredEvidenceTest {
                         .contains("expected 2MASS or MKO"));
     }
 
+    private static GravityVerdict verdict(double field, double intermediate, double veryLow) {
+        return new GravityVerdict(
+                Optional.of(GravityClass.VL_G),
+                OptionalDouble.of(field),
+                OptionalDouble.of(intermediate),
+                OptionalDouble.of(veryLow),
+                "",
+                List.of(),
+                Optional.empty());
+    }
+
+    private static Evidence evidence(Placement placement) {
+        return GatheredEvidence.of(
+                        new Candidate("x", 1, List.of(), Map.of()), placement, List.of(), PRIOR)
+                .orElseThrow()
+                .evidence();
+    }
+
     @Test
-    void theVerdictBecomesThePosterior() {
-        GravityVerdict verdict =
-                new GravityVerdict(
-                        Optional.of(GravityClass.VL_G),
-                        OptionalDouble.of(0.1),
-                        OptionalDouble.of(0.3),
-                        OptionalDouble.of(0.6),
-                        "",
-                        List.of());
-        Evidence evidence =
-                GatheredEvidence.of(
-                                new Candidate("x", 1, List.of(), Map.of()),
-                                placement(verdict),
-                                List.of())
-                        .orElseThrow()
-                        .evidence();
+    void scoresComeWithoutAPrior() {
+        Evidence evidence = evidence(placement(verdict(0.1, 0.3, 0.6)));
         assertEquals(0.6, evidence.type().probability(GravityClass.VL_G), 1e-9);
         assertEquals(12, evidence.type().quantile(0.5), 0.01);
         assertEquals(1.0 / 3, evidence.gravityPrior().get(GravityClass.INT_G), 1e-9);
+    }
+
+    /** The joint posterior goes in as it is, with the prior that is in it. */
+    @Test
+    void thePosteriorComesWithItsPrior() {
+        TypePosterior joint =
+                NormalType.posterior(
+                        14,
+                        0.3,
+                        Map.of(
+                                GravityClass.FLD_G, 0.2,
+                                GravityClass.INT_G, 0.3,
+                                GravityClass.VL_G, 0.5));
+        CalibratedType calibrated = new CalibratedType(Optional.of(joint), "", List.of(), 3);
+        GravityVerdict ofJoint =
+                verdict(
+                        joint.probability(GravityClass.FLD_G),
+                        joint.probability(GravityClass.INT_G),
+                        joint.probability(GravityClass.VL_G));
+        Evidence told = evidence(placement(ofJoint, calibrated));
+        assertEquals(14, told.type().quantile(0.5), 0.05);
+        assertEquals(
+                PRIOR.density(14, GravityClass.VL_G),
+                told.gravityPrior().get(GravityClass.VL_G),
+                1e-9);
+        Evidence byScores = evidence(placement(verdict(0.9, 0.1, 0), calibrated));
+        assertEquals(14, byScores.type().quantile(0.5), 0.05);
+        assertEquals(0.9, byScores.type().probability(GravityClass.FLD_G), 1e-9);
+        assertEquals(1.0 / 3, byScores.gravityPrior().get(GravityClass.VL_G), 1e-9);
+        Evidence unjudged =
+                evidence(placement(GravityVerdict.notJudged("", List.of()), calibrated));
+        assertTrue(unjudged.gravityPrior().isEmpty());
     }
 }
