@@ -22,6 +22,7 @@ import picocli.CommandLine.Spec;
             SortCommand.class,
             MeasureCommand.class,
             PlaceCommand.class,
+            JudgeCommand.class,
             ReportCommand.class,
             CatalogueCommand.class,
             CalibrateCommand.class,

@@ -1,17 +1,28 @@
 package emberline.cli;
 
+import emberline.judge.Judging;
 import emberline.reports.attach.PlacementTable;
 import emberline.reports.attach.TableFormat;
 import emberline.survey.ObjectResult;
 import java.util.List;
 import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
 
 /** {@code place}: see its description. */
 @Command(
         name = "place",
-        description = "Places spectra on the sequence of spectral types and prints a table.",
+        description =
+                "Places spectra on the sequence of spectral types, judges the objects, and prints a"
+                        + " table.",
         mixinStandardHelpOptions = true)
 final class PlaceCommand extends SpectraTableCommand {
+
+    @Mixin private JudgingOptions judgingOptions;
+
+    @Override
+    Judging judging() {
+        return judgingOptions.judging();
+    }
 
     @Override
     String table(List<ObjectResult> results, TableFormat asked) {

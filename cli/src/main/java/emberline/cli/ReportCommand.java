@@ -28,6 +28,7 @@ final class ReportCommand implements Callable<Integer> {
 
     @Spec private CommandSpec spec;
     @Mixin private SpectrumOptions spectrumOptions;
+    @Mixin private JudgingOptions judgingOptions;
     @Mixin private CatalogueOption catalogueOption;
 
     @Parameters(paramLabel = "SPECTRUM", arity = "1..*", description = "Files of spectra.")
@@ -49,7 +50,7 @@ final class ReportCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws IOException {
-        SurveySettings settings = spectrumOptions.settings(1);
+        SurveySettings settings = spectrumOptions.settings(1).withJudging(judgingOptions.judging());
         FeatureCatalogue catalogue = catalogueOption.load();
         List<ObjectResult> results =
                 SingleSpectra.run(

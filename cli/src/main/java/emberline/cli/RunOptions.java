@@ -40,6 +40,11 @@ final class RunOptions {
         options.put("prior", settings.prior().word());
         options.put("fit_reddening", Boolean.toString(settings.fitReddening()));
         options.put("to_rest", Boolean.toString(settings.toMeasuredRest()));
+        options.put("age", settings.judging().age().map(age -> age.text()).orElse(""));
+        options.put("aim", settings.judging().aimWords());
+        options.put(
+                "decide",
+                settings.judging().substellarFrom() + "," + settings.judging().stellarTo());
         options.put("reports", reports ? "pdf" : "none");
         return options;
     }

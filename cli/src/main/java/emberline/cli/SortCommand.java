@@ -37,6 +37,7 @@ final class SortCommand implements Callable<Integer> {
 
     @Spec private CommandSpec spec;
     @Mixin private ListOptions listOptions;
+    @Mixin private JudgingOptions judgingOptions;
 
     @Option(
             names = "--out",
@@ -52,7 +53,7 @@ final class SortCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws IOException, InterruptedException {
-        SurveySettings settings = listOptions.settings();
+        SurveySettings settings = listOptions.settings().withJudging(judgingOptions.judging());
         FeatureCatalogue catalogue = listOptions.catalogue();
         CandidateList candidates = listOptions.read();
         Chain chain = new Chain(catalogue, listOptions.measuring(), settings);

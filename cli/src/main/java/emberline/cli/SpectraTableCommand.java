@@ -1,5 +1,6 @@
 package emberline.cli;
 
+import emberline.judge.Judging;
 import emberline.reports.attach.TableFormat;
 import emberline.survey.ObjectResult;
 import java.nio.file.Path;
@@ -31,6 +32,11 @@ abstract class SpectraTableCommand implements Callable<Integer> {
     /** The table of the results in a format, with a line end. */
     abstract String table(List<ObjectResult> results, TableFormat asked);
 
+    /** How objects are judged; by default as usual. */
+    Judging judging() {
+        return Judging.withDefaults();
+    }
+
     @Override
     public Integer call() {
         List<ObjectResult> results =
@@ -38,7 +44,7 @@ abstract class SpectraTableCommand implements Callable<Integer> {
                         spectra,
                         catalogueOption.load(),
                         spectrumOptions.measuring(),
-                        spectrumOptions.settings(1),
+                        spectrumOptions.settings(1).withJudging(judging()),
                         spec.commandLine().getErr());
         spec.commandLine().getOut().print(table(results, format));
         spec.commandLine().getOut().flush();

@@ -47,6 +47,37 @@ class CommandsTest {
     }
 
     @Test
+    void judgePrintsTheColumnsOfTheResults() {
+        CommandRun run =
+                CommandRun.of("judge", "--type", "L3", "--gravity", "VL-G", "--format", "json");
+        assertEquals(ExitCode.DONE, run.code(), run.err());
+        for (String key : List.of("p_substellar_070", "p_substellar", "p_substellar_075")) {
+            assertTrue(run.out().contains("\"" + key + "\": 0.9"), run.out());
+        }
+        CommandRun several =
+                CommandRun.of("judge", "--type", "M7", "T6", "--age", "4..6Gyr", "--format", "csv");
+        List<String> lines = several.out().lines().toList();
+        assertEquals(3, lines.size(), several.err());
+        assertTrue(lines.get(1).contains(",stellar,"), lines.get(1));
+        assertTrue(lines.get(2).contains(",substellar,"), lines.get(2));
+    }
+
+    @ParameterizedTest
+    @CsvSource({
+        "--age, ancient, 50..150Myr",
+        "--aim, hot, metal-poor",
+        "--decide, 0.4, 'such as 0.95,0.05'",
+        "--gravity, LOW, INT-G",
+        "--type-sigma, 0, above 0"
+    })
+    void whatCannotBeJudgedIsExplained(String option, String value, String words) {
+        CommandRun run = CommandRun.of("judge", "--type", "L3", option, value);
+        assertEquals(ExitCode.WRONG_USAGE, run.code());
+        assertTrue(run.err().contains(option) && run.err().contains(words), run.err());
+        assertEquals(ExitCode.WRONG_USAGE, CommandRun.of("judge", "--type", "G2").code());
+    }
+
+    @Test
     void reportWritesAPdfAndPrintsItsName() throws IOException {
         CommandRun run = CommandRun.of("report", demoSpectrum(), "--out", folder);
         assertEquals(ExitCode.DONE, run.code(), run.err());

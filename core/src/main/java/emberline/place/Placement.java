@@ -5,6 +5,7 @@ import emberline.place.metallicity.MetallicityVerdict;
 import emberline.place.reddening.ReddeningFit;
 import emberline.spectrum.Finding;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /**
@@ -34,5 +35,45 @@ public record Placement(
     /** Copies the list. */
     public Placement {
         findings = List.copyOf(findings);
+    }
+
+    /**
+     * The placement of an object whose type is known from elsewhere, without a spectrum.
+     *
+     * @param type its type
+     * @param gravity its gravity class
+     * @param reason why nothing else is known
+     * @return a placement with these alone
+     */
+    public static Placement known(TypeEstimate type, GravityVerdict gravity, String reason) {
+        return new Placement(
+                Optional.of(type),
+                "",
+                new PublishedType(Optional.empty(), reason, List.of(), List.of()),
+                CalibratedType.none(reason),
+                Optional.empty(),
+                gravity,
+                new MetallicityVerdict(Optional.empty(), reason, Map.of(), List.of(), "", ""),
+                new Activity(Optional.empty(), List.of(), reason),
+                List.of());
+    }
+
+    /**
+     * This placement with another second witness.
+     *
+     * @param other what the calibrated witness says
+     * @return the same placement with that
+     */
+    public Placement with(CalibratedType other) {
+        return new Placement(
+                type,
+                typeReason,
+                published,
+                other,
+                reddening,
+                gravity,
+                metallicity,
+                activity,
+                findings);
     }
 }

@@ -34,8 +34,9 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
- * The whole chain for one object: read, prepare, measure, place. An object that fails gets a result
- * that says why; no exception leaves the chain for bad data. Safe for use by several threads.
+ * The whole chain for one object: read, prepare, measure, place, judge. An object that fails gets a
+ * result that says why; no exception leaves the chain for bad data. Safe for use by several
+ * threads.
  */
 public final class Chain {
 
@@ -46,6 +47,7 @@ public final class Chain {
     private final PlacerChoice placers;
     private final Degrader degrader = new Degrader();
     private final Degrading degrading;
+    private final JudgingStep judging;
     private final Preparing defaults;
     private final long seed;
     private final boolean fitReddening;
@@ -84,6 +86,7 @@ public final class Chain {
         this.lines = new LineReporter(catalogue, measuring.site());
         this.placers = placers;
         this.degrading = settings.degrading();
+        this.judging = new JudgingStep(settings.judging(), settings.prior().load());
         this.defaults = settings.preparing();
         this.seed = settings.seed();
         this.fitReddening = settings.fitReddening();
@@ -261,14 +264,15 @@ public final class Chain {
         if (placement.type().isEmpty()) {
             reasons.add(placement.typeReason());
         }
-        return new ObjectResult(
-                candidate,
-                reasons.isEmpty() ? Status.MEASURED : Status.PARTIAL,
-                String.join(" | ", reasons),
-                spectra,
-                Optional.of(best),
-                Optional.of(placement),
-                findings);
+        return judging.judged(
+                new ObjectResult(
+                        candidate,
+                        reasons.isEmpty() ? Status.MEASURED : Status.PARTIAL,
+                        String.join(" | ", reasons),
+                        spectra,
+                        Optional.of(best),
+                        Optional.of(placement),
+                        findings));
     }
 
     private static Finding fitted(ReddeningFit fit) {

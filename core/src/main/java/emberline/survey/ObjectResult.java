@@ -1,9 +1,11 @@
 package emberline.survey;
 
+import emberline.judge.Judgement;
 import emberline.measure.Measurements;
 import emberline.place.Placement;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 
@@ -17,6 +19,7 @@ import java.util.Optional;
  * @param best the measurements that were placed: those of the one spectrum, or of each feature the
  *     one with the smallest error; empty where nothing was read
  * @param placement type and gravity; empty where nothing was read
+ * @param judgement mass, age and decision; empty where there is no type or it means nothing
  * @param findings all findings, those of the spectra first
  */
 public record ObjectResult(
@@ -26,11 +29,60 @@ public record ObjectResult(
         List<SpectrumResult> spectra,
         Optional<Measurements> best,
         Optional<Placement> placement,
+        Optional<Judgement> judgement,
         List<Finding> findings) {
 
     /** Copies the lists. */
     public ObjectResult {
         spectra = List.copyOf(spectra);
         findings = List.copyOf(findings);
+    }
+
+    /**
+     * An object that was not judged.
+     *
+     * @param candidate the row of the list
+     * @param status how far the object came
+     * @param reason why it did not come further
+     * @param spectra its spectra
+     * @param best the measurements that were placed
+     * @param placement type and gravity
+     * @param findings all findings
+     */
+    public ObjectResult(
+            Candidate candidate,
+            Status status,
+            String reason,
+            List<SpectrumResult> spectra,
+            Optional<Measurements> best,
+            Optional<Placement> placement,
+            List<Finding> findings) {
+        this(candidate, status, reason, spectra, best, placement, Optional.empty(), findings);
+    }
+
+    /**
+     * The same object with a judgement, whose findings come after the others.
+     *
+     * @param made the judgement
+     * @return a new result
+     */
+    public ObjectResult withJudgement(Judgement made) {
+        List<Finding> all = new ArrayList<>(findings);
+        all.addAll(made.findings());
+        return new ObjectResult(
+                candidate, status, reason, spectra, best, placement, Optional.of(made), all);
+    }
+
+    /**
+     * The same object with more findings.
+     *
+     * @param more what comes after the others
+     * @return a new result
+     */
+    public ObjectResult withFindings(List<Finding> more) {
+        List<Finding> all = new ArrayList<>(findings);
+        all.addAll(more);
+        return new ObjectResult(
+                candidate, status, reason, spectra, best, placement, judgement, all);
     }
 }

@@ -1,5 +1,6 @@
 package emberline.survey;
 
+import emberline.judge.Judging;
 import emberline.place.calibrated.TypePriors;
 import emberline.prepare.Degrading;
 import emberline.prepare.Preparing;
@@ -14,6 +15,7 @@ import emberline.prepare.Preparing;
  * @param fitReddening whether type and extinction are fitted together
  * @param toMeasuredRest whether the velocity that lines show is taken out where none is stated
  * @param degrading how spectra are made worse before they are prepared
+ * @param judging how objects are judged
  */
 public record SurveySettings(
         Preparing preparing,
@@ -22,7 +24,8 @@ public record SurveySettings(
         TypePriors prior,
         boolean fitReddening,
         boolean toMeasuredRest,
-        Degrading degrading) {
+        Degrading degrading,
+        Judging judging) {
 
     /** The seed where none is given. */
     public static final long DEFAULT_SEED = 20_260_101L;
@@ -47,7 +50,8 @@ public record SurveySettings(
                 TypePriors.FLAT,
                 false,
                 false,
-                Degrading.none());
+                Degrading.none(),
+                Judging.withDefaults());
     }
 
     /**
@@ -58,7 +62,7 @@ public record SurveySettings(
      */
     public SurveySettings withThreads(int number) {
         return new SurveySettings(
-                preparing, number, seed, prior, fitReddening, toMeasuredRest, degrading);
+                preparing, number, seed, prior, fitReddening, toMeasuredRest, degrading, judging);
     }
 
     /**
@@ -69,7 +73,7 @@ public record SurveySettings(
      */
     public SurveySettings withSeed(long start) {
         return new SurveySettings(
-                preparing, threads, start, prior, fitReddening, toMeasuredRest, degrading);
+                preparing, threads, start, prior, fitReddening, toMeasuredRest, degrading, judging);
     }
 
     /**
@@ -80,7 +84,7 @@ public record SurveySettings(
      */
     public SurveySettings withPreparing(Preparing stated) {
         return new SurveySettings(
-                stated, threads, seed, prior, fitReddening, toMeasuredRest, degrading);
+                stated, threads, seed, prior, fitReddening, toMeasuredRest, degrading, judging);
     }
 
     /**
@@ -90,7 +94,8 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withMeasuredRest(boolean shift) {
-        return new SurveySettings(preparing, threads, seed, prior, fitReddening, shift, degrading);
+        return new SurveySettings(
+                preparing, threads, seed, prior, fitReddening, shift, degrading, judging);
     }
 
     /**
@@ -101,7 +106,7 @@ public record SurveySettings(
      */
     public SurveySettings withPrior(TypePriors before) {
         return new SurveySettings(
-                preparing, threads, seed, before, fitReddening, toMeasuredRest, degrading);
+                preparing, threads, seed, before, fitReddening, toMeasuredRest, degrading, judging);
     }
 
     /**
@@ -112,7 +117,7 @@ public record SurveySettings(
      */
     public SurveySettings withDegrading(Degrading how) {
         return new SurveySettings(
-                preparing, threads, seed, prior, fitReddening, toMeasuredRest, how);
+                preparing, threads, seed, prior, fitReddening, toMeasuredRest, how, judging);
     }
 
     /**
@@ -122,6 +127,18 @@ public record SurveySettings(
      * @return new settings
      */
     public SurveySettings withReddeningFit(boolean fit) {
-        return new SurveySettings(preparing, threads, seed, prior, fit, toMeasuredRest, degrading);
+        return new SurveySettings(
+                preparing, threads, seed, prior, fit, toMeasuredRest, degrading, judging);
+    }
+
+    /**
+     * These settings with objects judged otherwise.
+     *
+     * @param how thresholds, age and aims
+     * @return new settings
+     */
+    public SurveySettings withJudging(Judging how) {
+        return new SurveySettings(
+                preparing, threads, seed, prior, fitReddening, toMeasuredRest, degrading, how);
     }
 }

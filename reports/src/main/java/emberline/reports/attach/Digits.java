@@ -76,6 +76,19 @@ public final class Digits {
     }
 
     /**
+     * A number with a stated number of significant digits.
+     *
+     * @param value finite number
+     * @param digits 1 or more
+     * @return the digits, never in exponent form
+     */
+    public static String significant(double value, int digits) {
+        return new BigDecimal(value)
+                .round(new MathContext(digits, RoundingMode.HALF_EVEN))
+                .toPlainString();
+    }
+
+    /**
      * A number with a fixed number of decimals; never a negative zero.
      *
      * @param value finite number

@@ -66,6 +66,9 @@ public final class ObjectJson {
         map.put(
                 "activity",
                 result.placement().map(p -> (Object) LineJson.activity(p.activity())).orElse(null));
+        map.put(
+                "judgement",
+                result.judgement().map(j -> (Object) JudgementJson.map(j)).orElse(null));
         map.put("features", result.best().map(ObjectJson::features).orElse(List.of()));
         map.put("spectra", result.spectra().stream().map(ObjectJson::spectrum).toList());
         return map;

@@ -34,8 +34,8 @@ public final class PlacementTable {
      *
      * @param results the results of objects in the order of the table
      * @param format how it is printed: as text the main columns, with a line for every object that
-     *     has no type or no gravity class; as CSV all columns of the results table; as JSON
-     *     everything but the features
+     *     has no type or no gravity class, and a block of lines for every judgement; as CSV all
+     *     columns of the results table; as JSON everything but the features
      * @return the printed table, with a line end
      */
     public static String print(List<ObjectResult> results, TableFormat format) {
@@ -78,7 +78,7 @@ public final class PlacementTable {
                                         placement.metallicity().reason());
                             });
         }
-        return text.toString();
+        return text.append(JudgementText.print(results)).toString();
     }
 
     private static void remark(

@@ -127,6 +127,7 @@ public final class ResultColumns {
                                         .map(Finding::code)
                                         .distinct()
                                         .collect(Collectors.joining(" "))));
+        columns.addAll(JudgementColumns.all());
         return List.copyOf(columns);
     }
 
