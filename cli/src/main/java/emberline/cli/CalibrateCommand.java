@@ -14,6 +14,7 @@ import emberline.survey.Status;
 import emberline.survey.SurveyRunner;
 import emberline.survey.SurveySettings;
 import java.io.IOException;
+import java.io.StringReader;
 import java.io.StringWriter;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -73,7 +74,7 @@ final class CalibrateCommand implements Callable<Integer> {
         StringWriter text = new StringWriter();
         table.write(text, remarks("Values with one-sigma errors from the pixel noise; no pixels."));
         AtomicFile.write(out.resolve("reference.csv"), text.toString());
-        Calibrator.Outcome learned = new Calibrator(table, catalogue).calibrate();
+        Calibrator.Outcome learned = new Calibrator(asWritten(text.toString()), catalogue).calibrate();
         Map<String, String> files =
                 CalibrationFiles.text(
                         learned.calibration(), remarks("Learned from reference.csv."));
@@ -95,6 +96,11 @@ final class CalibrateCommand implements Callable<Integer> {
                                 + out.resolve("reference.csv"));
         spec.commandLine().getOut().print(UnseenSummary.text(learned.unseen()));
         return ExitCode.of(candidates.rows().size(), failed);
+    }
+
+    /** The table with its numbers as printed, so that whoever learns from the file learns the same. */
+    private static ReferenceTable asWritten(String text) throws IOException {
+        return ReferenceTable.read(new StringReader(text));
     }
 
     private List<String> remarks(String what) {

@@ -1,0 +1,144 @@
+package emberline.place.calibrated;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import emberline.catalogue.FeatureCatalogue;
+import emberline.place.GravityClass;
+import emberline.place.TypeEstimate;
+import emberline.place.TypePosterior;
+import emberline.place.calibrated.Calibrator.Unseen;
+import emberline.place.reference.ReferenceTable;
+import java.io.IOException;
+import java.io.InputStreamReader;
+import java.io.Reader;
+import java.nio.charset.StandardCharsets;
+import java.util.List;
+import java.util.Map;
+import java.util.function.Predicate;
+import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
+
+/**
+ * The calibration learned anew from the committed reference table, whose types and gravities are
+ * published ones (the table names the data set of each), and its figures on objects that it has not
+ * seen.
+ */
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
+class CrossValidationTest {
+
+    private Calibrator.Outcome outcome;
+
+    @BeforeAll
+    void learn() throws IOException {
+        try (Reader reader =
+                new InputStreamReader(
+                        ReferenceTable.class.getResourceAsStream(
+                                "/emberline/place/reference/reference.csv"),
+                        StandardCharsets.UTF_8)) {
+            outcome =
+                    new Calibrator(ReferenceTable.read(reader), FeatureCatalogue.standard())
+                            .calibrate();
+        }
+    }
+
+    private List<Unseen> dwarfs(double from, double before, String tiers) {
+        return outcome.unseen().stream()
+                .filter(one -> tiers.contains(one.row().tier()))
+                .filter(one -> known(one) >= from && known(one) < before)
+                .toList();
+    }
+
+    private static double known(Unseen one) {
+        return one.row().typeNumber().orElseThrow();
+    }
+
+    private static TypeEstimate type(Unseen one) {
+        return one.placed().posterior().orElseThrow().estimate();
+    }
+
+    private static double difference(Unseen one) {
+        return type(one).typeNumber() - known(one);
+    }
+
+    private static double share(List<Unseen> all, Predicate<Unseen> wanted) {
+        return all.stream().filter(wanted).count() / (double) all.size();
+    }
+
+    @Test
+    void typesOfUnseenDwarfs() {
+        List<Unseen> all = dwarfs(4, 40, "AB");
+        assertTrue(all.size() >= 220, "dwarfs of M4 and later: " + all.size());
+        assertEquals(1, share(all, one -> one.placed().posterior().isPresent()), 0.01);
+        assertTrue(rms(all) <= 0.61, "tiers A and B, rms " + rms(all));
+        assertTrue(rms(dwarfs(4, 40, "A")) <= 0.54, "tier A, rms " + rms(dwarfs(4, 40, "A")));
+        for (double[] range : new double[][] {{4, 10}, {10, 15}, {15, 20}}) {
+            double bias =
+                    dwarfs(range[0], range[1], "AB").stream()
+                            .mapToDouble(CrossValidationTest::difference)
+                            .average()
+                            .orElseThrow();
+            assertEquals(0, bias, 0.1, "bias from " + range[0]);
+        }
+    }
+
+    private static double rms(List<Unseen> all) {
+        return Math.sqrt(
+                all.stream()
+                        .mapToDouble(one -> Math.pow(difference(one), 2))
+                        .average()
+                        .orElseThrow());
+    }
+
+    /** Binomial sigma of 226 objects: 3.1% for the 68% interval, 1.4% for the 95% interval. */
+    @Test
+    void intervalsHoldWhatTheySay() {
+        List<Unseen> all = dwarfs(4, 40, "AB");
+        double in68 =
+                share(all, one -> type(one).lo68() <= known(one) && known(one) <= type(one).hi68());
+        double in95 =
+                share(all, one -> type(one).lo95() <= known(one) && known(one) <= type(one).hi95());
+        assertEquals(0.68, in68, 0.035);
+        assertEquals(0.95, in95, 0.025);
+    }
+
+    @Test
+    void lowGravityIsFound() {
+        List<Unseen> veryLow =
+                dwarfs(6, 17.01, "AB").stream()
+                        .filter(one -> one.row().gravity().equals("VL-G"))
+                        .toList();
+        List<Unseen> field =
+                dwarfs(6, 17.01, "AB").stream()
+                        .filter(one -> List.of("", "FLD-G").contains(one.row().gravity()))
+                        .toList();
+        assertTrue(share(veryLow, CrossValidationTest::isLow) >= 0.95);
+        assertTrue(share(field, CrossValidationTest::isLow) <= 0.08);
+    }
+
+    private static boolean isLow(Unseen one) {
+        TypePosterior posterior = one.placed().posterior().orElseThrow();
+        return posterior.probability(GravityClass.FLD_G) < 0.5;
+    }
+
+    /** The committed calibration is what the committed reference table gives. */
+    @Test
+    void theProductsCalibrationIsUpToDate() {
+        Map<String, String> learned = CalibrationFiles.text(outcome.calibration(), List.of());
+        Map<String, String> committed = CalibrationFiles.text(Calibration.standard(), List.of());
+        for (String file : learned.keySet()) {
+            String[] expected = learned.get(file).split("[,\n]", -1);
+            String[] found = committed.get(file).split("[,\n]", -1);
+            assertEquals(expected.length, found.length, file);
+            for (int i = 0; i < expected.length; i++) {
+                if (expected[i].equals(found[i])) {
+                    continue;
+                }
+                double number = Double.parseDouble(expected[i]);
+                assertEquals(
+                        number, Double.parseDouble(found[i]), 2e-3 * Math.abs(number) + 2e-4, file);
+            }
+        }
+    }
+}
