@@ -74,7 +74,8 @@ final class CalibrateCommand implements Callable<Integer> {
         StringWriter text = new StringWriter();
         table.write(text, remarks("Values with one-sigma errors from the pixel noise; no pixels."));
         AtomicFile.write(out.resolve("reference.csv"), text.toString());
-        Calibrator.Outcome learned = new Calibrator(asWritten(text.toString()), catalogue).calibrate();
+        Calibrator.Outcome learned =
+                new Calibrator(asWritten(text.toString()), catalogue).calibrate();
         Map<String, String> files =
                 CalibrationFiles.text(
                         learned.calibration(), remarks("Learned from reference.csv."));
@@ -98,7 +99,9 @@ final class CalibrateCommand implements Callable<Integer> {
         return ExitCode.of(candidates.rows().size(), failed);
     }
 
-    /** The table with its numbers as printed, so that whoever learns from the file learns the same. */
+    /**
+     * The table with its numbers as printed, so that whoever learns from the file learns the same.
+     */
     private static ReferenceTable asWritten(String text) throws IOException {
         return ReferenceTable.read(new StringReader(text));
     }

@@ -2,10 +2,12 @@ package emberline.reports.chart;
 
 import emberline.catalogue.Feature;
 import emberline.catalogue.FeatureCatalogue;
+import emberline.place.Placement;
 import emberline.place.PublishedType;
 import emberline.place.RelationEstimate;
 import emberline.place.RelationEstimate.Use;
 import emberline.place.TypeEstimate;
+import emberline.place.TypePosterior;
 import emberline.reports.chart.Axis.Tick;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -13,8 +15,9 @@ import java.util.List;
 
 /**
  * The type of an object: each published relation as a point with its error in a row of its own,
- * those that were combined above those that are shown for comparison, and the combined type with
- * its 68% and 95% intervals at the bottom.
+ * those that were combined above those that are shown for comparison, under them the type that the
+ * relations give together, and at the bottom the posterior with the 68% and 95% intervals of the
+ * adopted type.
  */
 public final class PosteriorChart {
 
@@ -27,59 +30,101 @@ public final class PosteriorChart {
     private static final double EARLIEST = -2;
     private static final double LATEST = 32;
 
+    /** Rows that the posterior takes up below the relations. */
+    private static final double POSTERIOR_ROWS = 3;
+
+    /** Where the posterior stands, one row below the combined type. */
+    private static final double FOOT = -0.8 - POSTERIOR_ROWS;
+
     private PosteriorChart() {}
 
     /**
      * The chart of a type.
      *
-     * @param type what the published relations say
+     * @param placement what the witnesses say
      * @param catalogue the names of the indices
      * @param mostRows the most relations that are shown, at least 1; those that were combined go
      *     first
      * @return the chart; the heights of its rows are whole numbers, that of the combined type 0
      */
-    public static Chart of(PublishedType type, FeatureCatalogue catalogue, int mostRows) {
-        List<RelationEstimate> shown = shown(type, mostRows);
+    public static Chart of(Placement placement, FeatureCatalogue catalogue, int mostRows) {
+        PublishedType type = placement.published();
+        List<RelationEstimate> shown = shown(placement, mostRows);
         List<Layer.Point> used = new ArrayList<>();
         List<Layer.Point> aside = new ArrayList<>();
         List<Tick> rows = new ArrayList<>();
         int row = shown.size();
         for (RelationEstimate estimate : shown) {
             TypeEstimate given = estimate.type().orElseThrow();
-            Layer.Point point =
-                    new Layer.Point(given.typeNumber(), given.lo68(), given.hi68(), row, row, row);
-            (estimate.use() == Use.COMBINED ? used : aside).add(point);
+            (estimate.use() == Use.COMBINED ? used : aside).add(point(given, row));
             rows.add(new Tick(row, rowLabel(estimate, catalogue)));
             row--;
         }
-        double[] range = range(type, shown);
+        double[] range = range(placement, shown);
         List<Layer> layers = new ArrayList<>();
-        type.type().ifPresent(combined -> layers.addAll(intervals(combined)));
+        placement
+                .type()
+                .ifPresent(
+                        adopted ->
+                                layers.add(
+                                        new Layer.Region(
+                                                adopted.lo68(),
+                                                adopted.hi68(),
+                                                0,
+                                                1,
+                                                Tone.RESULT_95,
+                                                false)));
         layers.add(new Layer.Points(aside, Tone.SHOWN, false));
         layers.add(new Layer.Points(used, Tone.USED, true));
         if (type.type().isPresent()) {
-            double at = type.type().get().typeNumber();
-            Layer.Point point = new Layer.Point(at, at, at, 0, 0, 0);
-            layers.add(new Layer.Points(List.of(point), Tone.RESULT, true));
+            layers.add(new Layer.Points(List.of(point(type.type().get(), 0)), Tone.RESULT, true));
             rows.add(new Tick(0, "combined"));
+        }
+        double foot = -0.8;
+        if (placement.calibrated().posterior().isPresent()) {
+            layers.addAll(posterior(placement.calibrated().posterior().get(), range));
+            rows.add(new Tick(FOOT + POSTERIOR_ROWS / 2, "posterior"));
+            foot = FOOT;
         }
         List<Tick> types = Ticks.types(range[0], range[1], 9);
         Axis x = new Axis("Spectral type", "", range[0], range[1], types);
-        Axis y = new Axis("", "", -0.8, shown.size() + 0.8, rows);
+        Axis y = new Axis("", "", foot, shown.size() + 0.8, rows);
         return new Chart("", x, y, layers);
     }
 
-    /** The combined type: its 68% interval over the full height, both intervals as bars. */
-    private static List<Layer> intervals(TypeEstimate type) {
+    private static Layer.Point point(TypeEstimate given, double row) {
+        return new Layer.Point(given.typeNumber(), given.lo68(), given.hi68(), row, row, row);
+    }
+
+    /** The posterior as an area, and under it the intervals of the type. */
+    private static List<Layer> posterior(TypePosterior posterior, double[] range) {
+        double highest = 0;
+        for (int i = 0; i < posterior.size(); i++) {
+            highest = Math.max(highest, posterior.probability(i));
+        }
+        double base = FOOT + 0.7;
+        double tall = POSTERIOR_ROWS - 1.2;
+        List<Layer.Vertex> lower = new ArrayList<>();
+        List<Layer.Vertex> upper = new ArrayList<>();
+        for (int i = 0; i < posterior.size(); i++) {
+            double type = posterior.typeNumber(i);
+            if (type >= range[0] && type <= range[1]) {
+                lower.add(new Layer.Vertex(type, base));
+                upper.add(new Layer.Vertex(type, base + tall * posterior.probability(i) / highest));
+            }
+        }
+        TypeEstimate type = posterior.estimate();
+        double bars = FOOT + 0.35;
         return List.of(
-                new Layer.Region(type.lo68(), type.hi68(), 0, 1, Tone.RESULT_95, false),
-                new Layer.Interval(type.lo95(), type.hi95(), 0, 0.12, Tone.RESULT_95),
-                new Layer.Interval(type.lo68(), type.hi68(), 0, 0.28, Tone.RESULT_68));
+                new Layer.Area(lower, upper, Tone.RESULT_68, ""),
+                new Layer.Interval(type.lo95(), type.hi95(), bars, 0.12, Tone.RESULT_95),
+                new Layer.Interval(type.lo68(), type.hi68(), bars, 0.28, Tone.RESULT_68));
     }
 
     /** The relations with a type, the combined ones first, in the order of their types. */
-    private static List<RelationEstimate> shown(PublishedType type, int mostRows) {
-        double centre = type.type().map(TypeEstimate::typeNumber).orElse(Double.NaN);
+    private static List<RelationEstimate> shown(Placement placement, int mostRows) {
+        PublishedType type = placement.published();
+        double centre = placement.type().map(TypeEstimate::typeNumber).orElse(Double.NaN);
         Comparator<RelationEstimate> byType =
                 Comparator.comparingDouble(e -> e.type().orElseThrow().typeNumber());
         List<RelationEstimate> used =
@@ -101,9 +146,9 @@ public final class PosteriorChart {
         return shown;
     }
 
-    private static double[] range(PublishedType type, List<RelationEstimate> shown) {
-        double low = type.type().map(TypeEstimate::lo95).orElse(LATEST);
-        double high = type.type().map(TypeEstimate::hi95).orElse(EARLIEST);
+    private static double[] range(Placement placement, List<RelationEstimate> shown) {
+        double low = placement.type().map(TypeEstimate::lo95).orElse(LATEST);
+        double high = placement.type().map(TypeEstimate::hi95).orElse(EARLIEST);
         for (RelationEstimate estimate : shown) {
             low = Math.min(low, estimate.type().orElseThrow().lo68());
             high = Math.max(high, estimate.type().orElseThrow().hi68());

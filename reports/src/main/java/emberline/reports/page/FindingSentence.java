@@ -33,11 +33,10 @@ public final class FindingSentence {
         StringBuilder text = new StringBuilder();
         if (placement.type().isPresent()) {
             TypeEstimate type = placement.type().get();
-            long used = used(placement);
             text.append("Spectral type ")
                     .append(withError(type))
                     .append(" by ")
-                    .append(count(used, "published relation"))
+                    .append(witnesses(placement))
                     .append("; ")
                     .append(gravity(placement.gravity()));
         } else {
@@ -45,6 +44,22 @@ public final class FindingSentence {
         }
         signal(result).ifPresent(signal -> text.append("; ").append(signal));
         return text.append('.').toString();
+    }
+
+    /** By what the type was found. */
+    private static String witnesses(Placement placement) {
+        String relations = count(used(placement), "published relation");
+        if (placement.calibrated().posterior().isEmpty()) {
+            return relations;
+        }
+        String loci =
+                count(placement.calibrated().contributions().size(), "feature")
+                        + " against spectra of known type";
+        return placement
+                .published()
+                .type()
+                .map(type -> loci + " (" + relations + ": " + withError(type) + ")")
+                .orElse(loci);
     }
 
     /**
@@ -83,8 +98,14 @@ public final class FindingSentence {
         return "gravity "
                 + verdict.gravityClass().get().label()
                 + (share.isPresent() ? " (P " + probability(share.getAsDouble()) + ")" : "")
-                + " by "
-                + count(scores, "published score");
+                + verdict.byScores()
+                        .map(
+                                byScores ->
+                                        "; "
+                                                + byScores.label()
+                                                + " by "
+                                                + count(scores, "published score"))
+                        .orElse("");
     }
 
     /** The probability of the class that was given. */

@@ -22,7 +22,7 @@ final class TypePanel {
     private static final float KEY_WIDTH = 176;
     private static final float LABEL_WIDTH = 68;
     private static final float GUTTER = 18;
-    private static final String HEADING = "Type by published relations";
+    private static final String HEADING = "Type: posterior and published relations";
     private static final Frame FRAME = new Frame(122, 2, 5, 24);
 
     private final ReportDocument document;
@@ -53,7 +53,7 @@ final class TypePanel {
 
     /** The height that the panel takes up with so many rows (point). */
     float tall(int rows) {
-        float chart = (rows + 1.6f) * ROW + (float) (FRAME.top() + FRAME.bottom());
+        float chart = (rows + 4.6f) * ROW + (float) (FRAME.top() + FRAME.bottom());
         float lines = 0;
         for (KeyNumbers.Entry entry : keys) {
             lines += valueLines(entry).size() * styles.table().leadingPoint() + 1.6f;
@@ -76,15 +76,17 @@ final class TypePanel {
             throws IOException {
         Placement placement = result.placement().orElseThrow();
         boolean any =
-                placement.published().estimates().stream().anyMatch(e -> e.type().isPresent());
+                placement.calibrated().posterior().isPresent()
+                        || placement.published().estimates().stream()
+                                .anyMatch(e -> e.type().isPresent());
         sheet.text(styles.heading(), FirstPage.MARGIN, y + 7, HEADING);
         if (any) {
-            Chart chart = PosteriorChart.of(placement.published(), catalogue, rows);
+            Chart chart = PosteriorChart.of(placement, catalogue, rows);
             sheet.text(
                     styles.small(),
                     FirstPage.MARGIN + document.lines().width(styles.heading(), HEADING) + 8,
                     y + 7,
-                    "filled: combined; open: shown for comparison; bars: 68% and 95%");
+                    "filled: combined; bars: 68% and 95%");
             sheet.chart(chart, FirstPage.MARGIN, y + 12, chartWidth, tall - 22, FRAME);
         } else {
             float at = y + 20;

@@ -97,7 +97,7 @@ class ChartTest {
     @Test
     void everyCombinedRelationHasAPointAtItsType() {
         Placement placement = Samples.lDwarf().placement().orElseThrow();
-        Chart chart = PosteriorChart.of(placement.published(), Samples.CATALOGUE, 20);
+        Chart chart = PosteriorChart.of(placement, Samples.CATALOGUE, 20);
         long combined =
                 placement.published().estimates().stream()
                         .filter(e -> e.use() == Use.COMBINED)
@@ -117,7 +117,7 @@ class ChartTest {
                 placement.published().type().orElseThrow().typeNumber(),
                 result.points().get(0).x(),
                 0);
-        assertEquals(chart.y().ticks().size(), 1 + used.points().size() + aside(chart));
+        assertEquals(chart.y().ticks().size(), 2 + used.points().size() + aside(chart));
     }
 
     private static int aside(Chart chart) {
