@@ -144,7 +144,7 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
                         photometry(candidate, numbers, findings),
                         astrometry(candidate, findings),
                         age(candidate, findings),
-                        OptionalDouble.empty());
+                        placement.metallicity().pSubdwarf());
         return new GatheredEvidence(evidence, findings);
     }
 

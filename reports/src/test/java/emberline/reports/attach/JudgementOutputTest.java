@@ -50,6 +50,21 @@ class JudgementOutputTest {
     }
 
     @Test
+    void theColumnsAreThoseOfTheContract() {
+        String expected =
+                "decision,p_substellar,p_substellar_070,p_substellar_075,p_below_13mjup,p_young,"
+                        + "age_myr,age_myr_lo68,age_myr_hi68,mass_mjup,mass_mjup_lo68,"
+                        + "mass_mjup_hi68,mass_msun,mass_msun_lo68,mass_msun_hi68,teff_k,"
+                        + "teff_k_sigma,log_l_lsun,log_l_lsun_sigma,m_bol,m_bol_sigma,logg_cgs,"
+                        + "logg_sigma,radius_rsun,radius_rsun_sigma,distance_pc,distance_pc_lo68,"
+                        + "distance_pc_hi68,distance_method,abs_mag_j,abs_mag_j_sigma,abs_mag_h,"
+                        + "abs_mag_h_sigma,abs_mag_k,abs_mag_k_sigma,vtan_kms,u_kms,v_kms,w_kms,"
+                        + "next_step,score,priority";
+        List<String> names = JudgementColumns.all().stream().map(ResultColumn::name).toList();
+        assertEquals(expected, String.join(",", names));
+    }
+
+    @Test
     void columnsHoldTheJudgement() {
         ObjectResult result = judged();
         assertEquals("substellar", cell(result, "decision"));
