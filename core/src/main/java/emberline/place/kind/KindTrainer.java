@@ -60,28 +60,29 @@ public final class KindTrainer {
         if (kind.isEmpty() || Regions.covered(vector, features) == 0) {
             return;
         }
+        String group = group(reference);
         kin.add(
                 new ReferenceKin(
                         reference.object(),
-                        reference.group(),
+                        group,
                         reference.typeNumber(),
                         reference.gravity(),
                         kind.get(),
                         reference.source(),
                         vector));
-        rows.add(new TrainingRow(reference.group(), kind.get(), TrainingRow.AS_OBSERVED, vector));
+        rows.add(new TrainingRow(group, kind.get(), TrainingRow.AS_OBSERVED, vector));
         rows.addAll(
-                copies.of(
-                        reference.object(),
-                        reference.group(),
-                        kind.get(),
-                        reference.typeNumber(),
-                        prepared));
+                copies.of(reference.object(), group, kind.get(), reference.typeNumber(), prepared));
         if (kin.size() % 4 == 0) {
             nonsense.add(features.of(measurer.measure(Nonsense.reversed(prepared))));
             double factor = kin.size() % 8 == 0 ? 0.8 : 1.2;
             nonsense.add(features.of(measurer.measure(Degraded.stretched(prepared, factor))));
         }
+    }
+
+    /** Averages of a library share a name, but are other objects. */
+    private static String group(ReferenceRow reference) {
+        return reference.group().contains("average") ? reference.object() : reference.group();
     }
 
     /**
