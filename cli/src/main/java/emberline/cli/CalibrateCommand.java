@@ -1,8 +1,11 @@
 package emberline.cli;
 
 import emberline.catalogue.FeatureCatalogue;
+import emberline.measure.Measurer;
 import emberline.place.calibrated.CalibrationFiles;
 import emberline.place.calibrated.Calibrator;
+import emberline.place.kind.KindTrainer;
+import emberline.place.kind.KindTrialTable;
 import emberline.place.reference.ReferenceTable;
 import emberline.read.CandidateList;
 import emberline.reports.attach.AtomicFile;
@@ -13,7 +16,9 @@ import emberline.survey.ReferenceMaker;
 import emberline.survey.Status;
 import emberline.survey.SurveyRunner;
 import emberline.survey.SurveySettings;
+import java.io.ByteArrayOutputStream;
 import java.io.IOException;
+import java.io.PrintWriter;
 import java.io.StringReader;
 import java.io.StringWriter;
 import java.nio.file.Files;
@@ -58,6 +63,7 @@ final class CalibrateCommand implements Callable<Integer> {
         CandidateList candidates = listOptions.read();
         Chain chain = new Chain(catalogue, listOptions.measuring(), settings);
         ReferenceMaker maker = new ReferenceMaker();
+        KindTrainer trainer = new KindTrainer(new Measurer(catalogue, listOptions.measuring()));
         new SurveyRunner(chain, settings.threads())
                 .run(
                         candidates,
@@ -67,7 +73,12 @@ final class CalibrateCommand implements Callable<Integer> {
                                 failed++;
                                 SingleSpectra.tellFailure(result, spec.commandLine().getErr());
                             }
-                            maker.add(result);
+                            maker.add(result)
+                                    .ifPresent(
+                                            row ->
+                                                    trainer.add(
+                                                            row,
+                                                            result.spectra().get(0).prepared()));
                         });
         ReferenceTable table = maker.table();
         Files.createDirectories(out);
@@ -96,6 +107,7 @@ final class CalibrateCommand implements Callable<Integer> {
                                 + " features written to "
                                 + out.resolve("reference.csv"));
         spec.commandLine().getOut().print(UnseenSummary.text(learned.unseen()));
+        learnKinds(trainer);
         return ExitCode.of(candidates.rows().size(), failed);
     }
 
@@ -104,6 +116,24 @@ final class CalibrateCommand implements Callable<Integer> {
      */
     private static ReferenceTable asWritten(String text) throws IOException {
         return ReferenceTable.read(new StringReader(text));
+    }
+
+    private void learnKinds(KindTrainer trainer) throws IOException {
+        PrintWriter err = spec.commandLine().getErr();
+        if (!trainer.isEnough()) {
+            err.println(
+                    "no model of kinds: there are too few spectra of late dwarfs, or of other"
+                            + " objects, to learn from");
+            return;
+        }
+        KindTrainer.Trained trained = trainer.train(err::println);
+        ByteArrayOutputStream model = new ByteArrayOutputStream();
+        trained.model().write(model);
+        AtomicFile.write(out.resolve("kind-model.gz"), model.toByteArray());
+        StringWriter trials = new StringWriter();
+        KindTrialTable.write(trials, trained.trials());
+        AtomicFile.write(out.resolve("kind-trials.csv"), trials.toString());
+        err.println("model of kinds written to " + out.resolve("kind-model.gz"));
     }
 
     private List<String> remarks(String what) {

@@ -17,5 +17,7 @@ public enum Purpose {
     /** The age: lithium. */
     AGE,
     /** A colour; for checks, not for types. */
-    COLOUR
+    COLOUR,
+    /** The kind of object; says nothing alone. */
+    KIND
 }

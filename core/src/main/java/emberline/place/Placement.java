@@ -1,7 +1,10 @@
 package emberline.place;
 
 import emberline.place.calibrated.CalibratedType;
+import emberline.place.kind.Kin;
+import emberline.place.kind.KindVerdict;
 import emberline.place.metallicity.MetallicityVerdict;
+import emberline.place.pair.PairVerdict;
 import emberline.place.reddening.ReddeningFit;
 import emberline.spectrum.Finding;
 import java.util.List;
@@ -9,9 +12,9 @@ import java.util.Map;
 import java.util.Optional;
 
 /**
- * Where an object stands: its type, gravity, metallicity and activity with what they rest on.
+ * Where an object stands: its kind, type, gravity, metallicity and activity with what they rest on.
  *
- * @param type the adopted type; empty where none could be given
+ * @param type the adopted type; empty where none could be given, or the object is no late dwarf
  * @param typeReason why there is no type; empty where there is one
  * @param published the first witness: the published relations
  * @param calibrated the second witness: the loci of spectra of known type
@@ -19,6 +22,9 @@ import java.util.Optional;
  * @param gravity the gravity class
  * @param metallicity the metallicity class
  * @param activity the activity by H alpha
+ * @param kind what kind of object it is
+ * @param kin the reference objects nearest to it, the nearest first
+ * @param pair whether it may be an unresolved pair
  * @param findings what the observer should know about the placement
  */
 public record Placement(
@@ -30,10 +36,14 @@ public record Placement(
         GravityVerdict gravity,
         MetallicityVerdict metallicity,
         Activity activity,
+        KindVerdict kind,
+        List<Kin> kin,
+        PairVerdict pair,
         List<Finding> findings) {
 
-    /** Copies the list. */
+    /** Copies the lists. */
     public Placement {
+        kin = List.copyOf(kin);
         findings = List.copyOf(findings);
     }
 
@@ -55,6 +65,9 @@ public record Placement(
                 gravity,
                 new MetallicityVerdict(Optional.empty(), reason, Map.of(), List.of(), "", ""),
                 new Activity(Optional.empty(), List.of(), reason),
+                KindVerdict.notJudged(reason),
+                List.of(),
+                PairVerdict.notJudged(reason),
                 List.of());
     }
 
@@ -74,6 +87,9 @@ public record Placement(
                 gravity,
                 metallicity,
                 activity,
+                kind,
+                kin,
+                pair,
                 findings);
     }
 }

@@ -7,8 +7,13 @@ import emberline.place.calibrated.CalibratedWitness;
 import emberline.place.calibrated.Calibration;
 import emberline.place.calibrated.TypePrior;
 import emberline.place.calibrated.TypePriors;
+import emberline.place.kind.KindJudge;
+import emberline.place.kind.KindPrior;
+import emberline.place.kind.KindVerdict;
 import emberline.place.metallicity.MetallicityJudge;
 import emberline.place.metallicity.MetallicityVerdict;
+import emberline.place.pair.PairJudge;
+import emberline.place.pair.PairVerdict;
 import emberline.place.reddening.ReddeningFit;
 import emberline.place.reddening.ReddeningFitter;
 import emberline.spectrum.Finding;
@@ -19,8 +24,8 @@ import java.util.Optional;
 import java.util.function.DoubleFunction;
 
 /**
- * Places an object on the sequence of spectral types and judges its gravity class, metallicity
- * class and activity.
+ * Judges the kind of an object, places it on the sequence of spectral types, and judges its gravity
+ * class, metallicity class, activity and whether it may be a pair.
  */
 public final class Placer {
 
@@ -35,6 +40,8 @@ public final class Placer {
     private final GravityJudge gravity;
     private final MetallicityJudge metallicity;
     private final ActivityJudge activity;
+    private final KindJudge kinds = new KindJudge(KindPrior.standard());
+    private final PairJudge pairs;
 
     /**
      * A placer with the product's calibration, every type equally probable beforehand.
@@ -58,6 +65,7 @@ public final class Placer {
         this.gravity = new GravityJudge(catalogue);
         this.metallicity = new MetallicityJudge(catalogue);
         this.activity = new ActivityJudge(catalogue);
+        this.pairs = new PairJudge(catalogue);
     }
 
     /**
@@ -66,7 +74,7 @@ public final class Placer {
      * @param measurements its features
      * @param seed start of the random draws for the probabilities; the same seed gives the same
      *     placement
-     * @return type, gravity and activity, or the reasons why there are none
+     * @return kind, type, gravity and the rest, or the reasons why there are none
      */
     public Placement place(Measurements measurements, long seed) {
         return place(measurements, Optional.empty(), seed);
@@ -89,14 +97,17 @@ public final class Placer {
      * @param reddening the fit, whose posterior goes before that of the features; empty where none
      *     was made
      * @param seed start of the random draws for the gravity probabilities
-     * @return type, gravity and activity, or the reasons why there are none
+     * @return kind, type, gravity and the rest, or the reasons why there are none
      */
     public Placement place(Measurements measurements, Optional<ReddeningFit> reddening, long seed) {
         PublishedType byRelations = published.witness(measurements);
         CalibratedType alone = calibrated.witness(measurements);
         CalibratedType byLoci = reddening.map(fit -> alone.with(fit.posterior())).orElse(alone);
-        Optional<TypeEstimate> type =
+        Optional<TypeEstimate> asDwarf =
                 byLoci.posterior().map(TypePosterior::estimate).or(byRelations::type);
+        KindVerdict kind = kinds.judge(measurements);
+        Optional<String> otherKind = KindGate.refusal(kind);
+        Optional<TypeEstimate> type = otherKind.isPresent() ? Optional.empty() : asDwarf;
         GravityVerdict verdict =
                 type.map(estimate -> gravity.judge(measurements, estimate, byLoci, seed))
                         .orElseGet(
@@ -109,19 +120,29 @@ public final class Placer {
         Activity halpha =
                 type.map(estimate -> activity.judge(measurements, estimate))
                         .orElseGet(() -> Activity.none("no type, and chi depends on the type"));
-        List<Finding> findings = new ArrayList<>(ofType(measurements, type, byRelations, byLoci));
+        PairVerdict pair =
+                type.map(estimate -> pairs.judge(measurements, estimate, seed))
+                        .orElseGet(() -> PairVerdict.notJudged("no type"));
+        List<Finding> findings = new ArrayList<>(KindGate.findings(kind, asDwarf.isPresent()));
+        findings.addAll(ofType(measurements, asDwarf, byRelations, byLoci));
+        findings.addAll(pair.findings());
         findings.addAll(ofGravity(verdict, byLoci));
         findings.addAll(MetallicityJudge.findings(metals));
         findings.addAll(activity.findings(halpha));
         return new Placement(
                 type,
-                type.isPresent() ? "" : byRelations.scheme() + "; " + byLoci.reason(),
+                type.isPresent()
+                        ? ""
+                        : otherKind.orElse(byRelations.scheme() + "; " + byLoci.reason()),
                 byRelations,
                 byLoci,
                 reddening,
                 verdict,
                 metals,
                 halpha,
+                kind,
+                kinds.kin(measurements),
+                pair,
                 findings);
     }
 
@@ -156,11 +177,6 @@ public final class Placer {
                                         apart)));
             }
         }
-        findings.add(
-                Finding.caution(
-                        "kind-not-judged",
-                        "the type holds only if the object is a late dwarf: giants, reddened stars"
-                                + " and galaxies are not told apart here"));
         if (BandCheck.showsNone(measurements)) {
             findings.add(
                     Finding.warning(

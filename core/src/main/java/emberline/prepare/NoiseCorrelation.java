@@ -36,6 +36,8 @@ record NoiseCorrelation(double lag1, double lag2) {
     /** Second differences beyond this many times their median size are lines or bad pixels. */
     private static final double CLIP = 5;
 
+    private static final double INDEPENDENT = 0.01;
+
     /** Fewer second differences than this say nothing. */
     private static final int LEAST_PIXELS = 50;
 
@@ -78,7 +80,19 @@ record NoiseCorrelation(double lag1, double lag2) {
         if (!(lag1 > SIGNIFICANT * error)) {
             return NONE;
         }
-        return possible(lag1, lag2);
+        return withSomeIndependent(possible(lag1, lag2));
+    }
+
+    /**
+     * At the edge of what is possible the noise has no power at some frequency, and rounding makes
+     * the covariance of many windows negative. A share of {@value #INDEPENDENT} of the noise is
+     * independent then.
+     */
+    private static NoiseCorrelation withSomeIndependent(NoiseCorrelation edge) {
+        double kept = 1 - INDEPENDENT;
+        return isPossible(edge.lag1 / kept, edge.lag2 / kept)
+                ? edge
+                : new NoiseCorrelation(edge.lag1 * kept, edge.lag2 * kept);
     }
 
     /**

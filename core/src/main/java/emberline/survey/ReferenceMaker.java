@@ -9,6 +9,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
 
@@ -29,10 +30,11 @@ public final class ReferenceMaker {
      *
      * @param result its result; the list says what it is in {@code known_type_number}, {@code
      *     known_gravity}, {@code known_kind}, {@code tier}, {@code group} and {@code dataset}
+     * @return the row that was added
      */
-    public void add(ObjectResult result) {
+    public Optional<ReferenceRow> add(ObjectResult result) {
         if (result.best().isEmpty()) {
-            return;
+            return Optional.empty();
         }
         Candidate candidate = result.candidate();
         Map<String, Measured> features = new LinkedHashMap<>();
@@ -41,7 +43,7 @@ public final class ReferenceMaker {
                 features.put(one.feature().id(), value);
             }
         }
-        rows.add(
+        ReferenceRow row =
                 new ReferenceRow(
                         candidate.name(),
                         ObjectGroup.of(candidate),
@@ -51,7 +53,9 @@ public final class ReferenceMaker {
                         candidate.text("tier").orElse(""),
                         candidate.text("dataset").orElse(""),
                         result.spectra().get(0).prepared().resolvingPower().value(),
-                        features));
+                        features);
+        rows.add(row);
+        return Optional.of(row);
     }
 
     /**

@@ -48,8 +48,11 @@ class PlacerTest {
     @Test
     void aSpectrumWithoutBandsIsSaidToHaveNone() {
         Placement placement = new Placer(CATALOGUE).place(flat(0.8, 2.4), 1);
-        assertTrue(placement.type().isPresent());
+        assertTrue(placement.published().type().isPresent());
+        assertTrue(placement.type().isEmpty());
+        assertTrue(placement.typeReason().startsWith("kind: "), placement.typeReason());
         assertTrue(codes(placement).contains("no-bands"), codes(placement).toString());
+        assertTrue(codes(placement).contains("not-a-late-dwarf"), codes(placement).toString());
     }
 
     @Test

@@ -53,6 +53,11 @@ public final class ObjectJson {
         map.put("list", result.candidate().cells());
         map.put("findings", result.findings().stream().map(ObjectJson::finding).toList());
         map.put("type_reason", result.placement().map(Placement::typeReason).orElse(""));
+        map.put("kinds", result.placement().map(KindJson::kinds).orElse(Map.of()));
+        map.put("kind_reason", result.placement().map(p -> p.kind().reason()).orElse(""));
+        map.put("kin", result.placement().map(KindJson::kin).orElse(List.of()));
+        map.put("pair_reason", result.placement().map(p -> p.pair().reason()).orElse(""));
+        map.put("pair_criteria", result.placement().map(KindJson::criteria).orElse(List.of()));
         map.put("published_scheme", result.placement().map(p -> p.published().scheme()).orElse(""));
         map.put(
                 "calibrated",

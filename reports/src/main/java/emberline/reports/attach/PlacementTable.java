@@ -1,10 +1,13 @@
 package emberline.reports.attach;
 
+import emberline.place.Placement;
+import emberline.place.pair.PairVerdict;
 import emberline.survey.ObjectResult;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.Collectors;
 
 /** Types and gravity classes of one or several objects as a table: one row an object. */
 public final class PlacementTable {
@@ -14,6 +17,8 @@ public final class PlacementTable {
             List.of(
                     "name",
                     "status",
+                    "kind",
+                    "p_late_dwarf",
                     "type",
                     "type_number",
                     "type_sigma",
@@ -76,9 +81,38 @@ public final class PlacementTable {
                                         result,
                                         "no metallicity class: ",
                                         placement.metallicity().reason());
+                                remark(text, result, "pair: ", pair(placement));
+                                remark(text, result, "nearest kin: ", kin(placement));
                             });
         }
         return text.append(JudgementText.print(results)).toString();
+    }
+
+    private static String pair(Placement placement) {
+        PairVerdict pair = placement.pair();
+        return pair.strength()
+                .map(
+                        strength ->
+                                strength.word()
+                                        + ", "
+                                        + pair.criteriaMet()
+                                        + " of "
+                                        + pair.criteriaJudged()
+                                        + " criteria met")
+                .orElse(pair.reason());
+    }
+
+    private static String kin(Placement placement) {
+        return placement.kin().stream()
+                .map(
+                        kin ->
+                                kin.object()
+                                        + " ("
+                                        + KindJson.type(kin).orElse(kin.kind().label())
+                                        + ", "
+                                        + Digits.fixed(kin.distance(), 2)
+                                        + ")")
+                .collect(Collectors.joining(", "));
     }
 
     private static void remark(

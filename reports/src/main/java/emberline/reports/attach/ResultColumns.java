@@ -2,6 +2,8 @@ package emberline.reports.attach;
 
 import emberline.place.Placement;
 import emberline.place.TypeEstimate;
+import emberline.place.kind.ObjectKind;
+import emberline.place.pair.PairVerdict;
 import emberline.place.reddening.ReddeningFit;
 import emberline.prepare.BandSignal;
 import emberline.prepare.Quality;
@@ -101,7 +103,7 @@ public final class ResultColumns {
                         "how far the object came: measured, partial, photometric or failed",
                         r -> r.status().word()));
         columns.add(text("reason", "why it came no further", ObjectResult::reason));
-        columns.add(text("kind", "kind of object; empty where it is not judged", r -> ""));
+        addKind(columns);
         addType(columns);
         columns.add(
                 text(
@@ -117,6 +119,7 @@ public final class ResultColumns {
         addGravity(columns);
         addReddening(columns);
         addMetallicity(columns);
+        addPair(columns);
         addSpectrum(columns);
         columns.add(
                 text(
@@ -129,6 +132,46 @@ public final class ResultColumns {
                                         .collect(Collectors.joining(" "))));
         columns.addAll(JudgementColumns.all());
         return List.copyOf(columns);
+    }
+
+    private static void addKind(List<ResultColumn> columns) {
+        columns.add(
+                text(
+                        "kind",
+                        "most probable kind of object; empty where it is not judged",
+                        r ->
+                                r.placement()
+                                        .flatMap(p -> p.kind().kind())
+                                        .map(ObjectKind::label)
+                                        .orElse("")));
+        columns.add(
+                placementShare(
+                        "p_late_dwarf",
+                        "probability of a late dwarf",
+                        p -> p.kind().probability(ObjectKind.LATE_DWARF)));
+        columns.add(
+                placementShare(
+                        "p_giant",
+                        "probability of a giant",
+                        p -> p.kind().probability(ObjectKind.GIANT)));
+    }
+
+    private static void addPair(List<ResultColumn> columns) {
+        columns.add(
+                text(
+                        "pair",
+                        "case for an unresolved pair: candidate, weak or none; empty where it is"
+                                + " not judged",
+                        r ->
+                                r.placement()
+                                        .flatMap(p -> p.pair().strength())
+                                        .map(PairVerdict.Strength::word)
+                                        .orElse("")));
+        columns.add(
+                placementShare(
+                        "p_pair",
+                        "probability, under noise, that enough criteria for a candidate are met",
+                        p -> p.pair().pPair()));
     }
 
     private static void addType(List<ResultColumn> columns) {

@@ -4,6 +4,7 @@ import emberline.catalogue.Band;
 import emberline.catalogue.Feature;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.HowKnown;
+import emberline.catalogue.Purpose;
 import emberline.catalogue.Source;
 import emberline.measure.FeatureMeasurement;
 import emberline.measure.Measurement;
@@ -70,7 +71,10 @@ final class DetailPages {
     /** Writes the pages; returns where their sections begin. */
     List<Flow.Bookmark> write(ObjectResult result) throws IOException {
         Placement placement = result.placement().orElseThrow();
-        List<FeatureMeasurement> all = result.best().orElseThrow().all();
+        List<FeatureMeasurement> all =
+                result.best().orElseThrow().all().stream()
+                        .filter(m -> m.feature().purpose() != Purpose.KIND)
+                        .toList();
         List<FeatureMeasurement> measured =
                 all.stream().filter(m -> m.result() instanceof Measured).toList();
         SourceList sources = sources(measured, placement);

@@ -1,10 +1,13 @@
 package emberline.reports.page;
 
+import emberline.place.Placement;
+import emberline.place.kind.ObjectKind;
 import emberline.spectrum.Spectrum;
 import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.OptionalDouble;
 
 /** What cannot be told from the spectra of an object, in sentences. */
 final class LimitsText {
@@ -18,9 +21,8 @@ final class LimitsText {
     static String of(ObjectResult result) {
         List<String> sentences = new ArrayList<>();
         sentences.add(
-                "The type supposes a single late dwarf of near-solar metallicity: giants, reddened"
-                        + " stars, subdwarfs, unresolved pairs and galaxies are not told apart"
-                        + " here.");
+                "The type supposes a single late dwarf of near-solar metallicity. "
+                        + result.placement().map(LimitsText::kind).orElse(""));
         boolean judged =
                 result.placement().map(p -> p.gravity().gravityClass().isPresent()).orElse(false);
         sentences.add(
@@ -53,6 +55,16 @@ final class LimitsText {
                         + " further evidence. The report supports expert judgement and does not"
                         + " replace it; look at the spectrum.");
         return String.join(" ", sentences);
+    }
+
+    private static String kind(Placement placement) {
+        OptionalDouble pLateDwarf = placement.kind().probability(ObjectKind.LATE_DWARF);
+        return pLateDwarf.isEmpty()
+                ? "The kind of object is not judged: " + placement.kind().reason() + "."
+                : "That it is a late dwarf was judged by likeness to public spectra (P "
+                        + FindingSentence.probability(pLateDwarf.getAsDouble())
+                        + ", for about half of all candidates being late dwarfs); subdwarfs and"
+                        + " unresolved pairs count as late dwarfs there.";
     }
 
     private static boolean reaches(ObjectResult result, double micron, double resolvingPower) {
