@@ -2,11 +2,13 @@ package emberline.reports.attach;
 
 import emberline.judge.Estimate;
 import emberline.judge.Judgement;
+import emberline.judge.Kinematics;
 import emberline.judge.MagnitudeBand;
 import emberline.reports.attach.ResultColumn.Content;
 import emberline.survey.ObjectResult;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.function.Function;
 import java.util.function.ToDoubleFunction;
@@ -25,6 +27,7 @@ final class JudgementColumns {
         addDecision(columns);
         addMassAndAge(columns);
         addProperties(columns);
+        addDistance(columns);
         addSteps(columns);
         return columns;
     }
@@ -109,6 +112,9 @@ final class JudgementColumns {
                 "radius from the grids",
                 j -> Optional.of(j.properties().radiusRsun()),
                 4);
+    }
+
+    private static void addDistance(List<ResultColumn> columns) {
         interval(
                 columns,
                 "distance_pc",
@@ -123,7 +129,7 @@ final class JudgementColumns {
                         j -> j.properties().distance().map(d -> d.method()).orElse("")));
         for (MagnitudeBand band :
                 List.of(MagnitudeBand.J_2MASS, MagnitudeBand.H_2MASS, MagnitudeBand.K_2MASS)) {
-            String letter = band.name().substring(0, 1).toLowerCase(java.util.Locale.ROOT);
+            String letter = band.name().substring(0, 1).toLowerCase(Locale.ROOT);
             value(
                     columns,
                     "abs_mag_" + letter,
@@ -165,7 +171,7 @@ final class JudgementColumns {
             List<ResultColumn> columns,
             String name,
             String direction,
-            ToDoubleFunction<emberline.judge.Kinematics.Space> part) {
+            ToDoubleFunction<Kinematics.Space> part) {
         columns.add(
                 number(
                         name,

@@ -29,6 +29,16 @@ public final class JudgementText {
         return text.toString();
     }
 
+    /**
+     * A judgement as lines for a page.
+     *
+     * @param judgement the judgement
+     * @return lines without line ends: decision, mass and age, properties, ledger, grids, next step
+     */
+    public static List<String> lines(Judgement judgement) {
+        return block("Decision", judgement).strip().lines().map(String::strip).toList();
+    }
+
     private static String block(String name, Judgement judgement) {
         Limits limits = judgement.limits();
         StringBuilder text = new StringBuilder("\n");

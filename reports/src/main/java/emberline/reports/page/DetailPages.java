@@ -6,6 +6,8 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.HowKnown;
 import emberline.catalogue.Purpose;
 import emberline.catalogue.Source;
+import emberline.judge.Judgement;
+import emberline.judge.LedgerEntry;
 import emberline.measure.FeatureMeasurement;
 import emberline.measure.Measurement;
 import emberline.measure.Measurement.Measured;
@@ -16,6 +18,7 @@ import emberline.place.RelationEstimate;
 import emberline.place.RelationEstimate.Use;
 import emberline.place.TypeEstimate;
 import emberline.reports.attach.Digits;
+import emberline.reports.attach.JudgementText;
 import emberline.reports.attach.TypeText;
 import emberline.reports.page.Flow.Cell;
 import emberline.spectrum.Finding;
@@ -86,6 +89,7 @@ final class DetailPages {
         for (String line : MetallicityText.of(placement.metallicity())) {
             flow.paragraph(styles.table(), line, 8);
         }
+        result.judgement().ifPresent(judgement -> judgement(flow, judgement));
         findings(flow, result);
         provenance(flow, result);
         flow.heading("Sources");
@@ -93,6 +97,24 @@ final class DetailPages {
             flow.paragraph(styles.table(), sources.mark(source) + " " + source.cite(), 14);
         }
         return flow.draw();
+    }
+
+    private void judgement(Flow flow, Judgement judgement) {
+        flow.heading("Judgement: mass, age and what the odds rest on");
+        for (String line : JudgementText.lines(judgement)) {
+            flow.paragraph(styles.table(), line, 8);
+        }
+        for (LedgerEntry entry : judgement.substellarLedger().entries()) {
+            flow.paragraph(
+                    styles.table(),
+                    String.format(
+                            Locale.ROOT,
+                            "%s: odds of a substellar mass times %.3g. %s",
+                            entry.label(),
+                            Math.pow(10, entry.log10Factor()),
+                            entry.note()),
+                    8);
+        }
     }
 
     private SourceList sources(List<FeatureMeasurement> measured, Placement placement) {

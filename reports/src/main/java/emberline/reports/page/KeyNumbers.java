@@ -1,8 +1,12 @@
 package emberline.reports.page;
 
+import emberline.judge.Estimate;
+import emberline.judge.Judgement;
+import emberline.judge.Limits;
 import emberline.measure.Measurement.Measured;
 import emberline.place.GravityVerdict;
 import emberline.place.TypeEstimate;
+import emberline.place.kind.KindVerdict;
 import emberline.prepare.BandSignal;
 import emberline.prepare.Quality;
 import emberline.reports.attach.Digits;
@@ -34,6 +38,8 @@ final class KeyNumbers {
         List<Entry> entries = new ArrayList<>();
         result.placement().flatMap(p -> p.type()).ifPresent(type -> addType(entries, type));
         result.placement().ifPresent(p -> addGravity(entries, p.gravity()));
+        result.placement().ifPresent(p -> addKind(entries, p.kind()));
+        result.judgement().ifPresent(judgement -> addJudgement(entries, judgement));
         addSpectra(entries, result);
         addListed(entries, result.candidate());
         return entries;
@@ -79,6 +85,69 @@ final class KeyNumbers {
 
     private static String share(OptionalDouble share) {
         return share.isPresent() ? Digits.fixed(share.getAsDouble(), 2) : "\u2013";
+    }
+
+    private static void addKind(List<Entry> entries, KindVerdict verdict) {
+        verdict.kind()
+                .ifPresent(
+                        kind ->
+                                entries.add(
+                                        new Entry(
+                                                "Kind",
+                                                kind.label()
+                                                        + ", P "
+                                                        + FindingSentence.probability(
+                                                                verdict.probabilities()
+                                                                        .get(kind)))));
+    }
+
+    private static void addJudgement(List<Entry> entries, Judgement judgement) {
+        Limits limits = judgement.limits();
+        entries.add(
+                new Entry(
+                        "Substellar?",
+                        String.format(
+                                Locale.ROOT,
+                                "%s: P %.2f (%.2f to %.2f by the limit)",
+                                judgement.decision().word(),
+                                limits.pSubstellar(),
+                                limits.pSubstellarLow(),
+                                limits.pSubstellarHigh())));
+        Estimate mass = judgement.massMsun();
+        entries.add(
+                new Entry(
+                        "Mass (solar)",
+                        String.format(
+                                Locale.ROOT,
+                                "%.3f (%.3f to %.3f)",
+                                mass.median(),
+                                mass.lo68(),
+                                mass.hi68())));
+        entries.add(new Entry("Age", judgement.ageWords()));
+        judgement
+                .properties()
+                .teffK()
+                .ifPresent(
+                        t ->
+                                entries.add(
+                                        new Entry(
+                                                "T eff (K)",
+                                                Digits.fixed(t.median(), 0)
+                                                        + " ± "
+                                                        + Digits.fixed(t.sigma(), 0))));
+        judgement
+                .properties()
+                .distance()
+                .ifPresent(
+                        d ->
+                                entries.add(
+                                        new Entry(
+                                                "Distance (pc)",
+                                                Digits.fixed(d.pc().median(), 1)
+                                                        + " ± "
+                                                        + Digits.fixed(d.pc().sigma(), 1)
+                                                        + " by "
+                                                        + d.method())));
     }
 
     private static void addSpectra(List<Entry> entries, ObjectResult result) {

@@ -20,9 +20,15 @@ final class LimitsText {
 
     static String of(ObjectResult result) {
         List<String> sentences = new ArrayList<>();
+        boolean kind = result.placement().map(p -> p.kind().kind().isPresent()).orElse(false);
         sentences.add(
-                "The type supposes a single late dwarf of near-solar metallicity. "
-                        + result.placement().map(LimitsText::kind).orElse(""));
+                kind
+                        ? "The kind is judged against some 600 public spectra; objects unlike all of"
+                                + " them can be called wrongly, and unresolved pairs and mild"
+                                + " subdwarfs pass as single dwarfs."
+                        : "The type supposes a single late dwarf of near-solar metallicity: giants,"
+                                + " reddened stars, subdwarfs, unresolved pairs and galaxies are not"
+                                + " told apart here.");
         boolean judged =
                 result.placement().map(p -> p.gravity().gravityClass().isPresent()).orElse(false);
         sentences.add(
@@ -51,9 +57,13 @@ final class LimitsText {
                             + " not in it.");
         }
         sentences.add(
-                "No mass, age or temperature follows from this page: a substellar claim needs"
-                        + " further evidence. The report supports expert judgement and does not"
-                        + " replace it; look at the spectrum.");
+                result.judgement().isPresent()
+                        ? "Mass and age rest on evolution models and on the prior stated; models"
+                                + " differ by more than their printed errors. The report supports"
+                                + " expert judgement and does not replace it; look at the spectrum."
+                        : "No mass, age or temperature follows from this page: a substellar claim"
+                                + " needs further evidence. The report supports expert judgement and"
+                                + " does not replace it; look at the spectrum.");
         return String.join(" ", sentences);
     }
 

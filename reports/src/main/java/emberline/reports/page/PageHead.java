@@ -47,7 +47,9 @@ final class PageHead {
         }
         String headline = type.map(FindingSentence::withError).orElse("no type");
         sheet.textRight(styles.headline(), right, y + 1, headline);
-        String gravity = gravityWords(result.placement().orElseThrow().gravity());
+        String gravity =
+                gravityWords(result.placement().orElseThrow().gravity())
+                        + result.judgement().map(j -> "   " + j.decision().word()).orElse("");
         sheet.textRight(styles.subhead(), right, y + 14.5f, gravity);
         float below = Math.max(baseline - styles.name().leadingPoint() + 7, y + 19);
         sheet.rule(FirstPage.MARGIN, right, below, document.theme().ink(), 0.7f);
