@@ -20,15 +20,9 @@ final class LimitsText {
 
     static String of(ObjectResult result) {
         List<String> sentences = new ArrayList<>();
-        boolean kind = result.placement().map(p -> p.kind().kind().isPresent()).orElse(false);
         sentences.add(
-                kind
-                        ? "The kind is judged against some 600 public spectra; objects unlike all of"
-                                + " them can be called wrongly, and unresolved pairs and mild"
-                                + " subdwarfs pass as single dwarfs."
-                        : "The type supposes a single late dwarf of near-solar metallicity: giants,"
-                                + " reddened stars, subdwarfs, unresolved pairs and galaxies are not"
-                                + " told apart here.");
+                "The type supposes a single late dwarf of near-solar metallicity. "
+                        + result.placement().map(LimitsText::kind).orElse(""));
         boolean judged =
                 result.placement().map(p -> p.gravity().gravityClass().isPresent()).orElse(false);
         sentences.add(
