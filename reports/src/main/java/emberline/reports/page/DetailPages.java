@@ -100,7 +100,7 @@ final class DetailPages {
     }
 
     private void judgement(Flow flow, Judgement judgement) {
-        flow.heading("Judgement: mass, age and what the odds rest on");
+        flow.heading("Judgement");
         for (String line : JudgementText.lines(judgement)) {
             flow.paragraph(styles.table(), line, 8);
         }
