@@ -64,11 +64,11 @@ class SortCommandTest {
         assertTrue(
                 rows.get(0)
                         .startsWith(
-                                "name,status,reason,kind,p_late_dwarf,p_giant,type,type_number,"
+                                "name,status,reason,kind,type,type_number,"
                                         + "type_sigma,type_lo68,"
                                         + "type_hi68,type_lo95,type_hi95,published_type,"
                                         + "published_type_sigma,gravity,p_fldg,p_intg,p_vlg"));
-        assertTrue(rows.get(0).contains(",pair,p_pair,"), rows.get(0));
+        assertTrue(rows.get(0).contains(",p_late_dwarf,p_giant,"), rows.get(0));
         try (Stream<Path> objects = Files.list(out.resolve("objects"));
                 Stream<Path> reports = Files.list(out.resolve("reports"))) {
             assertEquals(listed - 1, objects.count());

@@ -55,7 +55,7 @@ class PublishedRelationsTest {
     }
 
     private static void assertIntended(double type, double tolerance, Placement placement) {
-        double given = placement.type().orElseThrow().typeNumber();
+        double given = placement.published().type().orElseThrow().typeNumber();
         assertEquals(type, given, tolerance, placement.published().scheme());
         for (RelationEstimate estimate : placement.published().estimates()) {
             if (estimate.use() == Use.COMBINED

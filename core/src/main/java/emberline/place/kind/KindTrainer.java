@@ -10,6 +10,7 @@ import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.NavigableSet;
 import java.util.Optional;
 import java.util.TreeSet;
 import java.util.function.Consumer;
@@ -167,7 +168,7 @@ public final class KindTrainer {
         Map<String, Integer> folds = new HashMap<>();
         int next = 0;
         for (ObjectKind kind : ObjectKind.values()) {
-            TreeSet<String> groups = new TreeSet<>();
+            NavigableSet<String> groups = new TreeSet<>();
             kin.stream().filter(k -> k.kind() == kind).forEach(k -> groups.add(k.group()));
             for (String group : groups) {
                 if (!folds.containsKey(group)) {

@@ -11,6 +11,7 @@ import emberline.place.pair.PairVerdict.Strength;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.NavigableSet;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.TreeSet;
@@ -122,7 +123,7 @@ public final class PairJudge {
 
     private double shareOfCandidates(
             List<PairPlane> judged, Measurements measurements, TypeEstimate type, long seed) {
-        TreeSet<String> needed = new TreeSet<>();
+        NavigableSet<String> needed = new TreeSet<>();
         for (PairPlane plane : judged) {
             needed.add(plane.yFeature());
             plane.xFeature().ifPresent(needed::add);

@@ -117,6 +117,7 @@ public final class ResultColumns {
                         "one-sigma error of the type by the published relations",
                         r -> published(r).map(t -> Digits.type(t.sigmaSubclass())).orElse("")));
         addGravity(columns);
+        addKindShares(columns);
         addReddening(columns);
         addMetallicity(columns);
         addPair(columns);
@@ -144,6 +145,9 @@ public final class ResultColumns {
                                         .flatMap(p -> p.kind().kind())
                                         .map(ObjectKind::label)
                                         .orElse("")));
+    }
+
+    private static void addKindShares(List<ResultColumn> columns) {
         columns.add(
                 placementShare(
                         "p_late_dwarf",

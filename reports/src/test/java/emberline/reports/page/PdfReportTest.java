@@ -151,7 +151,7 @@ class PdfReportTest {
                         "Ember 12",
                         FindingSentence.of(object),
                         "Wavelength (µm, vacuum)",
-                        "Type by published relations",
+                        "Type: posterior and published relations",
                         "Key numbers",
                         "Gravity by published scores",
                         "What this cannot tell",
