@@ -182,7 +182,9 @@ final class CheckCommand implements Callable<Integer> {
                                                 + option.getValue())
                         .collect(Collectors.joining(", "));
         return (leaveOut
-                        ? "Each object was placed by what was learned without it."
+                        ? "Each type and gravity class was found by what was learned without the object;"
+                                + " kinds were not: their model has seen the product's reference"
+                                + " list."
                         : "Placed by the product's own calibration, which objects it was learned"
                                 + " from flatter.")
                 + (degraded.isEmpty() ? "" : " Spectra degraded: " + degraded + ".");
