@@ -9,6 +9,12 @@ import java.util.OptionalDouble;
 /** Judges the kind of an object and finds its nearest kin. */
 public final class KindJudge {
 
+    /**
+     * Where a spectrum covers one band only, this share of the windows of that band must have been
+     * measured: the model fills what is missing with a middling value, and that looks like a dwarf.
+     */
+    private static final double LEAST_SHARE_ALONE = 0.85;
+
     private static final int KIN = 5;
     private static final String NOBODY = "\0";
 
@@ -52,6 +58,14 @@ public final class KindJudge {
             return KindVerdict.notJudged(
                     "no wavelength region is covered well enough above the noise: 0.79 to 0.98"
                             + " micron, J, H or K");
+        }
+        int widest = coverages.get(0).regions();
+        if (Integer.bitCount(widest) == 1
+                && Regions.share(vector, model.features(), widest) < LEAST_SHARE_ALONE) {
+            return KindVerdict.notJudged(
+                    "of one band alone ("
+                            + Regions.letters(widest)
+                            + ") only a part is covered, which does not tell kinds apart");
         }
         OptionalDouble unlike = model.unlike(vector, withoutGroup);
         if (unlike.isEmpty()) {

@@ -57,6 +57,29 @@ final class Regions {
         return enough(vector, features, Block.LINE) | H;
     }
 
+    /**
+     * The share of the windows of a single region that were measured.
+     *
+     * @param vector the features of a spectrum
+     * @param features the features of the model
+     * @param region mask of one region
+     * @return 0 to 1
+     */
+    static double share(FeatureVector vector, KindFeatures features, int region) {
+        int all = 0;
+        int measured = 0;
+        for (int k = 0; k < features.size(); k++) {
+            KindFeature feature = features.features().get(k);
+            if (feature.block() == Block.SHAPE
+                    && feature.regions() == region
+                    && feature.isWindow()) {
+                all++;
+                measured += vector.has(k) ? 1 : 0;
+            }
+        }
+        return all == 0 ? 0 : measured / (double) all;
+    }
+
     private static int enough(FeatureVector vector, KindFeatures features, Block block) {
         int mask = 0;
         for (int bit = 0; bit < LETTERS.length(); bit++) {
