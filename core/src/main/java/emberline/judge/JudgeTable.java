@@ -1,13 +1,7 @@
 package emberline.judge;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
+import emberline.read.ProductTable;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.function.Function;
@@ -21,29 +15,16 @@ final class JudgeTable {
 
     /** Every row of a table, turned into a value; the message of a failure says where. */
     static <T> List<T> rows(String name, Function<NamedCsvRecord, T> make) {
-        String resource = FOLDER + name;
+        ProductTable table = ProductTable.at(FOLDER + name);
         List<T> values = new ArrayList<>();
-        try (InputStream stream = JudgeTable.class.getResourceAsStream(resource);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(
-                                        new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-            for (NamedCsvRecord row : rows) {
-                try {
-                    values.add(make.apply(row));
-                } catch (IllegalArgumentException e) {
-                    throw new IllegalStateException(
-                            resource
-                                    + ", line "
-                                    + row.getStartingLineNumber()
-                                    + ": "
-                                    + e.getMessage(),
-                            e);
-                }
+        for (NamedCsvRecord row : table.rows()) {
+            try {
+                values.add(make.apply(row));
+            } catch (IllegalArgumentException e) {
+                IllegalStateException fault = table.fault(row, e.getMessage());
+                fault.initCause(e);
+                throw fault;
             }
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
         }
         return values;
     }

@@ -163,15 +163,7 @@ public final class TypePosterior {
      * @return type number
      */
     public double quantile(double share) {
-        double below = 0;
-        for (int i = 0; i < marginal.length; i++) {
-            if (below + marginal[i] >= share && marginal[i] > 0) {
-                double part = (share - below) / marginal[i];
-                return typeNumber(i) + (part - 0.5) * stepSubclass;
-            }
-            below += marginal[i];
-        }
-        return typeNumber(marginal.length - 1) + 0.5 * stepSubclass;
+        return quantiles().at(share);
     }
 
     /**
@@ -180,8 +172,16 @@ public final class TypePosterior {
      * @return the estimate
      */
     public TypeEstimate estimate() {
-        double[] q = Arrays.stream(QUANTILES).map(this::quantile).toArray();
+        double[] q = Arrays.stream(QUANTILES).map(quantiles()::at).toArray();
         double sigma = Math.max((q[3] - q[1]) / 2, stepSubclass / 10);
         return new TypeEstimate(q[2], sigma, q[1], q[3], q[0], q[4]);
+    }
+
+    private CellQuantiles quantiles() {
+        double[] types = new double[size()];
+        for (int i = 0; i < types.length; i++) {
+            types[i] = typeNumber(i);
+        }
+        return new CellQuantiles(types, marginal, stepSubclass);
     }
 }

@@ -1,14 +1,7 @@
 package emberline.place.calibrated;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.Reader;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
+import emberline.read.ProductTable;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
@@ -86,16 +79,7 @@ public final class CalibrationFiles {
     }
 
     private static List<NamedCsvRecord> rows(String file) {
-        try (InputStream stream = CalibrationFiles.class.getResourceAsStream(FOLDER + file);
-                Reader reader = new InputStreamReader(stream, StandardCharsets.UTF_8);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(reader)) {
-            return rows.stream().toList();
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
-        }
+        return ProductTable.at(FOLDER + file).rows();
     }
 
     /**

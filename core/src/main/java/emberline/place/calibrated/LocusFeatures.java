@@ -1,13 +1,6 @@
 package emberline.place.calibrated;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvReader;
-import de.siegmar.fastcsv.reader.NamedCsvRecord;
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
+import emberline.read.ProductTable;
 import java.util.List;
 
 /** The features that place an object on the sequence. */
@@ -23,15 +16,8 @@ final class LocusFeatures {
      * @return feature ids
      */
     static List<String> standard() {
-        try (InputStream stream = LocusFeatures.class.getResourceAsStream(RESOURCE);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(
-                                        new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-            return rows.stream().map(row -> row.getField("feature")).toList();
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
-        }
+        return ProductTable.at(RESOURCE).rows().stream()
+                .map(row -> row.getField("feature"))
+                .toList();
     }
 }

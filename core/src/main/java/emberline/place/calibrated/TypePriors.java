@@ -1,16 +1,9 @@
 package emberline.place.calibrated;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
 import emberline.place.GravityClass;
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
+import emberline.read.ProductTable;
 import java.util.EnumMap;
-import java.util.List;
 import java.util.Map;
 import java.util.NavigableMap;
 import java.util.TreeMap;
@@ -59,7 +52,7 @@ public enum TypePriors {
      */
     public TypePrior load() {
         Map<GravityClass, Double> share = new EnumMap<>(GravityClass.class);
-        for (NamedCsvRecord row : rows("gravity-prior.csv")) {
+        for (NamedCsvRecord row : ProductTable.at(FOLDER + "gravity-prior.csv").rows()) {
             for (GravityClass gravity : GravityClass.values()) {
                 if (gravity.label().equals(row.getField("gravity"))) {
                     share.put(gravity, Double.parseDouble(row.getField("share")));
@@ -70,7 +63,7 @@ public enum TypePriors {
             return (type, gravity) -> share.get(gravity);
         }
         NavigableMap<Double, Double> logDensity = new TreeMap<>();
-        for (NamedCsvRecord row : rows("type-priors.csv")) {
+        for (NamedCsvRecord row : ProductTable.at(FOLDER + "type-priors.csv").rows()) {
             logDensity.put(
                     Double.parseDouble(row.getField("type_number")),
                     Math.log(Double.parseDouble(row.getField(word))));
@@ -92,18 +85,5 @@ public enum TypePriors {
         }
         double part = (at - below.getKey()) / (above.getKey() - below.getKey());
         return below.getValue() * (1 - part) + above.getValue() * part;
-    }
-
-    private static List<NamedCsvRecord> rows(String file) {
-        try (InputStream stream = TypePriors.class.getResourceAsStream(FOLDER + file);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(
-                                        new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-            return rows.stream().toList();
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
-        }
     }
 }

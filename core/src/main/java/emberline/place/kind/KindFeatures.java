@@ -1,15 +1,9 @@
 package emberline.place.kind;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurements;
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
+import emberline.read.ProductTable;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -87,26 +81,17 @@ public record KindFeatures(List<KindFeature> features) {
     }
 
     private static KindFeatures load() {
-        try (InputStream stream = KindFeatures.class.getResourceAsStream(RESOURCE);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(
-                                        new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-            List<KindFeature> features = new ArrayList<>();
-            for (NamedCsvRecord row : rows) {
-                String id = row.getField("feature");
-                int regions = Regions.parse(row.getField("region"));
-                features.add(
-                        new KindFeature(
-                                id,
-                                regions,
-                                Block.valueOf(row.getField("block")),
-                                id.contains("/shape_") && Integer.bitCount(regions) == 1));
-            }
-            return new KindFeatures(features);
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
+        List<KindFeature> features = new ArrayList<>();
+        for (NamedCsvRecord row : ProductTable.at(RESOURCE).rows()) {
+            String id = row.getField("feature");
+            int regions = Regions.parse(row.getField("region"));
+            features.add(
+                    new KindFeature(
+                            id,
+                            regions,
+                            Block.valueOf(row.getField("block")),
+                            id.contains("/shape_") && Integer.bitCount(regions) == 1));
         }
+        return new KindFeatures(features);
     }
 }

@@ -1,13 +1,7 @@
 package emberline.place.kind;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
+import emberline.read.ProductTable;
 import java.util.Collections;
 import java.util.EnumMap;
 import java.util.Map;
@@ -41,21 +35,12 @@ public record KindPrior(Map<ObjectKind, Double> shares) {
      * @return the shares of the resource
      */
     public static KindPrior standard() {
-        try (InputStream stream = KindPrior.class.getResourceAsStream(RESOURCE);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(
-                                        new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-            Map<ObjectKind, Double> shares = new EnumMap<>(ObjectKind.class);
-            for (NamedCsvRecord row : rows) {
-                shares.put(
-                        ObjectKind.labelled(row.getField("kind")).orElseThrow(),
-                        Double.parseDouble(row.getField("share")));
-            }
-            return new KindPrior(shares);
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
+        Map<ObjectKind, Double> shares = new EnumMap<>(ObjectKind.class);
+        for (NamedCsvRecord row : ProductTable.at(RESOURCE).rows()) {
+            shares.put(
+                    ObjectKind.labelled(row.getField("kind")).orElseThrow(),
+                    Double.parseDouble(row.getField("share")));
         }
+        return new KindPrior(shares);
     }
 }

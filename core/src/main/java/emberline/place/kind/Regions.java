@@ -66,40 +66,34 @@ final class Regions {
      * @return 0 to 1
      */
     static double share(FeatureVector vector, KindFeatures features, int region) {
-        int all = 0;
-        int measured = 0;
-        for (int k = 0; k < features.size(); k++) {
-            KindFeature feature = features.features().get(k);
-            if (feature.block() == Block.SHAPE
-                    && feature.regions() == region
-                    && feature.isWindow()) {
-                all++;
-                measured += vector.has(k) ? 1 : 0;
-            }
-        }
-        return all == 0 ? 0 : measured / (double) all;
+        return share(vector, features, Block.SHAPE, region);
     }
 
     private static int enough(FeatureVector vector, KindFeatures features, Block block) {
         int mask = 0;
         for (int bit = 0; bit < LETTERS.length(); bit++) {
-            int all = 0;
-            int measured = 0;
-            for (int k = 0; k < features.size(); k++) {
-                KindFeature feature = features.features().get(k);
-                boolean counts =
-                        feature.block() == block
-                                && feature.regions() == 1 << bit
-                                && (block == Block.LINE || feature.isWindow());
-                if (counts) {
-                    all++;
-                    measured += vector.has(k) ? 1 : 0;
-                }
-            }
-            if (all > 0 && measured >= LEAST_SHARE * all) {
+            if (share(vector, features, block, 1 << bit) >= LEAST_SHARE) {
                 mask |= 1 << bit;
             }
         }
         return mask;
+    }
+
+    private static double share(
+            FeatureVector vector, KindFeatures features, Block block, int region) {
+        int all = 0;
+        int measured = 0;
+        for (int k = 0; k < features.size(); k++) {
+            KindFeature feature = features.features().get(k);
+            boolean counts =
+                    feature.block() == block
+                            && feature.regions() == region
+                            && (block == Block.LINE || feature.isWindow());
+            if (counts) {
+                all++;
+                measured += vector.has(k) ? 1 : 0;
+            }
+        }
+        return all == 0 ? 0 : measured / (double) all;
     }
 }

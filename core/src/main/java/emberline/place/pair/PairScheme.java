@@ -1,13 +1,6 @@
 package emberline.place.pair;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvReader;
-import de.siegmar.fastcsv.reader.NamedCsvRecord;
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
+import emberline.read.ProductTable;
 import java.util.List;
 
 /**
@@ -30,25 +23,15 @@ record PairScheme(
 
     /** The schemes of the resource. */
     static List<PairScheme> standard() {
-        try (InputStream stream = PairScheme.class.getResourceAsStream(RESOURCE);
-                CsvReader<NamedCsvRecord> rows =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .ofNamedCsvRecord(
-                                        new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-            return rows.stream()
-                    .map(
-                            row ->
-                                    new PairScheme(
-                                            row.getField("source"),
-                                            Double.parseDouble(row.getField("least_type_number")),
-                                            Double.parseDouble(
-                                                    row.getField("greatest_type_number")),
-                                            Integer.parseInt(row.getField("candidate_from")),
-                                            Integer.parseInt(row.getField("weak_from"))))
-                    .toList();
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
-        }
+        return ProductTable.at(RESOURCE).rows().stream()
+                .map(
+                        row ->
+                                new PairScheme(
+                                        row.getField("source"),
+                                        Double.parseDouble(row.getField("least_type_number")),
+                                        Double.parseDouble(row.getField("greatest_type_number")),
+                                        Integer.parseInt(row.getField("candidate_from")),
+                                        Integer.parseInt(row.getField("weak_from"))))
+                .toList();
     }
 }

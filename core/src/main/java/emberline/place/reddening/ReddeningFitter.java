@@ -2,17 +2,16 @@ package emberline.place.reddening;
 
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurements;
+import emberline.place.CellQuantiles;
 import emberline.place.TypePosterior;
 import emberline.place.calibrated.CalibratedType;
 import emberline.place.calibrated.CalibratedWitness;
 import emberline.place.calibrated.Contribution;
-import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.NavigableMap;
 import java.util.Optional;
 import java.util.TreeMap;
-import java.util.function.Consumer;
 import java.util.function.DoubleFunction;
 
 /**
@@ -29,8 +28,13 @@ public final class ReddeningFitter {
     /** Greatest extinction in V that is tried (mag). */
     private static final double GREATEST_AV = 15;
 
-    private static final double COARSE = 1;
+    /** Distance of the extinctions that are tried at last (mag). */
     private static final double FINE = 0.1;
+
+    private static final int GREATEST_TENTHS = (int) Math.round(GREATEST_AV / FINE);
+
+    /** Distance of those that are tried first, in tenths of a magnitude. */
+    private static final int COARSE_TENTHS = 10;
 
     /** Extinctions less probable than the best by more than this logarithm are not refined. */
     private static final double NEGLIGIBLE = 8;
@@ -57,43 +61,43 @@ public final class ReddeningFitter {
      */
     public Optional<ReddeningFit> fit(DoubleFunction<Measurements> measuredAt) {
         Measurements asSeen = measuredAt.apply(0);
-        NavigableMap<Double, Trial> trials = new TreeMap<>();
-        for (double av = 0; av <= GREATEST_AV; av += COARSE) {
-            trial(av, asSeen, measuredAt).ifPresent(put(trials, av));
+        NavigableMap<Integer, Trial> trials = new TreeMap<>();
+        for (int tenths = 0; tenths <= GREATEST_TENTHS; tenths += COARSE_TENTHS) {
+            trial(tenths, asSeen, measuredAt, trials);
         }
         if (trials.isEmpty()) {
             return Optional.empty();
         }
-        double best = best(trials);
-        List<Double> refined = new ArrayList<>();
-        for (Map.Entry<Double, Trial> entry : trials.entrySet()) {
-            if (entry.getValue().logProbability > best - NEGLIGIBLE) {
-                for (double step = -COARSE + FINE; step < COARSE; step += FINE) {
-                    double av = Math.rint((entry.getKey() + step) / FINE) * FINE;
-                    if (av >= 0 && av <= GREATEST_AV && !refined.contains(av)) {
-                        refined.add(av);
-                    }
-                }
+        double least = best(trials) - NEGLIGIBLE;
+        NavigableMap<Integer, Trial> fine = new TreeMap<>();
+        for (Map.Entry<Integer, Trial> coarse : trials.entrySet()) {
+            if (coarse.getValue().logProbability > least) {
+                fine.put(coarse.getKey(), coarse.getValue());
             }
         }
-        NavigableMap<Double, Trial> fine = new TreeMap<>();
-        for (double av : refined) {
-            trial(av, asSeen, measuredAt).ifPresent(put(fine, av));
+        for (int centre : List.copyOf(fine.keySet())) {
+            int from = Math.max(0, centre - COARSE_TENTHS + 1);
+            int to = Math.min(GREATEST_TENTHS, centre + COARSE_TENTHS - 1);
+            for (int tenths = from; tenths <= to; tenths++) {
+                if (!fine.containsKey(tenths)) {
+                    trial(tenths, asSeen, measuredAt, fine);
+                }
+            }
         }
         return Optional.of(summary(fine));
     }
 
-    private static Consumer<Trial> put(NavigableMap<Double, Trial> trials, double av) {
-        return trial -> trials.put(av, trial);
-    }
-
-    private static double best(NavigableMap<Double, Trial> trials) {
+    private static double best(NavigableMap<Integer, Trial> trials) {
         return trials.values().stream().mapToDouble(Trial::logProbability).max().orElseThrow();
     }
 
-    private Optional<Trial> trial(
-            double av, Measurements asSeen, DoubleFunction<Measurements> measuredAt) {
-        Measurements freed = measuredAt.apply(av);
+    /** Tries an extinction, in tenths of a magnitude; where nothing can be placed, adds nothing. */
+    private void trial(
+            int tenths,
+            Measurements asSeen,
+            DoubleFunction<Measurements> measuredAt,
+            NavigableMap<Integer, Trial> trials) {
+        Measurements freed = measuredAt.apply(tenths * FINE);
         CalibratedType placed = witness.witness(freed);
         double stretch = 0;
         for (Contribution one : placed.contributions()) {
@@ -104,40 +108,33 @@ public final class ReddeningFitter {
             }
         }
         double logProbability = placed.logEvidence() + stretch;
-        return placed.posterior().map(posterior -> new Trial(logProbability, posterior));
+        placed.posterior()
+                .ifPresent(posterior -> trials.put(tenths, new Trial(logProbability, posterior)));
     }
 
-    private static ReddeningFit summary(NavigableMap<Double, Trial> trials) {
+    private static ReddeningFit summary(NavigableMap<Integer, Trial> trials) {
         double best = best(trials);
-        double total = 0;
-        List<TypePosterior> posteriors = new ArrayList<>();
-        List<Double> weights = new ArrayList<>();
-        for (Trial trial : trials.values()) {
-            double weight = Math.exp(trial.logProbability - best);
-            total += weight;
-            weights.add(weight);
-            posteriors.add(trial.posterior);
-        }
-        List<Double> avs = new ArrayList<>(trials.keySet());
+        List<TypePosterior> posteriors = trials.values().stream().map(Trial::posterior).toList();
+        List<Double> weights =
+                trials.values().stream()
+                        .map(trial -> Math.exp(trial.logProbability - best))
+                        .toList();
+        CellQuantiles extinction =
+                new CellQuantiles(
+                        trials.keySet().stream().mapToDouble(tenths -> tenths * FINE).toArray(),
+                        weights.stream().mapToDouble(Double::doubleValue).toArray(),
+                        FINE);
         return new ReddeningFit(
-                quantile(avs, weights, 0.5 * total),
-                quantile(avs, weights, 0.16 * total),
-                quantile(avs, weights, 0.84 * total),
-                quantile(avs, weights, 0.025 * total),
-                quantile(avs, weights, 0.975 * total),
+                positive(extinction.at(0.5)),
+                positive(extinction.at(0.16)),
+                positive(extinction.at(0.84)),
+                positive(extinction.at(0.025)),
+                positive(extinction.at(0.975)),
                 TypePosterior.mixture(posteriors, weights));
     }
 
-    /** The extinction below which a part of the weight lies, within cells around the trials. */
-    private static double quantile(List<Double> avs, List<Double> weights, double part) {
-        double below = 0;
-        for (int i = 0; i < avs.size(); i++) {
-            if (below + weights.get(i) >= part) {
-                double within = (part - below) / weights.get(i) - 0.5;
-                return Math.max(0, avs.get(i) + within * FINE);
-            }
-            below += weights.get(i);
-        }
-        return avs.get(avs.size() - 1);
+    /** The first cell reaches below zero, no extinction does. */
+    private static double positive(double avMag) {
+        return Math.max(0, avMag);
     }
 }

@@ -94,7 +94,7 @@ public final class FindingSentence {
             return "gravity not judged (" + verdict.reason() + ")";
         }
         long scores = verdict.scores().stream().filter(s -> s.score().isPresent()).count();
-        OptionalDouble share = share(verdict);
+        OptionalDouble share = verdict.pOfClass();
         return "gravity "
                 + verdict.gravityClass().get().label()
                 + (share.isPresent() ? " (P " + probability(share.getAsDouble()) + ")" : "")
@@ -106,18 +106,6 @@ public final class FindingSentence {
                                                 + " by "
                                                 + count(scores, "published score"))
                         .orElse("");
-    }
-
-    /** The probability of the class that was given. */
-    static OptionalDouble share(GravityVerdict verdict) {
-        if (verdict.gravityClass().isEmpty()) {
-            return OptionalDouble.empty();
-        }
-        return switch (verdict.gravityClass().get()) {
-            case FLD_G -> verdict.pFieldGravity();
-            case INT_G -> verdict.pIntermediateGravity();
-            case VL_G -> verdict.pVeryLowGravity();
-        };
     }
 
     private static Optional<String> signal(ObjectResult result) {

@@ -80,7 +80,7 @@ final class PageHead {
     }
 
     private static String gravityWords(GravityVerdict verdict) {
-        OptionalDouble share = FindingSentence.share(verdict);
+        OptionalDouble share = verdict.pOfClass();
         return verdict.gravityClass()
                 .map(
                         g ->
