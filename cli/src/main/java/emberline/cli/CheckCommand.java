@@ -7,8 +7,6 @@ import emberline.read.CandidateList;
 import emberline.reports.attach.AtomicFile;
 import emberline.reports.attach.CheckJson;
 import emberline.reports.attach.CheckTables;
-import emberline.reports.attach.ResultColumn;
-import emberline.reports.attach.ResultColumns;
 import emberline.reports.page.CheckReport;
 import emberline.reports.page.ReportSettings;
 import emberline.survey.Chain;
@@ -78,12 +76,6 @@ final class CheckCommand implements Callable<Integer> {
                             + " there (default: write no files).")
     private Path out;
 
-    private final ResultColumn kindColumn =
-            ResultColumns.standard().stream()
-                    .filter(column -> column.name().equals("kind"))
-                    .findFirst()
-                    .orElseThrow();
-
     /** How scores are printed. */
     private enum ScoreFormat {
         TEXT,
@@ -104,7 +96,7 @@ final class CheckCommand implements Callable<Integer> {
         new SurveyRunner(chain, settings.threads())
                 .run(
                         candidates,
-                        result -> ScoredObject.of(result, kindColumn.text(result)),
+                        ScoredObject::of,
                         object -> {
                             objects.add(object);
                             if (object.status() == Status.FAILED) {

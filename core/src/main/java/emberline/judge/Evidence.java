@@ -96,17 +96,6 @@ public record Evidence(
     }
 
     /**
-     * The same with H alpha.
-     *
-     * @param seen what it shows
-     * @return new evidence
-     */
-    public Evidence withHalpha(Halpha seen) {
-        return new Evidence(
-                type, gravityPrior, lithium, seen, photometry, astrometry, age, pMetalPoor);
-    }
-
-    /**
      * The same with magnitudes.
      *
      * @param magnitudes by band

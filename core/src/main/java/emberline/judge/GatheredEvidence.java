@@ -83,7 +83,7 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
         Map<GravityClass, Double> flat = new EnumMap<>(GravityClass.class);
         double third = 1.0 / GravityOrder.COUNT;
         for (GravityClass gravity : GravityClass.values()) {
-            share.put(gravity, of(verdict, gravity).orElse(third));
+            share.put(gravity, verdict.probability(gravity).orElse(third));
             flat.put(gravity, third);
         }
         TypePosterior apart =
@@ -96,18 +96,10 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
         return new TypeAndGravity(apart, verdict.gravityClass().isPresent() ? flat : Map.of());
     }
 
-    private static OptionalDouble of(GravityVerdict verdict, GravityClass gravity) {
-        return switch (gravity) {
-            case FLD_G -> verdict.pFieldGravity();
-            case INT_G -> verdict.pIntermediateGravity();
-            case VL_G -> verdict.pVeryLowGravity();
-        };
-    }
-
     /** Whether the probabilities of a verdict are those of a posterior. */
     private static boolean isOf(GravityVerdict verdict, TypePosterior posterior) {
         for (GravityClass gravity : GravityClass.values()) {
-            OptionalDouble p = of(verdict, gravity);
+            OptionalDouble p = verdict.probability(gravity);
             if (p.isEmpty() || p.getAsDouble() != posterior.probability(gravity)) {
                 return false;
             }

@@ -10,6 +10,10 @@ final class JudgeSources {
 
     /** All papers of {@code sources.csv}, in its order. */
     static List<Source> all() {
+        return Loaded.SOURCES;
+    }
+
+    private static List<Source> load() {
         return List.copyOf(
                 JudgeTable.rows(
                         "sources.csv",
@@ -23,5 +27,10 @@ final class JudgeSources {
                                         row.getField("page"),
                                         row.getField("title"),
                                         row.getField("doi"))));
+    }
+
+    /** Reads the table at the first use. */
+    private static final class Loaded {
+        private static final List<Source> SOURCES = load();
     }
 }

@@ -51,18 +51,25 @@ public record GravityVerdict(
     }
 
     /**
+     * The probability of a class.
+     *
+     * @param gravity the class
+     * @return 0 to 1, or empty where the class is not judged
+     */
+    public OptionalDouble probability(GravityClass gravity) {
+        return switch (gravity) {
+            case FLD_G -> pFieldGravity;
+            case INT_G -> pIntermediateGravity;
+            case VL_G -> pVeryLowGravity;
+        };
+    }
+
+    /**
      * The probability of the adopted class.
      *
      * @return 0 to 1, or empty where no class is adopted
      */
     public OptionalDouble pOfClass() {
-        if (gravityClass.isEmpty()) {
-            return OptionalDouble.empty();
-        }
-        return switch (gravityClass.get()) {
-            case FLD_G -> pFieldGravity;
-            case INT_G -> pIntermediateGravity;
-            case VL_G -> pVeryLowGravity;
-        };
+        return gravityClass.map(this::probability).orElseGet(OptionalDouble::empty);
     }
 }

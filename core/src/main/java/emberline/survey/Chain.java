@@ -9,6 +9,7 @@ import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
 import emberline.place.calibrated.Calibration;
+import emberline.place.calibrated.TypePrior;
 import emberline.place.reddening.ReddeningFit;
 import emberline.prepare.Degrader;
 import emberline.prepare.Degrader.Degraded;
@@ -61,12 +62,20 @@ public final class Chain {
      * @param settings what holds for all objects
      */
     public Chain(FeatureCatalogue catalogue, Measuring measuring, SurveySettings settings) {
+        this(catalogue, measuring, settings, settings.prior().load());
+    }
+
+    private Chain(
+            FeatureCatalogue catalogue,
+            Measuring measuring,
+            SurveySettings settings,
+            TypePrior prior) {
         this(
                 catalogue,
                 measuring,
                 settings,
-                PlacerChoice.always(
-                        new Placer(catalogue, Calibration.standard(), settings.prior().load())));
+                PlacerChoice.always(new Placer(catalogue, Calibration.standard(), prior)),
+                prior);
     }
 
     /**
@@ -82,11 +91,20 @@ public final class Chain {
             Measuring measuring,
             SurveySettings settings,
             PlacerChoice placers) {
+        this(catalogue, measuring, settings, placers, settings.prior().load());
+    }
+
+    private Chain(
+            FeatureCatalogue catalogue,
+            Measuring measuring,
+            SurveySettings settings,
+            PlacerChoice placers,
+            TypePrior prior) {
         this.measurer = new Measurer(catalogue, measuring);
         this.lines = new LineReporter(catalogue, measuring.site());
         this.placers = placers;
         this.degrading = settings.degrading();
-        this.judging = new JudgingStep(settings.judging(), settings.prior().load());
+        this.judging = new JudgingStep(settings.judging(), prior);
         this.defaults = settings.preparing();
         this.seed = settings.seed();
         this.fitReddening = settings.fitReddening();

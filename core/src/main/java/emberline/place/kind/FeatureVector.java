@@ -1,7 +1,5 @@
 package emberline.place.kind;
 
-import java.util.Arrays;
-
 /**
  * The features of one spectrum in the order of {@link KindFeatures}; NaN where one was not
  * measured. Stays within this package, where nobody changes the arrays.
@@ -25,10 +23,5 @@ record FeatureVector(double[] values, double[] sigmas) {
             }
         }
         return new FeatureVector(kept, sigmas);
-    }
-
-    /** Whether nothing was measured. */
-    boolean isEmpty() {
-        return Arrays.stream(values).allMatch(Double::isNaN);
     }
 }

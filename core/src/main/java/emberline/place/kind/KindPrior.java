@@ -35,6 +35,10 @@ public record KindPrior(Map<ObjectKind, Double> shares) {
      * @return the shares of the resource
      */
     public static KindPrior standard() {
+        return Loaded.STANDARD;
+    }
+
+    private static KindPrior load() {
         Map<ObjectKind, Double> shares = new EnumMap<>(ObjectKind.class);
         for (NamedCsvRecord row : ProductTable.at(RESOURCE).rows()) {
             shares.put(
@@ -42,5 +46,10 @@ public record KindPrior(Map<ObjectKind, Double> shares) {
                     Double.parseDouble(row.getField("share")));
         }
         return new KindPrior(shares);
+    }
+
+    /** Reads the shares at the first use. */
+    private static final class Loaded {
+        private static final KindPrior STANDARD = load();
     }
 }

@@ -12,8 +12,4 @@ record TrainingRow(String group, ObjectKind kind, String how, FeatureVector vect
 
     static final String AS_OBSERVED = "as observed";
     static final String NOISY = "noise added";
-
-    boolean isAsObserved() {
-        return how.equals(AS_OBSERVED);
-    }
 }

@@ -1,5 +1,6 @@
 package emberline.survey.score;
 
+import emberline.place.kind.ObjectKind;
 import java.util.List;
 
 /**
@@ -28,7 +29,7 @@ public record KindScore(
         int allContaminants) {
 
     /** The kind that the product gives to late dwarfs. */
-    private static final String LATE_DWARF = "late dwarf";
+    private static final String LATE_DWARF = ObjectKind.LATE_DWARF.label();
 
     static KindScore of(List<ScoredObject> objects) {
         List<ScoredObject> late = objects.stream().filter(o -> o.known().isLateDwarf()).toList();

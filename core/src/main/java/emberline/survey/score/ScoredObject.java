@@ -4,6 +4,7 @@ import emberline.catalogue.MetallicityClass;
 import emberline.place.GravityClass;
 import emberline.place.Placement;
 import emberline.place.TypeEstimate;
+import emberline.place.kind.ObjectKind;
 import emberline.prepare.BandSignal;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
@@ -132,10 +133,9 @@ public record ScoredObject(
      * The object of a result.
      *
      * @param result its result
-     * @param judgedKind the kind as the product's tables print it; blank where it is not judged
      * @return what is known of it beside what was found
      */
-    public static ScoredObject of(ObjectResult result, String judgedKind) {
+    public static ScoredObject of(ObjectResult result) {
         Candidate candidate = result.candidate();
         Optional<SpectrumResult> best =
                 result.spectra().stream()
@@ -150,7 +150,7 @@ public record ScoredObject(
                 new Found(
                         placement.flatMap(Placement::type),
                         placement.flatMap(p -> p.gravity().gravityClass()),
-                        judgedKind,
+                        placement.flatMap(p -> p.kind().kind()).map(ObjectKind::label).orElse(""),
                         placement.flatMap(p -> p.metallicity().adopted())),
                 best.isPresent()
                         ? OptionalDouble.of(best.get().prepared().resolvingPower().value())

@@ -35,7 +35,7 @@ class CrossValidationTest {
         try (Reader reader =
                 new InputStreamReader(
                         ReferenceTable.class.getResourceAsStream(
-                                "/emberline/place/reference/reference.csv"),
+                                "/emberline/measured/reference.csv"),
                         StandardCharsets.UTF_8)) {
             outcome =
                     new Calibrator(ReferenceTable.read(reader), FeatureCatalogue.standard())

@@ -4,6 +4,7 @@ import emberline.place.GravityClass;
 import emberline.place.TypeEstimate;
 import emberline.place.TypePosterior;
 import emberline.place.calibrated.Calibrator.Unseen;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.function.Predicate;
@@ -61,29 +62,20 @@ public final class UnseenSummary {
         double squares = 0;
         int in68 = 0;
         int in95 = 0;
-        for (Unseen one : placed) {
+        double[] off = new double[placed.size()];
+        for (int i = 0; i < off.length; i++) {
+            Unseen one = placed.get(i);
             double known = one.row().typeNumber().orElseThrow();
             TypeEstimate type = one.placed().posterior().orElseThrow().estimate();
             double difference = type.typeNumber() - known;
             sum += difference;
             squares += difference * difference;
+            off[i] = Math.abs(difference);
             in68 += type.lo68() <= known && known <= type.hi68() ? 1 : 0;
             in95 += type.lo95() <= known && known <= type.hi95() ? 1 : 0;
         }
         double n = placed.size();
-        double[] sorted =
-                placed.stream()
-                        .mapToDouble(
-                                one ->
-                                        Math.abs(
-                                                one.placed()
-                                                                .posterior()
-                                                                .orElseThrow()
-                                                                .estimate()
-                                                                .typeNumber()
-                                                        - one.row().typeNumber().orElseThrow()))
-                        .sorted()
-                        .toArray();
+        Arrays.sort(off);
         return String.format(
                 Locale.ROOT,
                 "  %-24s %3d of %3d placed, bias %+.2f, rms %.3f, median |difference| %.2f,"
@@ -93,7 +85,7 @@ public final class UnseenSummary {
                 chosen.size(),
                 sum / n,
                 Math.sqrt(squares / n),
-                sorted.length == 0 ? Double.NaN : sorted[sorted.length / 2],
+                off.length == 0 ? Double.NaN : off[off.length / 2],
                 in68 / n,
                 in95 / n);
     }

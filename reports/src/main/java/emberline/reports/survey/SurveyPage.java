@@ -124,12 +124,7 @@ public final class SurveyPage implements Closeable {
         if (verdict == null || verdict.gravityClass().isEmpty()) {
             return null;
         }
-        OptionalDouble share =
-                switch (verdict.gravityClass().get()) {
-                    case FLD_G -> verdict.pFieldGravity();
-                    case INT_G -> verdict.pIntermediateGravity();
-                    case VL_G -> verdict.pVeryLowGravity();
-                };
+        OptionalDouble share = verdict.pOfClass();
         return share.isPresent() ? Math.round(100 * share.getAsDouble()) / 100.0 : null;
     }
 
