@@ -15,6 +15,8 @@ import emberline.spectrum.ResolvingPower;
 import emberline.spectrum.ResolvingPower.Basis;
 import emberline.spectrum.Spectrum;
 import java.io.ByteArrayOutputStream;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.List;
 import java.util.concurrent.TimeUnit;
 import nom.tam.fits.Fits;
@@ -32,6 +34,7 @@ import org.openjdk.jmh.annotations.Param;
 import org.openjdk.jmh.annotations.Scope;
 import org.openjdk.jmh.annotations.Setup;
 import org.openjdk.jmh.annotations.State;
+import org.openjdk.jmh.annotations.TearDown;
 import org.openjdk.jmh.annotations.Warmup;
 
 /** What measuring costs: all features with covariance and draws, against perturbing pixels. */
@@ -52,6 +55,7 @@ public class MeasuringBench {
     private Measurer measurer;
     private List<String> measured;
     private byte[] fits;
+    private Path file;
     private long perturbations;
 
     /** Makes the spectrum and warms the grid cache, as a survey on one instrument does. */
@@ -92,6 +96,14 @@ public class MeasuringBench {
             file.write(new FitsOutputStream(bytes));
         }
         fits = bytes.toByteArray();
+        file = Files.createTempFile("bench", ".fits");
+        Files.write(file, fits);
+    }
+
+    /** Takes the file away. */
+    @TearDown
+    public void remove() throws Exception {
+        Files.delete(file);
     }
 
     /** All features with their sigmas. */
@@ -138,6 +150,12 @@ public class MeasuringBench {
     @Benchmark
     public Observation read() throws Exception {
         return new SpectrumReader().read(fits, "bench.fits");
+    }
+
+    /** Reading the same spectrum from the file, as a survey does. */
+    @Benchmark
+    public Observation readFile() throws Exception {
+        return new SpectrumReader().read(file);
     }
 
     /** Reading and preparing. */

@@ -13,40 +13,18 @@ final class MeasuredSpectrum {
     private static final double NEGATIVE = 1e-6;
 
     private final FormulaBook book;
-    private final WindowOperator operator;
     private final double[] means;
     private final EnvelopeMatrix covariance;
     private EnvelopeMatrix factor;
 
     MeasuredSpectrum(FormulaBook book, WindowOperator operator, PreparedSpectrum prepared) {
         this.book = book;
-        this.operator = operator;
         this.means = operator.apply(prepared.spectrum());
         this.covariance = operator.covariance(prepared.spectrum(), prepared.noise());
     }
 
     FormulaBook book() {
         return book;
-    }
-
-    /** Least coverage of the windows of a formula, 0 to 1. */
-    double coverage(Formula formula) {
-        double least = 1;
-        for (int row : formula.rows()) {
-            least = Math.min(least, operator.coverage(row));
-        }
-        return least;
-    }
-
-    /** Least coverage of the line windows over which a formula integrates; 1 if it has none. */
-    double lineCoverage(Formula formula) {
-        double least = 1;
-        for (int row : formula.rows()) {
-            if (operator.functional(row).measure().isIntegral()) {
-                least = Math.min(least, operator.coverage(row));
-            }
-        }
-        return least;
     }
 
     double value(Formula formula) {

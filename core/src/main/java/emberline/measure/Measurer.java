@@ -62,19 +62,29 @@ public final class Measurer {
     public Measurements measure(PreparedSpectrum prepared) {
         Plan plan = grids.of(prepared.spectrum(), prepared.resolvingPower(), () -> plan(prepared));
         MeasuredSpectrum measured = new MeasuredSpectrum(plan.book(), plan.operator(), prepared);
-        List<FeatureMeasurement> results = new ArrayList<>();
-        for (Feature feature : catalogue.features()) {
-            results.add(measure(feature, plan, measured));
+        List<FeatureMeasurement> results = new ArrayList<>(plan.steps().size());
+        for (Step step : plan.steps()) {
+            results.add(step.refused().orElseGet(() -> measure(step, measured)));
         }
         return Measurements.of(measured, results);
     }
 
     /** What can be prepared for a wavelength grid, before any flux is looked at. */
-    record Plan(
-            FormulaBook book,
-            WindowOperator operator,
-            Map<String, NotMeasured> refusals,
-            Applicability applicability) {}
+    record Plan(FormulaBook book, WindowOperator operator, List<Step> steps) {}
+
+    /**
+     * One feature on one wavelength grid.
+     *
+     * @param formula how it is computed; empty where it does not apply
+     * @param refused what came of it, where the grid alone decides
+     */
+    private record Step(
+            Feature feature,
+            Optional<Formula> formula,
+            double coverage,
+            double telluricShare,
+            OptionalDouble smoothing,
+            Optional<FeatureMeasurement> refused) {}
 
     private Plan plan(PreparedSpectrum prepared) {
         Spectrum spectrum = prepared.spectrum();
@@ -93,30 +103,53 @@ public final class Measurer {
         FormulaBook book = FormulaBook.of(catalogue, applicable, applicability::smoothing);
         WindowOperator operator =
                 WindowOperator.of(spectrum, prepared.resolvingPower().value(), book.functionals());
-        return new Plan(book, operator, Map.copyOf(refusals), applicability);
+        List<Step> steps = new ArrayList<>();
+        for (Feature feature : catalogue.features()) {
+            Optional<NotMeasured> refusal = Optional.ofNullable(refusals.get(feature.id()));
+            steps.add(step(feature, book, operator, refusal, applicability));
+        }
+        return new Plan(book, operator, List.copyOf(steps));
     }
 
-    private FeatureMeasurement measure(Feature feature, Plan plan, MeasuredSpectrum measured) {
-        NotMeasured refusal = plan.refusals().get(feature.id());
-        Optional<Formula> formula = plan.book().formula(feature.id());
-        if (refusal == null && formula.isEmpty()) {
-            refusal = missingPart(feature, plan);
-        }
+    private Step step(
+            Feature feature,
+            FormulaBook book,
+            WindowOperator operator,
+            Optional<NotMeasured> refusal,
+            Applicability applicability) {
+        Optional<Formula> formula =
+                refusal.isPresent() ? Optional.empty() : book.formula(feature.id());
+        double coverage = formula.map(f -> operator.coverage(f.rows())).orElse(0.0);
+        Optional<NotMeasured> why =
+                refusal.or(
+                        () ->
+                                formula.isEmpty()
+                                        ? Optional.of(missingPart(feature, book))
+                                        : uncovered(
+                                                coverage,
+                                                operator.lineCoverage(formula.get().rows())));
         double telluric = telluricShares.get(feature.id());
-        OptionalDouble smoothed = plan.applicability().smoothing(feature);
-        if (refusal != null) {
-            return new FeatureMeasurement(feature, refusal, 0, 0, telluric, smoothed);
-        }
-        double coverage = measured.coverage(formula.orElseThrow());
-        double signal = continuumSignal(formula.orElseThrow(), measured);
-        Measurement result = evaluate(formula.orElseThrow(), coverage, signal, measured);
-        return new FeatureMeasurement(
+        OptionalDouble smoothing = applicability.smoothing(feature);
+        return new Step(
                 feature,
-                result,
+                formula,
                 coverage,
-                result instanceof Measured ? signal : 0,
                 telluric,
-                smoothed);
+                smoothing,
+                why.map(w -> new FeatureMeasurement(feature, w, coverage, 0, telluric, smoothing)));
+    }
+
+    private FeatureMeasurement measure(Step step, MeasuredSpectrum measured) {
+        Formula formula = step.formula().orElseThrow();
+        double signal = continuumSignal(formula, measured);
+        Measurement result = evaluate(formula, signal, measured);
+        return new FeatureMeasurement(
+                step.feature(),
+                result,
+                step.coverage(),
+                result instanceof Measured ? signal : 0,
+                step.telluricShare(),
+                step.smoothing());
     }
 
     /**
@@ -142,34 +175,38 @@ public final class Measurer {
         return Double.isNaN(signal) ? Double.POSITIVE_INFINITY : signal;
     }
 
-    private static NotMeasured missingPart(Feature feature, Plan plan) {
+    private static NotMeasured missingPart(Feature feature, FormulaBook book) {
         String part =
                 feature.parts().stream()
                         .map(Part::feature)
-                        .filter(id -> plan.book().formula(id).isEmpty())
+                        .filter(id -> book.formula(id).isEmpty())
                         .findFirst()
                         .orElse("");
         return new NotMeasured(Why.PART_MISSING, "its part " + part + " does not apply");
     }
 
-    private Measurement evaluate(
-            Formula formula, double coverage, double signal, MeasuredSpectrum measured) {
+    private Optional<NotMeasured> uncovered(double coverage, double lineCoverage) {
         if (coverage < settings.minCoverage()) {
-            return refuse(
-                    Why.NOT_COVERED,
-                    "good pixels cover %.0f%% of a window; %.0f%% are needed",
-                    100 * coverage,
-                    100 * settings.minCoverage());
+            return Optional.of(
+                    refuse(
+                            Why.NOT_COVERED,
+                            "good pixels cover %.0f%% of a window; %.0f%% are needed",
+                            100 * coverage,
+                            100 * settings.minCoverage()));
         }
-        double line = measured.lineCoverage(formula);
-        if (line < Measuring.LEAST_LINE_COVERAGE) {
-            return refuse(
-                    Why.NOT_COVERED,
-                    "good pixels cover %.1f%% of the window of the line; an equivalent width"
-                            + " needs %.0f%%",
-                    100 * line,
-                    100 * Measuring.LEAST_LINE_COVERAGE);
+        if (lineCoverage < Measuring.LEAST_LINE_COVERAGE) {
+            return Optional.of(
+                    refuse(
+                            Why.NOT_COVERED,
+                            "good pixels cover %.1f%% of the window of the line; an equivalent"
+                                    + " width needs %.0f%%",
+                            100 * lineCoverage,
+                            100 * Measuring.LEAST_LINE_COVERAGE));
         }
+        return Optional.empty();
+    }
+
+    private Measurement evaluate(Formula formula, double signal, MeasuredSpectrum measured) {
         if (Double.isNaN(signal)) {
             return refuse(Why.NEGATIVE_CONTINUUM, "a continuum is zero or negative");
         }

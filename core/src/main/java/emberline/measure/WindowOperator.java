@@ -212,6 +212,26 @@ final class WindowOperator {
         return Double.isNaN(beforeFlux) ? 0 : beforeFlux;
     }
 
+    /** Least coverage of some functionals, 0 to 1. */
+    double coverage(int[] rows) {
+        double least = 1;
+        for (int row : rows) {
+            least = Math.min(least, coverage(row));
+        }
+        return least;
+    }
+
+    /** Least coverage of the functionals that integrate over a line; 1 if there are none. */
+    double lineCoverage(int[] rows) {
+        double least = 1;
+        for (int row : rows) {
+            if (functional(row).measure().isIntegral()) {
+                least = Math.min(least, coverage(row));
+            }
+        }
+        return least;
+    }
+
     /**
      * The covariance of the functionals from the noise of the pixels.
      *
