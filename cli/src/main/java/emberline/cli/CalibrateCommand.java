@@ -89,7 +89,9 @@ final class CalibrateCommand implements Callable<Integer> {
                 new Calibrator(asWritten(text.toString()), catalogue).calibrate();
         Map<String, String> files =
                 CalibrationFiles.text(
-                        learned.calibration(), remarks("Learned from reference.csv."));
+                        learned.calibration(),
+                        learned.noise(),
+                        remarks("Learned from reference.csv."));
         for (Map.Entry<String, String> file : files.entrySet()) {
             AtomicFile.write(out.resolve(file.getKey()), file.getValue());
         }

@@ -23,6 +23,7 @@ import picocli.CommandLine.Spec;
             MeasureCommand.class,
             PlaceCommand.class,
             JudgeCommand.class,
+            PlanCommand.class,
             ReportCommand.class,
             CatalogueCommand.class,
             CalibrateCommand.class,

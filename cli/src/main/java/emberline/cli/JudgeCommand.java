@@ -9,13 +9,11 @@ import emberline.spectrum.SpectralType;
 import emberline.survey.KnownObject;
 import emberline.survey.ObjectResult;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.concurrent.Callable;
-import java.util.stream.Collectors;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
@@ -123,17 +121,8 @@ final class JudgeCommand implements Callable<Integer> {
             return Optional.empty();
         }
         return Optional.of(
-                Arrays.stream(GravityClass.values())
-                        .filter(g -> g.label().equalsIgnoreCase(gravity))
-                        .findFirst()
-                        .orElseThrow(
-                                () ->
-                                        wrong(
-                                                "--gravity",
-                                                Arrays.stream(GravityClass.values())
-                                                        .map(GravityClass::label)
-                                                        .collect(Collectors.joining(", ")),
-                                                gravity)));
+                GravityClass.ofLabel(gravity)
+                        .orElseThrow(() -> wrong("--gravity", GravityClass.labels(), gravity)));
     }
 
     private Map<String, String> cells() {

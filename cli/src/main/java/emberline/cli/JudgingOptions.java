@@ -1,61 +1,37 @@
 package emberline.cli;
 
-import emberline.judge.AgeStatement;
 import emberline.judge.Aim;
 import emberline.judge.Judging;
-import java.util.function.Supplier;
+import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
 
-/** Options that say how objects are judged. */
+/** Options that say how objects are judged, and what is looked for. */
 final class JudgingOptions {
 
     @Spec(Spec.Target.MIXEE)
     private CommandSpec spec;
 
-    @Option(
-            names = "--age",
-            paramLabel = "AGE",
-            description =
-                    "Age where the list does not state one: 120+-8Myr, 50..150Myr, 2..8Gyr or the"
-                            + " short name of a group such as ABDMG (default: even in time from"
-                            + " 10 Myr to 10 Gyr).")
-    private String age;
+    @Mixin private DecisionOptions decision;
 
     @Option(
             names = "--aim",
             paramLabel = "AIM[=W],...",
             defaultValue = "substellar",
             description =
-                    "What is looked for: substellar, young, coolest, metal-poor, nearby; several"
+                    "What is looked for: substellar, young, coolest, metal-poor, nearby, pairs;"
+                            + " several"
                             + " with weights, e.g. young=2,nearby (default ${DEFAULT-VALUE}).")
     private String aim;
 
-    @Option(
-            names = "--decide",
-            paramLabel = "HIGH,LOW",
-            defaultValue = "0.95,0.05",
-            description =
-                    "Least probability for the decision substellar and greatest for stellar"
-                            + " (default ${DEFAULT-VALUE}).")
-    private String decide;
-
     /** How objects are judged. */
     Judging judging() {
-        Judging judging = checked("--decide", () -> Judging.withDefaults().withThresholds(decide));
-        judging = judging.withAims(checked("--aim", () -> Aim.parse(aim)));
-        return age == null
-                ? judging
-                : judging.withAge(checked("--age", () -> AgeStatement.parse(age)));
-    }
-
-    private <T> T checked(String option, Supplier<T> read) {
         try {
-            return read.get();
+            return decision.judging().withAims(Aim.parse(aim));
         } catch (IllegalArgumentException e) {
-            throw new ParameterException(spec.commandLine(), option + ": " + e.getMessage());
+            throw new ParameterException(spec.commandLine(), "--aim: " + e.getMessage());
         }
     }
 }

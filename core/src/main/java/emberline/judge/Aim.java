@@ -17,7 +17,9 @@ public enum Aim {
     /** Is it metal-poor? */
     METAL_POOR("metal-poor"),
     /** Is it within 20 pc? */
-    NEARBY("within 20 pc");
+    NEARBY("within 20 pc"),
+    /** Is it an unresolved pair? */
+    PAIRS("an unresolved pair");
 
     private final String claim;
 

@@ -20,6 +20,8 @@ import java.util.OptionalDouble;
  * @param astrometry position and motion
  * @param age what is stated about the age; empty where nothing is
  * @param pMetalPoor probability that it is metal-poor, from the spectrum; empty where not judged
+ * @param pBlendCriteria probability that its spectrum meets enough criteria of a blend of two
+ *     dwarfs; empty where not judged
  */
 public record Evidence(
         TypePosterior type,
@@ -29,7 +31,8 @@ public record Evidence(
         Map<MagnitudeBand, Magnitude> photometry,
         Astrometry astrometry,
         Optional<AgeStatement> age,
-        OptionalDouble pMetalPoor) {
+        OptionalDouble pMetalPoor,
+        OptionalDouble pBlendCriteria) {
 
     /** Copies the maps and checks the prior. */
     public Evidence {
@@ -59,6 +62,7 @@ public record Evidence(
                 Map.of(),
                 Astrometry.none(),
                 Optional.empty(),
+                OptionalDouble.empty(),
                 OptionalDouble.empty());
     }
 
@@ -92,7 +96,15 @@ public record Evidence(
      */
     public Evidence withLithium(LithiumTest test) {
         return new Evidence(
-                type, gravityPrior, test, halpha, photometry, astrometry, age, pMetalPoor);
+                type,
+                gravityPrior,
+                test,
+                halpha,
+                photometry,
+                astrometry,
+                age,
+                pMetalPoor,
+                pBlendCriteria);
     }
 
     /**
@@ -103,7 +115,15 @@ public record Evidence(
      */
     public Evidence withPhotometry(Map<MagnitudeBand, Magnitude> magnitudes) {
         return new Evidence(
-                type, gravityPrior, lithium, halpha, magnitudes, astrometry, age, pMetalPoor);
+                type,
+                gravityPrior,
+                lithium,
+                halpha,
+                magnitudes,
+                astrometry,
+                age,
+                pMetalPoor,
+                pBlendCriteria);
     }
 
     /**
@@ -114,7 +134,15 @@ public record Evidence(
      */
     public Evidence withAstrometry(Astrometry known) {
         return new Evidence(
-                type, gravityPrior, lithium, halpha, photometry, known, age, pMetalPoor);
+                type,
+                gravityPrior,
+                lithium,
+                halpha,
+                photometry,
+                known,
+                age,
+                pMetalPoor,
+                pBlendCriteria);
     }
 
     /**
@@ -132,7 +160,8 @@ public record Evidence(
                 photometry,
                 astrometry,
                 Optional.of(stated),
-                pMetalPoor);
+                pMetalPoor,
+                pBlendCriteria);
     }
 
     /**
@@ -150,6 +179,26 @@ public record Evidence(
                 photometry,
                 astrometry,
                 age,
+                OptionalDouble.of(probability),
+                pBlendCriteria);
+    }
+
+    /**
+     * The same with the probability that the criteria of a blend are met.
+     *
+     * @param probability 0 to 1
+     * @return new evidence
+     */
+    public Evidence withBlendCriteria(double probability) {
+        return new Evidence(
+                type,
+                gravityPrior,
+                lithium,
+                halpha,
+                photometry,
+                astrometry,
+                age,
+                pMetalPoor,
                 OptionalDouble.of(probability));
     }
 }

@@ -15,5 +15,7 @@ public enum FollowUp {
     /** A radial velocity. */
     VELOCITY,
     /** CaH and TiO in the optical. */
-    METALLICITY
+    METALLICITY,
+    /** Images sharp enough to part a pair. */
+    IMAGING
 }

@@ -136,7 +136,8 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
                         photometry(candidate, numbers, findings),
                         astrometry(candidate, findings),
                         age(candidate, findings),
-                        placement.metallicity().pSubdwarf());
+                        placement.metallicity().pSubdwarf(),
+                        placement.pair().pPair());
         return new GatheredEvidence(evidence, findings);
     }
 

@@ -184,11 +184,13 @@ public final class Judge {
         OutcomeSimulator simulator =
                 new OutcomeSimulator(posterior, curves, mix, age, lithium, numbers);
         List<NextStep> steps = new ArrayList<>(nextSteps.of(simulator, curves, mix, judging));
-        steps.addAll(sideQuestions.steps(poor, found.distance(), evidence, mix, judging));
+        double pair = sideQuestions.pair(evidence);
+        steps.addAll(sideQuestions.steps(poor, pair, found.distance(), evidence, mix, judging));
         List<NextStep> sorted = NextSteps.sorted(steps, judging);
         LedgerMaker ledgers = new LedgerMaker(open, posterior, curves);
         Properties physical = physical(evidence, mix, posterior, found);
         Map<Aim, Double> claims = claims(limits, aged, posterior, poor, found.distance());
+        claims.put(Aim.PAIRS, pair);
         return new Judgement(
                 limits,
                 mass,

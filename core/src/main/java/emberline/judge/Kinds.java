@@ -44,7 +44,7 @@ final class Kinds {
                         case SUBSTELLAR -> k % MASSES < 2;
                         case YOUNG -> (k & YOUNG) != 0;
                         case COOLEST -> (k & COOL) != 0;
-                        case METAL_POOR, NEARBY -> false;
+                        case METAL_POOR, NEARBY, PAIRS -> false;
                     };
         }
         return yes;

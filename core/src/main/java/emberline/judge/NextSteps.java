@@ -34,7 +34,7 @@ final class NextSteps {
         Map<FollowUp, OutcomeTable> tables = tables(simulator, curves, mix);
         List<NextStep> steps = new ArrayList<>();
         for (Aim aim : Aim.values()) {
-            if (!judging.aims().containsKey(aim) || aim == Aim.METAL_POOR || aim == Aim.NEARBY) {
+            if (!judging.aims().containsKey(aim) || SideQuestions.AIMS.contains(aim)) {
                 continue;
             }
             tables.forEach(

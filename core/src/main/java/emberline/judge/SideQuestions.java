@@ -3,9 +3,13 @@ package emberline.judge;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
 
-/** The aims that mass and age do not answer: metal-poor, and nearby. */
+/** The aims that mass and age do not answer: metal-poor, nearby, and pairs. */
 final class SideQuestions {
+
+    /** The aims that are answered here. */
+    static final Set<Aim> AIMS = Set.of(Aim.METAL_POOR, Aim.NEARBY, Aim.PAIRS);
 
     private static final int YES = 0;
     private static final int NO = 1;
@@ -56,6 +60,23 @@ final class SideQuestions {
                 });
     }
 
+    /**
+     * Probability of an unresolved pair: the share of pairs, times what the blend criteria say,
+     * given how often pairs and single dwarfs meet them.
+     */
+    double pair(Evidence evidence) {
+        double share = numbers.of("binary-share");
+        if (evidence.pBlendCriteria().isEmpty()) {
+            return share;
+        }
+        double met = evidence.pBlendCriteria().getAsDouble();
+        double ofPairs = numbers.of("pair-meets-criteria");
+        double ofSingles = numbers.of("single-meets-criteria");
+        double yes = share * (met * ofPairs + (1 - met) * (1 - ofPairs));
+        double no = (1 - share) * (met * ofSingles + (1 - met) * (1 - ofSingles));
+        return yes / (yes + no);
+    }
+
     /** Joint of nearby or not and of a measured log distance with a further error. */
     private double[][] distances(DistanceEstimate distance, double furtherError) {
         double sigma = Math.max(1e-3, distance.relativeSigma());
@@ -82,6 +103,7 @@ final class SideQuestions {
     /** The steps for these aims. */
     List<NextStep> steps(
             double pMetalPoor,
+            double pPair,
             Optional<DistanceEstimate> distance,
             Evidence evidence,
             TypeMix mix,
@@ -97,6 +119,15 @@ final class SideQuestions {
                                 {q * (1 - right), q * right}
                             });
             found.add(step(FollowUp.METALLICITY, Aim.METAL_POOR, table, mix, judging));
+        }
+        if (judging.aims().containsKey(Aim.PAIRS)) {
+            double parted = steps.accuracy(FollowUp.IMAGING);
+            OutcomeTable table =
+                    new OutcomeTable(
+                            new double[][] {
+                                {pPair * parted, pPair * (1 - parted)}, {0, 1 - pPair}
+                            });
+            found.add(step(FollowUp.IMAGING, Aim.PAIRS, table, mix, judging));
         }
         if (judging.aims().containsKey(Aim.NEARBY)
                 && distance.isPresent()

@@ -1,5 +1,9 @@
 package emberline.place;
 
+import java.util.Arrays;
+import java.util.Optional;
+import java.util.stream.Collectors;
+
 /** The published gravity classes. */
 public enum GravityClass {
     /** Field gravity. */
@@ -22,5 +26,26 @@ public enum GravityClass {
      */
     public String label() {
         return label;
+    }
+
+    /**
+     * The class with a label.
+     *
+     * @param text the label in any case
+     * @return the class; empty where none is called so
+     */
+    public static Optional<GravityClass> ofLabel(String text) {
+        return Arrays.stream(values())
+                .filter(gravity -> gravity.label.equalsIgnoreCase(text.trim()))
+                .findFirst();
+    }
+
+    /**
+     * All labels.
+     *
+     * @return separated by commas
+     */
+    public static String labels() {
+        return Arrays.stream(values()).map(GravityClass::label).collect(Collectors.joining(", "));
     }
 }

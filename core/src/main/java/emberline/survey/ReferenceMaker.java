@@ -4,12 +4,15 @@ import emberline.measure.FeatureMeasurement;
 import emberline.measure.Measurement.Measured;
 import emberline.place.reference.ReferenceRow;
 import emberline.place.reference.ReferenceTable;
+import emberline.prepare.BandSignal;
+import emberline.prepare.PreparedSpectrum;
 import emberline.spectrum.Candidate;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.Set;
 import java.util.TreeSet;
 
@@ -43,6 +46,7 @@ public final class ReferenceMaker {
                 features.put(one.feature().id(), value);
             }
         }
+        PreparedSpectrum prepared = result.spectra().get(0).prepared();
         ReferenceRow row =
                 new ReferenceRow(
                         candidate.name(),
@@ -52,7 +56,10 @@ public final class ReferenceMaker {
                         candidate.text("known_kind").orElse(""),
                         candidate.text("tier").orElse(""),
                         candidate.text("dataset").orElse(""),
-                        result.spectra().get(0).prepared().resolvingPower().value(),
+                        prepared.resolvingPower().value(),
+                        BandSignal.best(prepared.spectrum())
+                                .map(best -> OptionalDouble.of(best.medianSignalToNoise()))
+                                .orElse(OptionalDouble.empty()),
                         features);
         rows.add(row);
         return Optional.of(row);

@@ -25,6 +25,9 @@ public final class CalibrationFiles {
     /** Name of the table of the label error. */
     public static final String LABEL_ERROR = "label-error.csv";
 
+    /** Name of the table of the noise of features at a signal-to-noise of one. */
+    public static final String NOISE = "feature-noise.csv";
+
     private static final String FOLDER = "/emberline/place/calibrated/";
     private static final String MEAN = "mean";
     private static final String SHIFT = "low-gravity shift";
@@ -86,14 +89,17 @@ public final class CalibrationFiles {
      * A calibration as files.
      *
      * @param calibration what to write
+     * @param noise how noisy its features are
      * @param remarks lines that go before the header of each, without mark
      * @return text by file name
      */
-    public static Map<String, String> text(Calibration calibration, List<String> remarks) {
+    public static Map<String, String> text(
+            Calibration calibration, FeatureNoise noise, List<String> remarks) {
         Map<String, String> files = new LinkedHashMap<>();
         String head = remarks.isEmpty() ? "" : "# " + String.join("\n# ", remarks) + "\n";
         files.put(LOCI, head + loci(calibration));
         files.put(CORRELATIONS, head + correlations(calibration));
+        files.put(NOISE, head + noise.text());
         LabelError label = calibration.labelError();
         files.put(
                 LABEL_ERROR,

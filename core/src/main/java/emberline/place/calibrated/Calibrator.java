@@ -33,6 +33,7 @@ public final class Calibrator {
     private final TrainingSet training;
     private final List<String> features;
     private final TypePrior prior;
+    private final FeatureNoise noise;
 
     /**
      * A calibrator.
@@ -45,6 +46,7 @@ public final class Calibrator {
         Set<String> placing = new TreeSet<>(LocusFeatures.standard());
         this.features = table.features().stream().filter(placing::contains).toList();
         this.prior = TypePriors.FLAT.load();
+        this.noise = FeatureNoise.of(table, features);
     }
 
     /**
@@ -59,12 +61,16 @@ public final class Calibrator {
      * What was learned, and how well it does.
      *
      * @param calibration from all objects
+     * @param noise how noisy features are
      * @param unseen all dwarfs of known type, each placed without having been learned from
      * @param withoutGroup by the name of a group the calibration that has not seen its spectra;
      *     groups from which nothing was learned are absent
      */
     public record Outcome(
-            Calibration calibration, List<Unseen> unseen, Map<String, Calibration> withoutGroup) {
+            Calibration calibration,
+            FeatureNoise noise,
+            List<Unseen> unseen,
+            Map<String, Calibration> withoutGroup) {
 
         /** Copies the collections. */
         public Outcome {
@@ -111,7 +117,7 @@ public final class Calibrator {
         withoutFold.replaceAll((number, learned) -> learned.with(error));
         Map<String, Calibration> withoutGroup = new LinkedHashMap<>();
         fold.forEach((group, number) -> withoutGroup.put(group, withoutFold.get(number)));
-        return new Outcome(learn(training).with(error), unseen, withoutGroup);
+        return new Outcome(learn(training).with(error), noise, unseen, withoutGroup);
     }
 
     private Calibration learn(TrainingSet from) {

@@ -23,6 +23,8 @@ import java.util.OptionalDouble;
  *     for what is not a single late dwarf
  * @param source the data set and, through its manifest, the papers of the label
  * @param resolvingPower resolving power of the spectrum
+ * @param signalToNoise median signal-to-noise a pixel in the band that is covered best; empty where
+ *     it is not known
  * @param features values with errors by feature id; features that were not measured are absent
  */
 public record ReferenceRow(
@@ -34,6 +36,7 @@ public record ReferenceRow(
         String tier,
         String source,
         double resolvingPower,
+        OptionalDouble signalToNoise,
         Map<String, Measured> features) {
 
     /** Copies the map. */

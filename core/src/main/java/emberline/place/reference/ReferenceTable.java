@@ -36,7 +36,8 @@ public record ReferenceTable(List<String> features, List<ReferenceRow> rows) {
                     "kind",
                     "tier",
                     "source",
-                    "resolution");
+                    "resolution",
+                    "snr");
 
     /** Copies the lists. */
     public ReferenceTable {
@@ -94,6 +95,7 @@ public record ReferenceTable(List<String> features, List<ReferenceRow> rows) {
             }
         }
         String type = row.getField("type_number");
+        String signal = row.getField("snr");
         return new ReferenceRow(
                 row.getField("object"),
                 row.getField("group"),
@@ -105,6 +107,9 @@ public record ReferenceTable(List<String> features, List<ReferenceRow> rows) {
                 row.getField("tier"),
                 row.getField("source"),
                 Double.parseDouble(row.getField("resolution")),
+                signal.isBlank()
+                        ? OptionalDouble.empty()
+                        : OptionalDouble.of(Double.parseDouble(signal)),
                 values);
     }
 
@@ -133,6 +138,10 @@ public record ReferenceTable(List<String> features, List<ReferenceRow> rows) {
                             : "");
             cells.addAll(List.of(row.gravity(), row.kind(), row.tier(), row.source()));
             cells.add(String.format(Locale.ROOT, "%.0f", row.resolvingPower()));
+            cells.add(
+                    row.signalToNoise().isPresent()
+                            ? digits("%.1f", row.signalToNoise().getAsDouble())
+                            : "");
             for (String id : features) {
                 Measured value = row.features().get(id);
                 cells.add(value == null ? "" : digits("%.4f", value.value()));

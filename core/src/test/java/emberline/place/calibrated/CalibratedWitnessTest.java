@@ -38,7 +38,16 @@ class CalibratedWitnessTest {
                 Sample.of(
                         CALIBRATION,
                         new ReferenceRow(
-                                "x", "x", OptionalDouble.empty(), "", "", "", "", 120, values)));
+                                "x",
+                                "x",
+                                OptionalDouble.empty(),
+                                "",
+                                "",
+                                "",
+                                "",
+                                120,
+                                OptionalDouble.empty(),
+                                values)));
     }
 
     private static TypeEstimate type(Map<String, Measured> values) {
@@ -126,6 +135,7 @@ class CalibratedWitnessTest {
                                         "",
                                         "",
                                         120,
+                                        OptionalDouble.empty(),
                                         values)))
                 .posterior()
                 .orElseThrow()

@@ -125,8 +125,10 @@ class CrossValidationTest {
     /** The committed calibration is what the committed reference table gives. */
     @Test
     void theProductsCalibrationIsUpToDate() {
-        Map<String, String> learned = CalibrationFiles.text(outcome.calibration(), List.of());
-        Map<String, String> committed = CalibrationFiles.text(Calibration.standard(), List.of());
+        Map<String, String> learned =
+                CalibrationFiles.text(outcome.calibration(), outcome.noise(), List.of());
+        Map<String, String> committed =
+                CalibrationFiles.text(Calibration.standard(), FeatureNoise.standard(), List.of());
         for (String file : learned.keySet()) {
             String[] expected = learned.get(file).split("[,\n]", -1);
             String[] found = committed.get(file).split("[,\n]", -1);

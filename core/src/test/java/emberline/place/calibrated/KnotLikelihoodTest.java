@@ -48,7 +48,17 @@ class KnotLikelihoodTest {
         }
         return Sample.of(
                 calibration(),
-                new ReferenceRow("x", "x", OptionalDouble.empty(), "", "", "", "", 120, values));
+                new ReferenceRow(
+                        "x",
+                        "x",
+                        OptionalDouble.empty(),
+                        "",
+                        "",
+                        "",
+                        "",
+                        120,
+                        OptionalDouble.empty(),
+                        values));
     }
 
     private static double expected(double type, double lowGravity) {

@@ -48,6 +48,7 @@ class LabelErrorTest {
                                     "A",
                                     "",
                                     120,
+                                    OptionalDouble.empty(),
                                     Map.of())));
         }
         LabelError found = LabelFit.fit(labelled);
