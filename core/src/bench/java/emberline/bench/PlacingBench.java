@@ -1,6 +1,7 @@
 package emberline.bench;
 
 import emberline.catalogue.FeatureCatalogue;
+import emberline.judge.AgeStatement;
 import emberline.judge.GatheredEvidence;
 import emberline.judge.Judge;
 import emberline.judge.Judgement;
@@ -46,6 +47,7 @@ public class PlacingBench {
     private Placer placer;
     private Judge judge;
     private GatheredEvidence evidence;
+    private long ages;
 
     /** Reads and measures the object. */
     @Setup
@@ -81,6 +83,14 @@ public class PlacingBench {
     @Benchmark
     public Placement place() {
         return placer.place(measurements, 1);
+    }
+
+    /** The same with an age that no object before had stated. */
+    @Benchmark
+    public Judgement judgeOfNewAge() {
+        double myr = 100 + 1e-6 * ++ages;
+        return judge.judge(
+                evidence.evidence().withAge(AgeStatement.parse(myr + "+-10Myr")));
     }
 
     /** Properties, age, mass, limits and next steps: all of judging. */

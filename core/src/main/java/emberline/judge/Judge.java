@@ -34,7 +34,8 @@ public final class Judge {
     private final SideQuestions sideQuestions = new SideQuestions(numbers, age, nextSteps);
     private final Map<EvolutionGrid.Name, EvolutionGrid> grids = EvolutionGrid.all();
     private final Map<EvolutionGrid.Name, NodeTable> openTables;
-    private final Map<EvolutionGrid.Name, NodeTable> statedTables;
+    private final StatedAges<Map<EvolutionGrid.Name, NodeTable>> statedTables =
+            new StatedAges<>(this::tables);
     private final int fineness;
 
     /**
@@ -51,7 +52,6 @@ public final class Judge {
         this.judging = judging;
         this.fineness = fineness;
         this.openTables = tables(AgeStatement.none());
-        this.statedTables = judging.age().map(this::tables).orElse(openTables);
     }
 
     private Map<EvolutionGrid.Name, NodeTable> tables(AgeStatement stated) {
@@ -138,12 +138,7 @@ public final class Judge {
     }
 
     private Map<EvolutionGrid.Name, NodeTable> tablesFor(Evidence evidence) {
-        if (evidence.age().isEmpty()) {
-            return openTables;
-        }
-        return evidence.age().equals(judging.age())
-                ? statedTables
-                : tables(evidence.age().orElseThrow());
+        return evidence.age().map(statedTables::of).orElse(openTables);
     }
 
     private List<GridComparison> comparisons(

@@ -53,7 +53,6 @@ final class NodeTable {
     private final double[][] logL;
     private final double[][] logG;
     private final double[][] lithiumLeft;
-    private final double[][] radius;
 
     /**
      * A table.
@@ -94,12 +93,10 @@ final class NodeTable {
         this.logL = grid.on(Column.LOG_L, logAge, logMass);
         this.logG = grid.on(Column.LOG_G, logAge, logMass);
         this.lithiumLeft = forLithium.on(Column.LITHIUM, logAge, logMass);
-        this.radius = new double[logAge.length][logMass.length];
         for (int a = 0; a < logAge.length; a++) {
             for (int m = 0; m < logMass.length; m++) {
                 teff[a][m] = Math.pow(10, teff[a][m]);
                 lithiumLeft[a][m] = EvolutionGrid.lithiumLeft(lithiumLeft[a][m]);
-                radius[a][m] = Math.sqrt(mass(m) * Math.pow(10, SOLAR_LOG_G - logG[a][m]));
             }
         }
     }
@@ -223,7 +220,7 @@ final class NodeTable {
 
     /** Radius (solar) from mass and gravity. */
     double radius(int a, int m) {
-        return radius[a][m];
+        return Math.sqrt(mass(m) * Math.pow(10, SOLAR_LOG_G - logG[a][m]));
     }
 
     /** Part of the lithium left, 0 to 1. */
