@@ -16,8 +16,8 @@ import java.util.List;
 /**
  * The type of an object: each published relation as a point with its error in a row of its own,
  * those that were combined above those that are shown for comparison, under them the type that the
- * relations give together, and at the bottom the posterior with the 68% and 95% intervals of the
- * adopted type.
+ * relations give together, and at the bottom the posterior with that type marked in it by a dashed
+ * line and the 68% and 95% intervals of the adopted type.
  */
 public final class PosteriorChart {
 
@@ -77,12 +77,23 @@ public final class PosteriorChart {
         layers.add(new Layer.Points(aside, Tone.SHOWN, false));
         layers.add(new Layer.Points(used, Tone.USED, true));
         if (type.type().isPresent()) {
-            layers.add(new Layer.Points(List.of(point(type.type().get(), 0)), Tone.RESULT, true));
-            rows.add(new Tick(0, "combined"));
+            layers.add(new Layer.Points(List.of(point(type.type().get(), 0)), Tone.USED, false));
+            rows.add(new Tick(0, "published, combined"));
         }
         double foot = -0.8;
         if (placement.calibrated().posterior().isPresent()) {
             layers.addAll(posterior(placement.calibrated().posterior().get(), range));
+            type.type()
+                    .ifPresent(
+                            published ->
+                                    layers.add(
+                                            new Layer.Segment(
+                                                    published.typeNumber(),
+                                                    -0.45,
+                                                    published.typeNumber(),
+                                                    FOOT + 0.7,
+                                                    Tone.USED,
+                                                    true)));
             rows.add(new Tick(FOOT + POSTERIOR_ROWS / 2, "posterior"));
             foot = FOOT;
         }

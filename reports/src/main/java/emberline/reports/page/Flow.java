@@ -19,12 +19,27 @@ final class Flow {
     private final Paper paper;
     private final float columnWidth;
     private final List<Line> lines = new ArrayList<>();
+    private Band band = new Band(0, (sheet, top) -> {});
 
     Flow(ReportDocument document, Paper paper) {
         this.document = document;
         this.paper = paper;
         this.columnWidth =
                 (paper.widthPoint() - 2 * FirstPage.MARGIN - (COLUMNS - 1) * GUTTER) / COLUMNS;
+    }
+
+    /** Writes a band from its top down. */
+    @FunctionalInterface
+    interface BandContent {
+        void write(Sheet sheet, float top) throws IOException;
+    }
+
+    /** What stands above the columns of the first page over their full width. */
+    private record Band(float tall, BandContent content) {}
+
+    /** Puts a band of a height (point) above the columns of the first page. */
+    void band(float tall, BandContent content) {
+        band = new Band(tall, content);
     }
 
     /** Where a section begins. */
@@ -114,7 +129,8 @@ final class Flow {
         int from = 0;
         int page = 0;
         while (from < lines.size()) {
-            float full = paper.heightPoint() - FirstPage.FOOT - 6 - top();
+            float top = top() + (page == 0 ? band.tall() : 0);
+            float full = paper.heightPoint() - FirstPage.FOOT - 6 - top;
             int[] starts = columns(from, full);
             if (starts[COLUMNS] == lines.size()) {
                 starts = balanced(from, full);
@@ -122,8 +138,16 @@ final class Flow {
             page++;
             try (Sheet sheet = new Sheet(document, paper)) {
                 DetailPages.head(document, sheet, paper, page);
+                if (page == 1) {
+                    band.content().write(sheet, top());
+                }
                 for (int column = 0; column < COLUMNS; column++) {
-                    draw(sheet, column, starts[column], starts[column + 1], bookmarks);
+                    draw(
+                            sheet,
+                            new Place(column, top),
+                            starts[column],
+                            starts[column + 1],
+                            bookmarks);
                 }
             }
             from = starts[COLUMNS];
@@ -179,10 +203,13 @@ final class Flow {
         return end;
     }
 
-    private void draw(Sheet sheet, int column, int from, int to, List<Bookmark> bookmarks)
+    /** A column and where it begins. */
+    private record Place(int column, float top) {}
+
+    private void draw(Sheet sheet, Place place, int from, int to, List<Bookmark> bookmarks)
             throws IOException {
-        float left = FirstPage.MARGIN + column * (columnWidth + GUTTER);
-        float y = top();
+        float left = FirstPage.MARGIN + place.column() * (columnWidth + GUTTER);
+        float y = place.top();
         for (int i = from; i < to; i++) {
             Line line = lines.get(i);
             y += (i == from ? 0 : line.before()) + line.leading();
