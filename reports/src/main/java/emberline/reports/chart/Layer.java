@@ -121,7 +121,9 @@ public sealed interface Layer
         /** It begins right of the value. */
         RIGHT,
         /** It begins at the value and stands above it. */
-        ABOVE
+        ABOVE,
+        /** It ends at the value and stands above it. */
+        ABOVE_LEFT
     }
 
     /**

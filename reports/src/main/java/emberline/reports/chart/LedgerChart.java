@@ -22,7 +22,7 @@ public final class LedgerChart {
     /** Least and greatest end of the axis (log10 of the odds). */
     private static final double LEAST_REACH = 1.3;
 
-    private static final double MOST_REACH = 6;
+    private static final double MOST_REACH = 4;
 
     private LedgerChart() {}
 
@@ -69,7 +69,9 @@ public final class LedgerChart {
         layers.add(
                 new Layer.Points(
                         List.of(new Layer.Point(end, end, end, 0, 0, 0)), Tone.RESULT, true));
-        layers.add(note(end, end, 0, "P " + share(ledger.probability())));
+        double seen = Math.max(-reach, Math.min(reach, end));
+        String word = "P " + share(ledger.probability());
+        layers.add(note(seen, seen, 0, seen > 0 ? word + "\u2003" : "\u2003" + word));
         Axis x = new Axis("Odds of " + ledger.claim(), "", -reach, reach, ticks(reach));
         Axis y = new Axis("", "", -0.7, ledger.entries().size() + 1.7, rows);
         return new Chart("", x, y, layers);
@@ -133,7 +135,7 @@ public final class LedgerChart {
 
     private static List<Tick> ticks(double reach) {
         List<Tick> ticks = new ArrayList<>();
-        int step = reach > 3 ? 2 : 1;
+        int step = reach > 2.5 ? 2 : 1;
         for (int decade = (int) -reach; decade <= reach; decade++) {
             boolean named = decade % step == 0;
             String high = Math.abs(decade) > 2 ? "10" + superscript(Math.abs(decade)) : "";

@@ -21,6 +21,8 @@ public final class MassAgeChart {
     private static final double[] AGES = {10, 100, 1000, 10000};
     private static final String[] AGE_LABELS = {"10 Myr", "100 Myr", "1 Gyr", "10 Gyr"};
 
+    private static final double WORD_ROOM = 0.01;
+
     private MassAgeChart() {}
 
     /**
@@ -54,10 +56,12 @@ public final class MassAgeChart {
         layers.add(new Layer.Segment(left, hydrogen, right, hydrogen, Tone.WORDS, false));
         layers.add(new Layer.Segment(left, deuterium, right, deuterium, Tone.WORDS, true));
         layers.add(point(judgement, left, right));
-        double word = left + 0.02 * (right - left);
+        boolean old = Math.log10(judgement.age().ageMyr().median()) > (left + right) / 2;
+        double word = old ? left + WORD_ROOM * (right - left) : right - WORD_ROOM * (right - left);
+        Side side = old ? Side.ABOVE : Side.ABOVE_LEFT;
         double above = Math.log10(limits.hydrogenHighMsun());
-        layers.add(new Layer.Note(word, above, "burns hydrogen", Tone.WORDS, Side.ABOVE));
-        layers.add(new Layer.Note(word, deuterium, "burns deuterium", Tone.WORDS, Side.ABOVE));
+        layers.add(new Layer.Note(word, above, "burns hydrogen", Tone.WORDS, side));
+        layers.add(new Layer.Note(word, deuterium, "burns deuterium", Tone.WORDS, side));
         return new Chart(
                 "",
                 new Axis("Age", "", left, right, ages(left, right)),

@@ -2,6 +2,7 @@ package emberline.reports.chart;
 
 import emberline.catalogue.Feature;
 import emberline.catalogue.FeatureCatalogue;
+import emberline.catalogue.Source;
 import emberline.place.Placement;
 import emberline.place.PublishedType;
 import emberline.place.RelationEstimate;
@@ -176,6 +177,10 @@ public final class PosteriorChart {
     private static String rowLabel(RelationEstimate estimate, FeatureCatalogue catalogue) {
         String id = estimate.relation().feature();
         String symbol = catalogue.feature(id).map(Feature::symbol).orElse(id);
-        return symbol + "\u2002" + estimate.relation().source().shortCite();
+        Source source = estimate.relation().source();
+        int comma = source.authors().indexOf(',');
+        String authors =
+                comma < 0 ? source.authors() : source.authors().substring(0, comma) + " et al.";
+        return symbol + "\u2002" + authors + " " + source.year();
     }
 }

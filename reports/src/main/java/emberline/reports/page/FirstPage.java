@@ -17,7 +17,7 @@ final class FirstPage {
     static final float TOP = 40;
     static final float FOOT = 44;
 
-    private static final float LEAST_SPECTRUM = 128;
+    private static final float LEAST_SPECTRUM = 168;
     private static final float MOST_SPECTRUM = 345;
     private static final float BETWEEN = 34;
     private static final float LIMITS_LEADING = 8.4f;

@@ -1,6 +1,7 @@
 package emberline.reports.page;
 
 import emberline.catalogue.FeatureCatalogue;
+import emberline.measure.Measurement.Measured;
 import emberline.place.GravityScore;
 import emberline.place.Placement;
 import emberline.place.calibrated.Calibration;
@@ -45,6 +46,7 @@ final class GravityPanel {
         return result.placement()
                 .filter(p -> p.gravity().gravityClass().isPresent())
                 .map(p -> p.gravity().scores())
+                .filter(all -> all.stream().anyMatch(s -> s.index() instanceof Measured))
                 .orElse(List.of());
     }
 
@@ -53,7 +55,11 @@ final class GravityPanel {
         sheet.text(styles.heading(), FirstPage.MARGIN, y + 7, HEADING);
         Placement placement = result.placement().orElseThrow();
         if (scores.isEmpty()) {
-            String reason = "Not judged: " + placement.gravity().reason() + ".";
+            String reason =
+                    placement.gravity().gravityClass().isPresent()
+                            ? "None of the published indices was measured; the class rests on the"
+                                    + " calibrated features."
+                            : "Not judged: " + placement.gravity().reason() + ".";
             sheet.text(
                     styles.body(),
                     FirstPage.MARGIN,
@@ -61,13 +67,16 @@ final class GravityPanel {
                     document.lines().fit(styles.body(), reason, width));
             return;
         }
-        sheet.text(
-                styles.small(),
-                FirstPage.MARGIN + document.lines().width(styles.heading(), HEADING) + 8,
-                y + 7,
+        float from = document.lines().width(styles.heading(), HEADING) + 8;
+        String caption =
                 "areas, pale to dark: field, intermediate, very low gravity by "
                         + source(scores)
-                        + "; lines: calibrated loci of field (full) and very low gravity (dashed)");
+                        + "; lines: loci of field (full), very low (dashed)";
+        sheet.text(
+                styles.small(),
+                FirstPage.MARGIN + from,
+                y + 7,
+                document.lines().fit(styles.small(), caption, width - from));
         float each = (width - 3 * 8) / 4;
         GravityChart charts = new GravityChart(catalogue, calibration);
         int column = 0;

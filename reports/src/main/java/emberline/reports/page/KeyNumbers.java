@@ -81,14 +81,13 @@ final class KeyNumbers {
         }
         entries.add(
                 new Entry(
-                        "Gravity",
+                        "FLD, INT, VL",
                         "P "
                                 + share(verdict.pFieldGravity())
-                                + " FLD, "
+                                + ", "
                                 + share(verdict.pIntermediateGravity())
-                                + " INT, "
-                                + share(verdict.pVeryLowGravity())
-                                + " VL"));
+                                + ", "
+                                + share(verdict.pVeryLowGravity())));
     }
 
     private static String share(OptionalDouble share) {
@@ -138,7 +137,7 @@ final class KeyNumbers {
                         t ->
                                 entries.add(
                                         new Entry(
-                                                "T eff (K)",
+                                                "Teff (K)",
                                                 Digits.fixed(t.median(), 0)
                                                         + " ± "
                                                         + Digits.fixed(t.sigma(), 0))));
@@ -211,9 +210,7 @@ final class KeyNumbers {
                                             .filter(m -> m.result() instanceof Measured)
                                             .count();
                             entries.add(
-                                    new Entry(
-                                            "Features measured",
-                                            measured + " of " + best.all().size()));
+                                    new Entry("Features", measured + " of " + best.all().size()));
                         });
     }
 

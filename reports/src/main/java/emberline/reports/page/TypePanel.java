@@ -24,7 +24,6 @@ final class TypePanel {
     private static final float CONTRIBUTIONS_WIDTH = 196;
     private static final float GUTTER = 12;
     private static final int FEWEST_CONTRIBUTIONS = 3;
-    private static final String HEADING = "Type";
     private static final Frame FRAME = new Frame(116, 2, 5, 24);
 
     private final ReportDocument document;
@@ -70,7 +69,8 @@ final class TypePanel {
     }
 
     void write(Sheet sheet, float y, float tall, int rows) throws IOException {
-        sheet.text(styles.heading(), FirstPage.MARGIN, y + 7, HEADING);
+        String title = placement.type().isPresent() ? "Type" : "Type, if it were a late dwarf";
+        sheet.text(styles.heading(), FirstPage.MARGIN, y + 7, title);
         if (!any()) {
             noType(sheet, y);
             return;
@@ -80,7 +80,7 @@ final class TypePanel {
                 contributions.size() >= FEWEST_CONTRIBUTIONS
                         && placement.calibrated().posterior().isPresent();
         float chartWidth = beside ? width - CONTRIBUTIONS_WIDTH - GUTTER : width;
-        float heading = document.lines().width(styles.heading(), HEADING) + 8;
+        float heading = document.lines().width(styles.heading(), title) + 8;
         sheet.text(
                 styles.small(),
                 FirstPage.MARGIN + heading,
@@ -92,7 +92,13 @@ final class TypePanel {
                                         + " posterior; bars: 68%, 95%",
                                 chartWidth - heading));
         Chart chart = PosteriorChart.of(placement, catalogue, rows);
-        sheet.chart(chart, FirstPage.MARGIN, y + 11, chartWidth, tall - 20, FRAME);
+        sheet.chart(
+                chart,
+                FirstPage.MARGIN,
+                y + 11,
+                chartWidth,
+                tall - 20,
+                document.frameFor(chart, FRAME, chartWidth / 2));
         if (beside) {
             contributions(sheet, FirstPage.MARGIN + chartWidth + GUTTER, y, tall, contributions);
         }

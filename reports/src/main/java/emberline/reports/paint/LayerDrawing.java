@@ -83,8 +83,8 @@ final class LayerDrawing extends AbstractXYAnnotation {
         switch (note.side()) {
             case LEFT -> x -= width + NOTE_GAP;
             case RIGHT -> x += NOTE_GAP;
-            case ABOVE -> {
-                x += 1;
+            case ABOVE, ABOVE_LEFT -> {
+                x += note.side() == Layer.Side.ABOVE ? 1 : -width - 1;
                 baseline -= theme.labelSizePoint() * 0.36 + 1.6;
             }
         }

@@ -138,7 +138,11 @@ class ChartTest {
             if (score.score().isEmpty()) {
                 continue;
             }
-            Chart chart = new GravityChart(Samples.CATALOGUE, emberline.place.calibrated.Calibration.standard()).of(score, placement.type());
+            Chart chart =
+                    new GravityChart(
+                                    Samples.CATALOGUE,
+                                    emberline.place.calibrated.Calibration.standard())
+                            .of(score, placement.type());
             Layer.Point point = chart.layers(Layer.Points.class).get(0).points().get(0);
             for (Layer.Area area : chart.layers(Layer.Area.class)) {
                 boolean inside =
