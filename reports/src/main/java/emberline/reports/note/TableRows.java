@@ -30,6 +30,7 @@ final class TableRows implements Closeable {
     private final CsvWriter writer;
     private final Facts[] facts;
     private long count;
+    private boolean ended;
 
     TableRows(List<ResultColumn> columns, Path file) throws IOException {
         this.columns = List.copyOf(columns);
@@ -129,7 +130,10 @@ final class TableRows implements Closeable {
 
     /** Ends the writing. */
     void end() throws IOException {
-        writer.close();
+        if (!ended) {
+            ended = true;
+            writer.close();
+        }
     }
 
     /** Does something with a row. */
@@ -149,7 +153,10 @@ final class TableRows implements Closeable {
 
     @Override
     public void close() throws IOException {
-        writer.close();
-        Files.deleteIfExists(file);
+        try {
+            end();
+        } finally {
+            Files.deleteIfExists(file);
+        }
     }
 }
