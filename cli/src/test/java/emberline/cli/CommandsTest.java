@@ -80,8 +80,7 @@ class CommandsTest {
     @Test
     void reportBindsAndAttaches() throws IOException {
         CommandRun run =
-                CommandRun.of(
-                        "report", demoSpectrum(), "--out", folder, "--bind", "--attachments");
+                CommandRun.of("report", demoSpectrum(), "--out", folder, "--bind", "--attachments");
         assertTrue(run.out().contains("bound-reports.pdf"), run.out());
         for (String file :
                 List.of(
