@@ -23,7 +23,7 @@ final class JournalTable {
     static void write(TableRows rows, String title, String file, Writer out) throws IOException {
         out.write("Title: " + PlainAscii.of(title) + "\n");
         out.write("Authors: (fill in)\n");
-        out.write("Table: Results for each object\n");
+        out.write("Table: Results for each object (? for signs without a like in ASCII)\n");
         out.write(DOUBLE_RULE);
         out.write("Byte-by-byte Description of file: " + PlainAscii.of(file) + "\n");
         out.write(RULE);
@@ -63,10 +63,6 @@ final class JournalTable {
             }
             start = end + 2;
         }
-        out.write(RULE);
-        out.write(
-                "Note: blank where there is no value; text is in ASCII, signs without a like in\n");
-        out.write("  ASCII are written as ?.\n");
         out.write(RULE);
         rows.forEach(cells -> out.write(row(rows, cells)));
     }
