@@ -88,8 +88,7 @@ final class TypePanel {
                 document.lines()
                         .fit(
                                 styles.small(),
-                                "published relations (filled: combined, dashed below) and"
-                                        + " posterior; bars: 68%, 95%",
+                                "filled: combined (dashed below); bars: 68%, 95%",
                                 chartWidth - heading));
         Chart chart = PosteriorChart.of(placement, catalogue, rows);
         sheet.chart(

@@ -78,16 +78,17 @@ final class LayerDrawing extends AbstractXYAnnotation {
         graphics.setFont(fonts.label());
         graphics.setPaint(theme.colour(note.tone()));
         double width = fonts.label().getStringBounds(note.text(), LabelDrawing.EXACT).getWidth();
-        double x = places.clampedX(note.x());
-        double baseline = places.clampedY(note.y()) + theme.labelSizePoint() * 0.36;
-        switch (note.side()) {
-            case LEFT -> x -= width + NOTE_GAP;
-            case RIGHT -> x += NOTE_GAP;
-            case ABOVE, ABOVE_LEFT -> {
-                x += note.side() == Layer.Side.ABOVE ? 1 : -width - 1;
-                baseline -= theme.labelSizePoint() * 0.36 + 1.6;
-            }
-        }
+        double shift =
+                switch (note.side()) {
+                    case LEFT -> -width - NOTE_GAP;
+                    case RIGHT -> NOTE_GAP;
+                    case ABOVE -> 1;
+                    case ABOVE_LEFT -> -width - 1;
+                };
+        boolean above = note.side() == Layer.Side.ABOVE || note.side() == Layer.Side.ABOVE_LEFT;
+        double x = places.clampedX(note.x()) + shift;
+        double baseline =
+                places.clampedY(note.y()) + (above ? -1.6 : theme.labelSizePoint() * 0.36);
         graphics.drawString(note.text(), (float) x, (float) baseline);
     }
 
