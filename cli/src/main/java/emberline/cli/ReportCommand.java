@@ -1,12 +1,16 @@
 package emberline.cli;
 
 import emberline.catalogue.FeatureCatalogue;
+import emberline.reports.attach.AtomicFile;
+import emberline.reports.attach.ResultColumns;
 import emberline.reports.attach.SafeFileNames;
+import emberline.reports.note.Attachments;
 import emberline.reports.page.Paper;
 import emberline.reports.page.PdfReport;
 import emberline.reports.page.ReportSettings;
 import emberline.survey.ObjectResult;
 import emberline.survey.SurveySettings;
+import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -25,6 +29,8 @@ import picocli.CommandLine.Spec;
         description = "Writes a PDF report for each spectrum and prints the names of the files.",
         mixinStandardHelpOptions = true)
 final class ReportCommand implements Callable<Integer> {
+
+    private static final String BOUND = "bound-reports.pdf";
 
     @Spec private CommandSpec spec;
     @Mixin private SpectrumOptions spectrumOptions;
@@ -47,6 +53,18 @@ final class ReportCommand implements Callable<Integer> {
             defaultValue = "a4",
             description = "Size of the pages (default ${DEFAULT-VALUE}).")
     private Paper paper;
+
+    @Option(
+            names = "--bind",
+            description = "Also write all reports as one PDF with contents, " + BOUND + ".")
+    private boolean bind;
+
+    @Option(
+            names = "--attachments",
+            description =
+                    "Also write what goes into a note: results.ecsv, results.vot, results.mrt,"
+                            + " table.tex, sources.bib, methods.txt.")
+    private boolean attachments;
 
     @Override
     public Integer call() throws IOException {
@@ -73,7 +91,40 @@ final class ReportCommand implements Callable<Integer> {
                 spec.commandLine().getOut().println(out.resolve(names.stem(k) + ".pdf"));
             }
         }
+        if (bind) {
+            bind(pdf, results);
+        }
+        if (attachments) {
+            attach(results, catalogue, settings);
+        }
         spec.commandLine().getOut().flush();
         return SingleSpectra.exitCode(results);
+    }
+
+    private void bind(PdfReport pdf, List<ObjectResult> results) throws IOException {
+        List<ObjectResult> shown = results.stream().filter(PdfReport::canReport).toList();
+        if (!shown.isEmpty()) {
+            ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+            pdf.bind(shown, bytes);
+            AtomicFile.write(out.resolve(BOUND), bytes.toByteArray());
+            spec.commandLine().getOut().println(out.resolve(BOUND));
+        }
+    }
+
+    private void attach(
+            List<ObjectResult> results, FeatureCatalogue catalogue, SurveySettings settings)
+            throws IOException {
+        Attachments.Run run =
+                new Attachments.Run(
+                        "the spectra given",
+                        ProgramVersion.number(),
+                        RunOptions.of(settings, spectrumOptions.measuring(), true),
+                        settings.seed());
+        try (Attachments note = Attachments.open(out, ResultColumns.standard(), catalogue, run)) {
+            for (ObjectResult result : results) {
+                note.add(result);
+            }
+            note.complete();
+        }
     }
 }

@@ -1,12 +1,15 @@
 package emberline.cli;
 
+import emberline.catalogue.FeatureCatalogue;
 import emberline.read.CandidateList;
 import emberline.reports.attach.AtomicFile;
 import emberline.reports.attach.ObjectJson;
+import emberline.reports.attach.ResultColumn;
 import emberline.reports.attach.ResultColumns;
 import emberline.reports.attach.ResultTable;
 import emberline.reports.attach.RunJson;
 import emberline.reports.attach.SafeFileNames;
+import emberline.reports.note.Attachments;
 import emberline.reports.page.PdfReport;
 import emberline.reports.survey.SurveyPage;
 import emberline.survey.ObjectResult;
@@ -22,8 +25,9 @@ import java.util.stream.Stream;
 
 /**
  * The output folder of a run over a list: {@code results.csv}, {@code objects/}, {@code reports/},
- * {@code survey.html} and {@code run.json}. Files of one object may be written by several threads
- * at once; everything else is written in the order of the list by one thread.
+ * {@code survey.html}, {@code run.json} and the attachments of a note. Files of one object may be
+ * written by several threads at once; everything else is written in the order of the list by one
+ * thread.
  */
 final class RunFolder implements Closeable {
 
@@ -32,6 +36,7 @@ final class RunFolder implements Closeable {
     private final ResultTable table;
     private final SurveyPage page;
     private final RunJson run;
+    private final Attachments attachments;
     private final Optional<ReportWriter> reports;
     private final int objects;
     private boolean complete;
@@ -43,9 +48,17 @@ final class RunFolder implements Closeable {
      * @param list the candidates
      * @param run the record of the run
      * @param pdf writes the reports; empty for none
+     * @param note the run as the attachments tell of it
+     * @param catalogue the definitions with which the objects are measured
      * @throws IOException if the folder cannot be made or written to
      */
-    RunFolder(Path folder, CandidateList list, RunJson run, Optional<PdfReport> pdf)
+    RunFolder(
+            Path folder,
+            CandidateList list,
+            RunJson run,
+            Optional<PdfReport> pdf,
+            Attachments.Run note,
+            FeatureCatalogue catalogue)
             throws IOException {
         this.folder = folder;
         this.run = run;
@@ -58,9 +71,9 @@ final class RunFolder implements Closeable {
         if (pdf.isPresent()) {
             Files.createDirectories(folder.resolve("reports"));
         }
-        this.table =
-                ResultTable.open(
-                        folder.resolve("results.csv"), ResultColumns.forList(list.columns()));
+        List<ResultColumn> columns = ResultColumns.forList(list.columns());
+        this.attachments = Attachments.open(folder, columns, catalogue, note);
+        this.table = ResultTable.open(folder.resolve("results.csv"), columns);
         this.page =
                 SurveyPage.open(
                         folder.resolve("survey.html"),
@@ -85,6 +98,7 @@ final class RunFolder implements Closeable {
     /** Adds an object to the tables; in the order of the list. */
     void add(ObjectResult result) throws IOException {
         table.write(result);
+        attachments.add(result);
         page.add(result, stem(result), reports.isPresent() && PdfReport.canReport(result));
         run.add(result);
     }
@@ -94,6 +108,7 @@ final class RunFolder implements Closeable {
         complete = true;
         table.close();
         page.close();
+        attachments.complete();
         AtomicFile.write(folder.resolve("run.json"), run.text());
     }
 
@@ -129,6 +144,7 @@ final class RunFolder implements Closeable {
 
     @Override
     public void close() throws IOException {
+        attachments.close();
         if (!complete) {
             table.abandon();
             table.close();

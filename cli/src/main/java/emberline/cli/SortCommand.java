@@ -3,6 +3,7 @@ package emberline.cli;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.read.CandidateList;
 import emberline.reports.attach.RunJson;
+import emberline.reports.note.Attachments;
 import emberline.reports.page.PdfReport;
 import emberline.reports.page.ReportSettings;
 import emberline.survey.Chain;
@@ -28,7 +29,9 @@ import picocli.CommandLine.Spec;
         name = "sort",
         description = {
             "Takes a list of candidates through the whole chain and writes a folder with"
-                    + " results.csv, objects/NAME.json, reports/NAME.pdf, survey.html and run.json.",
+                    + " results.csv, objects/NAME.json, reports/NAME.pdf, survey.html, run.json and"
+                    + " what goes into a note: results.ecsv, results.vot, results.mrt, table.tex,"
+                    + " sources.bib and methods.txt.",
             "The list needs the columns name and spectrum (path relative to the list; several"
                     + " joined by ;)."
         },
@@ -63,7 +66,13 @@ final class SortCommand implements Callable<Integer> {
                         Progress.isTerminal(),
                         candidates.rows().size());
         try (RunFolder folder =
-                new RunFolder(out, candidates, record(settings), pdf(settings, catalogue))) {
+                new RunFolder(
+                        out,
+                        candidates,
+                        record(settings),
+                        pdf(settings, catalogue),
+                        note(settings, candidates),
+                        catalogue)) {
             new SurveyRunner(chain, settings.threads())
                     .run(
                             candidates,
@@ -118,6 +127,14 @@ final class SortCommand implements Callable<Integer> {
                             status.word()));
         }
         return text.append(" written to ").append(out).toString();
+    }
+
+    private Attachments.Run note(SurveySettings settings, CandidateList candidates) {
+        return new Attachments.Run(
+                candidates.file().getFileName().toString(),
+                ProgramVersion.number(),
+                RunOptions.of(settings, listOptions.measuring(), !noReports),
+                settings.seed());
     }
 
     private RunJson record(SurveySettings settings) throws IOException {

@@ -78,6 +78,25 @@ class CommandsTest {
     }
 
     @Test
+    void reportBindsAndAttaches() throws IOException {
+        CommandRun run =
+                CommandRun.of("report", demoSpectrum(), "--out", folder, "--bind", "--attachments");
+        assertTrue(run.out().contains("bound-reports.pdf"), run.out());
+        for (String file :
+                List.of(
+                        "bound-reports.pdf",
+                        "results.ecsv",
+                        "results.vot",
+                        "results.mrt",
+                        "table.tex",
+                        "sources.bib",
+                        "methods.txt",
+                        "emberline-object.schema.json")) {
+            assertTrue(Files.size(folder.resolve(file)) > 100, file);
+        }
+    }
+
+    @Test
     void reportWritesAPdfAndPrintsItsName() throws IOException {
         CommandRun run = CommandRun.of("report", demoSpectrum(), "--out", folder);
         assertEquals(ExitCode.DONE, run.code(), run.err());

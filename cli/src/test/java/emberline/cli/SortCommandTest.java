@@ -75,6 +75,12 @@ class SortCommandTest {
             assertEquals(listed - 1, reports.count());
         }
         assertTrue(Files.size(out.resolve("run.json")) > 100);
+        for (String file :
+                List.of("results.ecsv", "results.vot", "results.mrt", "table.tex", "sources.bib")) {
+            assertTrue(Files.size(out.resolve(file)) > 1000, file);
+        }
+        assertTrue(
+                Files.readString(out.resolve("methods.txt")).contains("Emberline"), "methods.txt");
         assertTrue(Files.size(out.resolve("survey.html")) > 1000);
     }
 

@@ -2,6 +2,7 @@ package emberline.judge;
 
 import emberline.catalogue.Source;
 import emberline.judge.PropertyRelations.Quantity;
+import emberline.place.TypeEstimate;
 import emberline.spectrum.Finding;
 import java.util.ArrayList;
 import java.util.EnumMap;
@@ -76,6 +77,18 @@ public final class Judge {
      */
     public static List<Source> sources() {
         return JudgeSources.all();
+    }
+
+    /**
+     * The papers behind the numbers that one judgement rests on: grids, limits, the relations of
+     * the types that it may have, and the tables of the evidence that counted.
+     *
+     * @param judgement the judgement
+     * @param type the type of the object; empty where it is not known
+     * @return papers in the order of their keys
+     */
+    public static List<Source> sources(Judgement judgement, Optional<TypeEstimate> type) {
+        return JudgeSources.of(judgement, type);
     }
 
     /**

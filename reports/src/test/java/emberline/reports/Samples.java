@@ -1,6 +1,9 @@
 package emberline.reports;
 
 import emberline.catalogue.FeatureCatalogue;
+import emberline.judge.GatheredEvidence;
+import emberline.judge.Judge;
+import emberline.judge.Judging;
 import emberline.measure.Measurements;
 import emberline.measure.Measurer;
 import emberline.measure.Measuring;
@@ -8,6 +11,8 @@ import emberline.measure.Site;
 import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
+import emberline.place.calibrated.TypePrior;
+import emberline.place.calibrated.TypePriors;
 import emberline.prepare.NoiseModel;
 import emberline.prepare.PreparedSpectrum;
 import emberline.spectrum.Candidate;
@@ -36,6 +41,8 @@ public final class Samples {
 
     private static final Measurer MEASURER = new Measurer(CATALOGUE, Measuring.withDefaults());
     private static final LineReporter LINES = new LineReporter(CATALOGUE, Site.DRY);
+    private static final Judge JUDGE = new Judge(Judging.withDefaults());
+    private static final TypePrior PRIOR = TypePriors.FLAT.load();
     private static final Placer PLACER = new Placer(CATALOGUE);
 
     private Samples() {}
@@ -136,6 +143,17 @@ public final class Samples {
                 Optional.of(best),
                 Optional.of(placement),
                 findings);
+    }
+
+    /** The object with its judgement, where there is anything to judge. */
+    public static ObjectResult judged(ObjectResult placed) {
+        return GatheredEvidence.of(
+                        placed.candidate(),
+                        placed.placement().orElseThrow(),
+                        placed.spectra().stream().map(SpectrumResult::lines).toList(),
+                        PRIOR)
+                .map(gathered -> placed.withJudgement(JUDGE.judge(gathered.evidence())))
+                .orElse(placed);
     }
 
     /** An object of which nothing could be read. */

@@ -35,10 +35,11 @@ final class JudgementColumns {
     private static void addDecision(List<ResultColumn> columns) {
         columns.add(
                 text(
-                        "decision",
-                        "substellar, stellar or undecided: the same verdict at 0.070, 0.072 and"
-                                + " 0.075 solar masses",
-                        j -> j.decision().word()));
+                                "decision",
+                                "substellar, stellar or undecided: the same verdict at 0.070, 0.072 and"
+                                        + " 0.075 solar masses",
+                                j -> j.decision().word())
+                        .withUcd("src.class"));
         columns.add(
                 share(
                         "p_substellar",
@@ -64,15 +65,30 @@ final class JudgementColumns {
     }
 
     private static void addMassAndAge(List<ResultColumn> columns) {
-        interval(columns, "age_myr", "Myr", "age", j -> Optional.of(j.age().ageMyr()), 3);
+        interval(
+                columns,
+                "age_myr",
+                "Myr",
+                "time.age",
+                "age",
+                j -> Optional.of(j.age().ageMyr()),
+                3);
         interval(
                 columns,
                 "mass_mjup",
                 "Mjup",
+                "phys.mass",
                 "mass",
                 j -> Optional.of(j.massMsun().times(JUPITERS_PER_SUN)),
                 3);
-        interval(columns, "mass_msun", "Msun", "mass", j -> Optional.of(j.massMsun()), 3);
+        interval(
+                columns,
+                "mass_msun",
+                "Msun",
+                "phys.mass",
+                "mass",
+                j -> Optional.of(j.massMsun()),
+                3);
     }
 
     private static void addProperties(List<ResultColumn> columns) {
@@ -80,6 +96,7 @@ final class JudgementColumns {
                 columns,
                 "teff_k",
                 "K",
+                "phys.temperature.effective",
                 "effective temperature by type",
                 j -> j.properties().teffK(),
                 0);
@@ -87,6 +104,7 @@ final class JudgementColumns {
                 columns,
                 "log_l_lsun",
                 "",
+                "phys.luminosity",
                 "log10 of the luminosity (solar): from the parallax where there is one, else by"
                         + " type",
                 j -> j.properties().logL(),
@@ -95,6 +113,7 @@ final class JudgementColumns {
                 columns,
                 "m_bol",
                 "mag",
+                "phys.magAbs.bol",
                 "absolute bolometric magnitude",
                 j -> j.properties().mBol(),
                 2);
@@ -102,6 +121,7 @@ final class JudgementColumns {
                 columns,
                 "logg_cgs",
                 "",
+                "phys.gravity",
                 "log10 of the surface gravity (cm/s2) from the grids",
                 j -> Optional.of(j.properties().logG()),
                 2);
@@ -109,6 +129,7 @@ final class JudgementColumns {
                 columns,
                 "radius_rsun",
                 "Rsun",
+                "phys.size.radius",
                 "radius from the grids",
                 j -> Optional.of(j.properties().radiusRsun()),
                 4);
@@ -119,14 +140,16 @@ final class JudgementColumns {
                 columns,
                 "distance_pc",
                 "pc",
+                "pos.distance",
                 "distance",
                 j -> j.properties().distance().map(d -> d.pc()),
                 3);
         columns.add(
                 text(
-                        "distance_method",
-                        "parallax, or photometry with the band",
-                        j -> j.properties().distance().map(d -> d.method()).orElse("")));
+                                "distance_method",
+                                "parallax, or photometry with the band",
+                                j -> j.properties().distance().map(d -> d.method()).orElse(""))
+                        .withUcd("meta.note"));
         for (MagnitudeBand band :
                 List.of(MagnitudeBand.J_2MASS, MagnitudeBand.H_2MASS, MagnitudeBand.K_2MASS)) {
             String letter = band.name().substring(0, 1).toLowerCase(Locale.ROOT);
@@ -134,6 +157,7 @@ final class JudgementColumns {
                     columns,
                     "abs_mag_" + letter,
                     "mag",
+                    "phys.magAbs;em.IR." + letter.toUpperCase(Locale.ROOT),
                     "absolute magnitude in "
                             + band.label()
                             + ": measured where a parallax allows,"
@@ -143,10 +167,14 @@ final class JudgementColumns {
         }
         columns.add(
                 number(
-                        "vtan_kms",
-                        "km/s",
-                        "tangential velocity",
-                        j -> j.properties().kinematics().map(k -> Digits.fixed(k.vtanKms(), 1))));
+                                "vtan_kms",
+                                "km/s",
+                                "tangential velocity",
+                                j ->
+                                        j.properties()
+                                                .kinematics()
+                                                .map(k -> Digits.fixed(k.vtanKms(), 1)))
+                        .withUcd("phys.veloc.transverse"));
         space(columns, "u_kms", "to the galactic centre", s -> s.uKms());
         space(columns, "v_kms", "along the rotation of the Galaxy", s -> s.vKms());
         space(columns, "w_kms", "to the north galactic pole", s -> s.wKms());
@@ -155,16 +183,20 @@ final class JudgementColumns {
     private static void addSteps(List<ResultColumn> columns) {
         columns.add(
                 text(
-                        "next_step",
-                        "the further observation that tells most, if one can change the decision",
-                        Judgement::nextStepWords));
+                                "next_step",
+                                "the further observation that tells most, if one can change the decision",
+                                Judgement::nextStepWords)
+                        .withUcd("meta.note"));
         columns.add(
                 number(
-                        "score",
-                        "",
-                        "place in the order of the survey by the aim: the greater, the earlier",
-                        j -> Optional.of(Digits.fixed(j.priority().score(), 4))));
-        columns.add(text("priority", "what the score rests on", j -> j.priority().reason()));
+                                "score",
+                                "",
+                                "place in the order of the survey by the aim: the greater, the earlier",
+                                j -> Optional.of(Digits.fixed(j.priority().score(), 4)))
+                        .withUcd("stat.value"));
+        columns.add(
+                text("priority", "what the score rests on", j -> j.priority().reason())
+                        .withUcd("meta.note"));
     }
 
     private static void space(
@@ -174,14 +206,15 @@ final class JudgementColumns {
             ToDoubleFunction<Kinematics.Space> part) {
         columns.add(
                 number(
-                        name,
-                        "km/s",
-                        "velocity relative to the Sun, " + direction,
-                        j ->
-                                j.properties()
-                                        .kinematics()
-                                        .flatMap(k -> k.space())
-                                        .map(s -> Digits.fixed(part.applyAsDouble(s), 1))));
+                                name,
+                                "km/s",
+                                "velocity relative to the Sun, " + direction,
+                                j ->
+                                        j.properties()
+                                                .kinematics()
+                                                .flatMap(k -> k.space())
+                                                .map(s -> Digits.fixed(part.applyAsDouble(s), 1)))
+                        .withUcd("phys.veloc;pos.galactic"));
     }
 
     /** A value with one sigma. */
@@ -189,22 +222,25 @@ final class JudgementColumns {
             List<ResultColumn> columns,
             String name,
             String unit,
+            String ucd,
             String description,
             Function<Judgement, Optional<Estimate>> take,
             int decimals) {
         columns.add(
                 number(
-                        name,
-                        unit,
-                        description,
-                        j -> take.apply(j).map(e -> Digits.fixed(e.median(), decimals))));
+                                name,
+                                unit,
+                                description,
+                                j -> take.apply(j).map(e -> Digits.fixed(e.median(), decimals)))
+                        .withUcd(ucd));
         String stem = name.replaceFirst("_cgs$", "");
         columns.add(
                 number(
-                        stem + "_sigma",
-                        unit,
-                        "half of the 68% interval of " + name,
-                        j -> take.apply(j).map(e -> Digits.fixed(e.sigma(), decimals))));
+                                stem + "_sigma",
+                                unit,
+                                "half of the 68% interval of " + name,
+                                j -> take.apply(j).map(e -> Digits.fixed(e.sigma(), decimals)))
+                        .withUcd("stat.error;" + ucd));
     }
 
     /** A median with its 68% interval. */
@@ -212,33 +248,41 @@ final class JudgementColumns {
             List<ResultColumn> columns,
             String name,
             String unit,
+            String ucd,
             String what,
             Function<Judgement, Optional<Estimate>> take,
             int digits) {
         columns.add(
                 number(
-                        name,
-                        unit,
-                        what + ", median",
-                        j -> take.apply(j).map(e -> Digits.significant(e.median(), digits))));
+                                name,
+                                unit,
+                                what + ", median",
+                                j -> take.apply(j).map(e -> Digits.significant(e.median(), digits)))
+                        .withUcd(ucd + ";stat.median"));
         columns.add(
                 number(
-                        name + "_lo68",
-                        unit,
-                        "lower end of the 68% interval of the " + what,
-                        j -> take.apply(j).map(e -> Digits.significant(e.lo68(), digits))));
+                                name + "_lo68",
+                                unit,
+                                "lower end of the 68% interval of the " + what,
+                                j -> take.apply(j).map(e -> Digits.significant(e.lo68(), digits)))
+                        .withUcd(ucd + ";stat.min"));
         columns.add(
                 number(
-                        name + "_hi68",
-                        unit,
-                        "upper end of the 68% interval of the " + what,
-                        j -> take.apply(j).map(e -> Digits.significant(e.hi68(), digits))));
+                                name + "_hi68",
+                                unit,
+                                "upper end of the 68% interval of the " + what,
+                                j -> take.apply(j).map(e -> Digits.significant(e.hi68(), digits)))
+                        .withUcd(ucd + ";stat.max"));
     }
 
     private static ResultColumn share(
             String name, String description, ToDoubleFunction<Judgement> take) {
         return number(
-                name, "", description, j -> Optional.of(Digits.probability(take.applyAsDouble(j))));
+                        name,
+                        "",
+                        description,
+                        j -> Optional.of(Digits.probability(take.applyAsDouble(j))))
+                .withUcd("stat.probability");
     }
 
     private static ResultColumn number(

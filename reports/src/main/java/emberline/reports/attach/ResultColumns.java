@@ -57,13 +57,7 @@ public final class ResultColumns {
             while (!taken.add(name)) {
                 name = "list_" + name;
             }
-            columns.add(
-                    new ResultColumn(
-                            name,
-                            "",
-                            "column " + listed + " of the candidate list, as listed",
-                            Content.TEXT,
-                            result -> result.candidate().cells().getOrDefault(listed, "")));
+            columns.add(ListedColumn.of(listed, name));
         }
         return List.copyOf(columns);
     }
@@ -96,26 +90,36 @@ public final class ResultColumns {
 
     private static List<ResultColumn> standardColumns() {
         List<ResultColumn> columns = new ArrayList<>();
-        columns.add(text("name", "name of the object as listed", r -> r.candidate().name()));
+        columns.add(
+                text("name", "name of the object as listed", r -> r.candidate().name())
+                        .withUcd("meta.id;meta.main"));
         columns.add(
                 text(
-                        "status",
-                        "how far the object came: measured, partial, photometric or failed",
-                        r -> r.status().word()));
-        columns.add(text("reason", "why it came no further", ObjectResult::reason));
+                                "status",
+                                "how far the object came: measured, partial, photometric or failed",
+                                r -> r.status().word())
+                        .withUcd("meta.code.status"));
+        columns.add(
+                text("reason", "why it came no further", ObjectResult::reason)
+                        .withUcd("meta.note"));
         addKind(columns);
         addType(columns);
         columns.add(
                 text(
-                        "published_type",
-                        "type by the published relations alone, combined",
-                        r -> published(r).map(TypeText::code).orElse("")));
+                                "published_type",
+                                "type by the published relations alone, combined",
+                                r -> published(r).map(TypeText::code).orElse(""))
+                        .withUcd("src.spType"));
         columns.add(
                 number(
-                        "published_type_sigma",
-                        "subclass",
-                        "one-sigma error of the type by the published relations",
-                        r -> published(r).map(t -> Digits.type(t.sigmaSubclass())).orElse("")));
+                                "published_type_sigma",
+                                "subclass",
+                                "one-sigma error of the type by the published relations",
+                                r ->
+                                        published(r)
+                                                .map(t -> Digits.type(t.sigmaSubclass()))
+                                                .orElse(""))
+                        .withUcd("stat.error;src.spType"));
         addGravity(columns);
         addKindShares(columns);
         addReddening(columns);
@@ -124,13 +128,14 @@ public final class ResultColumns {
         addSpectrum(columns);
         columns.add(
                 text(
-                        "findings",
-                        "codes of the findings, each once, separated by blanks",
-                        r ->
-                                r.findings().stream()
-                                        .map(Finding::code)
-                                        .distinct()
-                                        .collect(Collectors.joining(" "))));
+                                "findings",
+                                "codes of the findings, each once, separated by blanks",
+                                r ->
+                                        r.findings().stream()
+                                                .map(Finding::code)
+                                                .distinct()
+                                                .collect(Collectors.joining(" ")))
+                        .withUcd("meta.code"));
         columns.addAll(JudgementColumns.all());
         return List.copyOf(columns);
     }
@@ -138,13 +143,14 @@ public final class ResultColumns {
     private static void addKind(List<ResultColumn> columns) {
         columns.add(
                 text(
-                        "kind",
-                        "most probable kind of object; empty where it is not judged",
-                        r ->
-                                r.placement()
-                                        .flatMap(p -> p.kind().kind())
-                                        .map(ObjectKind::label)
-                                        .orElse("")));
+                                "kind",
+                                "most probable kind of object; empty where it is not judged",
+                                r ->
+                                        r.placement()
+                                                .flatMap(p -> p.kind().kind())
+                                                .map(ObjectKind::label)
+                                                .orElse(""))
+                        .withUcd("src.class"));
     }
 
     private static void addKindShares(List<ResultColumn> columns) {
@@ -163,14 +169,15 @@ public final class ResultColumns {
     private static void addPair(List<ResultColumn> columns) {
         columns.add(
                 text(
-                        "pair",
-                        "case for an unresolved pair: candidate, weak or none; empty where it is"
-                                + " not judged",
-                        r ->
-                                r.placement()
-                                        .flatMap(p -> p.pair().strength())
-                                        .map(PairVerdict.Strength::word)
-                                        .orElse("")));
+                                "pair",
+                                "case for an unresolved pair: candidate, weak or none; empty where it is"
+                                        + " not judged",
+                                r ->
+                                        r.placement()
+                                                .flatMap(p -> p.pair().strength())
+                                                .map(PairVerdict.Strength::word)
+                                                .orElse(""))
+                        .withUcd("meta.code.multip"));
         columns.add(
                 placementShare(
                         "p_pair",
@@ -181,87 +188,133 @@ public final class ResultColumns {
     private static void addType(List<ResultColumn> columns) {
         columns.add(
                 text(
-                        "type",
-                        "adopted spectral type; one colon where its error exceeds one subclass,"
-                                + " two where it exceeds two",
-                        r -> adopted(r).map(TypeText::code).orElse("")));
+                                "type",
+                                "adopted spectral type; one colon where its error exceeds one subclass,"
+                                        + " two where it exceeds two",
+                                r -> adopted(r).map(TypeText::code).orElse(""))
+                        .withUcd("src.spType"));
         columns.add(
                 typeNumber(
                         "type_number",
+                        "src.spType",
                         "adopted type on the scale M0 = 0, L0 = 10, T0 = 20, Y0 = 30",
                         TypeEstimate::typeNumber));
         columns.add(
                 typeNumber(
                         "type_sigma",
+                        "stat.error;src.spType",
                         "one-sigma error of the adopted type",
                         TypeEstimate::sigmaSubclass));
-        columns.add(typeNumber("type_lo68", "lower end of the 68% interval", TypeEstimate::lo68));
-        columns.add(typeNumber("type_hi68", "upper end of the 68% interval", TypeEstimate::hi68));
-        columns.add(typeNumber("type_lo95", "lower end of the 95% interval", TypeEstimate::lo95));
-        columns.add(typeNumber("type_hi95", "upper end of the 95% interval", TypeEstimate::hi95));
+        columns.add(
+                typeNumber(
+                        "type_lo68",
+                        "src.spType;stat.min",
+                        "lower end of the 68% interval",
+                        TypeEstimate::lo68));
+        columns.add(
+                typeNumber(
+                        "type_hi68",
+                        "src.spType;stat.max",
+                        "upper end of the 68% interval",
+                        TypeEstimate::hi68));
+        columns.add(
+                typeNumber(
+                        "type_lo95",
+                        "src.spType;stat.min",
+                        "lower end of the 95% interval",
+                        TypeEstimate::lo95));
+        columns.add(
+                typeNumber(
+                        "type_hi95",
+                        "src.spType;stat.max",
+                        "upper end of the 95% interval",
+                        TypeEstimate::hi95));
     }
 
     private static void addReddening(List<ResultColumn> columns) {
-        columns.add(reddening("a_v", "extinction in V fitted with the type", ReddeningFit::avMag));
-        columns.add(reddening("a_v_lo68", "lower end of its 68% interval", ReddeningFit::lo68Mag));
-        columns.add(reddening("a_v_hi68", "upper end of its 68% interval", ReddeningFit::hi68Mag));
+        columns.add(
+                reddening(
+                        "a_v",
+                        "phys.absorption;em.opt.V",
+                        "extinction in V fitted with the type",
+                        ReddeningFit::avMag));
+        columns.add(
+                reddening(
+                        "a_v_lo68",
+                        "phys.absorption;stat.min",
+                        "lower end of the 68% interval of a_v",
+                        ReddeningFit::lo68Mag));
+        columns.add(
+                reddening(
+                        "a_v_hi68",
+                        "phys.absorption;stat.max",
+                        "upper end of the 68% interval of a_v",
+                        ReddeningFit::hi68Mag));
     }
 
     private static ResultColumn reddening(
-            String name, String description, ToDoubleFunction<ReddeningFit> part) {
+            String name, String ucd, String description, ToDoubleFunction<ReddeningFit> part) {
         return number(
-                name,
-                "mag",
-                description,
-                r ->
-                        r.placement()
-                                .flatMap(Placement::reddening)
-                                .map(fit -> Digits.type(part.applyAsDouble(fit)))
-                                .orElse(""));
+                        name,
+                        "mag",
+                        description,
+                        r ->
+                                r.placement()
+                                        .flatMap(Placement::reddening)
+                                        .map(fit -> Digits.type(part.applyAsDouble(fit)))
+                                        .orElse(""))
+                .withUcd(ucd);
     }
 
     private static void addSpectrum(List<ResultColumn> columns) {
         columns.add(
                 number(
-                        "snr",
-                        "",
-                        "median signal-to-noise per pixel in the band that is covered best",
-                        r ->
-                                leading(r)
-                                        .flatMap(s -> BandSignal.best(s.prepared().spectrum()))
-                                        .map(s -> Digits.signal(s.medianSignalToNoise()))
-                                        .orElse("")));
+                                "snr",
+                                "",
+                                "median signal-to-noise per pixel in the band that is covered best",
+                                r ->
+                                        leading(r)
+                                                .flatMap(
+                                                        s ->
+                                                                BandSignal.best(
+                                                                        s.prepared().spectrum()))
+                                                .map(s -> Digits.signal(s.medianSignalToNoise()))
+                                                .orElse(""))
+                        .withUcd("stat.snr"));
         columns.add(
                 text(
-                        "quality",
-                        "grade of the best spectrum: good, usable, poor or unusable",
-                        r ->
-                                leading(r)
-                                        .map(s -> Quality.of(s.prepared()).grade().word())
-                                        .orElse("")));
+                                "quality",
+                                "grade of the best spectrum: good, usable, poor or unusable",
+                                r ->
+                                        leading(r)
+                                                .map(s -> Quality.of(s.prepared()).grade().word())
+                                                .orElse(""))
+                        .withUcd("meta.code.qual"));
         columns.add(
                 number(
-                        "resolution",
-                        "",
-                        "resolving power of the spectrum with the highest signal-to-noise",
-                        r ->
-                                leading(r)
-                                        .map(s -> s.prepared().resolvingPower().value())
-                                        .map(Digits::significant)
-                                        .orElse("")));
+                                "resolution",
+                                "",
+                                "resolving power of the spectrum with the highest signal-to-noise",
+                                r ->
+                                        leading(r)
+                                                .map(s -> s.prepared().resolvingPower().value())
+                                                .map(Digits::significant)
+                                                .orElse(""))
+                        .withUcd("spect.resolution"));
     }
 
     private static void addGravity(List<ResultColumn> columns) {
         columns.add(
                 text(
-                        "gravity",
-                        "most probable gravity class: FLD-G, INT-G or VL-G; empty where it is not"
-                                + " judged",
-                        r ->
-                                r.placement()
-                                        .flatMap(p -> p.gravity().gravityClass())
-                                        .map(g -> g.label())
-                                        .orElse("")));
+                                "gravity",
+                                "most probable gravity class: FLD-G, INT-G or VL-G; empty where it is not"
+                                        + " judged",
+                                r ->
+                                        r.placement()
+                                                .flatMap(p -> p.gravity().gravityClass())
+                                                .map(g -> g.label())
+                                                .orElse(""))
+                        .withUcd("src.class;phys.gravity"));
         columns.add(
                 placementShare("p_fldg", "probability of FLD-G", p -> p.gravity().pFieldGravity()));
         columns.add(
@@ -271,26 +324,28 @@ public final class ResultColumns {
                 placementShare("p_vlg", "probability of VL-G", p -> p.gravity().pVeryLowGravity()));
         columns.add(
                 text(
-                        "published_gravity",
-                        "gravity class by the published scores, the type taken as known",
-                        r ->
-                                r.placement()
-                                        .flatMap(p -> p.gravity().byScores())
-                                        .map(g -> g.label())
-                                        .orElse("")));
+                                "published_gravity",
+                                "gravity class by the published scores, the type taken as known",
+                                r ->
+                                        r.placement()
+                                                .flatMap(p -> p.gravity().byScores())
+                                                .map(g -> g.label())
+                                                .orElse(""))
+                        .withUcd("src.class;phys.gravity"));
     }
 
     private static void addMetallicity(List<ResultColumn> columns) {
         columns.add(
                 text(
-                        "metallicity",
-                        "metallicity class by zeta, if the object is a dwarf: d, sd, esd or usd;"
-                                + " empty where it is not judged",
-                        r ->
-                                r.placement()
-                                        .flatMap(p -> p.metallicity().adopted())
-                                        .map(name -> name.prefix())
-                                        .orElse("")));
+                                "metallicity",
+                                "metallicity class by zeta, if the object is a dwarf: d, sd, esd or usd;"
+                                        + " empty where it is not judged",
+                                r ->
+                                        r.placement()
+                                                .flatMap(p -> p.metallicity().adopted())
+                                                .map(name -> name.prefix())
+                                                .orElse(""))
+                        .withUcd("src.class;phys.abund.Z"));
         columns.add(
                 placementShare(
                         "p_subdwarf",
@@ -317,23 +372,26 @@ public final class ResultColumns {
     }
 
     private static ResultColumn typeNumber(
-            String name, String description, ToDoubleFunction<TypeEstimate> part) {
+            String name, String ucd, String description, ToDoubleFunction<TypeEstimate> part) {
         return number(
-                name,
-                "subclass",
-                description,
-                r -> adopted(r).map(t -> Digits.type(part.applyAsDouble(t))).orElse(""));
+                        name,
+                        "subclass",
+                        description,
+                        r -> adopted(r).map(t -> Digits.type(part.applyAsDouble(t))).orElse(""))
+                .withUcd(ucd);
     }
 
     private static ResultColumn placementShare(
             String name, String description, Function<Placement, OptionalDouble> share) {
         return number(
-                name,
-                "",
-                description,
-                r -> {
-                    OptionalDouble value = r.placement().map(share).orElse(OptionalDouble.empty());
-                    return value.isPresent() ? Digits.probability(value.getAsDouble()) : "";
-                });
+                        name,
+                        "",
+                        description,
+                        r -> {
+                            OptionalDouble value =
+                                    r.placement().map(share).orElse(OptionalDouble.empty());
+                            return value.isPresent() ? Digits.probability(value.getAsDouble()) : "";
+                        })
+                .withUcd("stat.probability");
     }
 }

@@ -6,6 +6,7 @@ import emberline.catalogue.GravityThreshold;
 import emberline.measure.Measurement.Measured;
 import emberline.place.GravityScore;
 import emberline.place.TypeEstimate;
+import emberline.place.calibrated.Calibration;
 import emberline.reports.chart.Layer.Vertex;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -14,22 +15,28 @@ import java.util.Optional;
 
 /**
  * One gravity-sensitive index against type: the published limits of intermediate and very low
- * gravity as areas over the types for which they are printed, and the object with its errors.
+ * gravity as areas over the types for which they are printed, the calibrated loci of field gravity
+ * (full line) and very low gravity (dashed), and the object with its errors.
  */
 public final class GravityChart {
 
     private static final double FIRST_TYPE = 5.5;
     private static final double LAST_TYPE = 17.5;
 
+    private static final double LOCUS_STEP = 0.25;
+
     private final FeatureCatalogue catalogue;
+    private final Calibration calibration;
 
     /**
      * A builder of gravity charts.
      *
      * @param catalogue the published limits
+     * @param calibration the loci
      */
-    public GravityChart(FeatureCatalogue catalogue) {
+    public GravityChart(FeatureCatalogue catalogue, Calibration calibration) {
         this.catalogue = catalogue;
+        this.calibration = calibration;
     }
 
     /**
@@ -59,10 +66,28 @@ public final class GravityChart {
         layers.add(area(intermediate, field, below, Tone.FIELD, "FLD"));
         layers.add(area(veryLow, intermediate, below, Tone.INTERMEDIATE, "INT"));
         layers.add(area(end, veryLow, below, Tone.VERY_LOW, "VL"));
+        locus(feature.id(), 0, Tone.LOCUS_FIELD).ifPresent(layers::add);
+        locus(feature.id(), 1, Tone.LOCUS_VERY_LOW).ifPresent(layers::add);
         layers.add(new Layer.Points(object, Tone.RESULT, true));
         Axis x = new Axis("", "", FIRST_TYPE, LAST_TYPE, Ticks.types(FIRST_TYPE, LAST_TYPE, 6));
         Axis y = new Axis("", "", range[0], range[1], Ticks.round(range[0], range[1], 4));
         return new Chart(feature.symbol(), x, y, layers);
+    }
+
+    private Optional<Layer> locus(String feature, double lowGravity, Tone tone) {
+        int points = (int) ((LAST_TYPE - FIRST_TYPE) / LOCUS_STEP) + 1;
+        double[] types = new double[points];
+        double[] values = new double[points];
+        for (int i = 0; i < points; i++) {
+            types[i] = FIRST_TYPE + i * LOCUS_STEP;
+            Optional<Calibration.Expected> expected =
+                    calibration.expected(feature, types[i], lowGravity);
+            if (expected.isEmpty()) {
+                return Optional.empty();
+            }
+            values[i] = expected.get().mean();
+        }
+        return Optional.of(Curve.line(types, values, tone));
     }
 
     private static List<Layer.Point> object(GravityScore score, Optional<TypeEstimate> type) {

@@ -10,7 +10,9 @@ public sealed interface Layer
                 Layer.Area,
                 Layer.Interval,
                 Layer.Labels,
-                Layer.Note {
+                Layer.Note,
+                Layer.Segment,
+                Layer.Blocks {
 
     /**
      * Points with errors.
@@ -102,12 +104,62 @@ public sealed interface Layer
     }
 
     /**
-     * A word beside a value.
+     * A word beside a value, its middle at the height of the value.
      *
      * @param x horizontal value
      * @param y vertical value
      * @param text the word
      * @param tone what it means
+     * @param side on which side of the value it stands
      */
-    record Note(double x, double y, String text, Tone tone) implements Layer {}
+    record Note(double x, double y, String text, Tone tone, Side side) implements Layer {}
+
+    /** Where a word stands beside a value. */
+    enum Side {
+        /** It ends left of the value. */
+        LEFT,
+        /** It begins right of the value. */
+        RIGHT,
+        /** It begins at the value and stands above it. */
+        ABOVE,
+        /** It ends at the value and stands above it. */
+        ABOVE_LEFT
+    }
+
+    /**
+     * A straight line.
+     *
+     * @param fromX horizontal value of its start
+     * @param fromY vertical value of its start
+     * @param toX horizontal value of its end
+     * @param toY vertical value of its end
+     * @param tone what it means
+     * @param dashed whether it is dashed
+     */
+    record Segment(double fromX, double fromY, double toX, double toY, Tone tone, boolean dashed)
+            implements Layer {}
+
+    /**
+     * Rectangles that are filled together, without seams where they touch.
+     *
+     * @param blocks the rectangles
+     * @param tone what they mean
+     * @param outlined whether each has an outline
+     */
+    record Blocks(List<Block> blocks, Tone tone, boolean outlined) implements Layer {
+        /** Copies the list. */
+        public Blocks {
+            blocks = List.copyOf(blocks);
+        }
+    }
+
+    /**
+     * A rectangle.
+     *
+     * @param left its left side (unit of the horizontal axis)
+     * @param right its right side
+     * @param bottom its lower side (unit of the vertical axis)
+     * @param top its upper side
+     */
+    record Block(double left, double right, double bottom, double top) {}
 }

@@ -2,6 +2,7 @@ package emberline.reports.chart;
 
 import emberline.catalogue.Feature;
 import emberline.catalogue.FeatureCatalogue;
+import emberline.catalogue.Source;
 import emberline.place.Placement;
 import emberline.place.PublishedType;
 import emberline.place.RelationEstimate;
@@ -16,8 +17,8 @@ import java.util.List;
 /**
  * The type of an object: each published relation as a point with its error in a row of its own,
  * those that were combined above those that are shown for comparison, under them the type that the
- * relations give together, and at the bottom the posterior with the 68% and 95% intervals of the
- * adopted type.
+ * relations give together, and at the bottom the posterior with that type marked in it by a dashed
+ * line and the 68% and 95% intervals of the adopted type.
  */
 public final class PosteriorChart {
 
@@ -77,12 +78,23 @@ public final class PosteriorChart {
         layers.add(new Layer.Points(aside, Tone.SHOWN, false));
         layers.add(new Layer.Points(used, Tone.USED, true));
         if (type.type().isPresent()) {
-            layers.add(new Layer.Points(List.of(point(type.type().get(), 0)), Tone.RESULT, true));
-            rows.add(new Tick(0, "combined"));
+            layers.add(new Layer.Points(List.of(point(type.type().get(), 0)), Tone.USED, false));
+            rows.add(new Tick(0, "published, combined"));
         }
         double foot = -0.8;
         if (placement.calibrated().posterior().isPresent()) {
             layers.addAll(posterior(placement.calibrated().posterior().get(), range));
+            type.type()
+                    .ifPresent(
+                            published ->
+                                    layers.add(
+                                            new Layer.Segment(
+                                                    published.typeNumber(),
+                                                    -0.45,
+                                                    published.typeNumber(),
+                                                    FOOT + 0.7,
+                                                    Tone.USED,
+                                                    true)));
             rows.add(new Tick(FOOT + POSTERIOR_ROWS / 2, "posterior"));
             foot = FOOT;
         }
@@ -165,6 +177,10 @@ public final class PosteriorChart {
     private static String rowLabel(RelationEstimate estimate, FeatureCatalogue catalogue) {
         String id = estimate.relation().feature();
         String symbol = catalogue.feature(id).map(Feature::symbol).orElse(id);
-        return symbol + "\u2002" + estimate.relation().source().shortCite();
+        Source source = estimate.relation().source();
+        int comma = source.authors().indexOf(',');
+        String authors =
+                comma < 0 ? source.authors() : source.authors().substring(0, comma) + " et al.";
+        return symbol + "\u2002" + authors + " " + source.year();
     }
 }

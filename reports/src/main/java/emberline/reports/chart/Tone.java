@@ -38,6 +38,20 @@ public enum Tone {
     INTERMEDIATE,
     /** Very low gravity. */
     VERY_LOW,
+    /** Where field gravity lies by calibration; a full line. */
+    LOCUS_FIELD,
+    /** Where very low gravity lies by calibration; a dashed line. */
+    LOCUS_VERY_LOW,
+    /** Evidence for a claim, or a pull to later types. */
+    TOWARDS,
+    /** Evidence against a claim, or a pull to earlier types. */
+    AGAINST,
+    /** What was set aside. */
+    SET_ASIDE,
+    /** A physical limit. */
+    LIMIT,
+    /** Words in a chart. */
+    WORDS,
     /** A line that guides the eye. */
     GUIDE
 }

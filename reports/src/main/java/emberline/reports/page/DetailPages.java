@@ -6,8 +6,6 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.HowKnown;
 import emberline.catalogue.Purpose;
 import emberline.catalogue.Source;
-import emberline.judge.Judgement;
-import emberline.judge.LedgerEntry;
 import emberline.measure.FeatureMeasurement;
 import emberline.measure.Measurement;
 import emberline.measure.Measurement.Measured;
@@ -17,22 +15,27 @@ import emberline.place.Placement;
 import emberline.place.RelationEstimate;
 import emberline.place.RelationEstimate.Use;
 import emberline.place.TypeEstimate;
+import emberline.place.calibrated.Calibration;
 import emberline.reports.attach.Digits;
-import emberline.reports.attach.JudgementText;
 import emberline.reports.attach.TypeText;
+import emberline.reports.chart.Chart;
+import emberline.reports.chart.LineInset;
 import emberline.reports.page.Flow.Cell;
-import emberline.spectrum.Finding;
 import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
 import java.io.IOException;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.EnumMap;
+import java.util.EnumSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
+import java.util.stream.Collectors;
 
 /** The pages after the first: every measurement, every relation, findings, provenance, sources. */
 final class DetailPages {
@@ -42,12 +45,18 @@ final class DetailPages {
 
     private final ReportDocument document;
     private final FeatureCatalogue catalogue;
+    private final Calibration calibration;
     private final ReportSettings settings;
     private final Styles styles;
 
-    DetailPages(ReportDocument document, FeatureCatalogue catalogue, ReportSettings settings) {
+    DetailPages(
+            ReportDocument document,
+            FeatureCatalogue catalogue,
+            Calibration calibration,
+            ReportSettings settings) {
         this.document = document;
         this.catalogue = catalogue;
+        this.calibration = calibration;
         this.settings = settings;
         this.styles = document.styles();
     }
@@ -71,8 +80,13 @@ final class DetailPages {
                 0.7f);
     }
 
-    /** Writes the pages; returns where their sections begin. */
-    List<Flow.Bookmark> write(ObjectResult result) throws IOException {
+    /**
+     * Writes the pages; returns where their sections begin.
+     *
+     * @param result the result of an object
+     * @param withGravity whether the gravity charts found no room on the first page
+     */
+    List<Flow.Bookmark> write(ObjectResult result, boolean withGravity) throws IOException {
         Placement placement = result.placement().orElseThrow();
         List<FeatureMeasurement> all =
                 result.best().orElseThrow().all().stream()
@@ -82,39 +96,38 @@ final class DetailPages {
                 all.stream().filter(m -> m.result() instanceof Measured).toList();
         SourceList sources = sources(measured, placement);
         Flow flow = new Flow(document, settings.paper());
+        band(flow, result, withGravity);
         features(flow, measured, placement, sources);
         notMeasured(flow, all);
         relations(flow, placement, sources);
-        flow.heading("Metallicity class");
-        for (String line : MetallicityText.of(placement.metallicity())) {
-            flow.paragraph(styles.table(), line, 8);
-        }
-        result.judgement().ifPresent(judgement -> judgement(flow, judgement));
-        findings(flow, result);
+        new SideSections(document).write(flow, result);
         provenance(flow, result);
         flow.heading("Sources");
-        for (Source source : sources.sources()) {
-            flow.paragraph(styles.table(), sources.mark(source) + " " + source.cite(), 14);
-        }
+        flow.paragraph(
+                styles.table(),
+                sources.sources().stream()
+                        .map(source -> sources.mark(source) + " " + source.cite())
+                        .collect(Collectors.joining("; ", "", ".")),
+                0);
         return flow.draw();
     }
 
-    private void judgement(Flow flow, Judgement judgement) {
-        flow.heading("Judgement");
-        for (String line : JudgementText.lines(judgement)) {
-            flow.paragraph(styles.table(), line, 8);
-        }
-        for (LedgerEntry entry : judgement.substellarLedger().entries()) {
-            flow.paragraph(
-                    styles.table(),
-                    String.format(
-                            Locale.ROOT,
-                            "%s: odds of a substellar mass times %.3g. %s",
-                            entry.label(),
-                            Math.pow(10, entry.log10Factor()),
-                            entry.note()),
-                    8);
-        }
+    /** Charts above the columns: gravity where it is wanted, lines where they are resolved. */
+    private void band(Flow flow, ObjectResult result, boolean withGravity) {
+        float width = settings.paper().widthPoint() - 2 * FirstPage.MARGIN;
+        List<Chart> lines = LineInset.of(result, catalogue, LinePanel.MOST);
+        float gravityTall = withGravity ? GravityPanel.tall(result) : 0;
+        flow.band(
+                gravityTall + LinePanel.tall(lines),
+                (sheet, top) -> {
+                    if (withGravity) {
+                        new GravityPanel(document, catalogue, calibration, width)
+                                .write(sheet, result, top);
+                    }
+                    if (!lines.isEmpty()) {
+                        new LinePanel(document, width).write(sheet, lines, top + gravityTall);
+                    }
+                });
     }
 
     private SourceList sources(List<FeatureMeasurement> measured, Placement placement) {
@@ -141,7 +154,7 @@ final class DetailPages {
                         + " the type by a published relation, bold where it was combined, or the"
                         + " gravity score (g). A dash: measured only. *: definition quoted from"
                         + " memory, not yet checked in the paper. †: more than half of a window lies"
-                        + " in a telluric band.",
+                        + " in a telluric band. ‡: set aside by the posterior as an outlier.",
                 0);
         Map<Band, List<FeatureMeasurement>> byBand = new LinkedHashMap<>();
         for (Band band : Band.values()) {
@@ -173,7 +186,8 @@ final class DetailPages {
         String unit = feature.kind() == emberline.catalogue.Kind.BAND_INDEX ? "" : " Å";
         String known =
                 (feature.howKnown() == HowKnown.FROM_MEMORY ? "*" : "")
-                        + (measurement.telluricShare() > MOSTLY_TELLURIC ? "†" : "");
+                        + (measurement.telluricShare() > MOSTLY_TELLURIC ? "†" : "")
+                        + (isSetAside(feature, placement) ? "‡" : "");
         String number =
                 Digits.feature(feature, value.value()).replace('-', '\u2212')
                         + " ± "
@@ -192,6 +206,11 @@ final class DetailPages {
                                 true),
                         new Cell(styles.table(), number, end - 29, 66, true),
                         says));
+    }
+
+    private static boolean isSetAside(Feature feature, Placement placement) {
+        return placement.calibrated().contributions().stream()
+                .anyMatch(c -> c.setAside() && c.feature().equals(feature.id()));
     }
 
     /** What a feature says: its type by a relation, its gravity score, or nothing. */
@@ -224,31 +243,47 @@ final class DetailPages {
     }
 
     private void notMeasured(Flow flow, List<FeatureMeasurement> all) {
-        Map<Measurement.Why, List<String>> byReason = new LinkedHashMap<>();
+        Map<Measurement.Why, List<Feature>> byReason = new LinkedHashMap<>();
         for (FeatureMeasurement measurement : all) {
             if (measurement.result() instanceof NotMeasured reason) {
                 byReason.computeIfAbsent(reason.why(), why -> new ArrayList<>())
-                        .add(measurement.feature().symbol());
+                        .add(measurement.feature());
             }
         }
         if (byReason.isEmpty()) {
             return;
         }
+        Set<Band> seen = EnumSet.noneOf(Band.class);
+        all.stream()
+                .filter(m -> m.result() instanceof Measured)
+                .forEach(m -> seen.add(m.feature().band()));
         flow.heading("Not measured");
-        for (Map.Entry<Measurement.Why, List<String>> group : byReason.entrySet()) {
-            List<String> symbols = group.getValue().stream().distinct().toList();
-            String words = group.getKey().words();
-            String title = words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1);
-            flow.paragraph(
-                    styles.table(),
-                    title
-                            + " ("
-                            + group.getValue().size()
-                            + "): "
-                            + String.join(", ", symbols)
-                            + ".",
-                    8);
-        }
+        byReason.forEach(
+                (why, features) -> {
+                    String words = why.words();
+                    String title =
+                            words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1);
+                    flow.paragraph(
+                            styles.table(),
+                            title + " (" + features.size() + "): " + symbols(features, seen) + ".",
+                            8);
+                });
+    }
+
+    /** Symbols of features; a band of which nothing was measured is named as a whole. */
+    private static String symbols(List<Feature> features, Set<Band> seen) {
+        Map<Band, Long> whole = new EnumMap<>(Band.class);
+        List<String> parts = new ArrayList<>();
+        features.stream()
+                .filter(f -> !seen.contains(f.band()))
+                .forEach(f -> whole.merge(f.band(), 1L, Long::sum));
+        whole.forEach((band, count) -> parts.add("all " + count + " of " + bandWords(band)));
+        features.stream()
+                .filter(f -> seen.contains(f.band()))
+                .map(Feature::symbol)
+                .distinct()
+                .forEach(parts::add);
+        return String.join(", ", parts);
     }
 
     private void relations(Flow flow, Placement placement, SourceList sources) {
@@ -268,12 +303,22 @@ final class DetailPages {
         relationGroup(flow, "Combined", Use.COMBINED, estimates, sources);
         relationGroup(flow, "In disagreement, not combined", Use.DISAGREES, estimates, sources);
         relationGroup(flow, "Shown, not combined", Use.SHOWN, estimates, sources);
-        relationGroup(
-                flow,
-                "Outside the valid range (index, range)",
-                Use.OUTSIDE_RANGE,
-                estimates,
-                sources);
+        List<String> outside =
+                estimates.stream()
+                        .filter(e -> e.use() == Use.OUTSIDE_RANGE)
+                        .map(
+                                e ->
+                                        symbol(e)
+                                                + sources.mark(e.relation().source())
+                                                + " "
+                                                + outside(e))
+                        .toList();
+        if (!outside.isEmpty()) {
+            flow.paragraph(
+                    styles.table(),
+                    "Index outside the valid range: " + String.join("; ", outside) + ".",
+                    8);
+        }
         List<String> missing =
                 estimates.stream()
                         .filter(e -> e.use() == Use.NOT_MEASURED)
@@ -307,20 +352,12 @@ final class DetailPages {
                             66,
                             16,
                             true);
-            if (estimate.type().isPresent()) {
-                Style style = use == Use.COMBINED ? styles.tableStrong() : styles.table();
-                String type = FindingSentence.withError(estimate.type().get());
-                flow.row(List.of(symbol, mark, new Cell(style, type, end, 80, true)));
-                boolean said = estimate.reason().isBlank() || estimate.reason().startsWith("shown");
-                if (!said) {
-                    flow.indented(styles.note(), estimate.reason(), 8);
-                }
-            } else {
-                flow.row(
-                        List.of(
-                                symbol,
-                                mark,
-                                new Cell(styles.note(), outside(estimate), end, end - 68, true)));
+            Style style = use == Use.COMBINED ? styles.tableStrong() : styles.table();
+            String type = estimate.type().map(FindingSentence::withError).orElse("");
+            flow.row(List.of(symbol, mark, new Cell(style, type, end, 80, true)));
+            boolean said = estimate.reason().isBlank() || estimate.reason().startsWith("shown");
+            if (!said) {
+                flow.indented(styles.note(), estimate.reason(), 8);
             }
         }
     }
@@ -336,7 +373,7 @@ final class DetailPages {
         String from = low.isPresent() ? Digits.fixed(low.getAsDouble(), 3) : "";
         String to = high.isPresent() ? "to " + Digits.fixed(high.getAsDouble(), 3) : "and above";
         String range = from + " " + to;
-        return index + ", " + range.strip().replace('-', '\u2212');
+        return index + " (" + range.strip().replace('-', '\u2212') + ")";
     }
 
     private String symbol(RelationEstimate estimate) {
@@ -344,27 +381,6 @@ final class DetailPages {
                 .feature(estimate.relation().feature())
                 .map(Feature::symbol)
                 .orElse(estimate.relation().feature());
-    }
-
-    private void findings(Flow flow, ObjectResult result) {
-        flow.heading("Findings");
-        if (result.findings().isEmpty()) {
-            flow.paragraph(styles.table(), "None.", 0);
-        }
-        for (Finding finding : result.findings()) {
-            String word = finding.severity().name();
-            String severity = word.charAt(0) + word.substring(1).toLowerCase(Locale.ROOT);
-            Style style =
-                    finding.severity() == Finding.Severity.WARNING
-                            ? styles.table().in(document.theme().accent())
-                            : styles.table();
-            flow.paragraph(
-                    style, severity + " (" + finding.code() + "): " + sentence(finding.text()), 8);
-        }
-    }
-
-    private static String sentence(String text) {
-        return text.endsWith(".") ? text : text + ".";
     }
 
     private void provenance(Flow flow, ObjectResult result) {

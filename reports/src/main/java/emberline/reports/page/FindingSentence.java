@@ -1,5 +1,7 @@
 package emberline.reports.page;
 
+import emberline.judge.Decision;
+import emberline.judge.Judgement;
 import emberline.place.GravityVerdict;
 import emberline.place.Placement;
 import emberline.place.RelationEstimate.Use;
@@ -39,11 +41,19 @@ public final class FindingSentence {
                     .append(witnesses(placement))
                     .append("; ")
                     .append(gravity(placement.gravity()));
+            result.judgement().ifPresent(j -> text.append("; ").append(decision(j)));
         } else {
             text.append("No spectral type: ").append(placement.typeReason());
         }
         signal(result).ifPresent(signal -> text.append("; ").append(signal));
         return text.append('.').toString();
+    }
+
+    private static String decision(Judgement judgement) {
+        String share = "P(substellar) " + probability(judgement.limits().pSubstellar());
+        return judgement.decision() == Decision.UNDECIDED
+                ? "undecided whether substellar (" + share + ")"
+                : judgement.decision().word() + " (" + share + ")";
     }
 
     /** By what the type was found. */

@@ -14,17 +14,34 @@ final class Flow {
     private static final float GUTTER = 15;
     private static final float BEFORE_HEADING = 7;
     private static final float BALANCE_STEP = 4;
+    private static final float[] TIGHTNESS = {1, 0.97f, 0.94f, 0.91f, 0.88f};
 
     private final ReportDocument document;
     private final Paper paper;
     private final float columnWidth;
     private final List<Line> lines = new ArrayList<>();
+    private float tightness = 1;
+    private Band band = new Band(0, (sheet, top) -> {});
 
     Flow(ReportDocument document, Paper paper) {
         this.document = document;
         this.paper = paper;
         this.columnWidth =
                 (paper.widthPoint() - 2 * FirstPage.MARGIN - (COLUMNS - 1) * GUTTER) / COLUMNS;
+    }
+
+    /** Writes a band from its top down. */
+    @FunctionalInterface
+    interface BandContent {
+        void write(Sheet sheet, float top) throws IOException;
+    }
+
+    /** What stands above the columns of the first page over their full width. */
+    private record Band(float tall, BandContent content) {}
+
+    /** Puts a band of a height (point) above the columns of the first page. */
+    void band(float tall, BandContent content) {
+        band = new Band(tall, content);
     }
 
     /** Where a section begins. */
@@ -54,8 +71,8 @@ final class Flow {
     private record Line(
             List<Cell> cells, float before, float leading, float after, int keep, boolean heading) {
 
-        float tall(boolean first) {
-            return (first ? 0 : before) + leading + after;
+        float tall(boolean first, float tightness) {
+            return (first ? 0 : before) + leading * tightness + after;
         }
     }
 
@@ -111,10 +128,12 @@ final class Flow {
     /** Draws all lines on as many pages as they need; returns where the sections begin. */
     List<Bookmark> draw() throws IOException {
         List<Bookmark> bookmarks = new ArrayList<>();
+        tighten();
         int from = 0;
         int page = 0;
         while (from < lines.size()) {
-            float full = paper.heightPoint() - FirstPage.FOOT - 6 - top();
+            float top = top() + (page == 0 ? band.tall() : 0);
+            float full = paper.heightPoint() - FirstPage.FOOT - 6 - top;
             int[] starts = columns(from, full);
             if (starts[COLUMNS] == lines.size()) {
                 starts = balanced(from, full);
@@ -122,8 +141,16 @@ final class Flow {
             page++;
             try (Sheet sheet = new Sheet(document, paper)) {
                 DetailPages.head(document, sheet, paper, page);
+                if (page == 1) {
+                    band.content().write(sheet, top());
+                }
                 for (int column = 0; column < COLUMNS; column++) {
-                    draw(sheet, column, starts[column], starts[column + 1], bookmarks);
+                    draw(
+                            sheet,
+                            new Place(column, top),
+                            starts[column],
+                            starts[column + 1],
+                            bookmarks);
                 }
             }
             from = starts[COLUMNS];
@@ -131,10 +158,22 @@ final class Flow {
         return bookmarks;
     }
 
+    /** Sets lines closer where that saves a page for a few lines. */
+    private void tighten() {
+        float room = paper.heightPoint() - FirstPage.FOOT - 6 - top() - band.tall();
+        for (float tried : TIGHTNESS) {
+            tightness = tried;
+            if (columns(0, room)[COLUMNS] == lines.size()) {
+                return;
+            }
+        }
+        tightness = 1;
+    }
+
     private int[] balanced(int from, float full) {
         float sum = 0;
         for (Line line : lines.subList(from, lines.size())) {
-            sum += line.tall(false);
+            sum += line.tall(false, tightness);
         }
         for (float tall = sum / COLUMNS; tall < full; tall += BALANCE_STEP) {
             int[] starts = columns(from, tall);
@@ -154,7 +193,7 @@ final class Flow {
             float y = 0;
             int start = next;
             while (next < lines.size()) {
-                y += lines.get(next).tall(next == start);
+                y += lines.get(next).tall(next == start, tightness);
                 if (y > tall && next > start) {
                     break;
                 }
@@ -179,13 +218,16 @@ final class Flow {
         return end;
     }
 
-    private void draw(Sheet sheet, int column, int from, int to, List<Bookmark> bookmarks)
+    /** A column and where it begins. */
+    private record Place(int column, float top) {}
+
+    private void draw(Sheet sheet, Place place, int from, int to, List<Bookmark> bookmarks)
             throws IOException {
-        float left = FirstPage.MARGIN + column * (columnWidth + GUTTER);
-        float y = top();
+        float left = FirstPage.MARGIN + place.column() * (columnWidth + GUTTER);
+        float y = place.top();
         for (int i = from; i < to; i++) {
             Line line = lines.get(i);
-            y += (i == from ? 0 : line.before()) + line.leading();
+            y += (i == from ? 0 : line.before()) + line.leading() * tightness;
             for (Cell cell : line.cells()) {
                 String text = document.lines().fit(cell.style(), cell.text(), cell.width());
                 if (cell.right()) {

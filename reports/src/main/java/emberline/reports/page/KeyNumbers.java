@@ -23,7 +23,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.stream.Collectors;
 
-/** The numbers of the first page: a label and a value each. */
+/** The key numbers of a report: a label and a value each. */
 final class KeyNumbers {
 
     private static final List<String> MAGNITUDES =
@@ -34,12 +34,19 @@ final class KeyNumbers {
     /** A number with its label. */
     record Entry(String label, String value) {}
 
-    static List<Entry> of(ObjectResult result) {
+    /** What was found. */
+    static List<Entry> found(ObjectResult result) {
         List<Entry> entries = new ArrayList<>();
         result.placement().flatMap(p -> p.type()).ifPresent(type -> addType(entries, type));
         result.placement().ifPresent(p -> addGravity(entries, p.gravity()));
         result.placement().ifPresent(p -> addKind(entries, p.kind()));
         result.judgement().ifPresent(judgement -> addJudgement(entries, judgement));
+        return entries;
+    }
+
+    /** What it was found from. */
+    static List<Entry> given(ObjectResult result) {
+        List<Entry> entries = new ArrayList<>();
         addSpectra(entries, result);
         addListed(entries, result.candidate());
         return entries;
@@ -51,8 +58,7 @@ final class KeyNumbers {
                         "Type number",
                         Digits.type(type.typeNumber())
                                 + " ± "
-                                + Digits.type(type.sigmaSubclass())
-                                + "  (L0 = 10)"));
+                                + Digits.type(type.sigmaSubclass())));
         entries.add(new Entry("68% interval", interval(type.lo68(), type.hi68())));
         entries.add(new Entry("95% interval", interval(type.lo95(), type.hi95())));
     }
@@ -75,8 +81,9 @@ final class KeyNumbers {
         }
         entries.add(
                 new Entry(
-                        "P(FLD, INT, VL)",
-                        share(verdict.pFieldGravity())
+                        "FLD, INT, VL",
+                        "P "
+                                + share(verdict.pFieldGravity())
                                 + ", "
                                 + share(verdict.pIntermediateGravity())
                                 + ", "
@@ -105,11 +112,10 @@ final class KeyNumbers {
         Limits limits = judgement.limits();
         entries.add(
                 new Entry(
-                        "Substellar?",
+                        "Substellar",
                         String.format(
                                 Locale.ROOT,
-                                "%s: P %.2f (%.2f to %.2f by the limit)",
-                                judgement.decision().word(),
+                                "P %.2f (%.2f to %.2f by the limit)",
                                 limits.pSubstellar(),
                                 limits.pSubstellarLow(),
                                 limits.pSubstellarHigh())));
@@ -131,7 +137,7 @@ final class KeyNumbers {
                         t ->
                                 entries.add(
                                         new Entry(
-                                                "T eff (K)",
+                                                "Teff (K)",
                                                 Digits.fixed(t.median(), 0)
                                                         + " ± "
                                                         + Digits.fixed(t.sigma(), 0))));
@@ -142,11 +148,11 @@ final class KeyNumbers {
                         d ->
                                 entries.add(
                                         new Entry(
-                                                "Distance (pc)",
+                                                "Distance",
                                                 Digits.fixed(d.pc().median(), 1)
                                                         + " ± "
                                                         + Digits.fixed(d.pc().sigma(), 1)
-                                                        + " by "
+                                                        + " pc by "
                                                         + d.method())));
     }
 
@@ -204,9 +210,7 @@ final class KeyNumbers {
                                             .filter(m -> m.result() instanceof Measured)
                                             .count();
                             entries.add(
-                                    new Entry(
-                                            "Features measured",
-                                            measured + " of " + best.all().size()));
+                                    new Entry("Features", measured + " of " + best.all().size()));
                         });
     }
 

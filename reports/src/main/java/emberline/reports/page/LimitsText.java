@@ -53,8 +53,10 @@ final class LimitsText {
         sentences.add(
                 result.judgement().isPresent()
                         ? "Mass and age rest on evolution models and on the prior stated; models"
-                                + " differ by more than their printed errors. The report supports"
-                                + " expert judgement and does not replace it; look at the spectrum."
+                                + " differ by more than their printed errors. A claim that it is"
+                                + " substellar stands on the evidence shown above and no further."
+                                + " The report supports expert judgement and does not replace it;"
+                                + " look at the spectrum."
                         : "No mass, age or temperature follows from this page: a substellar claim"
                                 + " needs further evidence. The report supports expert judgement and"
                                 + " does not replace it; look at the spectrum.");

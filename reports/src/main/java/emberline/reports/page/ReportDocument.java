@@ -1,9 +1,12 @@
 package emberline.reports.page;
 
 import de.rototor.pdfbox.graphics2d.PdfBoxGraphics2DFontTextDrawer;
+import emberline.reports.chart.Axis;
+import emberline.reports.chart.Chart;
 import emberline.reports.chart.TextWidth;
 import emberline.reports.paint.ChartPainter;
 import emberline.reports.paint.Face;
+import emberline.reports.paint.Frame;
 import emberline.reports.paint.Theme;
 import java.awt.Font;
 import java.io.IOException;
@@ -13,6 +16,8 @@ import org.apache.pdfbox.pdmodel.PDDocument;
 
 /** What all pages of one document share. */
 final class ReportDocument {
+
+    private static final double ROOM_OF_LABEL = 7;
 
     private final PDDocument pdf;
     private final FontSet fonts;
@@ -69,5 +74,18 @@ final class ReportDocument {
     /** How wide the labels of charts are. */
     TextWidth labelWidth() {
         return (text, size) -> fonts.width(Face.SANS, fonts.clean(Face.SANS, text), (float) size);
+    }
+
+    /**
+     * A frame whose left side has room for the labels of the rows of a chart, up to a limit
+     * (point).
+     */
+    Frame frameFor(Chart chart, Frame frame, float most) {
+        double widest = 0;
+        for (Axis.Tick tick : chart.y().ticks()) {
+            widest = Math.max(widest, labelWidth().point(tick.label(), theme.labelSizePoint()));
+        }
+        return new Frame(
+                Math.min(most, widest + ROOM_OF_LABEL), frame.top(), frame.right(), frame.bottom());
     }
 }

@@ -2,7 +2,9 @@ package emberline.reports.page;
 
 import emberline.catalogue.FeatureCatalogue;
 import emberline.place.Placement;
+import emberline.place.calibrated.Contribution;
 import emberline.reports.chart.Chart;
+import emberline.reports.chart.ContributionChart;
 import emberline.reports.chart.PosteriorChart;
 import emberline.reports.paint.Frame;
 import emberline.survey.ObjectResult;
@@ -10,25 +12,23 @@ import java.io.IOException;
 import java.util.List;
 import java.util.Locale;
 
-/** The middle of the first page: the chart of the type and beside it the key numbers. */
+/** The middle of the first page: the chart of the type and beside it what pulled it which way. */
 final class TypePanel {
 
     /** Fewest rows of relations for which there is room in any case. */
-    static final int FEWEST_ROWS = 4;
+    static final int FEWEST_ROWS = 3;
 
-    private static final int MOST_ROWS = 17;
+    private static final int MOST_ROWS = 14;
     private static final float ROW = 9.2f;
-    private static final float MOST_ROW = 15;
-    private static final float KEY_WIDTH = 176;
-    private static final float LABEL_WIDTH = 68;
-    private static final float GUTTER = 18;
-    private static final String HEADING = "Type: posterior and published relations";
-    private static final Frame FRAME = new Frame(122, 2, 5, 24);
+    private static final float MOST_ROW = 13;
+    private static final float CONTRIBUTIONS_WIDTH = 196;
+    private static final float GUTTER = 12;
+    private static final int FEWEST_CONTRIBUTIONS = 3;
+    private static final Frame FRAME = new Frame(116, 2, 5, 24);
 
     private final ReportDocument document;
     private final FeatureCatalogue catalogue;
-    private final ObjectResult result;
-    private final List<KeyNumbers.Entry> keys;
+    private final Placement placement;
     private final Styles styles;
     private final float width;
 
@@ -36,8 +36,7 @@ final class TypePanel {
             ReportDocument document, FeatureCatalogue catalogue, ObjectResult result, float width) {
         this.document = document;
         this.catalogue = catalogue;
-        this.result = result;
-        this.keys = KeyNumbers.of(result);
+        this.placement = result.placement().orElseThrow();
         this.styles = document.styles();
         this.width = width;
     }
@@ -45,7 +44,7 @@ final class TypePanel {
     /** How many rows of relations there are to show, at least {@link #FEWEST_ROWS}. */
     int rows() {
         long rows =
-                result.placement().orElseThrow().published().estimates().stream()
+                placement.published().estimates().stream()
                         .filter(e -> e.type().isPresent())
                         .count();
         return (int) Math.max(FEWEST_ROWS, Math.min(MOST_ROWS, rows));
@@ -53,74 +52,96 @@ final class TypePanel {
 
     /** The height that the panel takes up with so many rows (point). */
     float tall(int rows) {
-        float chart = (rows + 4.6f) * ROW + (float) (FRAME.top() + FRAME.bottom());
-        float lines = 0;
-        for (KeyNumbers.Entry entry : keys) {
-            lines += valueLines(entry).size() * styles.table().leadingPoint() + 1.6f;
+        if (!any()) {
+            return 44;
         }
-        return 14 + Math.max(chart, lines) + 8;
+        return 20 + (rows + 4.6f) * ROW + (float) (FRAME.top() + FRAME.bottom());
     }
 
     /** By how much the panel may grow where there is room (point). */
-    static float growth(int rows) {
-        return rows * (MOST_ROW - ROW);
+    float growth(int rows) {
+        return any() ? rows * (MOST_ROW - ROW) : 0;
+    }
+
+    private boolean any() {
+        return placement.calibrated().posterior().isPresent()
+                || placement.published().estimates().stream().anyMatch(e -> e.type().isPresent());
     }
 
     void write(Sheet sheet, float y, float tall, int rows) throws IOException {
-        float chartWidth = width - KEY_WIDTH - GUTTER;
-        relations(sheet, y, tall, rows, chartWidth);
-        keys(sheet, FirstPage.MARGIN + chartWidth + GUTTER, y);
+        String title = placement.type().isPresent() ? "Type" : "Type, if it were a late dwarf";
+        sheet.text(styles.heading(), FirstPage.MARGIN, y + 7, title);
+        if (!any()) {
+            noType(sheet, y);
+            return;
+        }
+        List<Contribution> contributions = placement.calibrated().contributions();
+        boolean beside =
+                contributions.size() >= FEWEST_CONTRIBUTIONS
+                        && placement.calibrated().posterior().isPresent();
+        float chartWidth = beside ? width - CONTRIBUTIONS_WIDTH - GUTTER : width;
+        float heading = document.lines().width(styles.heading(), title) + 8;
+        sheet.text(
+                styles.small(),
+                FirstPage.MARGIN + heading,
+                y + 7,
+                document.lines()
+                        .fit(
+                                styles.small(),
+                                "filled: combined (dashed below); bars: 68%, 95%",
+                                chartWidth - heading));
+        Chart chart = PosteriorChart.of(placement, catalogue, rows);
+        sheet.chart(
+                chart,
+                FirstPage.MARGIN,
+                y + 11,
+                chartWidth,
+                tall - 20,
+                document.frameFor(chart, FRAME, chartWidth / 2));
+        if (beside) {
+            contributions(sheet, FirstPage.MARGIN + chartWidth + GUTTER, y, tall, contributions);
+        }
     }
 
-    private void relations(Sheet sheet, float y, float tall, int rows, float chartWidth)
+    private void contributions(
+            Sheet sheet, float left, float y, float tall, List<Contribution> contributions)
             throws IOException {
-        Placement placement = result.placement().orElseThrow();
-        boolean any =
-                placement.calibrated().posterior().isPresent()
-                        || placement.published().estimates().stream()
-                                .anyMatch(e -> e.type().isPresent());
-        sheet.text(styles.heading(), FirstPage.MARGIN, y + 7, HEADING);
-        if (any) {
-            Chart chart = PosteriorChart.of(placement, catalogue, rows);
-            sheet.text(
-                    styles.small(),
-                    FirstPage.MARGIN + document.lines().width(styles.heading(), HEADING) + 8,
-                    y + 7,
-                    "filled: combined; bars: 68% and 95%");
-            sheet.chart(chart, FirstPage.MARGIN, y + 12, chartWidth, tall - 22, FRAME);
-        } else {
-            float at = y + 20;
-            for (String line :
-                    document.lines()
-                            .wrap(
-                                    styles.body(),
-                                    sentence(placement.published().scheme()),
-                                    chartWidth)) {
-                sheet.text(styles.body(), FirstPage.MARGIN, at, line);
-                at += styles.body().leadingPoint();
-            }
+        String heading = "Which features pulled it";
+        sheet.text(styles.heading(), left, y + 7, heading);
+        long aside = contributions.stream().filter(Contribution::setAside).count();
+        float from = document.lines().width(styles.heading(), heading) + 6;
+        sheet.text(
+                styles.small(),
+                left + from,
+                y + 7,
+                document.lines()
+                        .fit(
+                                styles.small(),
+                                "of " + contributions.size() + "; open: set aside (" + aside + ")",
+                                CONTRIBUTIONS_WIDTH - from));
+        int rows =
+                (int) Math.max(FEWEST_CONTRIBUTIONS, (tall - 22 - FRAME.bottom()) / (ROW - 0.5f));
+        Chart chart = ContributionChart.of(contributions, catalogue, rows);
+        sheet.chart(
+                chart,
+                left,
+                y + 11,
+                CONTRIBUTIONS_WIDTH,
+                tall - 20,
+                document.frameFor(chart, FRAME, CONTRIBUTIONS_WIDTH / 2));
+    }
+
+    private void noType(Sheet sheet, float y) throws IOException {
+        float at = y + 18;
+        for (String line :
+                document.lines()
+                        .wrap(styles.body(), sentence(placement.published().scheme()), width, 2)) {
+            sheet.text(styles.body(), FirstPage.MARGIN, at, line);
+            at += styles.body().leadingPoint();
         }
     }
 
     private static String sentence(String words) {
         return words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1) + ".";
-    }
-
-    private void keys(Sheet sheet, float left, float y) throws IOException {
-        sheet.text(styles.heading(), left, y + 7, "Key numbers");
-        sheet.rule(left, FirstPage.MARGIN + width, y + 11, document.theme().rule(), 0.5f);
-        float at = y + 20.5f;
-        for (KeyNumbers.Entry entry : keys) {
-            sheet.text(styles.table().in(document.theme().quiet()), left, at, entry.label());
-            for (String line : valueLines(entry)) {
-                sheet.text(styles.table(), left + LABEL_WIDTH, at, line);
-                at += styles.table().leadingPoint();
-            }
-            at += 1.6f;
-        }
-    }
-
-    private List<String> valueLines(KeyNumbers.Entry entry) {
-        return document.lines().wrap(styles.table(), entry.value(), KEY_WIDTH - LABEL_WIDTH, 3);
     }
 }

@@ -15,7 +15,9 @@ final class LabelDrawing {
 
     private static final float BAR_POINT = 0.9f;
     private static final double TICK_POINT = 3;
-    private static final FontRenderContext EXACT = new FontRenderContext(null, true, true);
+
+    /** Widths of texts without rounding to pixels. */
+    static final FontRenderContext EXACT = new FontRenderContext(null, true, true);
 
     private LabelDrawing() {}
 

@@ -22,7 +22,10 @@ final class LayerDrawing extends AbstractXYAnnotation {
 
     private static final long serialVersionUID = 1L;
     private static final float CURVE_POINT = 0.55f;
+    private static final float LOCUS_POINT = 0.9f;
+    private static final float SEGMENT_POINT = 0.6f;
     private static final double HATCH_STEP = 4;
+    private static final double NOTE_GAP = 3;
 
     private final transient Layer layer;
     private final transient Theme theme;
@@ -63,10 +66,73 @@ final class LayerDrawing extends AbstractXYAnnotation {
         } else if (layer instanceof Layer.Labels labels) {
             LabelDrawing.draw(graphics, places, labels, theme, fonts);
         } else if (layer instanceof Layer.Note note) {
-            graphics.setFont(fonts.label());
-            graphics.setPaint(theme.colour(note.tone()));
-            graphics.drawString(
-                    note.text(), (float) places.x(note.x()), (float) places.y(note.y()));
+            draw(graphics, places, note);
+        } else if (layer instanceof Layer.Segment segment) {
+            draw(graphics, places, segment);
+        } else if (layer instanceof Layer.Blocks blocks) {
+            draw(graphics, places, blocks);
+        }
+    }
+
+    private void draw(Graphics2D graphics, Places places, Layer.Note note) {
+        graphics.setFont(fonts.label());
+        graphics.setPaint(theme.colour(note.tone()));
+        double width = fonts.label().getStringBounds(note.text(), LabelDrawing.EXACT).getWidth();
+        double shift =
+                switch (note.side()) {
+                    case LEFT -> -width - NOTE_GAP;
+                    case RIGHT -> NOTE_GAP;
+                    case ABOVE -> 1;
+                    case ABOVE_LEFT -> -width - 1;
+                };
+        boolean above = note.side() == Layer.Side.ABOVE || note.side() == Layer.Side.ABOVE_LEFT;
+        double x = places.clampedX(note.x()) + shift;
+        double baseline =
+                places.clampedY(note.y()) + (above ? -1.6 : theme.labelSizePoint() * 0.36);
+        graphics.drawString(note.text(), (float) x, (float) baseline);
+    }
+
+    private void draw(Graphics2D graphics, Places places, Layer.Segment segment) {
+        graphics.setPaint(theme.colour(segment.tone()));
+        graphics.setStroke(
+                segment.dashed() ? dashed(SEGMENT_POINT) : new BasicStroke(SEGMENT_POINT));
+        graphics.draw(
+                new Line2D.Double(
+                        places.clampedX(segment.fromX()),
+                        places.clampedY(segment.fromY()),
+                        places.clampedX(segment.toX()),
+                        places.clampedY(segment.toY())));
+    }
+
+    private static BasicStroke dashed(float width) {
+        return new BasicStroke(
+                width,
+                BasicStroke.CAP_BUTT,
+                BasicStroke.JOIN_ROUND,
+                1,
+                new float[] {2.4f, 1.8f},
+                0);
+    }
+
+    private void draw(Graphics2D graphics, Places places, Layer.Blocks blocks) {
+        Path2D path = new Path2D.Double();
+        for (Layer.Block block : blocks.blocks()) {
+            double left = places.clampedX(block.left());
+            double top = places.clampedY(block.top());
+            path.append(
+                    new Rectangle2D.Double(
+                            left,
+                            top,
+                            places.clampedX(block.right()) - left,
+                            places.clampedY(block.bottom()) - top),
+                    false);
+        }
+        graphics.setPaint(theme.colour(blocks.tone()));
+        graphics.fill(path);
+        if (blocks.outlined()) {
+            graphics.setPaint(theme.ink());
+            graphics.setStroke(new BasicStroke(theme.hairlinePoint() * 0.7f));
+            graphics.draw(path);
         }
     }
 
@@ -106,8 +172,14 @@ final class LayerDrawing extends AbstractXYAnnotation {
             pieces.forEach(piece -> graphics.fill(band(places, curve, piece[0], piece[1])));
         }
         graphics.setPaint(theme.colour(curve.tone()));
+        boolean isDashed = curve.tone() == Tone.LOCUS_VERY_LOW;
         graphics.setStroke(
-                new BasicStroke(CURVE_POINT, BasicStroke.CAP_ROUND, BasicStroke.JOIN_ROUND));
+                isDashed
+                        ? dashed(LOCUS_POINT)
+                        : new BasicStroke(
+                                curve.tone() == Tone.LOCUS_FIELD ? LOCUS_POINT : CURVE_POINT,
+                                BasicStroke.CAP_ROUND,
+                                BasicStroke.JOIN_ROUND));
         for (int[] piece : pieces) {
             Path2D path = new Path2D.Double();
             path.moveTo(places.x(curve.x(piece[0])), places.y(curve.y(piece[0])));

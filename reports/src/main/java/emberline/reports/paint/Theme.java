@@ -66,6 +66,13 @@ public record Theme(
             case FIELD -> new Color(0xF2F5F9);
             case INTERMEDIATE -> new Color(0xD3E2F0);
             case VERY_LOW -> new Color(0xA3C6E2);
+            case LOCUS_FIELD -> new Color(0x3C4654);
+            case LOCUS_VERY_LOW -> new Color(0x123E63);
+            case TOWARDS -> new Color(0x0B5C8E);
+            case AGAINST -> new Color(0xDDA15E);
+            case SET_ASIDE -> new Color(0xFFFFFF);
+            case LIMIT -> new Color(0xD9DEE5);
+            case WORDS -> quiet;
             case GUIDE -> rule;
         };
     }

@@ -110,13 +110,14 @@ class ChartTest {
         assertEquals(combined, used.points().size());
         Layer.Points result =
                 chart.layers(Layer.Points.class).stream()
-                        .filter(p -> p.tone() == Tone.RESULT)
+                        .filter(p -> p.tone() == Tone.USED && !p.filled())
                         .findFirst()
                         .orElseThrow();
-        assertEquals(
-                placement.published().type().orElseThrow().typeNumber(),
-                result.points().get(0).x(),
-                0);
+        double published = placement.published().type().orElseThrow().typeNumber();
+        assertEquals(published, result.points().get(0).x(), 0);
+        Layer.Segment mark = chart.layers(Layer.Segment.class).get(0);
+        assertEquals(published, mark.fromX(), 0);
+        assertTrue(mark.dashed() && mark.toY() < -1, "the posterior has no mark of it");
         assertEquals(chart.y().ticks().size(), 2 + used.points().size() + aside(chart));
     }
 
@@ -138,7 +139,11 @@ class ChartTest {
             if (score.score().isEmpty()) {
                 continue;
             }
-            Chart chart = new GravityChart(Samples.CATALOGUE).of(score, placement.type());
+            Chart chart =
+                    new GravityChart(
+                                    Samples.CATALOGUE,
+                                    emberline.place.calibrated.Calibration.standard())
+                            .of(score, placement.type());
             Layer.Point point = chart.layers(Layer.Points.class).get(0).points().get(0);
             for (Layer.Area area : chart.layers(Layer.Area.class)) {
                 boolean inside =

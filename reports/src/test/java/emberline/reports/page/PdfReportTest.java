@@ -12,6 +12,7 @@ import emberline.reports.Samples;
 import emberline.reports.Samples.Bands;
 import emberline.spectrum.Finding;
 import emberline.survey.ObjectResult;
+import java.io.ByteArrayInputStream;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
@@ -32,10 +33,24 @@ import org.apache.pdfbox.pdmodel.PDPage;
 import org.apache.pdfbox.pdmodel.PDResources;
 import org.apache.pdfbox.pdmodel.font.PDFont;
 import org.apache.pdfbox.pdmodel.graphics.form.PDFormXObject;
+import org.apache.pdfbox.pdmodel.interactive.action.PDActionGoTo;
+import org.apache.pdfbox.pdmodel.interactive.annotation.PDAnnotation;
+import org.apache.pdfbox.pdmodel.interactive.annotation.PDAnnotationLink;
+import org.apache.pdfbox.pdmodel.interactive.documentnavigation.destination.PDPageDestination;
+import org.apache.pdfbox.text.PDFTextStripper;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
 import org.junit.jupiter.params.provider.MethodSource;
+import org.verapdf.core.EncryptedPdfException;
+import org.verapdf.core.ModelParsingException;
+import org.verapdf.core.ValidationException;
+import org.verapdf.gf.foundry.VeraGreenfieldFoundryProvider;
+import org.verapdf.pdfa.Foundries;
+import org.verapdf.pdfa.PDFAParser;
+import org.verapdf.pdfa.PDFAValidator;
+import org.verapdf.pdfa.flavours.PDFAFlavour;
+import org.verapdf.pdfa.results.ValidationResult;
 
 class PdfReportTest {
 
@@ -51,7 +66,38 @@ class PdfReportTest {
         var clean = Samples.spectrum(0.8, 2.45, 600, Bands.L_DWARF, 60, 9);
         return List.of(
                 Samples.lDwarf(),
-                Samples.tDwarf(),
+                Samples.judged(Samples.lDwarf()),
+                Samples.judged(Samples.tDwarf()),
+                Samples.judged(
+                        Samples.object(
+                                "R 40", Samples.spectrum(0.8, 2.4, 90, Bands.T_DWARF, 15, 9), 40)),
+                Samples.judged(
+                        Samples.object(
+                                "Optical",
+                                Samples.spectrum(0.55, 0.92, 2500, Bands.L_DWARF, 40, 9),
+                                1500)),
+                Samples.judged(
+                        Samples.object(
+                                "Lines\nof\nthree",
+                                Map.of(
+                                        "age",
+                                        "120+-8Myr",
+                                        "lithium",
+                                        "yes",
+                                        "parallax_mas",
+                                        "40",
+                                        "parallax_mas_err",
+                                        "1",
+                                        "h_mag",
+                                        "12.5",
+                                        "pmra_masyr",
+                                        "200",
+                                        "pmdec_masyr",
+                                        "-600"),
+                                List.of(
+                                        Samples.spectrum(0.6, 1.35, 5000, Bands.L_DWARF, 60, 9),
+                                        clean),
+                                2500)),
                 Samples.object(
                         LONG_NAME, Samples.spectrum(0.8, 2.45, 600, Bands.L_DWARF, 3, 9), 120),
                 Samples.object(
@@ -117,6 +163,7 @@ class PdfReportTest {
                         full.best(),
                         full.placement(),
                         findings);
+        warned = Samples.judged(warned);
         ReportSettings letter = ReportSettings.of("0.1.0", 7).withPaper(Paper.LETTER);
         PageLayout.assertWellSet(
                 pdf(new PdfReport(letter, Samples.CATALOGUE), warned), Paper.LETTER);
@@ -137,13 +184,17 @@ class PdfReportTest {
                         "SIMP J1339+1523",
                         "WISE J235402.77+024015.0",
                         "2MASS J01415823-4633574")) {
-            PageLayout.assertWellSet(pdf(A4, RealSpectra.object(rows.get(name))), Paper.A4);
+            ObjectResult object = Samples.judged(RealSpectra.object(rows.get(name)));
+            PageLayout.assertWellSet(pdf(A4, object), Paper.A4);
+            ReportSettings letter = ReportSettings.of("0.1.0", 7).withPaper(Paper.LETTER);
+            PageLayout.assertWellSet(
+                    pdf(new PdfReport(letter, Samples.CATALOGUE), object), Paper.LETTER);
         }
     }
 
     @Test
     void textIsReadInOrder() throws IOException {
-        ObjectResult object = Samples.lDwarf();
+        ObjectResult object = Samples.judged(Samples.lDwarf());
         String text = PdfText.all(pdf(A4, object)).replaceAll("\\s+", " ");
         int before = -1;
         for (String piece :
@@ -151,15 +202,25 @@ class PdfReportTest {
                         "Ember 12",
                         FindingSentence.of(object),
                         "Wavelength (µm, vacuum)",
-                        "Type: posterior and published relations",
-                        "Key numbers",
+                        "Type",
+                        "Spectral type",
+                        "Which features pulled it",
                         "Gravity by published scores",
+                        "Evidence, step by step",
+                        "Odds of mass below 0.072 solar masses",
+                        "Mass and age",
+                        "burns hydrogen",
+                        "burns deuterium",
+                        "Key numbers",
                         "What this cannot tell",
                         "Measured features",
                         "FeH_z",
                         "Not measured",
                         "Type relations",
+                        "Nearest reference objects",
+                        "Judgement",
                         "Findings",
+                        "What it was found from",
                         "Spectra and provenance",
                         "Sources")) {
             int at = text.indexOf(piece, before + 1);
@@ -232,6 +293,71 @@ class PdfReportTest {
         } finally {
             threads.shutdownNow();
         }
+    }
+
+    @Test
+    void reportsAreArchivable()
+            throws IOException, ModelParsingException, ValidationException, EncryptedPdfException {
+        VeraGreenfieldFoundryProvider.initialise();
+        ByteArrayOutputStream bound = new ByteArrayOutputStream();
+        A4.bind(List.of(Samples.lDwarf(), Samples.judged(Samples.tDwarf())), bound);
+        for (byte[] pdf : List.of(pdf(A4, Samples.judged(Samples.lDwarf())), bound.toByteArray())) {
+            try (PDFAParser parser =
+                            Foundries.defaultInstance()
+                                    .createParser(
+                                            new ByteArrayInputStream(pdf), PDFAFlavour.PDFA_2_B);
+                    PDFAValidator validator =
+                            Foundries.defaultInstance()
+                                    .createValidator(PDFAFlavour.PDFA_2_B, false)) {
+                ValidationResult result = validator.validate(parser);
+                assertTrue(result.isCompliant(), result.getTestAssertions().toString());
+                assertTrue(result.getTotalAssertions() > 1000);
+            }
+        }
+    }
+
+    @Test
+    void boundReportsHaveContentsWithLinksAndPageNumbers() throws IOException {
+        List<ObjectResult> objects = new ArrayList<>();
+        for (int i = 0; i < 56; i++) {
+            objects.add(
+                    Samples.object(
+                            "Bound " + i, Samples.spectrum(2, 2.1, 40, Bands.L_DWARF, 60, i), 120));
+        }
+        ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+        A4.bind(objects, bytes);
+        PageLayout.assertWellSet(bytes.toByteArray(), Paper.A4);
+        try (PDDocument document = Loader.loadPDF(bytes.toByteArray())) {
+            PDFTextStripper stripper = new PDFTextStripper();
+            int seen = 0;
+            for (int contents = 0; contents < 2; contents++) {
+                stripper.setStartPage(contents + 1);
+                stripper.setEndPage(contents + 1);
+                String text = stripper.getText(document);
+                for (PDAnnotation annotation : document.getPage(contents).getAnnotations()) {
+                    PDActionGoTo action =
+                            (PDActionGoTo) ((PDAnnotationLink) annotation).getAction();
+                    PDPage target = ((PDPageDestination) action.getDestination()).getPage();
+                    int number = document.getPages().indexOf(target) + 1;
+                    assertTrue(
+                            text.contains("Bound " + seen) && text.contains(" " + number),
+                            number + " in " + text);
+                    stripper.setStartPage(number);
+                    stripper.setEndPage(number);
+                    assertTrue(stripper.getText(document).startsWith("Bound " + seen));
+                    seen++;
+                }
+            }
+            assertEquals(objects.size(), seen);
+            var outline = document.getDocumentCatalog().getDocumentOutline();
+            assertEquals("Contents", outline.getFirstChild().getTitle());
+            assertEquals("Bound 0", outline.getFirstChild().getNextSibling().getTitle());
+            assertEquals(
+                    "Finding", outline.getFirstChild().getNextSibling().getFirstChild().getTitle());
+        }
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> A4.bind(List.of(), new ByteArrayOutputStream()));
     }
 
     @Test

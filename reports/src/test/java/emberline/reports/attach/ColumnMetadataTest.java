@@ -1,0 +1,80 @@
+package emberline.reports.attach;
+
+import static org.junit.jupiter.api.Assertions.assertDoesNotThrow;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import emberline.reports.attach.ResultColumn.Content;
+import emberline.reports.note.UnitNames;
+import java.util.List;
+import java.util.Set;
+import java.util.stream.Collectors;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/** Whoever adds a column says what it holds, in which unit, and with which content descriptor. */
+class ColumnMetadataTest {
+
+    private static final String WORD = "[a-zA-Z]+(\\.[a-zA-Z0-9-]+)*";
+
+    /** First atoms of the words of UCD1+. */
+    private static final Set<String> ROOTS =
+            Set.of(
+                    "arith", "em", "instr", "meta", "obs", "phot", "phys", "pos", "spect", "src",
+                    "stat", "time");
+
+    /** Primary words under which a number has no unit. */
+    private static final Set<String> PURE =
+            Set.of("stat.probability", "stat.snr", "stat.value", "spect.resolution");
+
+    static List<ResultColumn> columns() {
+        return ResultColumns.standard();
+    }
+
+    @ParameterizedTest
+    @MethodSource("columns")
+    void aColumnIsDescribed(ResultColumn column) {
+        assertTrue(column.name().matches("[a-z][a-z0-9_]*"), column.name());
+        assertTrue(column.description().length() > 5, column.name() + " lacks a description");
+        assertFalse(column.description().endsWith("."), column.name());
+        assertFalse(column.ucd().isEmpty(), column.name() + " lacks a UCD");
+        for (String word : column.ucd().split(";", -1)) {
+            assertTrue(word.matches(WORD), column.name() + ": " + word);
+            assertTrue(ROOTS.contains(word.split("\\.", -1)[0]), column.name() + ": " + word);
+        }
+    }
+
+    @ParameterizedTest
+    @MethodSource("columns")
+    void aNumberHasAUnitOrNeedsNone(ResultColumn column) {
+        assertDoesNotThrow(() -> UnitNames.check(column.unit()), column.name());
+        if (column.content() == Content.NUMBER && column.unit().isEmpty()) {
+            boolean logarithm = column.name().matches("log.*");
+            assertTrue(
+                    logarithm || PURE.contains(column.ucd().split(";", -1)[0]),
+                    column.name() + " lacks a unit");
+        }
+        if (column.content() == Content.TEXT) {
+            assertEquals("", column.unit(), column.name() + " is text and has a unit");
+        }
+    }
+
+    @Test
+    void namesAreUnique() {
+        Set<String> names = columns().stream().map(ResultColumn::name).collect(Collectors.toSet());
+        assertEquals(columns().size(), names.size());
+    }
+
+    @Test
+    void listedColumnsThatAreKnownKeepTheirMeaning() {
+        ResultColumn parallax =
+                ResultColumns.forList(List.of("name", "parallax_mas", "mine")).stream()
+                        .filter(c -> c.name().equals("parallax_mas"))
+                        .findFirst()
+                        .orElseThrow();
+        assertEquals("mas", parallax.unit());
+        assertEquals("pos.parallax", parallax.ucd());
+    }
+}
