@@ -132,6 +132,7 @@ public final class ResultColumns {
                                         .distinct()
                                         .collect(Collectors.joining(" "))));
         columns.addAll(JudgementColumns.all());
+        columns.addAll(VerdictColumns.all(columns));
         return List.copyOf(columns);
     }
 
