@@ -166,6 +166,7 @@
     // What changes with the selection is drawn over the points.
     plot.mark = () => {
       top.replaceChildren();
+      top.setAttribute('viewBox', `0 0 ${frame.wide} ${frame.tall}`);
       const taken = [];
       (plot.odd || []).forEach(s => {
         const x = plot.px(s.x);
@@ -246,7 +247,7 @@
       if (spot && spot.object) { pick(spot.object, true); }
     });
     canvas.addEventListener('pointerleave', hideTip);
-    canvas.addEventListener('dblclick', open);
+    canvas.addEventListener('dblclick', () => open());
     canvas.addEventListener('keydown', event => {
       const way = { ArrowRight: [1, 0], ArrowLeft: [-1, 0], ArrowUp: [0, -1], ArrowDown: [0, 1] }[event.key];
       if (!way || event.ctrlKey || event.metaKey || event.altKey) { return; }
@@ -320,7 +321,7 @@
     mapPlot.odd = mapPlot.spots.filter(s => s.object.p_unlike !== null && s.object.p_unlike >= ODD)
       .sort((a, b) => b.object.p_unlike - a.object.p_unlike || b.object.kin_distance - a.object.kin_distance).slice(0, 12);
     const off = objects.length - mapPlot.spots.length;
-    $('off').textContent = (off > 0 ? `${off} without a place; ` : '') + 'small dots: reference objects; ring: unlike all of them';
+    $('off').textContent = off > 0 ? `${off} without a place: too little measured` : '';
     $('off').title = $('off').textContent;
     if (wait !== true) { mapPlot.draw(); }
   };
@@ -381,6 +382,14 @@
       picture.append(drawn('path', LINES.includes(glyph)
         ? { d: path.join(''), fill: 'none', stroke: shade, 'stroke-width': 1.5 } : { d: path.join(''), fill: shade }));
       item.append(picture, kind || 'kind not judged');
+      glyphs.append(item);
+    });
+    [['under', 'reference object', 2], ['accent', 'unlike all of them', 4.5]].forEach(([shade, text, r]) => {
+      const item = element('span');
+      const picture = drawn('svg', { viewBox: '0 0 10 10', 'aria-hidden': 'true' });
+      picture.append(drawn('circle', { cx: 5, cy: 5, r, ...(r > 2
+        ? { fill: 'none', stroke: `var(--${shade})` } : { fill: `var(--${shade})` }) }));
+      item.append(picture, text);
       glyphs.append(item);
     });
     const ramp = $('ramp');

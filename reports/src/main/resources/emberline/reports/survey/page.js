@@ -50,9 +50,9 @@
 
   const facts = () => {
     const place = $('facts');
-    const cautions = $('cautions');
+    const below = $('more');
     place.replaceChildren();
-    cautions.replaceChildren();
+    below.replaceChildren();
     $('verdict').hidden = picked === null;
     if (picked === null) {
       place.append(element('h2', 'No object selected'),
@@ -79,12 +79,12 @@
       picked.next_step ? `next: ${picked.next_step}` : '',
       picked.status === 'failed' ? '' : picked.reason,
     ].filter(Boolean).join('; ');
-    if (more) { place.append(element('p', more + '.', 'quiet')); }
+    if (more) { below.append(element('p', more + (/[.!?]$/.test(more) ? '' : '.'), 'quiet')); }
     if (picked.cautions.length > 0) {
       const list = element('ul');
       picked.cautions.forEach(text => list.append(text.startsWith('!')
         ? element('li', text.slice(1), 'warning') : element('li', text)));
-      cautions.append(list);
+      below.append(list);
     }
     $('call').value = picked.said.verdict || '';
     $('said-type').value = picked.said.type || '';
@@ -96,7 +96,7 @@
     const program = [picked.type, picked.gravity, picked.kind, picked.decision].filter(Boolean).join(', ');
     $('said').textContent = isBlank(picked.said) ? ''
       : (picked.differs ? `Overrides the program (${program || 'no call'}). ` : '')
-        + (typed.has(picked.name) ? 'Kept by this browser; export it to take it back with sort --verdicts.' : 'Taken in by the run.');
+        + (typed.has(picked.name) ? 'Kept by this browser; export it to take it back with sort \u2011\u2011verdicts.' : 'Taken in by the run.');
   };
 
   const pick = (object, jump) => {

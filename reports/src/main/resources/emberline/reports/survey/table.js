@@ -56,12 +56,12 @@
 
   const ranked = KEYS.includes('rank') && objects.some(o => o.rank !== null);
   const COLUMNS = [
-    { key: 'place', title: 'Spectrum', width: 112, fill: (cell, o) => {
+    { key: 'place', title: 'Spectrum', width: 108, fill: (cell, o) => {
       const sparks = element('div', null, 'sparks');
       o.sparks.forEach(code => sparks.append(spark(code)));
       cell.append(sparks);
     } },
-    { key: 'name', title: 'Name', width: 152, kind: 'name', fill: (cell, o) => { cell.textContent = o.name; cell.title = o.name; } },
+    { key: 'name', title: 'Name', width: 182, kind: 'name', fill: (cell, o) => { cell.textContent = o.name; cell.title = o.name; } },
     { key: 'finalNumber', title: 'Type', width: 92, kind: 'type', fill: (cell, o) => {
       const own = o.said.type;
       cell.append(element('b', o.finalType || '\u2013'));
@@ -74,7 +74,7 @@
       if (o.finalGravity === o.gravity && o.gravity && o.p_gravity !== null) { cell.append(element('span', ' ' + clean(o.p_gravity), 'quiet')); }
       pen(cell, o, o.finalGravity !== o.gravity);
     } },
-    { key: 'finalKind', title: 'Kind', width: 112, fill: (cell, o) => {
+    { key: 'finalKind', title: 'Kind', width: 104, fill: (cell, o) => {
       cell.append(o.finalKind || '');
       pen(cell, o, o.finalKind !== o.kind);
       cell.title = o.finalKind !== o.kind ? `program: ${o.kind || 'not judged'}` : o.p_kind === null ? '' : `P = ${clean(o.p_kind)}`;
@@ -97,7 +97,7 @@
     } },
     { key: 'snr', title: 'S/N', width: 50, kind: 'right', fill: (cell, o) => { cell.textContent = o.snr === null ? '' : o.snr < 10 ? fixed(o.snr, 1) : fixed(o.snr, 0); } },
     { key: 'status', title: 'Status', width: 78, fill: (cell, o) => { cell.textContent = o.status; if (o.status === 'failed') { cell.classList.add('failed'); } } },
-    { key: 'sorted', title: 'Verdict', width: 96, fill: (cell, o) => {
+    { key: 'sorted', title: 'Verdict', width: 92, fill: (cell, o) => {
       const said = [o.said.verdict, o.said.type, o.said.gravity].filter(Boolean).join(', ') || (o.said.note ? 'note' : '');
       cell.textContent = said;
       cell.title = o.said.note || said;
@@ -107,7 +107,7 @@
       cell.append(element('div', o.sentence));
       cell.title = o.sentence;
     } },
-    { key: 'file', title: 'Files', width: 84, fill: (cell, o) => {
+    { key: 'file', title: 'Files', width: 88, fill: (cell, o) => {
       if (o.report) { cell.append(link('PDF', o, true)); }
       cell.append(link('JSON', o, false));
     } },
@@ -117,7 +117,9 @@
   COLUMNS.forEach(column => {
     const cell = element('th', null, column.kind === 'right' ? 'right' : '');
     cell.scope = 'col';
-    if (column.width) { cell.style.width = column.width + 'px'; }
+    if (column.width) { cell.style.setProperty('--wide', column.width + 'px'); }
+    cell.dataset.key = column.key;
+    cell.dataset.title = column.title;
     const button = element('button', column.title);
     button.type = 'button';
     button.title = column.about || '';
@@ -204,6 +206,7 @@
       COLUMNS.forEach(column => {
         const cell = element('td', null, column.kind);
         cell.setAttribute('role', 'gridcell');
+        cell.dataset.key = column.key;
         column.fill(cell, object);
         row.append(cell);
       });
