@@ -113,6 +113,18 @@ final class Browser implements Closeable {
         return driver.findElement(By.cssSelector(selector));
     }
 
+    /** Chooses an option of a list by its value or its text. */
+    void choose(String list, String option) {
+        find(list).findElements(By.tagName("option")).stream()
+                .filter(
+                        o ->
+                                option.equals(o.getDomProperty("value"))
+                                        || option.equals(o.getDomProperty("text")))
+                .findFirst()
+                .orElseThrow()
+                .click();
+    }
+
     /** The texts of all elements of a selector. */
     List<String> texts(String selector) {
         return driver.findElements(By.cssSelector(selector)).stream()

@@ -8,6 +8,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
+import emberline.reports.survey.SurveyPage;
+import emberline.reports.survey.SurveyRow;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -30,7 +32,6 @@ import org.openqa.selenium.By;
 import org.openqa.selenium.Keys;
 import org.openqa.selenium.WebElement;
 import org.openqa.selenium.interactions.Actions;
-import org.openqa.selenium.support.ui.Select;
 
 /** The survey page of a real run in a real browser. */
 @TestInstance(TestInstance.Lifecycle.PER_CLASS)
@@ -39,14 +40,14 @@ class SurveyPageInBrowserTest {
     private static final String EVIL = "</script><img src=x onerror=\"window.bad=1\"> 'q', \"r\"";
     private static final String EVIL_NOTE = "=1+1 <b>\"so\"</b>, 'yes'\nsecond line </script>";
 
-    @TempDir private Path folder;
-
+    private Path folder;
     private Browser browser;
     private Path list;
     private Path out;
 
     @BeforeAll
-    void sortAList() throws IOException {
+    void sortAList(@TempDir Path temporary) throws IOException {
+        folder = temporary;
         browser = Browser.start(folder.resolve("downloads"));
         list = folder.resolve("list.csv");
         out = folder.resolve("out");
@@ -99,7 +100,12 @@ class SurveyPageInBrowserTest {
     }
 
     private List<String> names() {
-        return browser.texts("#body td.name");
+        List<?> names =
+                (List<?>)
+                        browser.run(
+                                "return [...document.querySelectorAll('#body td.name')]"
+                                        + ".map(cell => cell.textContent)");
+        return names.stream().map(Object::toString).toList();
     }
 
     private void head(String title) {
@@ -144,9 +150,9 @@ class SurveyPageInBrowserTest {
             Map<String, NamedCsvRecord> rows = results();
             assertEquals(expected, order.stream().map(n -> rows.get(n).getField(column)).toList());
             WebElement cell = browser.find("th[aria-sort]");
-            assertEquals("ascending", cell.getAttribute("aria-sort"));
+            assertEquals("ascending", cell.getDomAttribute("aria-sort"));
             head(title);
-            assertEquals("descending", cell.getAttribute("aria-sort"));
+            assertEquals("descending", cell.getDomAttribute("aria-sort"));
             assertEquals(
                     expected.get(expected.size() - 1), rows.get(names().get(0)).getField(column));
         }
@@ -156,7 +162,7 @@ class SurveyPageInBrowserTest {
     void theTableFilters() throws IOException {
         Map<String, NamedCsvRecord> rows = results();
         assertEquals(rows.size() + " objects", browser.find("#count").getText());
-        new Select(browser.find("#decision")).selectByValue("substellar");
+        browser.choose("#decision", "substellar");
         List<String> substellar =
                 rows.values().stream()
                         .filter(r -> r.getField("decision").equals("substellar"))
@@ -181,7 +187,7 @@ class SurveyPageInBrowserTest {
                         .toList();
         Browser.await(() -> names().equals(middle), middle + " expected, found " + names());
         browser.find("#from").sendKeys("?");
-        assertEquals("true", browser.find("#from").getAttribute("aria-invalid"));
+        assertEquals("true", browser.find("#from").getDomAttribute("aria-invalid"));
         browser.find("#tools button[type=reset]").click();
         browser.find("#words").sendKeys("no such file");
         Browser.await(() -> names().equals(List.of(EVIL)), "found " + names());
@@ -198,7 +204,7 @@ class SurveyPageInBrowserTest {
                 .findElements(By.cssSelector("#histogram .bar"))
                 .get(1)
                 .sendKeys(Keys.ENTER);
-        String code = browser.find("#from").getAttribute("value");
+        String code = browser.find("#from").getDomProperty("value");
         assertFalse(code.isEmpty());
         assertTrue(names().size() < 14, "the bar selects nothing");
         assertEquals(names().size() + " of 14 objects", browser.find("#count").getText());
@@ -262,7 +268,7 @@ class SurveyPageInBrowserTest {
     void bothMapsHaveAPlaceForTheObjects() {
         click(names().get(2));
         int[] near = ring("#map");
-        new Select(browser.find("#plane")).selectByVisibleText("principal axes");
+        browser.choose("#plane", "principal axes");
         int[] axes = ring("#map");
         assertNotEquals(List.of(near[0], near[1]), List.of(axes[0], axes[1]));
     }
@@ -272,8 +278,8 @@ class SurveyPageInBrowserTest {
         Actions keys = new Actions(browser.driver());
         keys.sendKeys(Keys.ARROW_DOWN).sendKeys(Keys.ARROW_DOWN).perform();
         assertEquals(names().get(1), selected());
-        String row = browser.find("#body tr[aria-selected=true]").getAttribute("id");
-        assertEquals(row, browser.find("#table").getAttribute("aria-activedescendant"));
+        String row = browser.find("#body tr[aria-selected=true]").getDomAttribute("id");
+        assertEquals(row, browser.find("#table").getDomAttribute("aria-activedescendant"));
         new Actions(browser.driver()).sendKeys(Keys.END).perform();
         assertEquals(EVIL, selected());
         new Actions(browser.driver()).sendKeys("v").perform();
@@ -290,7 +296,7 @@ class SurveyPageInBrowserTest {
         browser.open(page(), fragment);
         assertEquals(name, selected());
         WebElement link = browser.find("#body tr[aria-selected=true] a");
-        String address = link.getAttribute("href");
+        String address = link.getDomProperty("href");
         assertTrue(Files.exists(Path.of(java.net.URI.create(address))), address);
         link.click();
         Browser.await(
@@ -330,18 +336,18 @@ class SurveyPageInBrowserTest {
         Path downloads = folder.resolve("downloads");
         String name = names().get(2);
         click(name);
-        new Select(browser.find("#call")).selectByVisibleText("giant");
+        browser.choose("#call", "giant");
         browser.find("#said-type").sendKeys("M7 III");
         browser.find("#note").sendKeys(EVIL_NOTE);
         click(EVIL);
-        new Select(browser.find("#call")).selectByVisibleText("bad data");
+        browser.choose("#call", "bad data");
         assertEquals("2 not exported", browser.find("#kept").getText());
         browser.open(page(), "");
         click(name);
-        assertEquals(EVIL_NOTE, browser.find("#note").getAttribute("value"));
+        assertEquals(EVIL_NOTE, browser.find("#note").getDomProperty("value"));
         String row = browser.find("#body tr[aria-selected=true]").getText();
         assertTrue(row.contains("M7 III") && row.contains("giant"), row);
-        new Select(browser.find("#judged")).selectByValue("differs");
+        browser.choose("#judged", "differs");
         assertTrue(names().contains(name), names().toString());
 
         Path file = downloads.resolve("verdicts.csv");
@@ -360,8 +366,8 @@ class SurveyPageInBrowserTest {
                 "[]",
                 browser.run(
                         "return localStorage.getItem('emberline verdicts ' + location.pathname)"));
-        assertEquals(EVIL_NOTE, browser.find("#note").getAttribute("value"));
-        assertEquals("giant", browser.find("#call").getAttribute("value"));
+        assertEquals(EVIL_NOTE, browser.find("#note").getDomProperty("value"));
+        assertEquals("giant", browser.find("#call").getDomProperty("value"));
 
         assertEquals(
                 ExitCode.SOME_FAILED,
@@ -369,6 +375,45 @@ class SurveyPageInBrowserTest {
         assertVerdict(results().get(name));
         Files.delete(out.resolve("verdicts.csv"));
         CommandRun.of("sort", list, "--out", out);
+    }
+
+    /** Ten thousand rows: few are in the page at a time, and none is lost. */
+    @Test
+    void aLargeSurveyOpens() throws IOException {
+        List<String> rows =
+                Files.readAllLines(page()).stream()
+                        .filter(line -> line.startsWith("[\"Tamarisk"))
+                        .map(
+                                line ->
+                                        line.endsWith(",")
+                                                ? line.substring(0, line.length() - 1)
+                                                : line)
+                        .toList();
+        assertEquals(13, rows.size());
+        int many = 10_000;
+        Path large = folder.resolve("large.html");
+        try (SurveyPage page = SurveyPage.open(large, "Large", "0.1.0")) {
+            for (int i = 0; i < many; i++) {
+                page.add(
+                        SurveyRow.parse(
+                                rows.get(i % rows.size())
+                                        .replaceFirst("Tamarisk", "Object " + i + " ")));
+            }
+        }
+        assertTrue(Files.size(large) < 15_000_000, Files.size(large) + " bytes");
+        browser.open(large, "");
+        double seconds =
+                ((Number) browser.run("return performance.getEntriesByName('ready')[0].startTime"))
+                                .doubleValue()
+                        / 1000;
+        assertTrue(seconds < 10, "ready after " + seconds + " s (2 s on an idle machine)");
+        assertEquals(many + " objects", browser.find("#count").getText());
+        assertTrue(names().size() < 60, names().size() + " rows in the page");
+        assertEquals("principal axes", browser.run("return document.getElementById('plane').textContent"));
+        new Actions(browser.driver()).sendKeys(Keys.END).perform();
+        assertTrue(selected().startsWith("Object 9999 "), selected());
+        browser.find("#words").sendKeys("object 7777 ");
+        Browser.await(() -> names().size() == 1, "found " + names());
     }
 
     private static void assertVerdict(NamedCsvRecord row) {

@@ -95,8 +95,7 @@ class PrincipalAxesTest {
                 early.add(placed.scores());
             }
         }
-        double apart =
-                Math.hypot(mean(late, 0) - mean(early, 0), mean(late, 1) - mean(early, 1));
+        double apart = Math.hypot(mean(late, 0) - mean(early, 0), mean(late, 1) - mean(early, 1));
         assertTrue(apart > 2, "late T dwarfs lie only " + apart + " from M4 to L2");
     }
 

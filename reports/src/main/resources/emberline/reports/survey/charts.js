@@ -8,13 +8,20 @@
 
   const readShades = () => {
     const style = getComputedStyle(document.documentElement);
+    mixed.clear();
     shades = { ramp: STOPS.map(([at, name]) => [at, hex(style.getPropertyValue(name))]) };
     ['ink', 'quiet', 'rule', 'accent', 'under', 'other', 'card'].forEach(name => {
       shades[name] = style.getPropertyValue('--' + name).trim();
     });
   };
   const hex = text => [1, 3, 5].map(i => parseInt(text.trim().slice(i, i + 2), 16));
+  const mixed = new Map();
   const shadeOf = type => {
+    const step = Math.round(type * 4);
+    if (!mixed.has(step)) { mixed.set(step, mix(step / 4)); }
+    return mixed.get(step);
+  };
+  const mix = type => {
     const ramp = shades.ramp;
     const t = Math.max(ramp[0][0], Math.min(ramp[ramp.length - 1][0], type));
     let i = 0;
@@ -38,7 +45,7 @@
     }
   };
   const LINES = ['cross', 'plus', 'star', 'hoop'];
-  const paintGlyph = (pen, kind, type, x, y, r) => {
+  const paintGlyph = (pen, kind, type, x, y, r, plain) => {
     const glyph = kind === 'late dwarf' && type === null ? 'hoop' : GLYPHS[kind] || 'hoop';
     const shade = kind === 'unlike known' ? shades.accent
       : type !== null && (kind === 'late dwarf' || kind === '') ? shadeOf(type) : shades.other;
@@ -50,9 +57,11 @@
     } else {
       pen.fillStyle = shade;
       pen.fill();
-      pen.strokeStyle = shades.card;
-      pen.lineWidth = 0.6;
-      pen.stroke();
+      if (!plain) {
+        pen.strokeStyle = shades.card;
+        pen.lineWidth = 0.6;
+        pen.stroke();
+      }
     }
   };
 
@@ -148,11 +157,11 @@
       const r = plot.spots.length > 2000 ? 2.2 : plot.spots.length > 300 ? 3 : 4;
       pen.globalAlpha = .13;
       plot.spots.forEach(s => {
-        if (s.object.at < 0) { paintGlyph(pen, s.object.finalKind, s.object.finalNumber, plot.px(s.x), plot.py(s.y), r * .8); }
+        if (s.object.at < 0) { paintGlyph(pen, s.object.finalKind, s.object.finalNumber, plot.px(s.x), plot.py(s.y), r * .8, true); }
       });
       pen.globalAlpha = 1;
       plot.spots.forEach(s => {
-        if (s.object.at >= 0) { paintGlyph(pen, s.object.finalKind, s.object.finalNumber, plot.px(s.x), plot.py(s.y), r); }
+        if (s.object.at >= 0) { paintGlyph(pen, s.object.finalKind, s.object.finalNumber, plot.px(s.x), plot.py(s.y), r, plot.spots.length > 2000); }
       });
       if (plot.spots.length === 0) {
         pen.fillStyle = shades.quiet;

@@ -50,9 +50,9 @@
 
   const facts = () => {
     const place = $('facts');
-    const below = $('more');
+    const rest = $('more');
     place.replaceChildren();
-    below.replaceChildren();
+    rest.replaceChildren();
     $('verdict').hidden = picked === null;
     if (picked === null) {
       place.append(element('h2', 'No object selected'),
@@ -79,12 +79,12 @@
       picked.next_step ? `next: ${picked.next_step}` : '',
       picked.status === 'failed' ? '' : picked.reason,
     ].filter(Boolean).join('; ');
-    if (more) { below.append(element('p', more + (/[.!?]$/.test(more) ? '' : '.'), 'quiet')); }
+    if (more) { rest.append(element('p', more + (/[.!?]$/.test(more) ? '' : '.'), 'quiet')); }
     if (picked.cautions.length > 0) {
       const list = element('ul');
       picked.cautions.forEach(text => list.append(text.startsWith('!')
         ? element('li', text.slice(1), 'warning') : element('li', text)));
-      below.append(list);
+      rest.append(list);
     }
     $('call').value = picked.said.verdict || '';
     $('said-type').value = picked.said.type || '';
@@ -127,6 +127,7 @@
     $(id).addEventListener('input', () => {
       if (!picked) { return; }
       say(picked, field, $(id).value.trim());
+      made = new Map();
       tellSaid();
       fillFilters();
       legend();
@@ -256,4 +257,5 @@
   try { asked = decodeURIComponent(location.hash.slice(1)); } catch (trouble) { /* a broken address selects nothing */ }
   if (asked) { pick(objects.find(o => o.file === asked), true); }
   document.documentElement.dataset.ready = 'yes';
+  performance.mark('ready');
 })();

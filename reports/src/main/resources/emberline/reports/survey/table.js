@@ -180,54 +180,70 @@
     return object => tests.every(test => test(object));
   };
 
-  const space = (height, parent) => {
+  const makeSpace = () => {
     const row = element('tr', null, 'space');
     row.setAttribute('aria-hidden', 'true');
     const cell = element('td');
     cell.colSpan = COLUMNS.length;
-    cell.style.height = height + 'px';
     row.append(cell);
-    parent.append(row);
+    return row;
+  };
+  const above = makeSpace();
+  const below = makeSpace();
+  const remark = text => {
+    const row = element('tr', null, 'space');
+    const cell = element('td', text, 'empty');
+    cell.colSpan = COLUMNS.length;
+    row.append(cell);
+    return row;
+  };
+  // What stays is not touched: a row that is taken out, even for a moment, loses the click on it.
+  const put = rows => {
+    const stay = new Set(rows);
+    [...body.children].forEach(row => { if (!stay.has(row)) { row.remove(); } });
+    let next = body.firstChild;
+    rows.forEach(row => {
+      if (row === next) { next = next.nextSibling; } else { body.insertBefore(row, next); }
+    });
+  };
+
+  // Rows in view are kept; a change of what they say forgets them.
+  let made = new Map();
+  const filled = object => {
+    const row = element('tr', null, 'row');
+    row.id = 'row-' + object.place;
+    row.dataset.place = object.place;
+    COLUMNS.forEach(column => {
+      const cell = element('td', null, column.kind);
+      cell.setAttribute('role', 'gridcell');
+      cell.dataset.key = column.key;
+      column.fill(cell, object);
+      row.append(cell);
+    });
+    return row;
   };
 
   const render = all => {
     const from = all ? 0 : Math.max(0, Math.floor(scroll.scrollTop / ROW) - MORE);
     const to = all ? Math.min(shown.length, PRINT)
       : Math.min(shown.length, Math.ceil((scroll.scrollTop + scroll.clientHeight) / ROW) + MORE);
-    const rows = document.createDocumentFragment();
-    if (from > 0) { space(from * ROW, rows); }
+    const rows = [above];
+    const still = new Map();
+    above.firstChild.style.height = from * ROW + 'px';
+    below.firstChild.style.height = all ? '0' : (shown.length - to) * ROW + 'px';
     for (let i = from; i < to; i++) {
       const object = shown[i];
-      const row = element('tr', null, 'row');
-      row.id = 'row-' + object.place;
+      const row = made.get(object) || filled(object);
       row.setAttribute('aria-rowindex', i + 2);
       row.setAttribute('aria-selected', object === picked);
-      row.dataset.place = object.place;
-      COLUMNS.forEach(column => {
-        const cell = element('td', null, column.kind);
-        cell.setAttribute('role', 'gridcell');
-        cell.dataset.key = column.key;
-        column.fill(cell, object);
-        row.append(cell);
-      });
-      rows.append(row);
+      still.set(object, row);
+      rows.push(row);
     }
-    if (!all && to < shown.length) { space((shown.length - to) * ROW, rows); }
-    if (all && to < shown.length) {
-      const row = element('tr', null, 'space');
-      const cell = element('td', `${shown.length - to} rows more; filter the table to print them.`, 'empty');
-      cell.colSpan = COLUMNS.length;
-      row.append(cell);
-      rows.append(row);
-    }
-    if (shown.length === 0) {
-      const row = element('tr', null, 'space');
-      const cell = element('td', 'No object matches.', 'empty');
-      cell.colSpan = COLUMNS.length;
-      row.append(cell);
-      rows.append(row);
-    }
-    body.replaceChildren(rows);
+    if (all && to < shown.length) { rows.push(remark(`${shown.length - to} rows more; filter the table to print them.`)); }
+    if (shown.length === 0) { rows.push(remark('No object matches.')); }
+    rows.push(below);
+    put(rows);
+    made = still;
     const row = picked && picked.at >= 0 ? 'row-' + picked.place : null;
     if (row && $(row)) { $('table').setAttribute('aria-activedescendant', row); } else { $('table').removeAttribute('aria-activedescendant'); }
   };
