@@ -341,7 +341,15 @@ class SurveyPageInBrowserTest {
         browser.find("#note").sendKeys(EVIL_NOTE);
         click(EVIL);
         browser.choose("#call", "bad data");
-        assertEquals("2 not exported", browser.find("#kept").getText());
+        assertEquals(
+                "2 not exported",
+                browser.find("#kept").getText(),
+                () ->
+                        browser.find("#card h2").getText()
+                                + " "
+                                + browser.find("#call").getDomProperty("value")
+                                + " "
+                                + browser.run("return JSON.stringify(localStorage)"));
         browser.open(page(), "");
         click(name);
         assertEquals(EVIL_NOTE, browser.find("#note").getDomProperty("value"));

@@ -124,7 +124,7 @@
     $('call').append(choice);
   });
   const told = (id, field) => {
-    $(id).addEventListener('input', () => {
+    $(id).addEventListener(/SELECT/.test($(id).tagName) ? 'change' : 'input', () => {
       if (!picked) { return; }
       say(picked, field, $(id).value.trim());
       made = new Map();
