@@ -12,7 +12,9 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.regex.Matcher;
 
 /**
@@ -32,6 +34,10 @@ public final class SurveyPage implements Closeable {
     private final Writer writer;
     private final String end;
     private final PageMap map = new PageMap();
+
+    /** Sentences that many rows share, by their number. */
+    private final Map<String, Integer> texts = new LinkedHashMap<>();
+
     private boolean empty = true;
     private boolean failed;
 
@@ -98,7 +104,11 @@ public final class SurveyPage implements Closeable {
      * @throws IOException if it cannot be written
      */
     public void add(SurveyRow row) throws IOException {
-        append((empty ? "\n" : ",\n") + row.text());
+        List<Integer> numbers =
+                row.cautions().stream()
+                        .map(text -> texts.computeIfAbsent(text, t -> texts.size()))
+                        .toList();
+        append((empty ? "\n" : ",\n") + row.text(numbers));
         map.add(row);
         empty = false;
     }
@@ -117,7 +127,13 @@ public final class SurveyPage implements Closeable {
     public void close() throws IOException {
         try (writer) {
             if (!failed) {
-                append("\n],\"map\":" + map.json() + "}" + end);
+                append(
+                        "\n],\"texts\":"
+                                + PageJson.of(texts.keySet())
+                                + ",\"map\":"
+                                + map.json()
+                                + "}"
+                                + end);
             }
         } catch (IOException | RuntimeException e) {
             failed = true;

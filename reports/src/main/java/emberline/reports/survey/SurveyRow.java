@@ -66,18 +66,22 @@ public final class SurveyRow {
                     "kin_distance",
                     "listed",
                     "sentence",
-                    "cautions",
                     "values",
                     "map",
                     "file",
                     "report",
-                    "sparks");
+                    "sparks",
+                    "cautions");
 
-    private final String text;
+    /** All cells but the last, without the closing bracket. */
+    private final String head;
+
+    private final List<String> cautions;
     private final double[] place;
 
-    private SurveyRow(String text, double[] place) {
-        this.text = text;
+    private SurveyRow(String head, List<String> cautions, double[] place) {
+        this.head = head;
+        this.cautions = cautions;
         this.place = place;
     }
 
@@ -122,12 +126,6 @@ public final class SurveyRow {
                                 + result.candidate().text("known_gravity").orElse(""))
                         .strip());
         cells.add(FindingSentence.of(result));
-        cells.add(
-                result.findings().stream()
-                        .filter(f -> f.severity() != Finding.Severity.NOTE)
-                        .map(f -> (f.severity() == Finding.Severity.WARNING ? "!" : "") + f.text())
-                        .distinct()
-                        .toList());
         cells.add(Quantities.of(result));
         double[] place =
                 result.best()
@@ -138,7 +136,14 @@ public final class SurveyRow {
         cells.add(hasReport);
         cells.add(
                 result.spectra().stream().map(s -> Sparkline.of(s.prepared().spectrum())).toList());
-        return new SurveyRow(PageJson.of(cells), place);
+        List<String> cautions =
+                result.findings().stream()
+                        .filter(f -> f.severity() != Finding.Severity.NOTE)
+                        .map(f -> (f.severity() == Finding.Severity.WARNING ? "!" : "") + f.text())
+                        .distinct()
+                        .toList();
+        String text = PageJson.of(cells);
+        return new SurveyRow(text.substring(0, text.length() - 1), cautions, place);
     }
 
     /**
@@ -163,7 +168,10 @@ public final class SurveyRow {
                 cells.get(map) instanceof List<?> scores
                         ? scores.stream().mapToDouble(s -> ((Number) s).doubleValue()).toArray()
                         : new double[0];
-        return new SurveyRow(text, place);
+        List<String> cautions =
+                ((List<?>) cells.get(cells.size() - 1)).stream().map(Object::toString).toList();
+        int end = text.length() - PageJson.of(cautions).length() - 2;
+        return new SurveyRow(text.substring(0, end), cautions, place);
     }
 
     /**
@@ -172,7 +180,17 @@ public final class SurveyRow {
      * @return a JSON array on one line that may stand in a script element
      */
     public String text() {
-        return text;
+        return head + "," + PageJson.of(cautions) + "]";
+    }
+
+    /** The row with its cautions by their numbers. */
+    String text(List<Integer> numbers) {
+        return head + "," + PageJson.of(numbers) + "]";
+    }
+
+    /** What the observer should beware of, each a sentence; a warning begins with {@code !}. */
+    List<String> cautions() {
+        return cautions;
     }
 
     /** Its place along the axes of the map; empty where it has none. */

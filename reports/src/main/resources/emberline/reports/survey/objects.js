@@ -15,6 +15,7 @@
     return object;
   });
   data.rows = null;
+  const cautionsOf = object => object.cautions.map(number => data.texts[number]);
 
   const element = (tag, text, kind) => {
     const made = document.createElement(tag);
@@ -62,7 +63,7 @@
       const said = object.said || {};
       object.words = [object.name, object.status, object.reason, object.finalType, object.finalGravity,
         object.finalKind, object.finalDecision, object.type, object.kind, object.sentence, object.findings,
-        object.cautions.join(' '), object.listed, object.kin, object.next_step, said.verdict, said.type,
+        cautionsOf(object).join(' '), object.listed, object.kin, object.next_step, said.verdict, said.type,
         said.gravity, said.note].join(' ').toLowerCase();
     }
     return object.words;

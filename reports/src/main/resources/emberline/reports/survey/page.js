@@ -82,7 +82,7 @@
     if (more) { rest.append(element('p', more + (/[.!?]$/.test(more) ? '' : '.'), 'quiet')); }
     if (picked.cautions.length > 0) {
       const list = element('ul');
-      picked.cautions.forEach(text => list.append(text.startsWith('!')
+      cautionsOf(picked).forEach(text => list.append(text.startsWith('!')
         ? element('li', text.slice(1), 'warning') : element('li', text)));
       rest.append(list);
     }

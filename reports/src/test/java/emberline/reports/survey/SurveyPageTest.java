@@ -9,6 +9,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import com.fasterxml.jackson.jr.ob.JSON;
 import emberline.reports.Samples;
 import emberline.reports.page.FindingSentence;
+import emberline.spectrum.Finding.Severity;
 import emberline.spectrum.Spectrum;
 import emberline.survey.ObjectResult;
 import emberline.survey.verdict.Verdict;
@@ -64,6 +65,11 @@ class SurveyPageTest {
         assertEquals(FindingSentence.of(dwarf), first.get(keys.indexOf("sentence")));
         assertEquals(6, ((List<?>) first.get(keys.indexOf("map"))).size());
         assertNull(second.get(keys.indexOf("map")));
+        List<?> texts = (List<?>) data.get("texts");
+        assertEquals(
+                dwarf.findings().stream().filter(f -> f.severity() != Severity.NOTE).count(),
+                texts.size());
+        assertEquals(texts.size(), ((List<?>) first.get(keys.indexOf("cautions"))).size());
         List<?> values = (List<?>) first.get(keys.indexOf("values"));
         assertEquals(((List<?>) data.get("quantities")).size(), values.size());
         assertEquals(
