@@ -1,6 +1,7 @@
 package emberline.cli;
 
 import emberline.read.UnreadableListException;
+import emberline.survey.verdict.UnreadableVerdictsException;
 import java.io.IOException;
 import picocli.CommandLine;
 import picocli.CommandLine.IExecutionExceptionHandler;
@@ -12,7 +13,8 @@ final class FailureHandler implements IExecutionExceptionHandler {
     @Override
     public int handleExecutionException(
             Exception failure, CommandLine commandLine, ParseResult parsed) {
-        if (failure instanceof UnreadableListException) {
+        if (failure instanceof UnreadableListException
+                || failure instanceof UnreadableVerdictsException) {
             commandLine.getErr().println(failure.getMessage());
             return ExitCode.NOTHING_READ;
         }

@@ -26,4 +26,13 @@ final class FileChecksum {
             throw new IllegalStateException(e); // every Java platform has SHA-256
         }
     }
+
+    /** The SHA-256 checksum of bytes, hexadecimal. */
+    static String sha256(byte[] bytes) {
+        try {
+            return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
+        } catch (NoSuchAlgorithmException e) {
+            throw new IllegalStateException(e); // every Java platform has SHA-256
+        }
+    }
 }

@@ -11,6 +11,7 @@ import emberline.survey.ObjectResult;
 import emberline.survey.Status;
 import emberline.survey.SurveyRunner;
 import emberline.survey.SurveySettings;
+import emberline.survey.verdict.Verdicts;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.EnumMap;
@@ -52,6 +53,8 @@ final class SortCommand implements Callable<Integer> {
     @Option(names = "--no-reports", description = "Write no PDF reports.")
     private boolean noReports;
 
+    @Mixin private VerdictOptions verdictOptions;
+
     private final Map<Status, Long> counts = new EnumMap<>(Status.class);
 
     @Override
@@ -59,24 +62,30 @@ final class SortCommand implements Callable<Integer> {
         SurveySettings settings = listOptions.settings().withJudging(judgingOptions.judging());
         FeatureCatalogue catalogue = listOptions.catalogue();
         CandidateList candidates = listOptions.read();
+        Verdicts verdicts = verdictOptions.verdicts(out);
         Chain chain = new Chain(catalogue, listOptions.measuring(), settings);
         Progress progress =
                 new Progress(
                         spec.commandLine().getErr(),
                         Progress.isTerminal(),
                         candidates.rows().size());
+        verdictOptions.strangers(verdicts, candidates).forEach(progress::say);
         try (RunFolder folder =
                 new RunFolder(
                         out,
                         candidates,
-                        record(settings),
+                        record(settings, verdicts),
                         pdf(settings, catalogue),
                         note(settings, candidates),
                         catalogue)) {
+            verdictOptions.keep(verdicts, out);
             new SurveyRunner(chain, settings.threads())
                     .run(
                             candidates,
-                            result -> {
+                            measured -> {
+                                ObjectResult result =
+                                        measured.withVerdict(
+                                                verdicts.of(measured.candidate().name()));
                                 folder.writeObject(result);
                                 return result;
                             },
@@ -137,10 +146,12 @@ final class SortCommand implements Callable<Integer> {
                 settings.seed());
     }
 
-    private RunJson record(SurveySettings settings) throws IOException {
+    private RunJson record(SurveySettings settings, Verdicts verdicts) throws IOException {
+        Map<String, String> options = RunOptions.of(settings, listOptions.measuring(), !noReports);
+        options.put("verdicts_sha256", VerdictOptions.checksum(verdicts));
         return new RunJson(
                 ProgramVersion.number(),
-                RunOptions.of(settings, listOptions.measuring(), !noReports),
+                options,
                 settings.seed(),
                 FileChecksum.sha256(listOptions.file()));
     }

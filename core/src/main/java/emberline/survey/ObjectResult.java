@@ -5,6 +5,7 @@ import emberline.measure.Measurements;
 import emberline.place.Placement;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
+import emberline.survey.verdict.Verdict;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -21,6 +22,7 @@ import java.util.Optional;
  * @param placement type and gravity; empty where nothing was read
  * @param judgement mass, age and decision; empty where there is no type or it means nothing
  * @param findings all findings, those of the spectra first
+ * @param verdict what an observer says of it; empty where nothing is said
  */
 public record ObjectResult(
         Candidate candidate,
@@ -30,7 +32,8 @@ public record ObjectResult(
         Optional<Measurements> best,
         Optional<Placement> placement,
         Optional<Judgement> judgement,
-        List<Finding> findings) {
+        List<Finding> findings,
+        Optional<Verdict> verdict) {
 
     /** Copies the lists. */
     public ObjectResult {
@@ -57,7 +60,16 @@ public record ObjectResult(
             Optional<Measurements> best,
             Optional<Placement> placement,
             List<Finding> findings) {
-        this(candidate, status, reason, spectra, best, placement, Optional.empty(), findings);
+        this(
+                candidate,
+                status,
+                reason,
+                spectra,
+                best,
+                placement,
+                Optional.empty(),
+                findings,
+                Optional.empty());
     }
 
     /**
@@ -70,7 +82,26 @@ public record ObjectResult(
         List<Finding> all = new ArrayList<>(findings);
         all.addAll(made.findings());
         return new ObjectResult(
-                candidate, status, reason, spectra, best, placement, Optional.of(made), all);
+                candidate,
+                status,
+                reason,
+                spectra,
+                best,
+                placement,
+                Optional.of(made),
+                all,
+                verdict);
+    }
+
+    /**
+     * The same object with an observer's verdict.
+     *
+     * @param said what the observer says; empty for nothing
+     * @return a new result
+     */
+    public ObjectResult withVerdict(Optional<Verdict> said) {
+        return new ObjectResult(
+                candidate, status, reason, spectra, best, placement, judgement, findings, said);
     }
 
     /**
@@ -83,6 +114,6 @@ public record ObjectResult(
         List<Finding> all = new ArrayList<>(findings);
         all.addAll(more);
         return new ObjectResult(
-                candidate, status, reason, spectra, best, placement, judgement, all);
+                candidate, status, reason, spectra, best, placement, judgement, all, verdict);
     }
 }

@@ -137,6 +137,7 @@ public final class ResultColumns {
                                                 .collect(Collectors.joining(" ")))
                         .withUcd("meta.code"));
         columns.addAll(JudgementColumns.all());
+        columns.addAll(VerdictColumns.all(columns));
         return List.copyOf(columns);
     }
 

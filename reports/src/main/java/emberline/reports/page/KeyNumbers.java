@@ -16,6 +16,7 @@ import emberline.spectrum.SpectralType;
 import emberline.spectrum.Spectrum;
 import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
+import emberline.survey.verdict.Verdict;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -29,6 +30,9 @@ final class KeyNumbers {
     private static final List<String> MAGNITUDES =
             List.of("i_mag", "z_mag", "y_mag", "j_mag", "h_mag", "k_mag", "w1_mag", "w2_mag");
 
+    /** Characters of a verdict that find room; the JSON holds all. */
+    private static final int LONGEST_VERDICT = 90;
+
     private KeyNumbers() {}
 
     /** A number with its label. */
@@ -37,6 +41,7 @@ final class KeyNumbers {
     /** What was found. */
     static List<Entry> found(ObjectResult result) {
         List<Entry> entries = new ArrayList<>();
+        result.verdict().ifPresent(verdict -> addVerdict(entries, verdict));
         result.placement().flatMap(p -> p.type()).ifPresent(type -> addType(entries, type));
         result.placement().ifPresent(p -> addGravity(entries, p.gravity()));
         result.placement().ifPresent(p -> addKind(entries, p.kind()));
@@ -50,6 +55,16 @@ final class KeyNumbers {
         addSpectra(entries, result);
         addListed(entries, result.candidate());
         return entries;
+    }
+
+    private static void addVerdict(List<Entry> entries, Verdict verdict) {
+        String words = verdict.words().replaceAll("\\s+", " ");
+        entries.add(
+                new Entry(
+                        "Observer\u2019s verdict",
+                        words.length() > LONGEST_VERDICT
+                                ? words.substring(0, LONGEST_VERDICT) + " \u2026"
+                                : words));
     }
 
     private static void addType(List<Entry> entries, TypeEstimate type) {

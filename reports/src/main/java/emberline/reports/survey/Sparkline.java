@@ -1,12 +1,13 @@
 package emberline.reports.survey;
 
 import emberline.spectrum.Spectrum;
+import java.util.Locale;
 
 /**
  * A spectrum as a short text for a thumbnail: one sign a column, 64 levels, a dot where there are
  * no data. All thumbnails cover 0.6 to 2.45 micron in equal steps of log wavelength, so that
  * features stand below each other; a spectrum of which less than a fifth lies there is drawn over
- * its own range.
+ * its own range, which stands before its signs ({@code 0.350~0.550~ABC...}, in micron).
  */
 final class Sparkline {
 
@@ -24,6 +25,7 @@ final class Sparkline {
     private Sparkline() {}
 
     static String of(Spectrum spectrum) {
+        String range = "";
         double low = LOW_MICRON;
         double high = HIGH_MICRON;
         int last = spectrum.size() - 1;
@@ -31,6 +33,7 @@ final class Sparkline {
         if (inside < LEAST_INSIDE * spectrum.size()) {
             low = spectrum.lowEdgeMicron(0);
             high = spectrum.highEdgeMicron(last);
+            range = String.format(Locale.ROOT, "%.3f~%.3f~", low, high);
         }
         double step = Math.log(high / low) / COLUMNS;
         double[] sums = new double[COLUMNS];
@@ -47,7 +50,7 @@ final class Sparkline {
                 }
             }
         }
-        return text(sums, weights);
+        return range + text(sums, weights);
     }
 
     private static String text(double[] sums, double[] weights) {

@@ -1,57 +1,43 @@
 package emberline.reports.survey;
 
-import com.fasterxml.jackson.jr.ob.JSON;
-import emberline.place.GravityVerdict;
-import emberline.place.Placement;
 import emberline.reports.attach.AtomicFile;
-import emberline.reports.attach.ResultColumn;
-import emberline.reports.attach.ResultColumns;
 import emberline.survey.ObjectResult;
+import emberline.survey.verdict.VerdictCall;
 import java.io.Closeable;
 import java.io.FileNotFoundException;
 import java.io.IOException;
 import java.io.InputStream;
 import java.io.Writer;
-import java.math.BigDecimal;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.OptionalDouble;
+import java.util.Map;
 import java.util.regex.Matcher;
 
 /**
  * The survey page: one HTML file with a table of all objects that can be sorted and filtered,
- * thumbnails of the spectra, a histogram of the types, and links to the reports and the JSON files
- * beside it. It needs no network. Fed object by object in the order of the list, of which each
- * leaves one line in a temporary file; the page appears when it is closed. Not for use by several
- * threads at once.
+ * thumbnails of the spectra, a histogram of the types, diagrams and a map whose points select rows,
+ * a form for the observer's own verdict, and links to the reports and the JSON files beside it. It
+ * needs no network. Fed object by object in the order of the list, of which each leaves one line in
+ * a temporary file; the page appears when it is closed. Not for use by several threads at once.
  */
 public final class SurveyPage implements Closeable {
 
-    /** Columns of the results table that go into the page under their own names. */
-    private static final List<String> TAKEN =
-            List.of(
-                    "name",
-                    "status",
-                    "reason",
-                    "type",
-                    "type_number",
-                    "type_sigma",
-                    "type_lo95",
-                    "type_hi95",
-                    "gravity",
-                    "snr",
-                    "resolution",
-                    "findings");
-
-    private static final List<ResultColumn> COLUMNS =
-            ResultColumns.standard().stream().filter(c -> TAKEN.contains(c.name())).toList();
+    /** The parts of the script in their order. */
+    private static final List<String> SCRIPTS =
+            List.of("objects.js", "verdicts.js", "charts.js", "table.js", "page.js");
 
     private final AtomicFile file;
     private final Writer writer;
     private final String end;
+    private final PageMap map = new PageMap();
+
+    /** Sentences that many rows share, by their number. */
+    private final Map<String, Integer> texts = new LinkedHashMap<>();
+
     private boolean empty = true;
     private boolean failed;
 
@@ -77,15 +63,25 @@ public final class SurveyPage implements Closeable {
         String filled =
                 put(put(template, "@TITLE@", escaped(title)), "@VERSION@", escaped(programVersion));
         filled = put(filled, "@STYLE@", resource("survey.css"));
-        filled = put(filled, "@SCRIPT@", resource("survey.js"));
+        StringBuilder script = new StringBuilder();
+        for (String part : SCRIPTS) {
+            script.append(resource(part));
+        }
+        filled = put(filled, "@SCRIPT@", script.toString());
         int data = filled.indexOf("@DATA@");
         AtomicFile file = AtomicFile.beside(target);
         Writer writer = Files.newBufferedWriter(file.temporary(), StandardCharsets.UTF_8);
         SurveyPage page = new SurveyPage(file, writer, filled.substring(data + "@DATA@".length()));
-        List<String> keys = new ArrayList<>(COLUMNS.stream().map(ResultColumn::name).toList());
-        keys.addAll(List.of("p_gravity", "listed", "file", "report", "spark"));
         page.append(filled.substring(0, data));
-        page.append("{\"keys\":" + json(keys) + ",\"rows\":[");
+        page.append(
+                "{\"keys\":"
+                        + PageJson.of(SurveyRow.keys())
+                        + ",\"quantities\":"
+                        + PageJson.of(Quantities.titles())
+                        + ",\"calls\":"
+                        + PageJson.of(
+                                Arrays.stream(VerdictCall.values()).map(VerdictCall::word).toList())
+                        + ",\"rows\":[");
         return page;
     }
 
@@ -98,34 +94,23 @@ public final class SurveyPage implements Closeable {
      * @throws IOException if it cannot be written
      */
     public void add(ObjectResult result, String stem, boolean hasReport) throws IOException {
-        List<Object> cells = new ArrayList<>();
-        for (ResultColumn column : COLUMNS) {
-            String text = column.text(result);
-            boolean number = column.content() == ResultColumn.Content.NUMBER;
-            cells.add(!number ? text : text.isEmpty() ? null : new BigDecimal(text));
-        }
-        cells.add(share(result));
-        String type = result.candidate().text("known_type").orElse("");
-        String gravity = result.candidate().text("known_gravity").orElse("");
-        cells.add((type + " " + gravity).strip());
-        cells.add(stem);
-        cells.add(hasReport);
-        cells.add(
-                ResultColumns.leading(result)
-                        .map(s -> Sparkline.of(s.prepared().spectrum()))
-                        .orElse(""));
-        append((empty ? "\n" : ",\n") + json(cells));
-        empty = false;
+        add(SurveyRow.of(result, stem, hasReport));
     }
 
-    /** The probability of the gravity class that was given, to two decimals. */
-    private static Object share(ObjectResult result) {
-        GravityVerdict verdict = result.placement().map(Placement::gravity).orElse(null);
-        if (verdict == null || verdict.gravityClass().isEmpty()) {
-            return null;
-        }
-        OptionalDouble share = verdict.pOfClass();
-        return share.isPresent() ? Math.round(100 * share.getAsDouble()) / 100.0 : null;
+    /**
+     * Adds an object of which the row is there already.
+     *
+     * @param row its row
+     * @throws IOException if it cannot be written
+     */
+    public void add(SurveyRow row) throws IOException {
+        List<Integer> numbers =
+                row.cautions().stream()
+                        .map(text -> texts.computeIfAbsent(text, t -> texts.size()))
+                        .toList();
+        append((empty ? "\n" : ",\n") + row.text(numbers));
+        map.add(row);
+        empty = false;
     }
 
     /** Gives the page up: when it is closed the former page stays. */
@@ -142,9 +127,15 @@ public final class SurveyPage implements Closeable {
     public void close() throws IOException {
         try (writer) {
             if (!failed) {
-                append("\n]}" + end);
+                append(
+                        "\n],\"texts\":"
+                                + PageJson.of(texts.keySet())
+                                + ",\"map\":"
+                                + map.json()
+                                + "}"
+                                + end);
             }
-        } catch (IOException e) {
+        } catch (IOException | RuntimeException e) {
             failed = true;
             throw e;
         } finally {
@@ -164,17 +155,6 @@ public final class SurveyPage implements Closeable {
             failed = true;
             throw e;
         }
-    }
-
-    /** JSON that may stand in a script element: no sign in it can end the element. */
-    private static String json(Object value) throws IOException {
-        return JSON.std
-                .asString(value)
-                .replace("<", "\\u003c")
-                .replace(">", "\\u003e")
-                .replace("&", "\\u0026")
-                .replace("\u2028", "\\u2028")
-                .replace("\u2029", "\\u2029");
     }
 
     private static String escaped(String text) {
