@@ -14,6 +14,7 @@ import emberline.survey.SurveySettings;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.EnumMap;
+import java.util.LinkedHashMap;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
@@ -41,6 +42,7 @@ final class SortCommand implements Callable<Integer> {
     @Spec private CommandSpec spec;
     @Mixin private ListOptions listOptions;
     @Mixin private JudgingOptions judgingOptions;
+    @Mixin private StandardsOption standardsOption;
 
     @Option(
             names = "--out",
@@ -56,7 +58,10 @@ final class SortCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws IOException, InterruptedException {
-        SurveySettings settings = listOptions.settings().withJudging(judgingOptions.judging());
+        SurveySettings settings =
+                standardsOption.addTo(
+                        listOptions.settings().withJudging(judgingOptions.judging()),
+                        spec.commandLine().getErr());
         FeatureCatalogue catalogue = listOptions.catalogue();
         CandidateList candidates = listOptions.read();
         Chain chain = new Chain(catalogue, listOptions.measuring(), settings);
@@ -138,9 +143,16 @@ final class SortCommand implements Callable<Integer> {
     }
 
     private RunJson record(SurveySettings settings) throws IOException {
+        Map<String, String> options =
+                new LinkedHashMap<>(RunOptions.of(settings, listOptions.measuring(), !noReports));
+        if (standardsOption.file().isPresent()) {
+            Path standards = standardsOption.file().get();
+            options.put("standards", standards.getFileName().toString());
+            options.put("standards_sha256", FileChecksum.sha256(standards));
+        }
         return new RunJson(
                 ProgramVersion.number(),
-                RunOptions.of(settings, listOptions.measuring(), !noReports),
+                options,
                 settings.seed(),
                 FileChecksum.sha256(listOptions.file()));
     }

@@ -6,6 +6,7 @@ import emberline.place.calibrated.TypePriors;
 import emberline.prepare.ExtinctionLaw;
 import emberline.prepare.Preparing;
 import emberline.spectrum.Medium;
+import emberline.survey.ReddeningMode;
 import emberline.survey.SurveySettings;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
@@ -14,6 +15,19 @@ import picocli.CommandLine.Spec;
 
 /** Options that state something about all spectra of a run. */
 final class SpectrumOptions {
+
+    /** The words of {@code --fit-reddening}. */
+    private enum ReddeningWord {
+        AUTO(ReddeningMode.CALLED_FOR),
+        ALWAYS(ReddeningMode.ALWAYS),
+        NEVER(ReddeningMode.NEVER);
+
+        private final ReddeningMode mode;
+
+        ReddeningWord(ReddeningMode mode) {
+            this.mode = mode;
+        }
+    }
 
     @Spec(Spec.Target.MIXEE)
     private CommandSpec spec;
@@ -56,8 +70,15 @@ final class SpectrumOptions {
 
     @Option(
             names = "--fit-reddening",
-            description = "Fit type and extinction together (0 to 15 mag in V, R_V 3.1).")
-    private boolean fitReddening;
+            paramLabel = "auto|always|never",
+            arity = "0..1",
+            defaultValue = "auto",
+            fallbackValue = "always",
+            description =
+                    "Fit type and extinction together (0 to 15 mag in V, R_V 3.1): auto where the"
+                            + " kind or the colours call for it (default), always (also without a"
+                            + " word after it), or never; with --av never.")
+    private ReddeningWord fitReddening;
 
     @Option(
             names = "--velocity",
@@ -116,7 +137,7 @@ final class SpectrumOptions {
             throw new ParameterException(
                     spec.commandLine(), "--extinction-ratio: expected --av beside it");
         }
-        if (fitReddening && avMag != null) {
+        if (fitReddening == ReddeningWord.ALWAYS && avMag != null) {
             throw new ParameterException(
                     spec.commandLine(),
                     "--fit-reddening: expected no --av beside it, which states the extinction");
@@ -129,7 +150,7 @@ final class SpectrumOptions {
                 .withThreads(threads)
                 .withSeed(seed)
                 .withPrior(prior)
-                .withReddeningFit(fitReddening)
+                .withReddening(avMag == null ? fitReddening.mode : ReddeningMode.NEVER)
                 .withMeasuredRest(toRest)
                 .withPreparing(stated);
     }

@@ -3,6 +3,7 @@ package emberline.survey;
 import emberline.judge.Judgement;
 import emberline.measure.Measurements;
 import emberline.place.Placement;
+import emberline.place.standard.StandardVerdict;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
 import java.util.ArrayList;
@@ -20,6 +21,8 @@ import java.util.Optional;
  *     one with the smallest error; empty where nothing was read
  * @param placement type and gravity; empty where nothing was read
  * @param judgement mass, age and decision; empty where there is no type or it means nothing
+ * @param standards the comparison with the standards of the run; empty where none were given or
+ *     nothing was read
  * @param findings all findings, those of the spectra first
  */
 public record ObjectResult(
@@ -30,6 +33,7 @@ public record ObjectResult(
         Optional<Measurements> best,
         Optional<Placement> placement,
         Optional<Judgement> judgement,
+        Optional<StandardVerdict> standards,
         List<Finding> findings) {
 
     /** Copies the lists. */
@@ -57,7 +61,16 @@ public record ObjectResult(
             Optional<Measurements> best,
             Optional<Placement> placement,
             List<Finding> findings) {
-        this(candidate, status, reason, spectra, best, placement, Optional.empty(), findings);
+        this(
+                candidate,
+                status,
+                reason,
+                spectra,
+                best,
+                placement,
+                Optional.empty(),
+                Optional.empty(),
+                findings);
     }
 
     /**
@@ -70,7 +83,15 @@ public record ObjectResult(
         List<Finding> all = new ArrayList<>(findings);
         all.addAll(made.findings());
         return new ObjectResult(
-                candidate, status, reason, spectra, best, placement, Optional.of(made), all);
+                candidate,
+                status,
+                reason,
+                spectra,
+                best,
+                placement,
+                Optional.of(made),
+                standards,
+                all);
     }
 
     /**
@@ -83,6 +104,35 @@ public record ObjectResult(
         List<Finding> all = new ArrayList<>(findings);
         all.addAll(more);
         return new ObjectResult(
-                candidate, status, reason, spectra, best, placement, judgement, all);
+                candidate,
+                status,
+                reason,
+                spectra,
+                best,
+                placement,
+                judgement,
+                standards,
+                all);
+    }
+
+    /**
+     * The same object with a comparison with standards, whose findings come after the others.
+     *
+     * @param made the comparison
+     * @return a new result
+     */
+    public ObjectResult withStandards(StandardVerdict made) {
+        List<Finding> all = new ArrayList<>(findings);
+        all.addAll(made.findings(placement.flatMap(Placement::type)));
+        return new ObjectResult(
+                candidate,
+                status,
+                reason,
+                spectra,
+                best,
+                placement,
+                judgement,
+                Optional.of(made),
+                all);
     }
 }
