@@ -16,19 +16,6 @@ import picocli.CommandLine.Spec;
 /** Options that state something about all spectra of a run. */
 final class SpectrumOptions {
 
-    /** The words of {@code --fit-reddening}. */
-    private enum ReddeningWord {
-        AUTO(ReddeningMode.CALLED_FOR),
-        ALWAYS(ReddeningMode.ALWAYS),
-        NEVER(ReddeningMode.NEVER);
-
-        private final ReddeningMode mode;
-
-        ReddeningWord(ReddeningMode mode) {
-            this.mode = mode;
-        }
-    }
-
     @Spec(Spec.Target.MIXEE)
     private CommandSpec spec;
 
@@ -70,15 +57,15 @@ final class SpectrumOptions {
 
     @Option(
             names = "--fit-reddening",
-            paramLabel = "auto|always|never",
-            arity = "0..1",
-            defaultValue = "auto",
-            fallbackValue = "always",
             description =
-                    "Fit type and extinction together (0 to 15 mag in V, R_V 3.1): auto where the"
-                            + " kind or the colours call for it (default), always (also without a"
-                            + " word after it), or never; with --av never.")
-    private ReddeningWord fitReddening;
+                    "Fit type and extinction together for every object (0 to 15 mag in V, R_V 3.1);"
+                            + " without it they are where the kind or the colours call for it.")
+    private boolean fitReddening;
+
+    @Option(
+            names = "--no-reddening",
+            description = "Never fit extinction, not even where the kind calls for it.")
+    private boolean noReddening;
 
     @Option(
             names = "--velocity",
@@ -137,7 +124,11 @@ final class SpectrumOptions {
             throw new ParameterException(
                     spec.commandLine(), "--extinction-ratio: expected --av beside it");
         }
-        if (fitReddening == ReddeningWord.ALWAYS && avMag != null) {
+        if (fitReddening && noReddening) {
+            throw new ParameterException(
+                    spec.commandLine(), "--fit-reddening: expected no --no-reddening beside it");
+        }
+        if (fitReddening && avMag != null) {
             throw new ParameterException(
                     spec.commandLine(),
                     "--fit-reddening: expected no --av beside it, which states the extinction");
@@ -150,9 +141,16 @@ final class SpectrumOptions {
                 .withThreads(threads)
                 .withSeed(seed)
                 .withPrior(prior)
-                .withReddening(avMag == null ? fitReddening.mode : ReddeningMode.NEVER)
+                .withReddening(reddening())
                 .withMeasuredRest(toRest)
                 .withPreparing(stated);
+    }
+
+    /** A stated extinction goes before a fitted one. */
+    private ReddeningMode reddening() {
+        return fitReddening
+                ? ReddeningMode.ALWAYS
+                : noReddening || avMag != null ? ReddeningMode.NEVER : ReddeningMode.CALLED_FOR;
     }
 
     private Preparing.Extinction extinction() {

@@ -104,15 +104,7 @@ public record ObjectResult(
         List<Finding> all = new ArrayList<>(findings);
         all.addAll(more);
         return new ObjectResult(
-                candidate,
-                status,
-                reason,
-                spectra,
-                best,
-                placement,
-                judgement,
-                standards,
-                all);
+                candidate, status, reason, spectra, best, placement, judgement, standards, all);
     }
 
     /**

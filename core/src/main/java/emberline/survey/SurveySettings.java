@@ -124,15 +124,7 @@ public record SurveySettings(
      */
     public SurveySettings withMeasuredRest(boolean shift) {
         return new SurveySettings(
-                preparing,
-                threads,
-                seed,
-                prior,
-                reddening,
-                shift,
-                degrading,
-                judging,
-                standards);
+                preparing, threads, seed, prior, reddening, shift, degrading, judging, standards);
     }
 
     /**

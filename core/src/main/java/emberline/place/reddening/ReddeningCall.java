@@ -14,7 +14,7 @@ import java.util.OptionalDouble;
  */
 public final class ReddeningCall {
 
-    /** From this probability of a reddened or early star on extinction is tried. */
+    /** From this probability of a reddened or early star, or of nothing known, on extinction is tried. */
     private static final double STAR_LIKELY = 0.2;
 
     /** Colours whose mean lies this many sigma on the red side call for a fit. */
@@ -25,7 +25,7 @@ public final class ReddeningCall {
             List.of("burgasser2002/h-j", "burgasser2006/k-j", "burgasser2006b/k-h");
 
     /** Extinction must make the measurements so much more probable (natural logarithm). */
-    private static final double LEAST_GAIN = 5;
+    private static final double LEAST_GAIN = 10;
 
     /** And a late dwarf so probable once it is taken out. */
     private static final double DWARF_SURE = 0.9;
@@ -44,12 +44,14 @@ public final class ReddeningCall {
     public static Optional<String> reason(Placement asSeen) {
         double star =
                 probability(asSeen, ObjectKind.REDDENED_BACKGROUND)
+                        + probability(asSeen, ObjectKind.UNLIKE_KNOWN)
                         + probability(asSeen, ObjectKind.EARLY_STAR);
         if (star >= STAR_LIKELY) {
             return Optional.of(
                     String.format(
                             Locale.ROOT,
-                            "the spectrum looks like a reddened or early star (p %.2f)",
+                            "the spectrum may be that of a reddened or early star, or like none known"
+                                    + " (p %.2f)",
                             star));
         }
         OptionalDouble red =

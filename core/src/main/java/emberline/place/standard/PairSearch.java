@@ -7,7 +7,6 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.IntPredicate;
-import java.util.stream.IntStream;
 
 /**
  * Looks for the sum of two standards that fits best, and for the single object that fits best.

@@ -18,8 +18,8 @@ import java.util.function.Predicate;
 
 /**
  * Compares objects with standard spectra by weighted chi-square with a free scale: over each range
- * alone, and over all together; and the best sum of two standards with the best single one. Make one
- * for a run: the standards are prepared once. Safe for use by several threads.
+ * alone, and over all together; and the best sum of two standards with the best single one. Make
+ * one for a run: the standards are prepared once. Safe for use by several threads.
  */
 public final class StandardComparison {
 
@@ -63,9 +63,10 @@ public final class StandardComparison {
                             .ifPresent(result -> byRange.put(range, result));
                 }
             }
-            leading = object.good(object.covered()) > leading.good(leading.covered())
-                    ? object
-                    : leading;
+            leading =
+                    object.good(object.covered()) > leading.good(leading.covered())
+                            ? object
+                            : leading;
         }
         List<Range> ranges = StandardLibrary.common(level, leading, allowed);
         if (ranges.isEmpty()) {
@@ -84,6 +85,7 @@ public final class StandardComparison {
                 type,
                 "",
                 ranges,
+                objects.indexOf(leading),
                 matches.size(),
                 best(matches),
                 byRange,

@@ -103,12 +103,11 @@ final class StandardLibrary {
         }
 
         /**
-         * The share of single objects that a sum improves at least as much as by a ratio, one
-         * added on both sides; empty where the standards are too few to tell.
+         * The share of single objects that a sum improves at least as much as by a ratio, one added
+         * on both sides; empty where the standards are too few to tell.
          */
         OptionalDouble pFalseAlarm(Collection<Range> ranges, double ratio) {
-            double[] all =
-                    ratios.computeIfAbsent(EnumSet.copyOf(ranges), set -> leftOut(set));
+            double[] all = ratios.computeIfAbsent(EnumSet.copyOf(ranges), set -> leftOut(set));
             if (all.length < FEWEST_SINGLES) {
                 return OptionalDouble.empty();
             }

@@ -8,8 +8,8 @@ import java.util.TreeMap;
 import org.apache.commons.statistics.distribution.FDistribution;
 
 /**
- * The type of an object by the standards that fit it best: the mean of their types, each weighted by
- * the chance that its fit is no worse than the best one, by the F test of the ratio of both
+ * The type of an object by the standards that fit it best: the mean of their types, each weighted
+ * by the chance that its fit is no worse than the best one, by the F test of the ratio of both
  * chi-squares. Of standards of one type the best counts, so that types with many standards do not
  * outweigh others.
  */

@@ -17,6 +17,8 @@ import java.util.Optional;
  *     could be compared
  * @param reason why there is no type; empty where there is one
  * @param ranges the ranges that were compared together, under one scale
+ * @param spectrum index of the spectrum of the object that was compared over these ranges; the
+ *     scales of the matches are to this one
  * @param compared number of standards that cover these ranges
  * @param best the standards that fit best there, the best first, each object once
  * @param byRange the same for each range alone
@@ -26,10 +28,14 @@ public record StandardVerdict(
         Optional<TypeEstimate> type,
         String reason,
         List<Range> ranges,
+        int spectrum,
         int compared,
         List<StandardMatch> best,
         Map<Range, RangeResult> byRange,
         Optional<PairFit> pair) {
+
+    /** From this reduced chi-square on no standard is like the object. */
+    private static final double BAD_FIT = 5;
 
     /** The comparison and the adopted type disagree from so many of their joint sigma on. */
     private static final double DISAGREEMENT = 2;
@@ -65,7 +71,7 @@ public record StandardVerdict(
      */
     static StandardVerdict none(String reason) {
         return new StandardVerdict(
-                Optional.empty(), reason, List.of(), 0, List.of(), Map.of(), Optional.empty());
+                Optional.empty(), reason, List.of(), 0, 0, List.of(), Map.of(), Optional.empty());
     }
 
     /**
@@ -84,6 +90,18 @@ public record StandardVerdict(
         }
         List<Finding> findings = new ArrayList<>();
         adopted.ifPresent(posterior -> disagreement(posterior).ifPresent(findings::add));
+        if (best.get(0).reducedChiSquare() > BAD_FIT) {
+            findings.add(
+                    Finding.caution(
+                            "standards-fit-badly",
+                            String.format(
+                                    Locale.ROOT,
+                                    "no standard is like the object: the best, %s, leaves a reduced"
+                                            + " chi-square of %.1f; the list may lack its type, or"
+                                            + " the object is peculiar, reddened or a blend",
+                                    best.get(0).first().name(),
+                                    best.get(0).reducedChiSquare())));
+        }
         pair.filter(fit -> fit.outcome() == PairFit.Outcome.CANDIDATE)
                 .ifPresent(fit -> findings.add(candidate(fit)));
         return findings;

@@ -1,0 +1,101 @@
+package emberline.reports.attach;
+
+import emberline.place.TypeEstimate;
+import emberline.place.standard.PairFit;
+import emberline.place.standard.StandardMatch;
+import emberline.place.standard.StandardVerdict;
+import emberline.reports.attach.ResultColumn.Content;
+import emberline.survey.ObjectResult;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Function;
+
+/** The columns of the results table that say what the comparison with standards gave. */
+final class StandardColumns {
+
+    private StandardColumns() {}
+
+    static List<ResultColumn> all() {
+        return List.of(
+                column(
+                        "standard_type",
+                        "",
+                        "type by the observer's standards that fit best; empty without standards",
+                        Content.TEXT,
+                        r -> type(r).map(TypeText::code)),
+                column(
+                        "standard_type_sigma",
+                        "subclass",
+                        "one-sigma error of the type by standards",
+                        Content.NUMBER,
+                        r -> type(r).map(t -> Digits.type(t.sigmaSubclass()))),
+                column(
+                        "best_standard",
+                        "",
+                        "the standard that fits best over all ranges together",
+                        Content.TEXT,
+                        r -> best(r).map(m -> m.first().name())),
+                column(
+                        "best_standard_chi2",
+                        "",
+                        "its reduced chi-square",
+                        Content.NUMBER,
+                        r -> best(r).map(m -> Digits.fixed(m.reducedChiSquare(), 2))),
+                column(
+                        "pair_standards",
+                        "",
+                        "whether the sum of two standards fits better than a single one: candidate,"
+                                + " unsure (better, but not known to be rarer among single objects"
+                                + " than 1 in 20) or none",
+                        Content.TEXT,
+                        r -> pair(r).map(fit -> fit.outcome().word())),
+                column(
+                        "pair_standards_types",
+                        "",
+                        "the types of the best sum",
+                        Content.TEXT,
+                        r -> pair(r).map(fit -> StandardsText.types(fit.pair()))),
+                column(
+                        "pair_standards_f_test",
+                        "",
+                        "confidence by the F test that the sum fits better",
+                        Content.NUMBER,
+                        r -> pair(r).map(fit -> Digits.probability(fit.confidence()))),
+                column(
+                        "pair_standards_false_alarm",
+                        "",
+                        "share of single standards that a sum of the others improves as much",
+                        Content.NUMBER,
+                        r ->
+                                pair(r).flatMap(
+                                                fit ->
+                                                        fit.pFalseAlarm().isPresent()
+                                                                ? Optional.of(
+                                                                        Digits.probability(
+                                                                                fit.pFalseAlarm()
+                                                                                        .getAsDouble()))
+                                                                : Optional.empty())));
+    }
+
+    private static ResultColumn column(
+            String name,
+            String unit,
+            String description,
+            Content content,
+            Function<ObjectResult, Optional<String>> take) {
+        return new ResultColumn(
+                name, unit, description, content, result -> take.apply(result).orElse(""));
+    }
+
+    private static Optional<TypeEstimate> type(ObjectResult result) {
+        return result.standards().flatMap(StandardVerdict::type);
+    }
+
+    private static Optional<StandardMatch> best(ObjectResult result) {
+        return result.standards().flatMap(verdict -> verdict.best().stream().findFirst());
+    }
+
+    private static Optional<PairFit> pair(ObjectResult result) {
+        return result.standards().flatMap(StandardVerdict::pair);
+    }
+}
