@@ -6,6 +6,7 @@ import emberline.place.standard.StandardMatch;
 import emberline.place.standard.StandardVerdict;
 import emberline.reports.attach.ResultColumn.Content;
 import emberline.survey.ObjectResult;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
@@ -16,65 +17,77 @@ final class StandardColumns {
     private StandardColumns() {}
 
     static List<ResultColumn> all() {
-        return List.of(
-                column(
+        List<ResultColumn> columns = new ArrayList<>();
+        columns.add(
+                text(
                         "standard_type",
-                        "",
                         "type by the observer's standards that fit best; empty without standards",
-                        Content.TEXT,
-                        r -> type(r).map(TypeText::code)),
-                column(
+                        r -> type(r).map(TypeText::code)));
+        columns.add(
+                number(
                         "standard_type_sigma",
                         "subclass",
                         "one-sigma error of the type by standards",
-                        Content.NUMBER,
-                        r -> type(r).map(t -> Digits.type(t.sigmaSubclass()))),
-                column(
+                        r -> type(r).map(t -> Digits.type(t.sigmaSubclass()))));
+        columns.add(
+                text(
                         "best_standard",
-                        "",
                         "the standard that fits best over all ranges together",
-                        Content.TEXT,
-                        r -> best(r).map(m -> m.first().name())),
-                column(
+                        r -> best(r).map(m -> m.first().name())));
+        columns.add(
+                number(
                         "best_standard_chi2",
                         "",
                         "its reduced chi-square",
-                        Content.NUMBER,
-                        r -> best(r).map(m -> Digits.fixed(m.reducedChiSquare(), 2))),
-                column(
+                        r -> best(r).map(m -> Digits.fixed(m.reducedChiSquare(), 2))));
+        addPair(columns);
+        return List.copyOf(columns);
+    }
+
+    private static void addPair(List<ResultColumn> columns) {
+        columns.add(
+                text(
                         "pair_standards",
-                        "",
                         "whether the sum of two standards fits better than a single one: candidate,"
                                 + " unsure (better, but not known to be rarer among single objects"
                                 + " than 1 in 20) or none",
-                        Content.TEXT,
-                        r -> pair(r).map(fit -> fit.outcome().word())),
-                column(
+                        r -> pair(r).map(fit -> fit.outcome().word())));
+        columns.add(
+                text(
                         "pair_standards_types",
-                        "",
                         "the types of the best sum",
-                        Content.TEXT,
-                        r -> pair(r).map(fit -> StandardsText.types(fit.pair()))),
-                column(
+                        r -> pair(r).map(fit -> StandardsText.types(fit.pair()))));
+        columns.add(
+                number(
                         "pair_standards_f_test",
                         "",
                         "confidence by the F test that the sum fits better",
-                        Content.NUMBER,
-                        r -> pair(r).map(fit -> Digits.probability(fit.confidence()))),
-                column(
+                        r -> pair(r).map(fit -> Digits.probability(fit.confidence()))));
+        columns.add(
+                number(
                         "pair_standards_false_alarm",
                         "",
                         "share of single standards that a sum of the others improves as much",
-                        Content.NUMBER,
-                        r ->
-                                pair(r).flatMap(
-                                                fit ->
-                                                        fit.pFalseAlarm().isPresent()
-                                                                ? Optional.of(
-                                                                        Digits.probability(
-                                                                                fit.pFalseAlarm()
-                                                                                        .getAsDouble()))
-                                                                : Optional.empty())));
+                        r -> pair(r).flatMap(StandardColumns::falseAlarm)));
+    }
+
+    private static Optional<String> falseAlarm(PairFit fit) {
+        return fit.pFalseAlarm().isPresent()
+                ? Optional.of(Digits.probability(fit.pFalseAlarm().getAsDouble()))
+                : Optional.empty();
+    }
+
+    private static ResultColumn text(
+            String name, String description, Function<ObjectResult, Optional<String>> take) {
+        return column(name, "", description, Content.TEXT, take);
+    }
+
+    private static ResultColumn number(
+            String name,
+            String unit,
+            String description,
+            Function<ObjectResult, Optional<String>> take) {
+        return column(name, unit, description, Content.NUMBER, take);
     }
 
     private static ResultColumn column(

@@ -33,6 +33,8 @@ final class KeyNumbers {
     private static final List<String> MAGNITUDES =
             List.of("i_mag", "z_mag", "y_mag", "j_mag", "h_mag", "k_mag", "w1_mag", "w2_mag");
 
+    private static final int LONGEST_NAME = 21;
+
     private KeyNumbers() {}
 
     /** A number with its label. */
@@ -98,8 +100,18 @@ final class KeyNumbers {
             entries.add(
                     new Entry(
                             "   \u03c7² = " + StandardsText.chiSquare(match),
-                            StandardsText.named(match)));
+                            shortened(match.first().name())
+                                    + " ("
+                                    + new SpectralType(match.first().typeNumber()).code()
+                                    + ")"));
         }
+    }
+
+    /** A name that leaves room for a type in its line; the whole names stand on the next page. */
+    private static String shortened(String name) {
+        return name.length() <= LONGEST_NAME
+                ? name
+                : name.substring(0, LONGEST_NAME - 1).strip() + "\u2026";
     }
 
     private static String interval(double low, double high) {
