@@ -21,22 +21,26 @@ final class StandardColumns {
         columns.add(
                 text(
                         "standard_type",
+                        "src.spType",
                         "type by the observer's standards that fit best; empty without standards",
                         r -> type(r).map(TypeText::code)));
         columns.add(
                 number(
                         "standard_type_sigma",
+                        "stat.error;src.spType",
                         "subclass",
                         "one-sigma error of the type by standards",
                         r -> type(r).map(t -> Digits.type(t.sigmaSubclass()))));
         columns.add(
                 text(
                         "best_standard",
+                        "meta.id",
                         "the standard that fits best over all ranges together",
                         r -> best(r).map(m -> m.first().name())));
         columns.add(
                 number(
                         "best_standard_chi2",
+                        "stat.value;stat.fit.chi2",
                         "",
                         "its reduced chi-square",
                         r -> best(r).map(m -> Digits.fixed(m.reducedChiSquare(), 2))));
@@ -48,6 +52,7 @@ final class StandardColumns {
         columns.add(
                 text(
                         "pair_standards",
+                        "meta.code;src.class",
                         "whether the sum of two standards fits better than a single one: candidate,"
                                 + " unsure (better, but not known to be rarer among single objects"
                                 + " than 1 in 20) or none",
@@ -55,17 +60,20 @@ final class StandardColumns {
         columns.add(
                 text(
                         "pair_standards_types",
+                        "src.spType",
                         "the types of the best sum",
                         r -> pair(r).map(fit -> StandardsText.types(fit.pair()))));
         columns.add(
                 number(
                         "pair_standards_f_test",
+                        "stat.probability",
                         "",
                         "confidence by the F test that the sum fits better",
                         r -> pair(r).map(fit -> Digits.probability(fit.confidence()))));
         columns.add(
                 number(
                         "pair_standards_false_alarm",
+                        "stat.probability",
                         "",
                         "share of single standards that a sum of the others improves as much",
                         r -> pair(r).flatMap(StandardColumns::falseAlarm)));
@@ -78,16 +86,20 @@ final class StandardColumns {
     }
 
     private static ResultColumn text(
-            String name, String description, Function<ObjectResult, Optional<String>> take) {
-        return column(name, "", description, Content.TEXT, take);
+            String name,
+            String ucd,
+            String description,
+            Function<ObjectResult, Optional<String>> take) {
+        return column(name, "", description, Content.TEXT, take).withUcd(ucd);
     }
 
     private static ResultColumn number(
             String name,
+            String ucd,
             String unit,
             String description,
             Function<ObjectResult, Optional<String>> take) {
-        return column(name, unit, description, Content.NUMBER, take);
+        return column(name, unit, description, Content.NUMBER, take).withUcd(ucd);
     }
 
     private static ResultColumn column(

@@ -31,9 +31,10 @@ import org.apache.pdfbox.text.PDFTextStripper;
 import org.junit.jupiter.api.Test;
 
 /** The comparison with standards in tables, JSON, chart and PDF. */
-class StandardsReportTest {
+public class StandardsReportTest {
 
-    private static ObjectResult compared() {
+    /** An invented L dwarf beside eight invented standards. */
+    public static ObjectResult compared() {
         ObjectResult object = Samples.lDwarf();
         List<Standard> standards = new ArrayList<>();
         for (int k = 0; k < 8; k++) {
