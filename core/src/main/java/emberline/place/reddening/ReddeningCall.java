@@ -14,7 +14,10 @@ import java.util.OptionalDouble;
  */
 public final class ReddeningCall {
 
-    /** From this probability of a reddened or early star, or of nothing known, on extinction is tried. */
+    /**
+     * From this probability of a reddened or early star, or of nothing known, on extinction is
+     * tried.
+     */
     private static final double STAR_LIKELY = 0.2;
 
     /** Colours whose mean lies this many sigma on the red side call for a fit. */

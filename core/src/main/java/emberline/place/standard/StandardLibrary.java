@@ -128,8 +128,7 @@ final class StandardLibrary {
             return IntStream.range(0, taken)
                     .map(i -> covering[(int) ((long) i * covering.length / taken)])
                     .mapToObj(k -> search.fit(binned.get(k), others(k), OptionalDouble.empty()))
-                    .flatMap(Optional::stream)
-                    .mapToDouble(PairFit::ratio)
+                    .mapToDouble(fit -> fit.map(PairFit::ratio).orElse(1.0))
                     .toArray();
         }
 
