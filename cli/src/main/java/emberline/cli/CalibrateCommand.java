@@ -12,6 +12,7 @@ import emberline.reports.attach.AtomicFile;
 import emberline.reports.attach.UnseenSummary;
 import emberline.reports.attach.UnseenTable;
 import emberline.survey.Chain;
+import emberline.survey.ReddeningMode;
 import emberline.survey.ReferenceMaker;
 import emberline.survey.Status;
 import emberline.survey.SurveyRunner;
@@ -58,7 +59,7 @@ final class CalibrateCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws IOException, InterruptedException {
-        SurveySettings settings = listOptions.settings();
+        SurveySettings settings = listOptions.settings().withReddening(ReddeningMode.NEVER);
         FeatureCatalogue catalogue = listOptions.catalogue();
         CandidateList candidates = listOptions.read();
         Chain chain = new Chain(catalogue, listOptions.measuring(), settings);

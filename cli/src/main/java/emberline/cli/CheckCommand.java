@@ -12,6 +12,7 @@ import emberline.reports.page.ReportSettings;
 import emberline.survey.Chain;
 import emberline.survey.HeldOutPlacers;
 import emberline.survey.PlacerChoice;
+import emberline.survey.ReddeningMode;
 import emberline.survey.ReferenceMaker;
 import emberline.survey.Status;
 import emberline.survey.SurveyRunner;
@@ -128,7 +129,8 @@ final class CheckCommand implements Callable<Integer> {
         if (!leaveOut) {
             return new Chain(catalogue, measuring, settings);
         }
-        SurveySettings asObserved = settings.withDegrading(Degrading.none());
+        SurveySettings asObserved =
+                settings.withDegrading(Degrading.none()).withReddening(ReddeningMode.NEVER);
         ReferenceMaker maker = new ReferenceMaker();
         new SurveyRunner(new Chain(catalogue, measuring, asObserved), settings.threads())
                 .run(candidates, result -> result, maker::add);

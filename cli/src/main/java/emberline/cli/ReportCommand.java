@@ -35,6 +35,7 @@ final class ReportCommand implements Callable<Integer> {
     @Spec private CommandSpec spec;
     @Mixin private SpectrumOptions spectrumOptions;
     @Mixin private JudgingOptions judgingOptions;
+    @Mixin private StandardsOption standardsOption;
     @Mixin private CatalogueOption catalogueOption;
 
     @Parameters(paramLabel = "SPECTRUM", arity = "1..*", description = "Files of spectra.")
@@ -68,7 +69,10 @@ final class ReportCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws IOException {
-        SurveySettings settings = spectrumOptions.settings(1).withJudging(judgingOptions.judging());
+        SurveySettings settings =
+                standardsOption.addTo(
+                        spectrumOptions.settings(1).withJudging(judgingOptions.judging()),
+                        spec.commandLine().getErr());
         FeatureCatalogue catalogue = catalogueOption.load();
         List<ObjectResult> results =
                 SingleSpectra.run(

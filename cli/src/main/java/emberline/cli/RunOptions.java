@@ -38,7 +38,7 @@ final class RunOptions {
                         .map(extinction -> Double.toString(extinction.rv()))
                         .orElse(""));
         options.put("prior", settings.prior().word());
-        options.put("fit_reddening", Boolean.toString(settings.fitReddening()));
+        options.put("fit_reddening", settings.reddening().word());
         options.put("to_rest", Boolean.toString(settings.toMeasuredRest()));
         options.put("age", settings.judging().age().map(age -> age.text()).orElse(""));
         options.put("aim", settings.judging().aimWords());

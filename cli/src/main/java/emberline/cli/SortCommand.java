@@ -15,6 +15,7 @@ import emberline.survey.verdict.Verdicts;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.EnumMap;
+import java.util.LinkedHashMap;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
@@ -42,6 +43,7 @@ final class SortCommand implements Callable<Integer> {
     @Spec private CommandSpec spec;
     @Mixin private ListOptions listOptions;
     @Mixin private JudgingOptions judgingOptions;
+    @Mixin private StandardsOption standardsOption;
 
     @Option(
             names = "--out",
@@ -59,7 +61,10 @@ final class SortCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws IOException, InterruptedException {
-        SurveySettings settings = listOptions.settings().withJudging(judgingOptions.judging());
+        SurveySettings settings =
+                standardsOption.addTo(
+                        listOptions.settings().withJudging(judgingOptions.judging()),
+                        spec.commandLine().getErr());
         FeatureCatalogue catalogue = listOptions.catalogue();
         CandidateList candidates = listOptions.read();
         Verdicts verdicts = verdictOptions.verdicts(out);
@@ -147,8 +152,14 @@ final class SortCommand implements Callable<Integer> {
     }
 
     private RunJson record(SurveySettings settings, Verdicts verdicts) throws IOException {
-        Map<String, String> options = RunOptions.of(settings, listOptions.measuring(), !noReports);
+        Map<String, String> options =
+                new LinkedHashMap<>(RunOptions.of(settings, listOptions.measuring(), !noReports));
         options.put("verdicts_sha256", VerdictOptions.checksum(verdicts));
+        if (standardsOption.file().isPresent()) {
+            Path standards = standardsOption.file().get();
+            options.put("standards", standards.getFileName().toString());
+            options.put("standards_sha256", FileChecksum.sha256(standards));
+        }
         return new RunJson(
                 ProgramVersion.number(),
                 options,

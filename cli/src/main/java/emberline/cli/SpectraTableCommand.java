@@ -1,8 +1,11 @@
 package emberline.cli;
 
 import emberline.judge.Judging;
+import emberline.read.UnreadableListException;
 import emberline.reports.attach.TableFormat;
 import emberline.survey.ObjectResult;
+import emberline.survey.SurveySettings;
+import java.io.PrintWriter;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.concurrent.Callable;
@@ -37,14 +40,22 @@ abstract class SpectraTableCommand implements Callable<Integer> {
         return Judging.withDefaults();
     }
 
+    /** The settings as the command adds to them; by default as they are. */
+    SurveySettings completed(SurveySettings settings, PrintWriter err)
+            throws UnreadableListException {
+        return settings;
+    }
+
     @Override
-    public Integer call() {
+    public Integer call() throws UnreadableListException {
         List<ObjectResult> results =
                 SingleSpectra.run(
                         spectra,
                         catalogueOption.load(),
                         spectrumOptions.measuring(),
-                        spectrumOptions.settings(1).withJudging(judging()),
+                        completed(
+                                spectrumOptions.settings(1).withJudging(judging()),
+                                spec.commandLine().getErr()),
                         spec.commandLine().getErr());
         spec.commandLine().getOut().print(table(results, format));
         spec.commandLine().getOut().flush();

@@ -6,6 +6,7 @@ import emberline.place.calibrated.TypePriors;
 import emberline.prepare.ExtinctionLaw;
 import emberline.prepare.Preparing;
 import emberline.spectrum.Medium;
+import emberline.survey.ReddeningMode;
 import emberline.survey.SurveySettings;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
@@ -56,8 +57,15 @@ final class SpectrumOptions {
 
     @Option(
             names = "--fit-reddening",
-            description = "Fit type and extinction together (0 to 15 mag in V, R_V 3.1).")
+            description =
+                    "Fit type and extinction together for every object (0 to 15 mag in V, R_V 3.1);"
+                            + " without it they are where the kind or the colours call for it.")
     private boolean fitReddening;
+
+    @Option(
+            names = "--no-reddening",
+            description = "Never fit extinction, not even where the kind calls for it.")
+    private boolean noReddening;
 
     @Option(
             names = "--velocity",
@@ -116,6 +124,10 @@ final class SpectrumOptions {
             throw new ParameterException(
                     spec.commandLine(), "--extinction-ratio: expected --av beside it");
         }
+        if (fitReddening && noReddening) {
+            throw new ParameterException(
+                    spec.commandLine(), "--fit-reddening: expected no --no-reddening beside it");
+        }
         if (fitReddening && avMag != null) {
             throw new ParameterException(
                     spec.commandLine(),
@@ -129,9 +141,16 @@ final class SpectrumOptions {
                 .withThreads(threads)
                 .withSeed(seed)
                 .withPrior(prior)
-                .withReddeningFit(fitReddening)
+                .withReddening(reddening())
                 .withMeasuredRest(toRest)
                 .withPreparing(stated);
+    }
+
+    /** A stated extinction goes before a fitted one. */
+    private ReddeningMode reddening() {
+        return fitReddening
+                ? ReddeningMode.ALWAYS
+                : noReddening || avMag != null ? ReddeningMode.NEVER : ReddeningMode.CALLED_FOR;
     }
 
     private Preparing.Extinction extinction() {

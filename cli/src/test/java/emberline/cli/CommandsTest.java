@@ -1,6 +1,7 @@
 package emberline.cli;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.catalogue.FeatureCatalogue;
@@ -44,6 +45,60 @@ class CommandsTest {
         assertEquals(2, lines.size());
         assertTrue(lines.get(0).startsWith("name,"), lines.get(0));
         assertTrue(lines.get(1).contains("M6"), lines.get(1));
+    }
+
+    /** A list of standards of the demo survey. */
+    private Path standards() throws IOException {
+        StringBuilder list = new StringBuilder("name,spectrum,medium,resolution,known_type\n");
+        List<String> rows = Files.readAllLines(DemoRun.survey());
+        List<String> types = List.of("M6", "M7", "M8", "M9", "L0", "L1");
+        for (int k = 0; k < types.size(); k++) {
+            String[] cells = rows.get(k + 1).split(",", -1);
+            list.append(
+                            String.join(
+                                    ",",
+                                    "S" + k,
+                                    DemoRun.survey()
+                                            .resolveSibling(cells[1])
+                                            .toAbsolutePath()
+                                            .toString(),
+                                    cells[2],
+                                    cells[3],
+                                    types.get(k)))
+                    .append('\n');
+        }
+        return Files.writeString(folder.resolve("standards.csv"), list);
+    }
+
+    @Test
+    void placeShowsTheComparisonWithStandardsBesideThePosterior() throws IOException {
+        Path standards = standards();
+        CommandRun text = CommandRun.of("place", demoSpectrum(), "--standards", standards);
+        assertEquals(ExitCode.DONE, text.code(), text.err());
+        assertTrue(text.out().contains("standard_type"), text.out());
+        assertTrue(text.out().contains("standards: best: S"), text.out());
+        assertFalse(text.out().contains("best: S0 "), "the object itself: " + text.out());
+        CommandRun json =
+                CommandRun.of(
+                        "place", demoSpectrum(), "--standards", standards, "--format", "json");
+        assertTrue(json.out().contains("\"by_range\""), json.out());
+        assertTrue(json.out().contains("\"best_standard\": \"S"), json.out());
+        CommandRun without = CommandRun.of("place", demoSpectrum());
+        assertFalse(without.out().contains("standard_type"), without.out());
+    }
+
+    @Test
+    void reportTakesStandardsAndABadListStopsEverything() throws IOException {
+        Path out = folder.resolve("with-standards");
+        CommandRun run =
+                CommandRun.of("report", demoSpectrum(), "--standards", standards(), "--out", out);
+        assertEquals(ExitCode.DONE, run.code(), run.err());
+        Path bad =
+                Files.writeString(
+                        folder.resolve("bad.csv"), "name,spectrum,known_type\na,gone.csv,L1\n");
+        CommandRun failed = CommandRun.of("place", demoSpectrum(), "--standards", bad);
+        assertEquals(ExitCode.NOTHING_READ, failed.code());
+        assertTrue(failed.err().contains("bad.csv: row 1, column spectrum: "), failed.err());
     }
 
     @Test

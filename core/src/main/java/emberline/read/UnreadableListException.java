@@ -22,6 +22,15 @@ public final class UnreadableListException extends IOException {
         super(where + ": " + found + "; expected " + expected + ". " + advice);
     }
 
+    /**
+     * Makes the exception.
+     *
+     * @param message says where, what was found, what was expected and what to do
+     */
+    public UnreadableListException(String message) {
+        super(message);
+    }
+
     /** Passes on what is wrong with the file as such. */
     UnreadableListException(UnreadableSpectrumException cause) {
         super(cause.getMessage(), cause);

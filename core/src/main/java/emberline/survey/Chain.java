@@ -10,7 +10,10 @@ import emberline.place.Placement;
 import emberline.place.Placer;
 import emberline.place.calibrated.Calibration;
 import emberline.place.calibrated.TypePrior;
+import emberline.place.reddening.ReddeningCall;
 import emberline.place.reddening.ReddeningFit;
+import emberline.place.standard.StandardComparison;
+import emberline.place.standard.StandardVerdict;
 import emberline.prepare.Degrader;
 import emberline.prepare.Degrader.Degraded;
 import emberline.prepare.Degrading;
@@ -23,7 +26,6 @@ import emberline.read.SpectrumReader;
 import emberline.read.UnreadableSpectrumException;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
-import emberline.spectrum.Medium;
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -33,6 +35,8 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
+import java.util.stream.Collectors;
 
 /**
  * The whole chain for one object: read, prepare, measure, place, judge. An object that fails gets a
@@ -51,7 +55,8 @@ public final class Chain {
     private final JudgingStep judging;
     private final Preparing defaults;
     private final long seed;
-    private final boolean fitReddening;
+    private final ReddeningMode reddeningMode;
+    private final Optional<StandardComparison> standards;
     private final boolean toMeasuredRest;
 
     /**
@@ -107,7 +112,8 @@ public final class Chain {
         this.judging = new JudgingStep(settings.judging(), prior);
         this.defaults = settings.preparing();
         this.seed = settings.seed();
-        this.fitReddening = settings.fitReddening();
+        this.reddeningMode = settings.reddening();
+        this.standards = settings.standards();
         this.toMeasuredRest = settings.toMeasuredRest();
     }
 
@@ -148,7 +154,7 @@ public final class Chain {
                 Degraded degraded =
                         degrader.degrade(
                                 reader.read(folder.resolve(path)),
-                                stated(candidate),
+                                Statements.of(candidate, defaults),
                                 degrading,
                                 ObjectSeed.of(candidate.name() + "; " + path, seed));
                 spectra.add(measure(path, degraded.observation(), degraded.stated()));
@@ -164,15 +170,48 @@ public final class Chain {
                     candidate,
                     troubles.isEmpty() ? "no spectrum is listed" : String.join(" | ", troubles));
         }
-        Optional<ReddeningFit> reddening =
-                fitReddening
-                        ? placers.placerFor(candidate).fitReddening(av -> measuredAt(av, used))
-                        : Optional.empty();
-        if (reddening.isPresent()) {
-            spectra.clear();
-            used.forEach((path, one) -> spectra.add(again(path, one, reddening.get().avMag())));
+        return placed(candidate, spectra, used, troubles);
+    }
+
+    /** A placement with the spectra that it rests on and what is to be said of its extinction. */
+    private record Placed(
+            List<SpectrumResult> spectra, Placement placement, Optional<Finding> reddening) {
+
+        Measurements best() {
+            return Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
         }
-        return placed(candidate, spectra, reddening, troubles);
+    }
+
+    /** Places an object as it is seen, or with the extinction taken out that was fitted. */
+    private Placed place(
+            Candidate candidate, List<SpectrumResult> spectra, Map<String, Degraded> used) {
+        Placer placer = placers.placerFor(candidate);
+        long draws = ObjectSeed.of(candidate.name(), seed);
+        Measurements best =
+                Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
+        Placement asSeen = placer.place(best, draws);
+        Optional<String> call =
+                switch (reddeningMode) {
+                    case NEVER -> Optional.empty();
+                    case CALLED_FOR -> ReddeningCall.reason(asSeen);
+                    case ALWAYS -> Optional.of("");
+                };
+        Optional<ReddeningFit> fit =
+                call.flatMap(reason -> placer.fitReddening(avMag -> measuredAt(avMag, used)));
+        if (fit.isEmpty()) {
+            return new Placed(spectra, asSeen, Optional.empty());
+        }
+        List<SpectrumResult> freedSpectra = new ArrayList<>();
+        used.forEach((path, one) -> freedSpectra.add(again(path, one, fit.get().avMag())));
+        Placed freed = new Placed(freedSpectra, asSeen, Optional.empty());
+        Placement placement = placer.place(freed.best(), fit, draws);
+        if (reddeningMode == ReddeningMode.CALLED_FOR
+                && !ReddeningCall.isBelieved(fit.get(), placement)) {
+            return new Placed(
+                    spectra, asSeen, Optional.of(notBelieved(call.orElseThrow(), fit.get())));
+        }
+        return new Placed(
+                freedSpectra, placement, Optional.of(fitted(call.orElseThrow(), fit.get())));
     }
 
     private Measurements measuredAt(double avMag, Map<String, Degraded> used) {
@@ -255,14 +294,12 @@ public final class Chain {
 
     private ObjectResult placed(
             Candidate candidate,
-            List<SpectrumResult> spectra,
-            Optional<ReddeningFit> reddening,
+            List<SpectrumResult> asSeen,
+            Map<String, Degraded> used,
             List<String> troubles) {
-        Measurements best =
-                Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
-        Placement placement =
-                placers.placerFor(candidate)
-                        .place(best, reddening, ObjectSeed.of(candidate.name(), seed));
+        Placed placed = place(candidate, asSeen, used);
+        List<SpectrumResult> spectra = placed.spectra();
+        Placement placement = placed.placement();
         List<Finding> findings = new ArrayList<>();
         spectra.forEach(spectrum -> findings.addAll(spectrum.prepared().findings()));
         for (String trouble : troubles) {
@@ -276,49 +313,60 @@ public final class Chain {
                                     + " spectra were measured apart; of each feature the"
                                     + " measurement with the smallest error was placed"));
         }
-        reddening.ifPresent(fit -> findings.add(fitted(fit)));
+        placed.reddening().ifPresent(findings::add);
         findings.addAll(placement.findings());
         List<String> reasons = new ArrayList<>(troubles);
         if (placement.type().isEmpty()) {
             reasons.add(placement.typeReason());
         }
-        return judging.judged(
+        ObjectResult result =
                 new ObjectResult(
                         candidate,
                         reasons.isEmpty() ? Status.MEASURED : Status.PARTIAL,
                         String.join(" | ", reasons),
                         spectra,
-                        Optional.of(best),
+                        Optional.of(placed.best()),
                         Optional.of(placement),
-                        findings));
+                        findings);
+        return judging.judged(
+                standards
+                        .map(comparison -> result.withStandards(compared(comparison, result)))
+                        .orElse(result));
     }
 
-    private static Finding fitted(ReddeningFit fit) {
+    /** Compares an object with the standards, of which itself is none. */
+    private static StandardVerdict compared(StandardComparison comparison, ObjectResult result) {
+        String group = ObjectGroup.of(result.candidate());
+        Set<String> own =
+                result.spectra().stream().map(SpectrumResult::sha256).collect(Collectors.toSet());
+        return comparison.compare(
+                result.spectra().stream().map(SpectrumResult::prepared).toList(),
+                standard -> standard.group().equals(group) || own.contains(standard.sha256()));
+    }
+
+    private static Finding fitted(String reason, ReddeningFit fit) {
         return Finding.note(
                 "reddening-fitted",
                 String.format(
                         Locale.ROOT,
-                        "extinction in V fitted together with the type: %.1f mag (68%%: %.1f to"
+                        "%sextinction in V fitted together with the type: %.1f mag (68%%: %.1f to"
                                 + " %.1f); %.1f mag was taken out before measuring",
+                        reason.isEmpty() ? "" : reason + ": ",
                         fit.avMag(),
                         fit.lo68Mag(),
                         fit.hi68Mag(),
                         fit.avMag()));
     }
 
-    /** What is stated about the spectra of a candidate: the list goes before the defaults. */
-    private Preparing stated(Candidate candidate) {
-        Preparing stated = defaults;
-        Optional<Medium> medium = candidate.text("medium").flatMap(Medium::named);
-        if (medium.isPresent()) {
-            stated = stated.withMedium(medium.get());
-        }
-        if (candidate.number("resolution").isPresent()) {
-            stated = stated.withResolvingPower(candidate.number("resolution").getAsDouble());
-        }
-        if (candidate.number("rv_kms").isPresent()) {
-            stated = stated.withRadialVelocityKms(candidate.number("rv_kms").getAsDouble());
-        }
-        return stated;
+    private static Finding notBelieved(String reason, ReddeningFit fit) {
+        return Finding.note(
+                "reddening-not-believed",
+                String.format(
+                        Locale.ROOT,
+                        "%s, so extinction was fitted; the best for a late dwarf is %.1f mag in V,"
+                                + " which does not make it one surely enough: nothing was taken out"
+                                + " (--fit-reddening takes it out)",
+                        reason,
+                        fit.avMag()));
     }
 }

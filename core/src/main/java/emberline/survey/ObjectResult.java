@@ -3,6 +3,7 @@ package emberline.survey;
 import emberline.judge.Judgement;
 import emberline.measure.Measurements;
 import emberline.place.Placement;
+import emberline.place.standard.StandardVerdict;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
 import emberline.survey.verdict.Verdict;
@@ -21,6 +22,8 @@ import java.util.Optional;
  *     one with the smallest error; empty where nothing was read
  * @param placement type and gravity; empty where nothing was read
  * @param judgement mass, age and decision; empty where there is no type or it means nothing
+ * @param standards the comparison with the standards of the run; empty where none were given or
+ *     nothing was read
  * @param findings all findings, those of the spectra first
  * @param verdict what an observer says of it; empty where nothing is said
  */
@@ -32,6 +35,7 @@ public record ObjectResult(
         Optional<Measurements> best,
         Optional<Placement> placement,
         Optional<Judgement> judgement,
+        Optional<StandardVerdict> standards,
         List<Finding> findings,
         Optional<Verdict> verdict) {
 
@@ -68,6 +72,7 @@ public record ObjectResult(
                 best,
                 placement,
                 Optional.empty(),
+                Optional.empty(),
                 findings,
                 Optional.empty());
     }
@@ -89,6 +94,7 @@ public record ObjectResult(
                 best,
                 placement,
                 Optional.of(made),
+                standards,
                 all,
                 verdict);
     }
@@ -101,7 +107,16 @@ public record ObjectResult(
      */
     public ObjectResult withVerdict(Optional<Verdict> said) {
         return new ObjectResult(
-                candidate, status, reason, spectra, best, placement, judgement, findings, said);
+                candidate,
+                status,
+                reason,
+                spectra,
+                best,
+                placement,
+                judgement,
+                standards,
+                findings,
+                said);
     }
 
     /**
@@ -114,6 +129,28 @@ public record ObjectResult(
         List<Finding> all = new ArrayList<>(findings);
         all.addAll(more);
         return new ObjectResult(
-                candidate, status, reason, spectra, best, placement, judgement, all, verdict);
+                candidate, status, reason, spectra, best, placement, judgement, standards, all, verdict);
+    }
+
+    /**
+     * The same object with a comparison with standards, whose findings come after the others.
+     *
+     * @param made the comparison
+     * @return a new result
+     */
+    public ObjectResult withStandards(StandardVerdict made) {
+        List<Finding> all = new ArrayList<>(findings);
+        all.addAll(made.findings(placement.flatMap(Placement::type)));
+        return new ObjectResult(
+                candidate,
+                status,
+                reason,
+                spectra,
+                best,
+                placement,
+                judgement,
+                Optional.of(made),
+                all,
+                verdict);
     }
 }

@@ -2,8 +2,10 @@ package emberline.survey;
 
 import emberline.judge.Judging;
 import emberline.place.calibrated.TypePriors;
+import emberline.place.standard.StandardComparison;
 import emberline.prepare.Degrading;
 import emberline.prepare.Preparing;
+import java.util.Optional;
 
 /**
  * Settings of a run over many objects.
@@ -12,20 +14,22 @@ import emberline.prepare.Preparing;
  * @param threads number of threads, at least 1
  * @param seed start of all random draws
  * @param prior what is thought of types and gravities before a spectrum is looked at
- * @param fitReddening whether type and extinction are fitted together
+ * @param reddening whether type and extinction are fitted together
  * @param toMeasuredRest whether the velocity that lines show is taken out where none is stated
  * @param degrading how spectra are made worse before they are prepared
  * @param judging how objects are judged
+ * @param standards spectra of known type with which each object is compared; empty for none
  */
 public record SurveySettings(
         Preparing preparing,
         int threads,
         long seed,
         TypePriors prior,
-        boolean fitReddening,
+        ReddeningMode reddening,
         boolean toMeasuredRest,
         Degrading degrading,
-        Judging judging) {
+        Judging judging,
+        Optional<StandardComparison> standards) {
 
     /** The seed where none is given. */
     public static final long DEFAULT_SEED = 20_260_101L;
@@ -48,10 +52,11 @@ public record SurveySettings(
                 Runtime.getRuntime().availableProcessors(),
                 DEFAULT_SEED,
                 TypePriors.FLAT,
-                false,
+                ReddeningMode.NEVER,
                 false,
                 Degrading.none(),
-                Judging.withDefaults());
+                Judging.withDefaults(),
+                Optional.empty());
     }
 
     /**
@@ -62,7 +67,15 @@ public record SurveySettings(
      */
     public SurveySettings withThreads(int number) {
         return new SurveySettings(
-                preparing, number, seed, prior, fitReddening, toMeasuredRest, degrading, judging);
+                preparing,
+                number,
+                seed,
+                prior,
+                reddening,
+                toMeasuredRest,
+                degrading,
+                judging,
+                standards);
     }
 
     /**
@@ -73,7 +86,15 @@ public record SurveySettings(
      */
     public SurveySettings withSeed(long start) {
         return new SurveySettings(
-                preparing, threads, start, prior, fitReddening, toMeasuredRest, degrading, judging);
+                preparing,
+                threads,
+                start,
+                prior,
+                reddening,
+                toMeasuredRest,
+                degrading,
+                judging,
+                standards);
     }
 
     /**
@@ -84,7 +105,15 @@ public record SurveySettings(
      */
     public SurveySettings withPreparing(Preparing stated) {
         return new SurveySettings(
-                stated, threads, seed, prior, fitReddening, toMeasuredRest, degrading, judging);
+                stated,
+                threads,
+                seed,
+                prior,
+                reddening,
+                toMeasuredRest,
+                degrading,
+                judging,
+                standards);
     }
 
     /**
@@ -95,7 +124,7 @@ public record SurveySettings(
      */
     public SurveySettings withMeasuredRest(boolean shift) {
         return new SurveySettings(
-                preparing, threads, seed, prior, fitReddening, shift, degrading, judging);
+                preparing, threads, seed, prior, reddening, shift, degrading, judging, standards);
     }
 
     /**
@@ -106,7 +135,15 @@ public record SurveySettings(
      */
     public SurveySettings withPrior(TypePriors before) {
         return new SurveySettings(
-                preparing, threads, seed, before, fitReddening, toMeasuredRest, degrading, judging);
+                preparing,
+                threads,
+                seed,
+                before,
+                reddening,
+                toMeasuredRest,
+                degrading,
+                judging,
+                standards);
     }
 
     /**
@@ -117,18 +154,34 @@ public record SurveySettings(
      */
     public SurveySettings withDegrading(Degrading how) {
         return new SurveySettings(
-                preparing, threads, seed, prior, fitReddening, toMeasuredRest, how, judging);
+                preparing,
+                threads,
+                seed,
+                prior,
+                reddening,
+                toMeasuredRest,
+                how,
+                judging,
+                standards);
     }
 
     /**
      * These settings with type and extinction fitted together, or not.
      *
-     * @param fit true to fit
+     * @param when for which objects
      * @return new settings
      */
-    public SurveySettings withReddeningFit(boolean fit) {
+    public SurveySettings withReddening(ReddeningMode when) {
         return new SurveySettings(
-                preparing, threads, seed, prior, fit, toMeasuredRest, degrading, judging);
+                preparing,
+                threads,
+                seed,
+                prior,
+                when,
+                toMeasuredRest,
+                degrading,
+                judging,
+                standards);
     }
 
     /**
@@ -139,6 +192,33 @@ public record SurveySettings(
      */
     public SurveySettings withJudging(Judging how) {
         return new SurveySettings(
-                preparing, threads, seed, prior, fitReddening, toMeasuredRest, degrading, how);
+                preparing,
+                threads,
+                seed,
+                prior,
+                reddening,
+                toMeasuredRest,
+                degrading,
+                how,
+                standards);
+    }
+
+    /**
+     * These settings with standards to compare with.
+     *
+     * @param prepared the standards, prepared once for the run
+     * @return new settings
+     */
+    public SurveySettings withStandards(StandardComparison prepared) {
+        return new SurveySettings(
+                preparing,
+                threads,
+                seed,
+                prior,
+                reddening,
+                toMeasuredRest,
+                degrading,
+                judging,
+                Optional.of(prepared));
     }
 }

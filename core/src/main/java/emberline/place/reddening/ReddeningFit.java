@@ -10,6 +10,8 @@ import emberline.place.TypePosterior;
  * @param hi68Mag upper end of the 68% interval (mag)
  * @param lo95Mag lower end of the 95% interval (mag)
  * @param hi95Mag upper end of the 95% interval (mag)
+ * @param logGain natural logarithm of how much more probable the measurements are with the
+ *     extinctions that were tried, all alike beforehand, than with none
  * @param posterior type and gravity, whatever the extinction
  */
 public record ReddeningFit(
@@ -18,4 +20,5 @@ public record ReddeningFit(
         double hi68Mag,
         double lo95Mag,
         double hi95Mag,
+        double logGain,
         TypePosterior posterior) {}

@@ -84,7 +84,7 @@ public final class ReddeningFitter {
                 }
             }
         }
-        return Optional.of(summary(fine));
+        return Optional.of(summary(fine, Optional.ofNullable(trials.get(0))));
     }
 
     private static double best(NavigableMap<Integer, Trial> trials) {
@@ -112,7 +112,8 @@ public final class ReddeningFitter {
                 .ifPresent(posterior -> trials.put(tenths, new Trial(logProbability, posterior)));
     }
 
-    private static ReddeningFit summary(NavigableMap<Integer, Trial> trials) {
+    private static ReddeningFit summary(
+            NavigableMap<Integer, Trial> trials, Optional<Trial> without) {
         double best = best(trials);
         List<TypePosterior> posteriors = trials.values().stream().map(Trial::posterior).toList();
         List<Double> weights =
@@ -124,12 +125,17 @@ public final class ReddeningFitter {
                         trials.keySet().stream().mapToDouble(tenths -> tenths * FINE).toArray(),
                         weights.stream().mapToDouble(Double::doubleValue).toArray(),
                         FINE);
+        double mean =
+                weights.stream().mapToDouble(Double::doubleValue).sum() / (GREATEST_TENTHS + 1);
+        double logGain =
+                without.map(trial -> best + Math.log(mean) - trial.logProbability()).orElse(0.0);
         return new ReddeningFit(
                 positive(extinction.at(0.5)),
                 positive(extinction.at(0.16)),
                 positive(extinction.at(0.84)),
                 positive(extinction.at(0.025)),
                 positive(extinction.at(0.975)),
+                logGain,
                 TypePosterior.mixture(posteriors, weights));
     }
 

@@ -2,8 +2,8 @@ package emberline.place.standard;
 
 import emberline.prepare.PreparedSpectrum;
 import emberline.spectrum.Spectrum;
-import java.util.ArrayList;
-import java.util.List;
+import java.util.EnumMap;
+import java.util.Map;
 
 /**
  * A grid of bins on which spectra of different instruments can be compared. Bins are one resolution
@@ -15,43 +15,59 @@ final class CommonGrid {
     /** Share of a bin that good pixels must cover. */
     private static final double LEAST_COVERAGE = 0.8;
 
-    private final double[] edges;
-
-    private CommonGrid(double[] edges) {
-        this.edges = edges;
-    }
-
-    /** Fluxes with their one-sigma errors in the bins; NaN where a bin is not covered. */
-    @SuppressWarnings("ArrayRecordComponent") // never compared
-    record Binned(double[] flux, double[] sigma) {}
+    private final double[] lowMicron;
+    private final double[] highMicron;
+    private final Map<Range, int[]> bins = new EnumMap<>(Range.class);
 
     /**
-     * A grid over some ranges.
+     * A grid over all ranges.
      *
-     * @param ranges pairs of low and high wavelength (micron), increasing
      * @param resolvingPower resolving power of the coarsest spectrum
      */
-    static CommonGrid over(List<double[]> ranges, double resolvingPower) {
-        List<Double> edges = new ArrayList<>();
-        for (double[] range : ranges) {
-            double step = 1 / resolvingPower;
-            int bins = Math.max(1, (int) (Math.log(range[1] / range[0]) / step));
-            for (int k = 0; k < bins; k++) {
-                edges.add(range[0] * Math.exp(k * step));
-                edges.add(range[0] * Math.exp((k + 1) * step));
+    CommonGrid(double resolvingPower) {
+        int size = 0;
+        for (Range range : Range.values()) {
+            int count = count(range, resolvingPower);
+            bins.put(range, new int[] {size, size + count});
+            size += count;
+        }
+        lowMicron = new double[size];
+        highMicron = new double[size];
+        for (Range range : Range.values()) {
+            int from = bins.get(range)[0];
+            int to = bins.get(range)[1];
+            double step = Math.log(range.highMicron() / range.lowMicron()) / (to - from);
+            for (int k = from; k < to; k++) {
+                lowMicron[k] = range.lowMicron() * Math.exp((k - from) * step);
+                highMicron[k] = range.lowMicron() * Math.exp((k - from + 1) * step);
             }
         }
-        return new CommonGrid(edges.stream().mapToDouble(Double::doubleValue).toArray());
+    }
+
+    private static int count(Range range, double resolvingPower) {
+        return Math.max(
+                1, (int) (Math.log(range.highMicron() / range.lowMicron()) * resolvingPower));
     }
 
     int size() {
-        return edges.length / 2;
+        return lowMicron.length;
+    }
+
+    /** The first bin of a range. */
+    int from(Range range) {
+        return bins.get(range)[0];
+    }
+
+    /** The bin after the last one of a range. */
+    int to(Range range) {
+        return bins.get(range)[1];
     }
 
     double centreMicron(int bin) {
-        return 0.5 * (edges[2 * bin] + edges[2 * bin + 1]);
+        return 0.5 * (lowMicron[bin] + highMicron[bin]);
     }
 
+    /** A spectrum in the bins. */
     Binned of(PreparedSpectrum prepared) {
         Spectrum spectrum = prepared.spectrum();
         double[] flux = new double[size()];
@@ -59,12 +75,12 @@ final class CommonGrid {
         for (int bin = 0; bin < size(); bin++) {
             bin(spectrum, prepared.noise().lag1(), bin, flux, sigma);
         }
-        return new Binned(flux, sigma);
+        return new Binned(this, flux, sigma);
     }
 
     private void bin(Spectrum spectrum, double lag1, int bin, double[] flux, double[] sigma) {
-        double low = edges[2 * bin];
-        double high = edges[2 * bin + 1];
+        double low = lowMicron[bin];
+        double high = highMicron[bin];
         double covered = 0;
         double sum = 0;
         double variance = 0;

@@ -1,11 +1,12 @@
 package emberline.place.standard;
 
+import java.util.Optional;
+
 /**
  * How well a standard, or the sum of two, fits an object.
  *
  * @param first the standard, or the earlier of two
- * @param second the later of two; the same as the first for a single one
- * @param isPair whether it is a sum of two
+ * @param second the later of two; empty for a single one
  * @param scale factor of the first
  * @param secondScale factor of the second; 0 for a single one
  * @param chiSquare weighted sum of squares
@@ -13,8 +14,7 @@ package emberline.place.standard;
  */
 public record StandardMatch(
         Standard first,
-        Standard second,
-        boolean isPair,
+        Optional<Standard> second,
         double scale,
         double secondScale,
         double chiSquare,

@@ -9,6 +9,7 @@ import emberline.place.GravityScore;
 import emberline.place.Placement;
 import emberline.place.RelationEstimate;
 import emberline.place.TypeEstimate;
+import emberline.place.reddening.ReddeningFit;
 import emberline.prepare.BandSignal;
 import emberline.prepare.NoiseModel;
 import emberline.prepare.Quality;
@@ -52,12 +53,21 @@ public final class ObjectJson {
         Map<String, Object> map = columns(result);
         map.put("list", result.candidate().cells());
         map.put("findings", result.findings().stream().map(ObjectJson::finding).toList());
+        map.put(
+                "reddening",
+                result.placement()
+                        .flatMap(Placement::reddening)
+                        .map(fit -> (Object) reddening(fit))
+                        .orElse(null));
         map.put("type_reason", result.placement().map(Placement::typeReason).orElse(""));
         map.put("kinds", result.placement().map(KindJson::kinds).orElse(Map.of()));
         map.put("kind_reason", result.placement().map(p -> p.kind().reason()).orElse(""));
         map.put("kin", result.placement().map(KindJson::kin).orElse(List.of()));
         map.put("pair_reason", result.placement().map(p -> p.pair().reason()).orElse(""));
         map.put("pair_criteria", result.placement().map(KindJson::criteria).orElse(List.of()));
+        map.put(
+                "standards",
+                result.standards().map(v -> (Object) StandardsJson.map(v)).orElse(null));
         map.put("published_scheme", result.placement().map(p -> p.published().scheme()).orElse(""));
         map.put(
                 "calibrated",
@@ -88,6 +98,17 @@ public final class ObjectJson {
                     column.name(),
                     column.content() == Content.NUMBER ? JsonText.number(text) : text);
         }
+        return map;
+    }
+
+    private static Map<String, Object> reddening(ReddeningFit fit) {
+        Map<String, Object> map = new LinkedHashMap<>();
+        map.put("a_v", JsonText.number(Digits.type(fit.avMag())));
+        map.put("a_v_lo68", JsonText.number(Digits.type(fit.lo68Mag())));
+        map.put("a_v_hi68", JsonText.number(Digits.type(fit.hi68Mag())));
+        map.put("a_v_lo95", JsonText.number(Digits.type(fit.lo95Mag())));
+        map.put("a_v_hi95", JsonText.number(Digits.type(fit.hi95Mag())));
+        map.put("log_gain", JsonText.number(Digits.fixed(fit.logGain(), 2)));
         return map;
     }
 

@@ -24,6 +24,9 @@ public final class PlacementTable {
                     "type_sigma",
                     "type_lo95",
                     "type_hi95",
+                    "standard_type",
+                    "standard_type_sigma",
+                    "a_v",
                     "gravity",
                     "p_fldg",
                     "p_intg",
@@ -31,6 +34,10 @@ public final class PlacementTable {
                     "metallicity",
                     "snr",
                     "resolution");
+
+    /** Those of them that are left out where no object has a value. */
+    private static final List<String> WHERE_THERE_IS_ANY =
+            List.of("standard_type", "standard_type_sigma", "a_v");
 
     private PlacementTable() {}
 
@@ -63,6 +70,11 @@ public final class PlacementTable {
         List<ResultColumn> columns =
                 ResultColumns.standard().stream()
                         .filter(column -> ON_TERMINAL.contains(column.name()))
+                        .filter(
+                                column ->
+                                        !WHERE_THERE_IS_ANY.contains(column.name())
+                                                || results.stream()
+                                                        .anyMatch(r -> !column.text(r).isEmpty()))
                         .toList();
         StringBuilder text = new StringBuilder(table(results, columns).text());
         for (ObjectResult result : results) {
@@ -84,6 +96,17 @@ public final class PlacementTable {
                                 remark(text, result, "pair: ", pair(placement));
                                 remark(text, result, "nearest kin: ", kin(placement));
                             });
+            result.standards()
+                    .ifPresent(
+                            verdict ->
+                                    StandardsText.lines(verdict)
+                                            .forEach(
+                                                    line ->
+                                                            remark(
+                                                                    text,
+                                                                    result,
+                                                                    "standards: ",
+                                                                    line)));
         }
         return text.append(JudgementText.print(results)).toString();
     }

@@ -125,6 +125,7 @@ public final class ResultColumns {
         addReddening(columns);
         addMetallicity(columns);
         addPair(columns);
+        columns.addAll(StandardColumns.all());
         addSpectrum(columns);
         columns.add(
                 text(

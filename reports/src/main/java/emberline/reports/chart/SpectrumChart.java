@@ -88,10 +88,19 @@ public final class SpectrumChart {
         List<Curve> curves = new ArrayList<>();
         List<String> remarks = new ArrayList<>();
         Heights heights = new Heights();
+        double[] factors = new double[spectra.size()];
         for (int i = 0; i < spectra.size(); i++) {
             Optional<Spectrum> first = i == 0 ? Optional.empty() : Optional.of(spectra.get(0));
-            addSpectrum(spectra.get(i), first, low, high, curves, remarks, heights);
+            factors[i] = addSpectrum(spectra.get(i), first, low, high, curves, remarks, heights);
         }
+        result.standards()
+                .filter(verdict -> !verdict.best().isEmpty())
+                .map(verdict -> StandardOverlay.of(verdict, spectra, factors))
+                .ifPresent(
+                        overlay -> {
+                            curves.add(overlay.curve());
+                            remarks.add(overlay.remark());
+                        });
         if (spectra.size() > 1) {
             remarks.add("Several spectra are scaled to the first where they overlap.");
         }
@@ -127,7 +136,8 @@ public final class SpectrumChart {
         }
     }
 
-    private void addSpectrum(
+    /** Adds the curves of a spectrum; returns the factor by which its fluxes are multiplied. */
+    private double addSpectrum(
             Spectrum spectrum,
             Optional<Spectrum> scaleTo,
             double low,
@@ -163,6 +173,7 @@ public final class SpectrumChart {
         }
         heights.include(
                 factor * pixels.quantile(0.004) - 0.02, factor * pixels.quantile(0.996) + 0.04);
+        return factor;
     }
 
     private static Optional<TypeEstimate> type(ObjectResult result) {

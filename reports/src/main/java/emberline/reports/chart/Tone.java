@@ -6,6 +6,8 @@ public enum Tone {
     SPECTRUM,
     /** Single pixels behind a binned spectrum. */
     PIXELS,
+    /** A standard laid over the spectrum. */
+    STANDARD,
     /** The one-sigma band of a spectrum. */
     SIGMA,
     /** Where the atmosphere hardly lets light through. */

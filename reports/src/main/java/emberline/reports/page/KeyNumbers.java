@@ -7,10 +7,14 @@ import emberline.measure.Measurement.Measured;
 import emberline.place.GravityVerdict;
 import emberline.place.TypeEstimate;
 import emberline.place.kind.KindVerdict;
+import emberline.place.reddening.ReddeningFit;
+import emberline.place.standard.StandardMatch;
+import emberline.place.standard.StandardVerdict;
 import emberline.prepare.BandSignal;
 import emberline.prepare.Quality;
 import emberline.reports.attach.Digits;
 import emberline.reports.attach.ResultColumns;
+import emberline.reports.attach.StandardsText;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.SpectralType;
 import emberline.spectrum.Spectrum;
@@ -33,6 +37,8 @@ final class KeyNumbers {
     /** Characters of a verdict that find room; the JSON holds all. */
     private static final int LONGEST_VERDICT = 90;
 
+    private static final int LONGEST_NAME = 21;
+
     private KeyNumbers() {}
 
     /** A number with its label. */
@@ -43,6 +49,8 @@ final class KeyNumbers {
         List<Entry> entries = new ArrayList<>();
         result.verdict().ifPresent(verdict -> addVerdict(entries, verdict));
         result.placement().flatMap(p -> p.type()).ifPresent(type -> addType(entries, type));
+        result.placement().flatMap(p -> p.reddening()).ifPresent(f -> addReddening(entries, f));
+        result.standards().ifPresent(verdict -> addStandards(entries, verdict));
         result.placement().ifPresent(p -> addGravity(entries, p.gravity()));
         result.placement().ifPresent(p -> addKind(entries, p.kind()));
         result.judgement().ifPresent(judgement -> addJudgement(entries, judgement));
@@ -76,6 +84,49 @@ final class KeyNumbers {
                                 + Digits.type(type.sigmaSubclass())));
         entries.add(new Entry("68% interval", interval(type.lo68(), type.hi68())));
         entries.add(new Entry("95% interval", interval(type.lo95(), type.hi95())));
+    }
+
+    private static void addReddening(List<Entry> entries, ReddeningFit fit) {
+        entries.add(
+                new Entry(
+                        "A(V) fitted (mag)",
+                        Digits.fixed(fit.avMag(), 1)
+                                + " ("
+                                + Digits.fixed(fit.lo68Mag(), 1)
+                                + " to "
+                                + Digits.fixed(fit.hi68Mag(), 1)
+                                + ")"));
+    }
+
+    /** The type by standards, and the best of them with their reduced chi-squares. */
+    private static void addStandards(List<Entry> entries, StandardVerdict verdict) {
+        if (verdict.type().isEmpty()) {
+            entries.add(new Entry("Standards", "not compared"));
+            return;
+        }
+        entries.add(
+                new Entry(
+                        "Standards",
+                        StandardsText.withError(verdict.type().get())
+                                + "  ("
+                                + StandardsText.ranges(verdict.ranges())
+                                + ")"));
+        for (StandardMatch match : verdict.best()) {
+            entries.add(
+                    new Entry(
+                            "   \u03c7² = " + StandardsText.chiSquare(match),
+                            shortened(match.first().name())
+                                    + " ("
+                                    + new SpectralType(match.first().typeNumber()).code()
+                                    + ")"));
+        }
+    }
+
+    /** A name that leaves room for a type in its line; the whole names stand on the next page. */
+    private static String shortened(String name) {
+        return name.length() <= LONGEST_NAME
+                ? name
+                : name.substring(0, LONGEST_NAME - 1).strip() + "\u2026";
     }
 
     private static String interval(double low, double high) {

@@ -4,7 +4,9 @@ import emberline.judge.Judgement;
 import emberline.judge.LedgerEntry;
 import emberline.place.Placement;
 import emberline.place.kind.Kin;
+import emberline.place.standard.StandardVerdict;
 import emberline.reports.attach.JudgementText;
+import emberline.reports.attach.StandardsText;
 import emberline.reports.page.Flow.Cell;
 import emberline.spectrum.Finding;
 import emberline.survey.ObjectResult;
@@ -28,6 +30,7 @@ final class SideSections {
     /** Writes the sections. */
     void write(Flow flow, ObjectResult result) {
         Placement placement = result.placement().orElseThrow();
+        result.standards().ifPresent(verdict -> standards(flow, verdict));
         kin(flow, placement.kin());
         flow.heading("Metallicity class");
         for (String line : MetallicityText.of(placement.metallicity())) {
@@ -36,6 +39,22 @@ final class SideSections {
         result.judgement().ifPresent(judgement -> judgement(flow, judgement));
         findings(flow, result);
         given(flow, result);
+    }
+
+    private void standards(Flow flow, StandardVerdict verdict) {
+        flow.heading("Comparison with standards");
+        flow.paragraph(
+                styles.note(),
+                "The observer's own spectra of known type; reduced chi-square with a free scale, in"
+                        + " bins of a resolution element, with 2% of scatter between like objects"
+                        + " and 10% in the colours between ranges.",
+                0);
+        for (String line : StandardsText.lines(verdict)) {
+            flow.paragraph(
+                    styles.table(),
+                    line.substring(0, 1).toUpperCase(Locale.ROOT) + line.substring(1) + ".",
+                    8);
+        }
     }
 
     private void kin(Flow flow, List<Kin> kin) {

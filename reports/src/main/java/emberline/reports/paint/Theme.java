@@ -50,6 +50,7 @@ public record Theme(
         return switch (tone) {
             case SPECTRUM -> new Color(0x14233F);
             case PIXELS -> new Color(0xC3CBD8);
+            case STANDARD -> new Color(0xC2571A);
             case SIGMA -> new Color(0xBFD0E6);
             case TELLURIC_OPAQUE -> new Color(0x7C8591);
             case TELLURIC_STRONG -> new Color(0xA2AAB5);

@@ -12,6 +12,7 @@ import com.networknt.schema.JsonSchemaFactory;
 import com.networknt.schema.SpecVersion;
 import emberline.reports.RealSpectra;
 import emberline.reports.Samples;
+import emberline.reports.page.StandardsReportTest;
 import emberline.survey.ObjectResult;
 import java.io.IOException;
 import java.util.ArrayList;
@@ -42,6 +43,7 @@ class ObjectSchemaTest {
                 List.of(
                         Samples.lDwarf(),
                         Samples.judged(Samples.lDwarf()),
+                        StandardsReportTest.compared(),
                         Samples.judged(Samples.tDwarf()),
                         Samples.failed("x", "gone"))) {
             assertValid(object);
