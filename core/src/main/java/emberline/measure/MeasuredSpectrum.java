@@ -13,12 +13,16 @@ final class MeasuredSpectrum {
     private static final double NEGATIVE = 1e-6;
 
     private final FormulaBook book;
+    private final WindowOperator operator;
+    private final PreparedSpectrum prepared;
     private final double[] means;
     private final EnvelopeMatrix covariance;
     private EnvelopeMatrix factor;
 
     MeasuredSpectrum(FormulaBook book, WindowOperator operator, PreparedSpectrum prepared) {
         this.book = book;
+        this.operator = operator;
+        this.prepared = prepared;
         this.means = operator.apply(prepared.spectrum());
         this.covariance = operator.covariance(prepared.spectrum(), prepared.noise());
     }
@@ -82,10 +86,18 @@ final class MeasuredSpectrum {
         return root(continuum.rows(), continuum.weights());
     }
 
-    /** The Cholesky factor of the covariance, made when it is first needed. */
+    /** The lower factor of the covariance, made when it is first needed. */
     private synchronized EnvelopeMatrix factor() {
         if (factor == null) {
-            factor = covariance.cholesky();
+            factor =
+                    covariance
+                            .cholesky()
+                            .orElseGet(
+                                    () ->
+                                            covariance.factorFrom(
+                                                    operator.noiseVectors(
+                                                            prepared.spectrum(),
+                                                            prepared.noise())));
         }
         return factor;
     }
