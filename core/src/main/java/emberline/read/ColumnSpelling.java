@@ -48,6 +48,9 @@ public final class ColumnSpelling {
     /** The known column that a name was most likely meant to be. */
     static Optional<String> meant(String column, Collection<String> known) {
         String lower = column.trim().toLowerCase(Locale.ROOT).replace(' ', '_').replace('-', '_');
+        if (known.contains(lower)) {
+            return Optional.of(lower);
+        }
         Optional<String> withoutUnit =
                 known.stream().filter(name -> name.startsWith(lower + "_")).findFirst();
         if (withoutUnit.isPresent() && !lower.isEmpty()) {
