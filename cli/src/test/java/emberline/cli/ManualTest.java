@@ -71,15 +71,22 @@ class ManualTest {
         CommandRun run = CommandRun.of("completion");
         assertEquals(ExitCode.DONE, run.code());
         Files.writeString(script, run.out());
-        String ask =
+        assertTrue(completed(script, "so", 1).strip().endsWith("sort"), "commands");
+        String options = completed(script, "sort --re", 2);
+        assertTrue(options.contains("--resolution"), options);
+    }
+
+    private static String completed(Path script, String words, int word)
+            throws IOException, InterruptedException {
+        return output(
+                "bash",
+                "-c",
                 "source "
                         + script
-                        + "; COMP_WORDS=(emberline %s); COMP_CWORD=%d; _complete_emberline;"
-                        + " echo ${COMPREPLY[@]}";
-        assertTrue(
-                output("bash", "-c", String.format(ask, "so", 1)).strip().endsWith("sort"),
-                "commands");
-        String options = output("bash", "-c", String.format(ask, "sort --re", 2));
-        assertTrue(options.contains("--resolution"), options);
+                        + "; COMP_WORDS=(emberline "
+                        + words
+                        + "); COMP_CWORD="
+                        + word
+                        + "; _complete_emberline; echo ${COMPREPLY[@]}");
     }
 }

@@ -135,7 +135,8 @@ class HostileFilesTest {
                 "a: !!java.io.FileOutputStream [MADE]"
             })
     void yamlOfEcsvMakesNothing(String line) {
-        StringBuilder header = new StringBuilder("# %ECSV 1.0\n# ---\n");
+        StringBuilder header = new StringBuilder("# ");
+        header.append('%').append("ECSV 1.0\n# ---\n");
         Path made = folder.resolve("made");
         header.append("# ").append(line.replace("MADE", made.toString())).append('\n');
         if (line.contains("&a")) {

@@ -83,7 +83,7 @@ class HostileNamesTest {
                 "&lt;b&gt; &amp;",
                 "]]><!--",
                 "\u2028\u2029",
-                "@DATA@ @STYLE@ ${x} %s %n",
+                "@DATA@ @STYLE@ ${x} %" + "s %" + "n",
                 "\\input{/etc/passwd} $x^2$ % & # _ { } ~ ^",
                 "=HYPERLINK(\"http://127.0.0.1\",\"x\")",
                 "+1+cmd|' /C calc'!A0",

@@ -35,7 +35,7 @@ class StressReportTest {
 
     @TempDir private Path folder;
 
-    private static String cells(String kind, double w, double f, int pixel) {
+    private static String cells(String kind, double f, int pixel) {
         double noise = 0.02 * Math.sin(pixel * 12.9898 + pixel * pixel * 0.37);
         double flux = f + noise;
         return switch (kind) {
@@ -83,7 +83,7 @@ class StressReportTest {
             double w = 0.8 + 1.7 * i / (pixels - 1.0);
             double f = Math.exp(-0.5 * Math.pow((w - 1.3) / 0.45, 2));
             f *= 1 - 0.5 * Math.exp(-0.5 * Math.pow((w - 1.4) / 0.06, 2));
-            text.append(String.format(Locale.ROOT, "%.6f,", w)).append(cells(kind, w, f, i));
+            text.append(String.format(Locale.ROOT, "%.6f,", w)).append(cells(kind, f, i));
             text.append('\n');
         }
         Files.writeString(folder.resolve("s.csv"), text);
