@@ -149,7 +149,7 @@ class EnvelopeMatrixTest {
      * factor from the vectors still returns the matrix.
      */
     @ParameterizedTest
-    @ValueSource(ints = {2, 7, 30, 60, 200, 400})
+    @ValueSource(ints = {7, 60, 200})
     void moreWindowsThanPixelsHaveAFactor(int pixels) {
         Random random = new Random(pixels);
         RealMatrix windows = new Array2DRowRealMatrix(500, pixels);
@@ -163,9 +163,7 @@ class EnvelopeMatrixTest {
         }
         RealMatrix full = windows.multiply(windows.transpose());
         EnvelopeMatrix matrix = of(full);
-        if (pixels > 2 && pixels < 400) {
-            assertTrue(matrix.cholesky().isEmpty(), "no case of the weakness of Cholesky");
-        }
+        assertTrue(matrix.cholesky().isEmpty(), "no case of the weakness of Cholesky");
         RealMatrix lower = lower(matrix.factorFrom(strips(windows)));
         assertClose(full, lower.multiply(lower.transpose()));
     }

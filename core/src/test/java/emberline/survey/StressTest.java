@@ -9,6 +9,7 @@ import emberline.judge.Judgement;
 import emberline.measure.FeatureMeasurement;
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measuring;
+import emberline.place.TypePosterior;
 import emberline.spectrum.Candidate;
 import java.io.IOException;
 import java.nio.file.Files;
@@ -130,10 +131,12 @@ class StressTest {
         ObjectResult other = run(900, 80, (w, f, s) -> row(w, f * scale, s * scale));
         requireAnswerOrReason(other);
         assertEquals(one.status(), other.status(), other.reason());
-        assertEquals(
-                one.placement().orElseThrow().type().orElseThrow().typeNumber(),
-                other.placement().orElseThrow().type().orElseThrow().typeNumber(),
-                0.02);
+        double[] shares = shares(one);
+        double[] others = shares(other);
+        for (int k = 0; k < shares.length; k++) {
+            assertEquals(shares[k], others[k], 1e-3, "posterior at " + k);
+        }
+        int compared = 0;
         for (FeatureMeasurement feature : one.best().orElseThrow().all()) {
             String id = feature.feature().id();
             if (feature.result() instanceof Measured m) {
@@ -141,8 +144,16 @@ class StressTest {
                 // ten digits are written into the file
                 assertEquals(m.value(), n.value(), 1e-6 * Math.max(1, Math.abs(m.value())), id);
                 assertEquals(1, n.oneSigma() / m.oneSigma(), 1e-3, id);
+                compared++;
             }
         }
+        assertTrue(compared > 30, "only " + compared + " features were measured");
+    }
+
+    private static double[] shares(ObjectResult result) {
+        TypePosterior posterior =
+                result.placement().orElseThrow().calibrated().posterior().orElseThrow();
+        return IntStream.range(0, posterior.size()).mapToDouble(posterior::probability).toArray();
     }
 
     /** At the ends of what a double holds there may be a refusal, but nothing without a reason. */
@@ -155,7 +166,7 @@ class StressTest {
     @ParameterizedTest
     @CsvSource({"2", "3", "4", "5", "7", "10", "20", "40", "49", "55", "80", "120", "200", "400"})
     void fewPixels(int pixels) throws IOException {
-        for (int seed = 0; seed < 3; seed++) {
+        for (int seed = 0; seed < 2; seed++) {
             for (double signal : new double[] {1, 30, 1000}) {
                 requireAnswerOrReason(
                         run(pixels, signal, StressTest::row, "wavelength_micron,flux,sigma", seed));
@@ -241,7 +252,7 @@ class StressTest {
     void anyMixture() throws IOException {
         SplittableRandom random = new SplittableRandom(77);
         List<Case> cases = cases();
-        for (int trial = 0; trial < 40; trial++) {
+        for (int trial = 0; trial < 25; trial++) {
             Cells one = cases.get(random.nextInt(cases.size())).cells();
             Cells two = cases.get(random.nextInt(cases.size())).cells();
             double border = random.nextDouble(0.8, 2.5);
