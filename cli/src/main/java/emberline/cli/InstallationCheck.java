@@ -201,7 +201,7 @@ final class InstallationCheck {
                             line.what(),
                             String.format(
                                     Locale.ROOT,
-                                    "%.6g; expected %.6g +- %.1g",
+                                    "%.7g; expected %.7g +- %.1g",
                                     line.found(),
                                     line.expected(),
                                     line.tolerance()),

@@ -161,12 +161,12 @@ public final class CandidateListReader {
         for (int i = 0; i < keys.size(); i++) {
             byColumn.put(keys.get(i), i < cells.size() ? cells.get(i) : "");
         }
-        String written = byColumn.get("name").trim();
+        String written = byColumn.get("name").strip();
         String name = written.isEmpty() ? "row " + row : written;
         List<String> spectra =
                 Arrays.stream(byColumn.get("spectrum").split(";", -1))
-                        .map(String::trim)
-                        .filter(path -> !path.isEmpty())
+                        .map(String::strip)
+                        .filter(path -> !path.isBlank())
                         .toList();
         Candidate candidate = new Candidate(name, row, spectra, byColumn);
         Optional<String> problem = problem(candidate, keys.size(), cells.size(), written);

@@ -22,6 +22,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 /** Lists that name what is no file of a spectrum, and lists that are no files themselves. */
 class HostileListTest {
@@ -70,6 +71,19 @@ class HostileListTest {
         assertFalse(results.get(0).reason().contains("internal error"), results.get(0).reason());
         assertTrue(results.get(1).reason().contains("none.csv: no such file"));
         assertFalse(Files.exists(folder.resolve("made")), "a command was run");
+    }
+
+    /** What looks like a blank is no name, whatever its code is, and ends no reading. */
+    @ParameterizedTest
+    @ValueSource(strings = {"\u2028", "\u2003", "\u3000\u2029", "\u205f", "\u00a0", "\u200b"})
+    void blanksOfOtherScriptsAreNoNames(String name) throws IOException {
+        List<ObjectResult> results = run(name + ",a.csv", "other,none.csv", "last," + name);
+        assertEquals(3, results.size());
+        for (ObjectResult result : results) {
+            assertEquals(Status.FAILED, result.status());
+            assertFalse(result.candidate().name().isBlank());
+            assertFalse(result.reason().contains("internal error"), result.reason());
+        }
     }
 
     @Test

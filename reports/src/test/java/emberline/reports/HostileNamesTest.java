@@ -70,7 +70,6 @@ class HostileNamesTest {
                 "\u202egnp.exe",
                 "\u200b\u200d\ufeff",
                 "\ud83d\ude80 \ud835\udd38",
-                "\ud800 half a pair",
                 "\u0627\u0644\u0646\u062c\u0645",
                 "e\u0301\u0301\u0301\u0301",
                 "\u00e9",
@@ -82,7 +81,7 @@ class HostileNamesTest {
                 "javascript:alert(1)",
                 "&lt;b&gt; &amp;",
                 "]]><!--",
-                "\u2028\u2029",
+                "a\u2028b\u2029",
                 "@DATA@ @STYLE@ ${x} %" + "s %" + "n",
                 "\\input{/etc/passwd} $x^2$ % & # _ { } ~ ^",
                 "=HYPERLINK(\"http://127.0.0.1\",\"x\")",
@@ -152,7 +151,7 @@ class HostileNamesTest {
         String text = Files.readString(file);
         assertTrue(text.chars().noneMatch(c -> c < ' ' && c != '\n'), "control characters");
         Object read = JSON.std.mapFrom(text).get("name");
-        assertEquals(name.replaceAll("[\ud800-\udbff](?![\udc00-\udfff])", "?"), read);
+        assertEquals(name, read);
     }
 
     private static void requireCsv(Path file, String name) throws IOException {
@@ -164,7 +163,7 @@ class HostileNamesTest {
                 assertFalse(cell.matches("(?s)[=@\\t\\r\\n\uff1d+-].*"), cell);
                 String bare = cell.startsWith("'") ? cell.substring(1) : cell;
                 assertTrue(
-                        name.startsWith("\ud800") || bare.equals(name) || cell.equals(name), cell);
+                        bare.equals(name) || cell.equals(name), cell);
             }
         }
     }
