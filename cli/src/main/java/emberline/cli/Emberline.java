@@ -2,6 +2,7 @@ package emberline.cli;
 
 import emberline.reports.paint.HeadlessFonts;
 import java.io.PrintWriter;
+import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.util.logging.LogManager;
 import picocli.CommandLine;
@@ -27,7 +28,10 @@ import picocli.CommandLine.Spec;
             ReportCommand.class,
             CatalogueCommand.class,
             CalibrateCommand.class,
-            CheckCommand.class
+            CheckCommand.class,
+            DoctorCommand.class,
+            CompletionCommand.class,
+            ManualCommand.class
         },
         mixinStandardHelpOptions = true,
         versionProvider = ProgramVersion.class,
@@ -48,9 +52,17 @@ public final class Emberline implements Runnable {
     public static void main(String[] arguments) {
         LogManager.getLogManager()
                 .reset(); // the table and FITS libraries log what we report better
-        HeadlessFonts.prepare();
         PrintWriter out = new PrintWriter(System.out, false, StandardCharsets.UTF_8);
         PrintWriter err = new PrintWriter(System.err, true, StandardCharsets.UTF_8);
+        try {
+            HeadlessFonts.prepare();
+        } catch (UncheckedIOException e) {
+            err.println(
+                    "folder for temporary files: cannot be written ("
+                            + e.getCause().getMessage()
+                            + "); expected a writable one, for the fonts of the reports. Choose"
+                            + " another by the Java option -Djava.io.tmpdir=DIR.");
+        }
         int code = commandLine(out, err).execute(arguments);
         if (out.checkError()) {
             err.println("standard output: cannot be written; check where it goes, then run again");
@@ -71,6 +83,7 @@ public final class Emberline implements Runnable {
                 .setOut(out)
                 .setErr(err)
                 .setCaseInsensitiveEnumValuesAllowed(true)
+                .setParameterExceptionHandler(new UsageFailure())
                 .setExecutionExceptionHandler(new FailureHandler());
     }
 

@@ -4,15 +4,21 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measuring;
 import emberline.read.CandidateList;
 import emberline.read.CandidateListReader;
+import emberline.read.ColumnSpelling;
 import emberline.read.UnreadableListException;
 import emberline.survey.SurveySettings;
 import java.nio.file.Path;
 import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
 
 /** What every command takes that runs a candidate list through the chain. */
 final class ListOptions {
+
+    @Spec(Spec.Target.MIXEE)
+    private CommandSpec spec;
 
     @Mixin private SpectrumOptions spectrumOptions;
     @Mixin private CatalogueOption catalogueOption;
@@ -33,9 +39,13 @@ final class ListOptions {
         return list;
     }
 
-    /** Reads the list. */
+    /** Reads the list, and asks about columns that look misspelt. */
     CandidateList read() throws UnreadableListException {
-        return new CandidateListReader().read(list);
+        CandidateList read = new CandidateListReader().read(list);
+        for (String doubt : ColumnSpelling.doubts(read)) {
+            spec.commandLine().getErr().println(list.getFileName() + ": " + doubt);
+        }
+        return read;
     }
 
     /** The settings of the run. */

@@ -1,5 +1,7 @@
 package emberline.measure;
 
+import java.util.Optional;
+
 /**
  * A symmetric matrix of which each row is stored from its first non-zero element to the diagonal.
  * Covariances of window means are of this kind once the windows are sorted: windows far apart share
@@ -10,8 +12,11 @@ final class EnvelopeMatrix {
     /** A pivot below this share of its diagonal element counts as zero. */
     private static final double SINGULAR = 1e-9;
 
-    /** A pivot below minus this share of its diagonal element is no matter of rounding. */
+    /** A pivot below minus this share of its diagonal element makes the factor useless. */
     private static final double NEGATIVE = 1e-5;
+
+    /** A correlation that is lost with a row without pivot may not be above this. */
+    private static final double LOST = 1e-4;
 
     private final int[] start;
     private final double[][] rows;
@@ -41,41 +46,51 @@ final class EnvelopeMatrix {
      * The lower Cholesky factor. Rows that depend on earlier ones, as windows on few pixels do, get
      * a zero on the diagonal, so that the product still returns this matrix.
      *
-     * @return a lower-triangular matrix with the same envelope
-     * @throws IllegalStateException if the matrix is no covariance: a pivot is negative by more
-     *     than rounding can make it
+     * <p>Where many rows nearly depend on each other, each small pivot multiplies the rounding of
+     * those before it, until the factor has nothing to do with the matrix. This happens where there
+     * are more windows than pixels below them, whatever the noise; {@link OrthogonalFactor} has the
+     * factor then.
+     *
+     * @return a lower-triangular matrix with the same envelope, of which the product with its
+     *     transpose returns all correlations within 0.0001; empty where rounding spoils it or this
+     *     matrix is no covariance
      */
-    EnvelopeMatrix cholesky() {
+    Optional<EnvelopeMatrix> cholesky() {
         double[][] factor = new double[rows.length][];
         for (int j = 0; j < rows.length; j++) {
             double[] row = rows[j].clone();
             int from = start[j];
+            double own = rows[j][j - from];
             for (int i = from; i < j; i++) {
                 double pivot = factor[i][i - start[i]];
+                double rest = row[i - from] - dot(row, from, factor[i], start[i], i);
                 if (pivot == 0) {
+                    if (rest * rest > LOST * LOST * own * rows[i][i - start[i]]) {
+                        return Optional.empty();
+                    }
                     row[i - from] = 0;
-                    continue;
+                } else {
+                    row[i - from] = rest / pivot;
                 }
-                row[i - from] = (row[i - from] - dot(row, from, factor[i], start[i], i)) / pivot;
             }
-            double rest = row[j - from] - dot(row, from, row, from, j);
-            if (!(rest >= -NEGATIVE * rows[j][j - from])) {
-                throw new IllegalStateException(
-                        "covariance of "
-                                + rows.length
-                                + " window means: row "
-                                + j
-                                + " has the pivot "
-                                + rest
-                                + " on the diagonal element "
-                                + rows[j][j - from]
-                                + "; expected none below zero: check the correlation of the noise"
-                                + " of neighbouring pixels");
+            double rest = own - dot(row, from, row, from, j);
+            if (!(rest >= -NEGATIVE * own)) {
+                return Optional.empty();
             }
-            row[j - from] = rest > SINGULAR * rows[j][j - from] ? Math.sqrt(rest) : 0;
+            row[j - from] = rest > SINGULAR * own ? Math.sqrt(rest) : 0;
             factor[j] = row;
         }
-        return new EnvelopeMatrix(start, factor);
+        return Optional.of(new EnvelopeMatrix(start, factor));
+    }
+
+    /**
+     * The lower factor of this matrix from vectors of which it holds the products.
+     *
+     * @param vectors the rows of a matrix B with B B^T equal to this matrix
+     * @return a lower-triangular matrix with the same envelope
+     */
+    EnvelopeMatrix factorFrom(OrthogonalFactor.Strip[] vectors) {
+        return new EnvelopeMatrix(start, OrthogonalFactor.of(vectors, start));
     }
 
     /** Sum of products of two rows over the columns below {@code end} that both store. */

@@ -1,6 +1,8 @@
 package emberline.measure;
 
+import emberline.prepare.NoiseModel;
 import emberline.prepare.PreparedSpectrum;
+import emberline.spectrum.Spectrum;
 import java.util.List;
 
 /**
@@ -12,15 +14,46 @@ final class MeasuredSpectrum {
     /** A variance below minus this share of its terms is no matter of rounding. */
     private static final double NEGATIVE = 1e-6;
 
+    /** Fluxes within this power of two of one are left as they are; others could overflow. */
+    private static final int SAFE_EXPONENT = 100;
+
+    private static final int MOST_EXPONENT = 1000;
+
     private final FormulaBook book;
+    private final WindowOperator operator;
+    private final Spectrum spectrum;
+    private final NoiseModel noise;
     private final double[] means;
     private final EnvelopeMatrix covariance;
     private EnvelopeMatrix factor;
 
     MeasuredSpectrum(FormulaBook book, WindowOperator operator, PreparedSpectrum prepared) {
         this.book = book;
-        this.means = operator.apply(prepared.spectrum());
-        this.covariance = operator.covariance(prepared.spectrum(), prepared.noise());
+        this.operator = operator;
+        this.spectrum = onSafeScale(prepared.spectrum());
+        this.noise = prepared.noise();
+        this.means = operator.apply(spectrum);
+        this.covariance = operator.covariance(spectrum, noise);
+    }
+
+    /**
+     * The spectrum on a scale on which squares and products of a few fluxes can be held. Every
+     * feature is a ratio, so the scale does not matter; it is a power of two, so nothing is
+     * rounded.
+     */
+    private static Spectrum onSafeScale(Spectrum spectrum) {
+        double largest = 0;
+        for (int i = 0; i < spectrum.size(); i++) {
+            if (spectrum.isGood(i)) {
+                largest = Math.max(largest, Math.abs(spectrum.flux(i)));
+            }
+        }
+        int exponent = largest > 0 ? Math.getExponent(largest) : 0;
+        if (Math.abs(exponent) <= SAFE_EXPONENT) {
+            return spectrum;
+        }
+        int shift = Math.max(-MOST_EXPONENT, Math.min(MOST_EXPONENT, -exponent));
+        return spectrum.withFluxScaledBy(Math.scalb(1.0, shift));
     }
 
     FormulaBook book() {
@@ -82,10 +115,16 @@ final class MeasuredSpectrum {
         return root(continuum.rows(), continuum.weights());
     }
 
-    /** The Cholesky factor of the covariance, made when it is first needed. */
+    /** The lower factor of the covariance, made when it is first needed. */
     private synchronized EnvelopeMatrix factor() {
         if (factor == null) {
-            factor = covariance.cholesky();
+            factor =
+                    covariance
+                            .cholesky()
+                            .orElseGet(
+                                    () ->
+                                            covariance.factorFrom(
+                                                    operator.noiseVectors(spectrum, noise)));
         }
         return factor;
     }

@@ -267,6 +267,51 @@ final class WindowOperator {
         return new EnvelopeMatrix(lowest, elements);
     }
 
+    /**
+     * Vectors of which the products are the covariance of the functionals: the rows of W S C, where
+     * C is a lower factor of the correlation of the pixels, so that each is independent noise.
+     *
+     * @param spectrum a spectrum on this grid
+     * @param noise how neighbouring pixels share their noise
+     * @return one a row
+     */
+    OrthogonalFactor.Strip[] noiseVectors(Spectrum spectrum, NoiseModel noise) {
+        double[][] root = correlationRoot(spectrum.size(), noise.lag1(), noise.lag2());
+        OrthogonalFactor.Strip[] vectors = new OrthogonalFactor.Strip[weights.length];
+        for (int row = 0; row < vectors.length; row++) {
+            double[] noisy = timesSigma(spectrum, row);
+            int from = Math.max(0, first[row] - LAGS);
+            double[] mixed = new double[noisy.length == 0 ? 0 : first[row] + noisy.length - from];
+            for (int k = 0; k < noisy.length; k++) {
+                int pixel = first[row] + k;
+                for (int lag = 0; lag <= Math.min(LAGS, pixel); lag++) {
+                    mixed[pixel - lag - from] += noisy[k] * root[pixel][lag];
+                }
+            }
+            vectors[row] = new OrthogonalFactor.Strip(from, mixed);
+        }
+        return vectors;
+    }
+
+    /**
+     * The Cholesky factor of the correlation of pixels: for each its element on the diagonal and
+     * those one and two columns before it.
+     */
+    private static double[][] correlationRoot(int pixels, double lag1, double lag2) {
+        double[][] root = new double[pixels][LAGS + 1];
+        for (int i = 0; i < pixels; i++) {
+            double far = i < 2 || root[i - 2][0] == 0 ? 0 : lag2 / root[i - 2][0];
+            double near =
+                    i < 1 || root[i - 1][0] == 0
+                            ? 0
+                            : (lag1 - (i < 2 ? 0 : far * root[i - 1][1])) / root[i - 1][0];
+            root[i][0] = Math.sqrt(Math.max(0, 1 - near * near - far * far));
+            root[i][1] = near;
+            root[i][2] = far;
+        }
+        return root;
+    }
+
     private double[] timesSigma(Spectrum spectrum, int row) {
         boolean median = functionals.get(row).measure() == WindowFunctional.Over.MEDIAN;
         double[] product = new double[weights[row].length];

@@ -19,6 +19,9 @@ final class NoiseCheck {
     /** Stated noise is remarked on where the scatter is below it by more than this factor. */
     private static final double TOO_LARGE = 3;
 
+    /** Stated noise that exceeds the scatter by more than this is not the noise of these pixels. */
+    private static final double OTHER_SCALE = 50;
+
     /** Factor within which scatter and correlation must agree on the noise. */
     private static final double SAME_STORY = 1.5;
 
@@ -47,7 +50,11 @@ final class NoiseCheck {
     static Settled settle(Optional<double[]> inFile, double[] flux) {
         Optional<double[]> stated = inFile.filter(NoiseCheck::isUsable);
         if (stated.isEmpty()) {
-            return estimated(flux, inFile.isPresent());
+            return estimated(
+                    flux,
+                    inFile.isPresent()
+                            ? "the sigma column is mostly empty"
+                            : "the file states no sigma");
         }
         double[] sigma = stated.get().clone();
         int zero = 0;
@@ -56,6 +63,16 @@ final class NoiseCheck {
                 zero += Double.isFinite(flux[i]) ? 1 : 0;
                 sigma[i] = Double.NaN;
             }
+        }
+        if (isOnOtherScale(flux, sigma)) {
+            return estimated(
+                    flux,
+                    String.format(
+                            Locale.ROOT,
+                            "the stated sigma exceeds the flux of most pixels, and the scatter of"
+                                    + " neighbours by a factor of %.0f: it cannot be on the scale"
+                                    + " of the flux and was set aside",
+                            1 / PixelScatter.inUnitsOf(flux, sigma)));
         }
         List<Finding> findings = new ArrayList<>();
         if (zero > 0) {
@@ -158,8 +175,25 @@ final class NoiseCheck {
         return 2 * positive > sigma.length;
     }
 
-    private static Settled estimated(double[] flux, boolean stated) {
-        String why = stated ? "the sigma column is mostly empty" : "the file states no sigma";
+    /**
+     * Whether the stated sigma contradicts the fluxes: it exceeds most of them, so that neighbours
+     * should differ by more than they are, and yet they agree far better than any sharing of noise
+     * or caution in a sigma could explain. Flux and sigma were then written in different units.
+     */
+    private static boolean isOnOtherScale(double[] flux, double[] sigma) {
+        int below = 0;
+        int good = 0;
+        for (int i = 0; i < flux.length; i++) {
+            if (Double.isFinite(flux[i]) && Double.isFinite(sigma[i])) {
+                good++;
+                below += Math.abs(flux[i]) < sigma[i] ? 1 : 0;
+            }
+        }
+        double scatter = PixelScatter.inUnitsOf(flux, sigma);
+        return 2 * below > good && scatter > 0 && scatter < 1 / OTHER_SCALE;
+    }
+
+    private static Settled estimated(double[] flux, String why) {
         double[] sigma = PixelScatter.sigma(flux);
         if (!Arrays.stream(sigma).anyMatch(s -> s > 0)) {
             return new Settled(

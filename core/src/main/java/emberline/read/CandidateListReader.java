@@ -13,6 +13,7 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.stream.Stream;
 
 /**
  * Reads a candidate list: a table with a row for each object, told by content (CSV separated by
@@ -60,6 +61,9 @@ public final class CandidateListReader {
     private static final Set<String> TEXT_COLUMNS =
             Set.of("name", "spectrum", "medium", "known_type", "known_gravity", "known_kind");
 
+    /** Columns that later steps read, and this one only keeps. */
+    private static final Set<String> LATER_COLUMNS = Set.of("mag_system", "age", "lithium");
+
     /** Words that stand for "no value" in a column of numbers. */
     private static final Set<String> NO_VALUE = Set.of("nan", "null", "none", "n/a", "--", "-");
 
@@ -72,11 +76,18 @@ public final class CandidateListReader {
      *     {@code name} or {@code spectrum}, or has no rows; its message says what to do
      */
     public CandidateList read(Path list) throws UnreadableListException {
-        ListTable table;
-        String name;
         try {
-            FileContent content = FileContent.load(list);
-            name = content.name();
+            return read(FileContent.load(list), list);
+        } catch (UnreadableSpectrumException e) {
+            throw new UnreadableListException(e);
+        }
+    }
+
+    /** Reads a list from what lies at a path. */
+    static CandidateList read(FileContent content, Path list) throws UnreadableListException {
+        ListTable table;
+        String name = content.name();
+        try {
             table = ListTableReader.read(content);
         } catch (UnreadableSpectrumException e) {
             throw new UnreadableListException(e);
@@ -95,6 +106,14 @@ public final class CandidateListReader {
         return new CandidateList(list, keys, rows);
     }
 
+    /** The columns that the product uses, sorted. */
+    static List<String> knownColumns() {
+        return Stream.of(NUMBER_COLUMNS, TEXT_COLUMNS, LATER_COLUMNS)
+                .flatMap(Set::stream)
+                .sorted()
+                .toList();
+    }
+
     /** The known name of a column whatever its case; other names as they are. */
     private static String key(String column) {
         String lower = column.toLowerCase(Locale.ROOT).trim();
@@ -111,7 +130,12 @@ public final class CandidateListReader {
                                 ? "no line of column names"
                                 : "no column '" + needed + "' among " + shortened(columns),
                         "the columns name and spectrum",
-                        "Name the columns in the first line, separated by commas.");
+                        ColumnSpelling.meant(needed, columns)
+                                .or(() -> NearestWord.to(needed, columns))
+                                .map(near -> "Did you mean '" + near + "'? Rename it.")
+                                .orElse(
+                                        "Name the columns in the first line, separated by"
+                                                + " commas."));
             }
         }
         Set<String> seen = new HashSet<>();
@@ -137,12 +161,12 @@ public final class CandidateListReader {
         for (int i = 0; i < keys.size(); i++) {
             byColumn.put(keys.get(i), i < cells.size() ? cells.get(i) : "");
         }
-        String written = byColumn.get("name").trim();
+        String written = byColumn.get("name").strip();
         String name = written.isEmpty() ? "row " + row : written;
         List<String> spectra =
                 Arrays.stream(byColumn.get("spectrum").split(";", -1))
-                        .map(String::trim)
-                        .filter(path -> !path.isEmpty())
+                        .map(String::strip)
+                        .filter(path -> !path.isBlank())
                         .toList();
         Candidate candidate = new Candidate(name, row, spectra, byColumn);
         Optional<String> problem = problem(candidate, keys.size(), cells.size(), written);

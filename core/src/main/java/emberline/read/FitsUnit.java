@@ -7,6 +7,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.Set;
 import nom.tam.fits.AsciiTable;
 import nom.tam.fits.BinaryTable;
 import nom.tam.fits.Data;
@@ -25,6 +26,7 @@ final class FitsUnit implements Keywords {
     private static final int CARD = 80;
     private static final int MOST_UNITS = 1000;
     private static final int MOST_AXES = 999;
+    private static final Set<Double> BITPIX = Set.of(8.0, 16.0, 32.0, 64.0, -32.0, -64.0);
 
     private final FileContent content;
     private final int index;
@@ -137,7 +139,7 @@ final class FitsUnit implements Keywords {
             }
             size *= length;
         }
-        double bytesPerNumber = Math.abs(number("BITPIX").orElse(8.0)) / 8;
+        double bytesPerNumber = Math.abs(checkedBitpix()) / 8;
         double groups = number("GCOUNT").orElse(1.0);
         double heap = number("PCOUNT").orElse(0.0);
         double declared = bytesPerNumber * Math.max(1, groups) * (Math.max(0, heap) + size);
@@ -153,6 +155,21 @@ final class FitsUnit implements Keywords {
                     "The file is cut off or its header wrong: fetch it again.");
         }
         return (long) declared;
+    }
+
+    /**
+     * The bits of a number; anything else than the standard has could hide how much is declared.
+     */
+    private double checkedBitpix() throws UnreadableSpectrumException {
+        double bits = number("BITPIX").orElse(8.0);
+        if (!BITPIX.contains(bits)) {
+            throw new UnreadableSpectrumException(
+                    where(),
+                    "BITPIX = " + text("BITPIX").orElse(""),
+                    "8, 16, 32, 64, -32 or -64",
+                    "Write the file again with a FITS library.");
+        }
+        return bits;
     }
 
     /** Reads the data of a table through the FITS library. */

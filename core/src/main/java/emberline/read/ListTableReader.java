@@ -6,6 +6,7 @@ import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.CsvRecord;
 import java.io.IOException;
 import java.math.BigDecimal;
+import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.List;
 import uk.ac.starlink.fits.FitsTableBuilder;
@@ -144,7 +145,7 @@ final class ListTableReader {
         List<String> columns = new ArrayList<>();
         for (int i = 0; i < table.getColumnCount(); i++) {
             String column = table.getColumnInfo(i).getName();
-            columns.add(column == null ? "" : column.trim());
+            columns.add(column == null ? "" : wellFormed(column.trim()));
         }
         List<List<String>> rows = new ArrayList<>();
         try (RowSequence sequence = table.getRowSequence()) {
@@ -172,6 +173,11 @@ final class ListTableReader {
                     ? new BigDecimal(cell.toString()).stripTrailingZeros().toPlainString()
                     : "";
         }
-        return cell.toString().trim();
+        return wellFormed(cell.toString().trim());
+    }
+
+    /** The text with a question mark for each half of a pair, which no output could hold. */
+    private static String wellFormed(String text) {
+        return new String(text.getBytes(StandardCharsets.UTF_8), StandardCharsets.UTF_8);
     }
 }

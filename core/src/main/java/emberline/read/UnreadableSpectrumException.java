@@ -10,6 +10,8 @@ public final class UnreadableSpectrumException extends IOException {
 
     private static final long serialVersionUID = 1L;
 
+    private static final int LONGEST = 500;
+
     /**
      * Makes the exception; its message reads "where: found; expected X. Advice."
      *
@@ -19,6 +21,11 @@ public final class UnreadableSpectrumException extends IOException {
      * @param advice what the observer can do, a full sentence
      */
     public UnreadableSpectrumException(String where, String found, String expected, String advice) {
-        super(where + ": " + found + "; expected " + expected + ". " + advice);
+        super(where + ": " + shortened(found) + "; expected " + expected + ". " + advice);
+    }
+
+    /** What was found, cut where a file would make a message of any length. */
+    static String shortened(String found) {
+        return found.length() > LONGEST ? found.substring(0, LONGEST) + "..." : found;
     }
 }

@@ -55,6 +55,44 @@ class NoiseCheckTest {
         assertTrue(Arrays.stream(settled.sigma()).allMatch(s -> s == 1));
     }
 
+    /** Flux and sigma in different units: the sigma says nothing, the scatter does. */
+    @Test
+    void noiseOnAnotherScaleIsSetAside() {
+        NoiseCheck.Settled settled = settle(noise(0, 1), 5000);
+        assertEquals("sigma-estimated", codes(settled).get(0));
+        String text = settled.findings().get(0).text();
+        assertTrue(text.matches(".*by a factor of (4[5-9]|5[0-5])\\d\\d: .*"), text);
+        assertTrue(text.contains("was set aside"));
+        assertEquals(1, settled.sigma()[SIZE / 2], 0.5);
+    }
+
+    /** A cautious sigma below the flux, and noise above the flux that is noise, stay. */
+    @Test
+    void cautiousNoiseAndNoiseAboveTheFluxAreKept() {
+        assertEquals(List.of("sigma-above-scatter"), codes(settle(noise(0, 1), 45)));
+        Random random = new Random(3);
+        double[] faint = new double[SIZE];
+        Arrays.setAll(faint, i -> 0.001 + random.nextGaussian());
+        assertEquals(List.of(), codes(settle(faint, 1)));
+        double[] constant = new double[SIZE];
+        Arrays.fill(constant, 2);
+        assertFalse(codes(settle(constant, 1000)).contains("sigma-estimated"));
+    }
+
+    /** The sigma of this public spectrum is 4700 times its scatter, and 770 times its flux. */
+    @Test
+    void aRealSpectrumWithSigmaOnAnotherScaleIsMeasured() throws IOException {
+        Path file =
+                SharedSpectra.folder().resolve("montreal/SIMPJ1158+0435_NIR_SpeX_Robert2016.csv");
+        PreparedSpectrum prepared =
+                new Preparer().prepare(new SpectrumReader().read(file), Preparing.withDefaults());
+        double[] signal = new double[prepared.spectrum().size()];
+        Arrays.setAll(signal, i -> prepared.spectrum().flux(i) / prepared.spectrum().fluxSigma(i));
+        Arrays.sort(signal);
+        double median = signal[signal.length / 2];
+        assertTrue(median > 3 && median < 100, "median signal-to-noise " + median);
+    }
+
     @Test
     void tooSmallNoiseIsScaledToTheScatter() {
         NoiseCheck.Settled settled = settle(noise(0, 2), 0.1);

@@ -95,6 +95,11 @@ public final class CalibratedWitness {
         double[] inflation = new double[sample.size()];
         KnotLikelihood[] knots = fit(sample, inflation);
         Map<GravityClass, double[]> grid = onGrid(knots);
+        if (!Double.isFinite(best(grid))) {
+            return CalibratedType.none(
+                    "the measured values lie beyond all reason from those of any type: look at the"
+                            + " spectrum for bad pixels");
+        }
         TypePosterior alone = posterior(grid, false);
         KnotLikelihood nearest = knots[(int) Math.round(mean(alone) / TypeKnots.STEP)];
         return new CalibratedType(
@@ -112,9 +117,11 @@ public final class CalibratedWitness {
      * @return the posterior; empty where too little was measured
      */
     Optional<TypePosterior> withoutLabelError(Sample sample) {
-        return sample.size() < FEWEST
-                ? Optional.empty()
-                : Optional.of(posterior(onGrid(fit(sample, new double[sample.size()])), false));
+        if (sample.size() < FEWEST) {
+            return Optional.empty();
+        }
+        Map<GravityClass, double[]> grid = onGrid(fit(sample, new double[sample.size()]));
+        return Double.isFinite(best(grid)) ? Optional.of(posterior(grid, false)) : Optional.empty();
     }
 
     /** The likelihood at all knots that matter; fills in how much each sigma had to be widened. */

@@ -7,6 +7,9 @@ package emberline.place.calibrated;
  */
 final class KnotLikelihood {
 
+    private static final double LEAST_VARIANCE = 1e-14;
+    private static final double LEAST_SHARE = 1e-12;
+
     private final double[] lower;
     private final double logDeterminant;
     private final int size;
@@ -67,10 +70,15 @@ final class KnotLikelihood {
         return matrix;
     }
 
-    /** The lower factor, in place; the sum of a positive definite and a semidefinite matrix. */
+    /**
+     * The lower factor, in place; the sum of a positive definite and a semidefinite matrix. A pivot
+     * that rounding made too small is kept at a share of its diagonal element, so that very large
+     * noise beside small scatter makes no infinite numbers.
+     */
     private static double[] cholesky(double[] a, int size) {
         for (int row = 0; row < size; row++) {
             int start = row * size;
+            double least = Math.max(LEAST_VARIANCE, LEAST_SHARE * a[start + row]);
             for (int col = 0; col <= row; col++) {
                 int other = col * size;
                 double sum = a[start + col];
@@ -78,7 +86,7 @@ final class KnotLikelihood {
                     sum -= a[start + k] * a[other + k];
                 }
                 a[start + col] =
-                        row == col ? Math.sqrt(Math.max(sum, 1e-14)) : sum / a[other + col];
+                        row == col ? Math.sqrt(Math.max(sum, least)) : sum / a[other + col];
             }
         }
         return a;

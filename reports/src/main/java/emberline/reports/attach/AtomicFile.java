@@ -6,6 +6,7 @@ import java.nio.file.AtomicMoveNotSupportedException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
+import java.nio.file.StandardOpenOption;
 
 /**
  * A file that appears whole or not at all: it is written under a temporary name in the folder of
@@ -53,7 +54,11 @@ public final class AtomicFile {
     public static void write(Path target, byte[] bytes) throws IOException {
         AtomicFile file = beside(target);
         try {
-            Files.write(file.temporary, bytes);
+            Files.write(
+                    file.temporary(),
+                    bytes,
+                    StandardOpenOption.CREATE_NEW,
+                    StandardOpenOption.WRITE);
             file.commit();
         } finally {
             file.discard();
@@ -61,11 +66,14 @@ public final class AtomicFile {
     }
 
     /**
-     * Where to write.
+     * Where to write. What stands there is deleted first: it is left from an earlier run, or a link
+     * by which something outside the folder would be written over.
      *
-     * @return the temporary file
+     * @return the temporary file, which does not exist
+     * @throws IOException if something stands there that cannot be deleted
      */
-    public Path temporary() {
+    public Path temporary() throws IOException {
+        Files.deleteIfExists(temporary);
         return temporary;
     }
 

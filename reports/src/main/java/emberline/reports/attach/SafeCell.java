@@ -4,10 +4,14 @@ import java.util.regex.Pattern;
 
 /**
  * A cell that no spreadsheet takes for a formula: text that begins with {@code =}, {@code +},
- * {@code -}, {@code @}, a tab or a line end gets an apostrophe before it. Numbers and angles in
- * degrees, minutes and seconds, such as {@code -1.5} and {@code -12:30:05.2}, are left as they are.
+ * {@code -}, {@code @}, their full-width forms, a tab or a line end gets an apostrophe before it.
+ * Numbers and angles in degrees, minutes and seconds, such as {@code -1.5} and {@code -12:30:05.2},
+ * are left as they are.
  */
 final class SafeCell {
+
+    /** By what a formula may begin, in some spreadsheets in full width too. */
+    private static final String STARTS = "=+-@\t\r\n\uff1d\uff0b\uff0d\uff20";
 
     private static final Pattern NUMBER =
             Pattern.compile(
@@ -16,7 +20,7 @@ final class SafeCell {
     private SafeCell() {}
 
     static String of(String cell) {
-        if (cell.isEmpty() || "=+-@\t\r\n".indexOf(cell.charAt(0)) < 0) {
+        if (cell.isEmpty() || STARTS.indexOf(cell.charAt(0)) < 0) {
             return cell;
         }
         return NUMBER.matcher(cell).matches() ? cell : "'" + cell;
