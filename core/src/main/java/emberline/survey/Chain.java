@@ -9,7 +9,10 @@ import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
 import emberline.place.calibrated.Calibration;
+import emberline.place.calibrated.SeveralSpectra;
 import emberline.place.calibrated.TypePrior;
+import emberline.place.photometric.PhotometricType;
+import emberline.place.photometric.PhotometricWitness;
 import emberline.place.reddening.ReddeningFit;
 import emberline.prepare.Degrader;
 import emberline.prepare.Degrader.Degraded;
@@ -18,6 +21,7 @@ import emberline.prepare.ExtinctionLaw;
 import emberline.prepare.PreparedSpectrum;
 import emberline.prepare.Preparer;
 import emberline.prepare.Preparing;
+import emberline.read.CandidatePhotometry;
 import emberline.read.Observation;
 import emberline.read.SpectrumReader;
 import emberline.read.UnreadableSpectrumException;
@@ -35,9 +39,9 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
- * The whole chain for one object: read, prepare, measure, place, judge. An object that fails gets a
- * result that says why; no exception leaves the chain for bad data. Safe for use by several
- * threads.
+ * The whole chain for one object: read, prepare, measure, place, judge; for one without a spectrum
+ * place and judge by its colours. An object that fails gets a result that says why; no exception
+ * leaves the chain for bad data. Safe for use by several threads.
  */
 public final class Chain {
 
@@ -49,6 +53,7 @@ public final class Chain {
     private final Degrader degrader = new Degrader();
     private final Degrading degrading;
     private final JudgingStep judging;
+    private final PhotometricWitness colours;
     private final Preparing defaults;
     private final long seed;
     private final boolean fitReddening;
@@ -105,6 +110,7 @@ public final class Chain {
         this.placers = placers;
         this.degrading = settings.degrading();
         this.judging = new JudgingStep(settings.judging(), prior);
+        this.colours = new PhotometricWitness(prior);
         this.defaults = settings.preparing();
         this.seed = settings.seed();
         this.fitReddening = settings.fitReddening();
@@ -143,16 +149,30 @@ public final class Chain {
         Map<String, Degraded> used = new LinkedHashMap<>();
         List<SpectrumResult> spectra = new ArrayList<>();
         List<String> troubles = new ArrayList<>();
-        for (String path : candidate.spectra()) {
+        List<Finding> twice = new ArrayList<>();
+        if (candidate.spectra().isEmpty()) {
+            return byColours(candidate);
+        }
+        for (int place = 0; place < candidate.spectra().size(); place++) {
+            String path = candidate.spectra().get(place);
             try {
                 Degraded degraded =
                         degrader.degrade(
                                 reader.read(folder.resolve(path)),
-                                stated(candidate),
+                                stated(candidate.forSpectrum(place)),
                                 degrading,
                                 ObjectSeed.of(candidate.name() + "; " + path, seed));
-                spectra.add(measure(path, degraded.observation(), degraded.stated()));
-                used.put(path, degraded);
+                SpectrumResult result = measure(path, degraded.observation(), degraded.stated());
+                Optional<SpectrumResult> same =
+                        spectra.stream()
+                                .filter(one -> one.sha256().equals(result.sha256()))
+                                .findFirst();
+                if (same.isPresent()) {
+                    twice.add(countedOnce(path, same.get()));
+                } else {
+                    spectra.add(result);
+                    used.put(path, degraded);
+                }
             } catch (UnreadableSpectrumException e) {
                 troubles.add(e.getMessage());
             } catch (InvalidPathException e) {
@@ -160,22 +180,58 @@ public final class Chain {
             }
         }
         if (spectra.isEmpty()) {
-            return failed(
-                    candidate,
-                    troubles.isEmpty() ? "no spectrum is listed" : String.join(" | ", troubles));
+            return failed(candidate, String.join(" | ", troubles));
         }
+        Placer placer = placers.placerFor(candidate);
         Optional<ReddeningFit> reddening =
                 fitReddening
-                        ? placers.placerFor(candidate).fitReddening(av -> measuredAt(av, used))
+                        ? placer.fitReddening(av -> measuredAt(av, used, placer))
                         : Optional.empty();
         if (reddening.isPresent()) {
             spectra.clear();
             used.forEach((path, one) -> spectra.add(again(path, one, reddening.get().avMag())));
         }
-        return placed(candidate, spectra, reddening, troubles);
+        return placed(candidate, spectra, reddening, troubles, twice);
     }
 
-    private Measurements measuredAt(double avMag, Map<String, Degraded> used) {
+    /** One spectrum listed twice would have its noise counted as if it were two. */
+    private static Finding countedOnce(String path, SpectrumResult same) {
+        return Finding.caution(
+                "spectrum-twice",
+                path
+                        + " is the same file as "
+                        + same.path()
+                        + " byte for byte; it was counted once");
+    }
+
+    /** An object without a spectrum. */
+    private ObjectResult byColours(Candidate candidate) {
+        PhotometricType type = colours.witness(CandidatePhotometry.of(candidate));
+        if (type.posterior().isEmpty()) {
+            return failed(candidate, "no spectrum is listed, and " + type.reason());
+        }
+        List<Finding> findings = new ArrayList<>();
+        findings.add(
+                Finding.note(
+                        "photometric-type",
+                        "there is no spectrum; type and kind rest on the colours "
+                                + String.join(", ", type.colours())
+                                + " alone, and the intervals are those of colours"));
+        findings.addAll(type.findings());
+        return judging.judged(
+                new ObjectResult(
+                        candidate,
+                        Status.PHOTOMETRIC,
+                        type.reason().isEmpty()
+                                ? "no spectrum: type from colours"
+                                : "no spectrum, and no type from colours: " + type.reason(),
+                        List.of(),
+                        Optional.empty(),
+                        Optional.of(Placement.byColours(type)),
+                        findings));
+    }
+
+    private Measurements measuredAt(double avMag, Map<String, Degraded> used, Placer placer) {
         List<Measurements> all = new ArrayList<>();
         for (Degraded one : used.values()) {
             try {
@@ -184,7 +240,7 @@ public final class Chain {
                 throw new IllegalStateException("prepared before, but not now", e);
             }
         }
-        return Measurements.best(all);
+        return placer.join(all).measurements();
     }
 
     /** Measures a spectrum that was measured before, with another extinction taken out. */
@@ -257,14 +313,25 @@ public final class Chain {
             Candidate candidate,
             List<SpectrumResult> spectra,
             Optional<ReddeningFit> reddening,
-            List<String> troubles) {
-        Measurements best =
-                Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
+            List<String> troubles,
+            List<Finding> twice) {
+        Placer placer = placers.placerFor(candidate);
+        SeveralSpectra.Joined joined =
+                placer.join(spectra.stream().map(SpectrumResult::measurements).toList());
+        List<SpectrumResult> apart = new ArrayList<>();
+        for (int i = 0; i < spectra.size(); i++) {
+            apart.add(spectra.get(i).withTypeAlone(joined.apart().get(i)));
+        }
         Placement placement =
-                placers.placerFor(candidate)
-                        .place(best, reddening, ObjectSeed.of(candidate.name(), seed));
+                withColours(
+                        candidate,
+                        placer.place(
+                                joined.measurements(),
+                                reddening,
+                                ObjectSeed.of(candidate.name(), seed)));
         List<Finding> findings = new ArrayList<>();
         spectra.forEach(spectrum -> findings.addAll(spectrum.prepared().findings()));
+        findings.addAll(twice);
         for (String trouble : troubles) {
             findings.add(Finding.warning("spectrum-unreadable", trouble));
         }
@@ -273,11 +340,14 @@ public final class Chain {
                     Finding.note(
                             "several-spectra",
                             spectra.size()
-                                    + " spectra were measured apart; of each feature the"
-                                    + " measurement with the smallest error was placed"));
+                                    + " spectra were measured apart and placed together; what"
+                                    + " several of them have entered as a mean weighted by noise"
+                                    + " and calibration error"));
+            findings.addAll(joined.findings());
         }
         reddening.ifPresent(fit -> findings.add(fitted(fit)));
         findings.addAll(placement.findings());
+        findings.addAll(unlikeColours(candidate, placement));
         List<String> reasons = new ArrayList<>(troubles);
         if (placement.type().isEmpty()) {
             reasons.add(placement.typeReason());
@@ -287,10 +357,28 @@ public final class Chain {
                         candidate,
                         reasons.isEmpty() ? Status.MEASURED : Status.PARTIAL,
                         String.join(" | ", reasons),
-                        spectra,
-                        Optional.of(best),
+                        apart,
+                        Optional.of(joined.measurements()),
                         Optional.of(placement),
                         findings));
+    }
+
+    /** The placement with what the colours say, where two magnitudes are listed at least. */
+    private Placement withColours(Candidate candidate, Placement placement) {
+        PhotometricType byColours = colours.witness(CandidatePhotometry.of(candidate));
+        return byColours.posterior().isPresent() ? placement.with(byColours) : placement;
+    }
+
+    private List<Finding> unlikeColours(Candidate candidate, Placement placement) {
+        if (placement.type().isEmpty() || placement.photometric().isEmpty()) {
+            return List.of();
+        }
+        return colours.disagreement(
+                        CandidatePhotometry.of(candidate),
+                        placement.type().get(),
+                        placement.reddening().map(ReddeningFit::avMag).orElse(0.0))
+                .map(List::of)
+                .orElse(List.of());
     }
 
     private static Finding fitted(ReddeningFit fit) {

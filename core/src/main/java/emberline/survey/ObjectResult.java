@@ -3,6 +3,7 @@ package emberline.survey;
 import emberline.judge.Judgement;
 import emberline.measure.Measurements;
 import emberline.place.Placement;
+import emberline.prepare.BandSignal;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
 import java.util.ArrayList;
@@ -16,8 +17,8 @@ import java.util.Optional;
  * @param status how far the object came
  * @param reason why it did not come further; empty where it is measured
  * @param spectra its spectra, those that could be read, in the order of the list
- * @param best the measurements that were placed: those of the one spectrum, or of each feature the
- *     one with the smallest error; empty where nothing was read
+ * @param best the measurements that were placed: those of the one spectrum, or those of several
+ *     joined; empty where nothing was read
  * @param placement type and gravity; empty where nothing was read
  * @param judgement mass, age and decision; empty where there is no type or it means nothing
  * @param findings all findings, those of the spectra first
@@ -58,6 +59,31 @@ public record ObjectResult(
             Optional<Placement> placement,
             List<Finding> findings) {
         this(candidate, status, reason, spectra, best, placement, Optional.empty(), findings);
+    }
+
+    /**
+     * The spectrum that stands for an object where one number is wanted, such as its resolving
+     * power: the one with the highest signal-to-noise, the first of equals.
+     *
+     * @return its leading spectrum; empty where none was read
+     */
+    public Optional<SpectrumResult> leading() {
+        if (spectra.size() == 1) {
+            return Optional.of(spectra.get(0));
+        }
+        SpectrumResult leading = null;
+        double highest = Double.NEGATIVE_INFINITY;
+        for (SpectrumResult spectrum : spectra) {
+            double signal =
+                    BandSignal.best(spectrum.prepared().spectrum())
+                            .map(BandSignal::medianSignalToNoise)
+                            .orElse(Double.NEGATIVE_INFINITY);
+            if (leading == null || signal > highest) {
+                leading = spectrum;
+                highest = signal;
+            }
+        }
+        return Optional.ofNullable(leading);
     }
 
     /**

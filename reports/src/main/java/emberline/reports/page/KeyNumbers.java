@@ -10,7 +10,6 @@ import emberline.place.kind.KindVerdict;
 import emberline.prepare.BandSignal;
 import emberline.prepare.Quality;
 import emberline.reports.attach.Digits;
-import emberline.reports.attach.ResultColumns;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.SpectralType;
 import emberline.spectrum.Spectrum;
@@ -157,7 +156,7 @@ final class KeyNumbers {
     }
 
     private static void addSpectra(List<Entry> entries, ObjectResult result) {
-        Optional<SpectrumResult> leading = ResultColumns.leading(result);
+        Optional<SpectrumResult> leading = result.leading();
         if (leading.isEmpty()) {
             return;
         }

@@ -110,10 +110,7 @@ public final class SurveyPage implements Closeable {
         cells.add((type + " " + gravity).strip());
         cells.add(stem);
         cells.add(hasReport);
-        cells.add(
-                ResultColumns.leading(result)
-                        .map(s -> Sparkline.of(s.prepared().spectrum()))
-                        .orElse(""));
+        cells.add(result.leading().map(s -> Sparkline.of(s.prepared().spectrum())).orElse(""));
         append((empty ? "\n" : ",\n") + json(cells));
         empty = false;
     }
