@@ -2,6 +2,8 @@ package emberline.judge;
 
 import emberline.judge.PropertyRelations.Quantity;
 import emberline.place.GravityClass;
+import emberline.spectrum.Magnitude;
+import emberline.spectrum.MagnitudeBand;
 import java.util.Optional;
 
 /**

@@ -2,6 +2,8 @@ package emberline.judge;
 
 import emberline.place.GravityClass;
 import emberline.place.TypePosterior;
+import emberline.spectrum.Magnitude;
+import emberline.spectrum.MagnitudeBand;
 import java.util.EnumMap;
 import java.util.Map;
 import java.util.Optional;

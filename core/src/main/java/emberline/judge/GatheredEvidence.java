@@ -11,8 +11,12 @@ import emberline.place.Placement;
 import emberline.place.TypeEstimate;
 import emberline.place.TypePosterior;
 import emberline.place.calibrated.TypePrior;
+import emberline.place.photometric.PhotometricType;
+import emberline.read.CandidatePhotometry;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
+import emberline.spectrum.Magnitude;
+import emberline.spectrum.MagnitudeBand;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;
@@ -33,7 +37,6 @@ import java.util.OptionalDouble;
  */
 public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
 
-    private static final List<String> LETTERS = List.of("j", "h", "k", "w1", "w2");
     private static final String LITHIUM = "Li";
     private static final String STRONG_HALPHA = "halpha-above-saturation";
 
@@ -46,8 +49,9 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
      * Gathers the evidence of an object.
      *
      * <p>Type and gravity come from the posterior of the calibrated witness where there is one,
-     * else the type from the adopted one with normal errors. Where the gravity class rests on the
-     * published scores, their probabilities take the place of those of the posterior.
+     * else from that of the colours, else the type from the adopted one with normal errors. Where
+     * the gravity class rests on the published scores, their probabilities take the place of those
+     * of the posterior.
      *
      * @param candidate the row of the list
      * @param placement type and gravity
@@ -67,7 +71,11 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
 
     private static TypeAndGravity gravity(Placement placement, TypeEstimate type, TypePrior prior) {
         GravityVerdict verdict = placement.gravity();
-        Optional<TypePosterior> posterior = placement.calibrated().posterior();
+        Optional<TypePosterior> posterior =
+                placement
+                        .calibrated()
+                        .posterior()
+                        .or(() -> placement.photometric().flatMap(PhotometricType::posterior));
         if (posterior.isPresent() && isOf(verdict, posterior.get())) {
             Map<GravityClass, Double> before = new EnumMap<>(GravityClass.class);
             double sum = 0;
@@ -133,7 +141,7 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
                         placed.prior(),
                         lithium(candidate, lines, numbers, findings),
                         halpha(placement, numbers),
-                        photometry(candidate, numbers, findings),
+                        photometry(candidate, findings),
                         astrometry(candidate, findings),
                         age(candidate, findings),
                         placement.metallicity().pSubdwarf(),
@@ -200,35 +208,17 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
     }
 
     private static Map<MagnitudeBand, Magnitude> photometry(
-            Candidate candidate, JudgeNumbers numbers, List<Finding> findings) {
-        String system = candidate.text("mag_system").orElse("2MASS");
-        Map<MagnitudeBand, Magnitude> magnitudes = new EnumMap<>(MagnitudeBand.class);
-        boolean assumed = false;
-        for (String letter : LETTERS) {
-            OptionalDouble magnitude = candidate.number(letter + "_mag");
-            if (magnitude.isEmpty()) {
-                continue;
-            }
-            Optional<MagnitudeBand> band = MagnitudeBand.of(letter, system);
-            if (band.isEmpty()) {
-                findings.add(unusable("mag_system", system, "2MASS or MKO"));
-                continue;
-            }
-            double sigma =
-                    candidate.number(letter + "_mag_err").orElse(numbers.of("magnitude-error"));
-            if (sigma >= 0) {
-                magnitudes.put(band.get(), new Magnitude(magnitude.getAsDouble(), sigma));
-                assumed |= !letter.startsWith("w") && candidate.text("mag_system").isEmpty();
-            }
-        }
-        if (assumed) {
+            Candidate candidate, List<Finding> findings) {
+        CandidatePhotometry photometry = CandidatePhotometry.of(candidate);
+        findings.addAll(photometry.findings());
+        if (photometry.systemAssumed()) {
             findings.add(
                     Finding.note(
                             "mag-system-assumed",
                             "the list does not state the system of J, H and K (column mag_system);"
                                     + " 2MASS was assumed"));
         }
-        return magnitudes;
+        return photometry.magnitudes();
     }
 
     private static Astrometry astrometry(Candidate candidate, List<Finding> findings) {

@@ -4,6 +4,7 @@ import emberline.catalogue.Source;
 import emberline.judge.PropertyRelations.Quantity;
 import emberline.place.TypeEstimate;
 import emberline.spectrum.Finding;
+import emberline.spectrum.MagnitudeBand;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;

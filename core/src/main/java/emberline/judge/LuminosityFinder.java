@@ -1,6 +1,8 @@
 package emberline.judge;
 
 import emberline.judge.PropertyRelations.Quantity;
+import emberline.spectrum.Magnitude;
+import emberline.spectrum.MagnitudeBand;
 import java.util.Optional;
 
 /**

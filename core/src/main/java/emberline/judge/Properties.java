@@ -1,5 +1,6 @@
 package emberline.judge;
 
+import emberline.spectrum.MagnitudeBand;
 import java.util.EnumMap;
 import java.util.Map;
 import java.util.Optional;

@@ -2,6 +2,7 @@ package emberline.judge;
 
 import emberline.judge.PropertyRelations.Quantity;
 import emberline.place.GravityClass;
+import emberline.spectrum.MagnitudeBand;
 import java.util.EnumMap;
 import java.util.Map;
 import java.util.Optional;

@@ -3,6 +3,7 @@ package emberline.measure;
 import emberline.measure.Measurement.Measured;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -29,51 +30,26 @@ public final class Measurements {
     /** Share of a normal distribution below minus one sigma. */
     private static final double LOW_TAIL = 0.158655253931457;
 
-    private final Map<String, Entry> entries;
+    private final Map<String, MeasuredEntry> entries;
 
-    private Measurements(Map<String, Entry> entries) {
+    /** Measurements by feature in the order of the catalogue. */
+    Measurements(Map<String, MeasuredEntry> entries) {
         this.entries = entries;
-    }
-
-    /** A measurement with what is needed to relate it to others. */
-    private record Entry(
-            FeatureMeasurement measurement, MeasuredSpectrum spectrum, Optional<Formula> formula) {
-
-        /** Whether this is to be preferred to another measurement of the same feature. */
-        boolean beats(Entry other) {
-            double mine = sigmaOrInfinite();
-            return mine < other.sigmaOrInfinite();
-        }
-
-        private double sigmaOrInfinite() {
-            return measurement.result().fold(Measured::oneSigma, why -> Double.POSITIVE_INFINITY);
-        }
     }
 
     /** Collects the measurements of one spectrum in the order of the catalogue. */
     static Measurements of(MeasuredSpectrum spectrum, List<FeatureMeasurement> measurements) {
-        Map<String, Entry> entries = new LinkedHashMap<>();
+        Map<String, MeasuredEntry> entries = new LinkedHashMap<>();
         for (FeatureMeasurement measurement : measurements) {
             String id = measurement.feature().id();
-            entries.put(id, new Entry(measurement, spectrum, spectrum.book().formula(id)));
+            entries.put(id, MeasuredEntry.of(measurement, spectrum, spectrum.book().formula(id)));
         }
         return new Measurements(entries);
     }
 
-    /**
-     * Of several spectra of one object the best measurement of each feature: the one with the
-     * smallest error.
-     *
-     * @param several measurements with one catalogue, at least one
-     * @return one measurement a feature
-     */
-    public static Measurements best(List<Measurements> several) {
-        Map<String, Entry> best = new LinkedHashMap<>(several.get(0).entries);
-        for (Measurements other : several.subList(1, several.size())) {
-            other.entries.forEach(
-                    (id, entry) -> best.merge(id, entry, (a, b) -> b.beats(a) ? b : a));
-        }
-        return new Measurements(best);
+    /** The entries by feature in the order of the catalogue. */
+    Map<String, MeasuredEntry> entries() {
+        return Collections.unmodifiableMap(entries);
     }
 
     /**
@@ -82,7 +58,7 @@ public final class Measurements {
      * @return one entry a feature
      */
     public List<FeatureMeasurement> all() {
-        return entries.values().stream().map(Entry::measurement).toList();
+        return entries.values().stream().map(MeasuredEntry::measurement).toList();
     }
 
     /**
@@ -92,7 +68,7 @@ public final class Measurements {
      * @return the measurement, or empty where the catalogue has no such feature
      */
     public Optional<FeatureMeasurement> of(String id) {
-        return Optional.ofNullable(entries.get(id)).map(Entry::measurement);
+        return Optional.ofNullable(entries.get(id)).map(MeasuredEntry::measurement);
     }
 
     /**
@@ -110,16 +86,11 @@ public final class Measurements {
      *
      * @param one a measured feature
      * @param two a measured feature
-     * @return covariance in the units of both; 0 for features of different spectra
+     * @return covariance in the units of both; 0 for features that share no spectrum
      * @throws IllegalArgumentException if one of them was not measured
      */
     public double covariance(String one, String two) {
-        Entry a = measuredEntry(one);
-        Entry b = measuredEntry(two);
-        if (a.spectrum != b.spectrum) {
-            return 0;
-        }
-        return a.spectrum.covariance(a.formula.orElseThrow(), b.formula.orElseThrow());
+        return measuredEntry(one).covariance(measuredEntry(two));
     }
 
     /**
@@ -151,27 +122,36 @@ public final class Measurements {
      * @throws IllegalArgumentException if one of them was not measured
      */
     public double[][] draws(List<String> ids, int count, long seed) {
-        Map<MeasuredSpectrum, List<Integer>> bySpectrum = new LinkedHashMap<>();
+        Map<MeasuredSpectrum, List<Drawn>> bySpectrum = new LinkedHashMap<>();
         for (int k = 0; k < ids.size(); k++) {
-            bySpectrum
-                    .computeIfAbsent(
-                            measuredEntry(ids.get(k)).spectrum, spectrum -> new ArrayList<>())
-                    .add(k);
+            for (MeasuredEntry.Part part : measuredEntry(ids.get(k)).parts()) {
+                bySpectrum
+                        .computeIfAbsent(part.spectrum(), spectrum -> new ArrayList<>())
+                        .add(new Drawn(k, part));
+            }
         }
-        double[][] draws = new double[ids.size()][];
+        double[][] draws = new double[ids.size()][count];
         long stream = seed;
-        for (Map.Entry<MeasuredSpectrum, List<Integer>> group : bySpectrum.entrySet()) {
+        for (Map.Entry<MeasuredSpectrum, List<Drawn>> group : bySpectrum.entrySet()) {
             List<Formula> formulas =
-                    group.getValue().stream()
-                            .map(k -> measuredEntry(ids.get(k)).formula.orElseThrow())
-                            .toList();
+                    group.getValue().stream().map(one -> one.part.formula()).toList();
             double[][] drawn = group.getKey().draws(formulas, count, stream++);
             for (int f = 0; f < drawn.length; f++) {
-                draws[group.getValue().get(f)] = drawn[f];
+                double[] sum = draws[group.getValue().get(f).place];
+                double weight = group.getValue().get(f).part.weight();
+                for (int i = 0; i < count; i++) {
+                    sum[i] += weight * drawn[f][i];
+                }
             }
+        }
+        for (int k = 0; k < draws.length; k++) {
+            measuredEntry(ids.get(k)).widen(draws[k]);
         }
         return draws;
     }
+
+    /** A part of a feature that is to be drawn, and the place of the feature among the others. */
+    private record Drawn(int place, MeasuredEntry.Part part) {}
 
     /**
      * The 68% interval of a measured feature. Where the continuum is well measured it is the value
@@ -203,7 +183,7 @@ public final class Measurements {
     private Map<String, Interval68> intervals68(List<String> ids, long seed) {
         List<String> skewed =
                 ids.stream()
-                        .filter(id -> measuredEntry(id).measurement.continuumSignal() < LINEAR)
+                        .filter(id -> measuredEntry(id).measurement().continuumSignal() < LINEAR)
                         .toList();
         double[][] draws = draws(skewed, INTERVAL_DRAWS, seed);
         Map<String, Interval68> intervals = new LinkedHashMap<>();
@@ -253,9 +233,9 @@ public final class Measurements {
      */
     public record Interval68(double low, double high) {}
 
-    private Entry measuredEntry(String id) {
-        Entry entry = entries.get(id);
-        if (entry == null || !(entry.measurement.result() instanceof Measured)) {
+    private MeasuredEntry measuredEntry(String id) {
+        MeasuredEntry entry = entries.get(id);
+        if (entry == null || !(entry.measurement().result() instanceof Measured)) {
             throw new IllegalArgumentException(
                     "feature " + id + " was not measured: expected one of " + measuredIds());
         }

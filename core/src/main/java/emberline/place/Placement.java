@@ -5,6 +5,7 @@ import emberline.place.kind.Kin;
 import emberline.place.kind.KindVerdict;
 import emberline.place.metallicity.MetallicityVerdict;
 import emberline.place.pair.PairVerdict;
+import emberline.place.photometric.PhotometricType;
 import emberline.place.reddening.ReddeningFit;
 import emberline.spectrum.Finding;
 import java.util.List;
@@ -25,6 +26,7 @@ import java.util.Optional;
  * @param kind what kind of object it is
  * @param kin the reference objects nearest to it, the nearest first
  * @param pair whether it may be an unresolved pair
+ * @param photometric what its colours say; empty where they were not looked at
  * @param findings what the observer should know about the placement
  */
 public record Placement(
@@ -39,6 +41,7 @@ public record Placement(
         KindVerdict kind,
         List<Kin> kin,
         PairVerdict pair,
+        Optional<PhotometricType> photometric,
         List<Finding> findings) {
 
     /** Copies the lists. */
@@ -68,7 +71,55 @@ public record Placement(
                 KindVerdict.notJudged(reason),
                 List.of(),
                 PairVerdict.notJudged(reason),
+                Optional.empty(),
                 List.of());
+    }
+
+    /**
+     * The placement of an object without a spectrum by its colours.
+     *
+     * @param byColours what they say
+     * @return type, or the reason why there is none, and kind; nothing else
+     */
+    public static Placement byColours(PhotometricType byColours) {
+        String reason = "no spectrum: colours alone do not tell this";
+        return new Placement(
+                byColours.type(),
+                byColours.reason(),
+                new PublishedType(Optional.empty(), reason, List.of(), List.of()),
+                CalibratedType.none(reason),
+                Optional.empty(),
+                GravityVerdict.notJudged(reason, List.of()),
+                new MetallicityVerdict(Optional.empty(), reason, Map.of(), List.of(), "", ""),
+                new Activity(Optional.empty(), List.of(), reason),
+                byColours.kind(),
+                List.of(),
+                PairVerdict.notJudged(reason),
+                Optional.of(byColours),
+                byColours.findings());
+    }
+
+    /**
+     * This placement with what the colours say beside the spectrum.
+     *
+     * @param byColours what they say; its findings are not taken over
+     * @return the same placement with that
+     */
+    public Placement with(PhotometricType byColours) {
+        return new Placement(
+                type,
+                typeReason,
+                published,
+                calibrated,
+                reddening,
+                gravity,
+                metallicity,
+                activity,
+                kind,
+                kin,
+                pair,
+                Optional.of(byColours),
+                findings);
     }
 
     /**
@@ -90,6 +141,7 @@ public record Placement(
                 kind,
                 kin,
                 pair,
+                photometric,
                 findings);
     }
 }

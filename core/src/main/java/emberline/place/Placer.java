@@ -5,6 +5,7 @@ import emberline.measure.Measurements;
 import emberline.place.calibrated.CalibratedType;
 import emberline.place.calibrated.CalibratedWitness;
 import emberline.place.calibrated.Calibration;
+import emberline.place.calibrated.SeveralSpectra;
 import emberline.place.calibrated.TypePrior;
 import emberline.place.calibrated.TypePriors;
 import emberline.place.kind.KindJudge;
@@ -37,6 +38,7 @@ public final class Placer {
 
     private final PublishedWitness published;
     private final CalibratedWitness calibrated;
+    private final SeveralSpectra several;
     private final GravityJudge gravity;
     private final MetallicityJudge metallicity;
     private final ActivityJudge activity;
@@ -62,6 +64,7 @@ public final class Placer {
     public Placer(FeatureCatalogue catalogue, Calibration calibration, TypePrior prior) {
         this.published = new PublishedWitness(catalogue);
         this.calibrated = new CalibratedWitness(calibration, prior);
+        this.several = new SeveralSpectra(calibration, calibrated);
         this.gravity = new GravityJudge(catalogue);
         this.metallicity = new MetallicityJudge(catalogue);
         this.activity = new ActivityJudge(catalogue);
@@ -78,6 +81,16 @@ public final class Placer {
      */
     public Placement place(Measurements measurements, long seed) {
         return place(measurements, Optional.empty(), seed);
+    }
+
+    /**
+     * Joins the spectra of one object, so that it can be placed once.
+     *
+     * @param spectra the features of each spectrum, at least one
+     * @return the features of all, the type by each alone, and where they contradict one another
+     */
+    public SeveralSpectra.Joined join(List<Measurements> spectra) {
+        return several.join(spectra);
     }
 
     /**
@@ -143,6 +156,7 @@ public final class Placer {
                 kind,
                 kinds.kin(measurements),
                 pair,
+                Optional.empty(),
                 findings);
     }
 

@@ -20,12 +20,13 @@ import java.util.stream.Stream;
  * commas, semicolons or tabs; ECSV; VOTable; FITS table; each also packed by gzip).
  *
  * <p>The columns {@code name} and {@code spectrum} must be there (in any case); {@code spectrum}
- * holds paths relative to the folder of the list, several joined by {@code ;}. Known beside them
- * are medium, resolution, ra_deg, dec_deg, parallax_mas, pmra_masyr, pmdec_masyr, rv_kms, j_mag,
- * h_mag, k_mag, w1_mag, w2_mag (most with a column of the same name and {@code _err}), known_type,
- * known_gravity and known_kind. Other columns are kept as they are. Every row of the list becomes a
- * candidate; what makes one unusable is said beside it. Has no state; one reader may serve many
- * threads.
+ * holds paths relative to the folder of the list, several joined by {@code ;}. It may be blank, or
+ * be missing, where at least two magnitudes are listed. Known beside them are medium, resolution,
+ * ra_deg, dec_deg, parallax_mas, pmra_masyr, pmdec_masyr, rv_kms, y_mag, j_mag, h_mag, k_mag,
+ * w1_mag, w2_mag (most with a column of the same name and {@code _err}), known_type, known_gravity
+ * and known_kind; medium, resolution and rv_kms hold one value, or one for each spectrum, joined by
+ * {@code ;}. Other columns are kept as they are. Every row of the list becomes a candidate; what
+ * makes one unusable is said beside it. Has no state; one reader may serve many threads.
  */
 public final class CandidateListReader {
 
@@ -47,6 +48,8 @@ public final class CandidateListReader {
                     "pmdec_masyr_err",
                     "rv_kms",
                     "rv_kms_err",
+                    "y_mag",
+                    "y_mag_err",
                     "j_mag",
                     "j_mag_err",
                     "h_mag",
@@ -63,6 +66,12 @@ public final class CandidateListReader {
 
     /** Columns that later steps read, and this one only keeps. */
     private static final Set<String> LATER_COLUMNS = Set.of("mag_system", "age", "lithium");
+
+    private static final List<String> MAGNITUDES =
+            List.of("y_mag", "j_mag", "h_mag", "k_mag", "w1_mag", "w2_mag");
+
+    /** An object without a spectrum can be typed by one colour at least. */
+    private static final int FEWEST_MAGNITUDES = 2;
 
     /** Words that stand for "no value" in a column of numbers. */
     private static final Set<String> NO_VALUE = Set.of("nan", "null", "none", "n/a", "--", "-");
@@ -122,8 +131,10 @@ public final class CandidateListReader {
 
     private static void requireColumns(String name, List<String> keys, List<String> columns)
             throws UnreadableListException {
+        boolean hasColours =
+                keys.stream().filter(MAGNITUDES::contains).count() >= FEWEST_MAGNITUDES;
         for (String needed : new String[] {"name", "spectrum"}) {
-            if (!keys.contains(needed)) {
+            if (!keys.contains(needed) && !(needed.equals("spectrum") && hasColours)) {
                 throw new UnreadableListException(
                         name,
                         columns.isEmpty()
@@ -164,7 +175,7 @@ public final class CandidateListReader {
         String written = byColumn.get("name").strip();
         String name = written.isEmpty() ? "row " + row : written;
         List<String> spectra =
-                Arrays.stream(byColumn.get("spectrum").split(";", -1))
+                Arrays.stream(byColumn.getOrDefault("spectrum", "").split(";", -1))
                         .map(String::strip)
                         .filter(path -> !path.isBlank())
                         .toList();
@@ -204,21 +215,39 @@ public final class CandidateListReader {
             return Optional.of(
                     at("name", row) + "no name; expected a name. Give the object a name.");
         }
-        if (candidate.spectra().isEmpty()) {
+        if (candidate.spectra().isEmpty() && magnitudes(candidate) < FEWEST_MAGNITUDES) {
             return Optional.of(
                     at("spectrum", row)
-                            + "no path; expected the path of a spectrum. Add it, relative to the"
-                            + " folder of the list.");
+                            + "no path; expected the path of a spectrum, or two magnitudes for a type"
+                            + " from colours. Add it, relative to the folder of the list.");
         }
-        Optional<String> medium = candidate.text("medium");
-        if (medium.isPresent() && Medium.named(medium.get()).isEmpty()) {
-            return Optional.of(
-                    at("medium", row)
-                            + "'"
-                            + medium.get()
-                            + "'; expected air or vacuum. Correct the word or leave it empty.");
+        for (int i = 0; i < Math.max(1, candidate.spectra().size()); i++) {
+            Candidate stated = candidate.forSpectrum(i);
+            Optional<String> medium = stated.text("medium");
+            if (medium.isPresent() && Medium.named(medium.get()).isEmpty()) {
+                return Optional.of(
+                        at("medium", row)
+                                + "'"
+                                + medium.get()
+                                + "'; expected air or vacuum"
+                                + forEach(candidate)
+                                + ". Correct the word or leave it empty.");
+            }
+            Optional<String> number = badNumber(stated);
+            if (number.isPresent()) {
+                return number;
+            }
         }
-        return badNumber(candidate);
+        return Optional.empty();
+    }
+
+    private static long magnitudes(Candidate candidate) {
+        return MAGNITUDES.stream().filter(column -> candidate.number(column).isPresent()).count();
+    }
+
+    private static String forEach(Candidate candidate) {
+        int spectra = candidate.spectra().size();
+        return spectra > 1 ? ", or as many of them joined by ; as there are spectra" : "";
     }
 
     private static Optional<String> badNumber(Candidate candidate) {

@@ -18,6 +18,9 @@ import java.util.OptionalDouble;
  */
 public record Candidate(String name, int row, List<String> spectra, Map<String, String> cells) {
 
+    /** Columns that may hold a value for each spectrum, joined by {@code ;}. */
+    public static final List<String> PER_SPECTRUM = List.of("medium", "resolution", "rv_kms");
+
     /** Copies the collections. */
     public Candidate {
         if (name.isBlank()) {
@@ -56,5 +59,23 @@ public record Candidate(String name, int row, List<String> spectra, Map<String, 
         } catch (NumberFormatException e) {
             return OptionalDouble.empty();
         }
+    }
+
+    /**
+     * The candidate with what the list states about one of its spectra: cells of some columns hold
+     * one value for all spectra, or one for each, joined by {@code ;}.
+     *
+     * @param place the place of the spectrum, from 0
+     * @return the same candidate where it states nothing apart
+     */
+    public Candidate forSpectrum(int place) {
+        Map<String, String> own = new LinkedHashMap<>(cells);
+        for (String column : PER_SPECTRUM) {
+            String[] parts = cells.getOrDefault(column, "").split(";", -1);
+            if (parts.length > 1 && parts.length == spectra.size()) {
+                own.put(column, parts[place].trim());
+            }
+        }
+        return new Candidate(name, row, spectra, own);
     }
 }

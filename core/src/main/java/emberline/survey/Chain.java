@@ -9,7 +9,10 @@ import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
 import emberline.place.calibrated.Calibration;
+import emberline.place.calibrated.SeveralSpectra;
 import emberline.place.calibrated.TypePrior;
+import emberline.place.photometric.PhotometricType;
+import emberline.place.photometric.PhotometricWitness;
 import emberline.place.reddening.ReddeningCall;
 import emberline.place.reddening.ReddeningFit;
 import emberline.place.standard.StandardComparison;
@@ -21,6 +24,7 @@ import emberline.prepare.ExtinctionLaw;
 import emberline.prepare.PreparedSpectrum;
 import emberline.prepare.Preparer;
 import emberline.prepare.Preparing;
+import emberline.read.CandidatePhotometry;
 import emberline.read.Observation;
 import emberline.read.SpectrumReader;
 import emberline.read.UnreadableSpectrumException;
@@ -39,9 +43,9 @@ import java.util.Set;
 import java.util.stream.Collectors;
 
 /**
- * The whole chain for one object: read, prepare, measure, place, judge. An object that fails gets a
- * result that says why; no exception leaves the chain for bad data. Safe for use by several
- * threads.
+ * The whole chain for one object: read, prepare, measure, place, judge; for one without a spectrum
+ * place and judge by its colours. An object that fails gets a result that says why; no exception
+ * leaves the chain for bad data. Safe for use by several threads.
  */
 public final class Chain {
 
@@ -53,6 +57,7 @@ public final class Chain {
     private final Degrader degrader = new Degrader();
     private final Degrading degrading;
     private final JudgingStep judging;
+    private final PhotometricWitness colours;
     private final Preparing defaults;
     private final long seed;
     private final ReddeningMode reddeningMode;
@@ -110,6 +115,7 @@ public final class Chain {
         this.placers = placers;
         this.degrading = settings.degrading();
         this.judging = new JudgingStep(settings.judging(), prior);
+        this.colours = new PhotometricWitness(prior);
         this.defaults = settings.preparing();
         this.seed = settings.seed();
         this.reddeningMode = settings.reddening();
@@ -149,16 +155,30 @@ public final class Chain {
         Map<String, Degraded> used = new LinkedHashMap<>();
         List<SpectrumResult> spectra = new ArrayList<>();
         List<String> troubles = new ArrayList<>();
-        for (String path : candidate.spectra()) {
+        List<Finding> twice = new ArrayList<>();
+        if (candidate.spectra().isEmpty()) {
+            return byColours(candidate);
+        }
+        for (int place = 0; place < candidate.spectra().size(); place++) {
+            String path = candidate.spectra().get(place);
             try {
                 Degraded degraded =
                         degrader.degrade(
                                 reader.read(folder.resolve(path)),
-                                Statements.of(candidate, defaults),
+                                Statements.of(candidate.forSpectrum(place), defaults),
                                 degrading,
                                 ObjectSeed.of(candidate.name() + "; " + path, seed));
-                spectra.add(measure(path, degraded.observation(), degraded.stated()));
-                used.put(path, degraded);
+                SpectrumResult result = measure(path, degraded.observation(), degraded.stated());
+                Optional<SpectrumResult> same =
+                        spectra.stream()
+                                .filter(one -> one.sha256().equals(result.sha256()))
+                                .findFirst();
+                if (same.isPresent()) {
+                    twice.add(countedOnce(path, same.get()));
+                } else {
+                    spectra.add(result);
+                    used.put(path, degraded);
+                }
             } catch (UnreadableSpectrumException e) {
                 troubles.add(e.getMessage());
             } catch (InvalidPathException e) {
@@ -166,30 +186,25 @@ public final class Chain {
             }
         }
         if (spectra.isEmpty()) {
-            return failed(
-                    candidate,
-                    troubles.isEmpty() ? "no spectrum is listed" : String.join(" | ", troubles));
+            return failed(candidate, String.join(" | ", troubles));
         }
-        return placed(candidate, spectra, used, troubles);
+        return placed(candidate, spectra, used, troubles, twice);
     }
 
     /** A placement with the spectra that it rests on and what is to be said of its extinction. */
     private record Placed(
-            List<SpectrumResult> spectra, Placement placement, Optional<Finding> reddening) {
-
-        Measurements best() {
-            return Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
-        }
-    }
+            List<SpectrumResult> spectra,
+            SeveralSpectra.Joined joined,
+            Placement placement,
+            Optional<Finding> reddening) {}
 
     /** Places an object as it is seen, or with the extinction taken out that was fitted. */
     private Placed place(
             Candidate candidate, List<SpectrumResult> spectra, Map<String, Degraded> used) {
         Placer placer = placers.placerFor(candidate);
         long draws = ObjectSeed.of(candidate.name(), seed);
-        Measurements best =
-                Measurements.best(spectra.stream().map(SpectrumResult::measurements).toList());
-        Placement asSeen = placer.place(best, draws);
+        SeveralSpectra.Joined joined = joined(placer, spectra);
+        Placement asSeen = placer.place(joined.measurements(), draws);
         Optional<String> call =
                 switch (reddeningMode) {
                     case NEVER -> Optional.empty();
@@ -197,24 +212,66 @@ public final class Chain {
                     case ALWAYS -> Optional.of("");
                 };
         Optional<ReddeningFit> fit =
-                call.flatMap(reason -> placer.fitReddening(avMag -> measuredAt(avMag, used)));
+                call.flatMap(
+                        reason -> placer.fitReddening(avMag -> measuredAt(avMag, used, placer)));
         if (fit.isEmpty()) {
-            return new Placed(spectra, asSeen, Optional.empty());
+            return new Placed(spectra, joined, asSeen, Optional.empty());
         }
-        List<SpectrumResult> freedSpectra = new ArrayList<>();
-        used.forEach((path, one) -> freedSpectra.add(again(path, one, fit.get().avMag())));
-        Placed freed = new Placed(freedSpectra, asSeen, Optional.empty());
-        Placement placement = placer.place(freed.best(), fit, draws);
+        List<SpectrumResult> freed = new ArrayList<>();
+        used.forEach((path, one) -> freed.add(again(path, one, fit.get().avMag())));
+        SeveralSpectra.Joined freedJoined = joined(placer, freed);
+        Placement placement = placer.place(freedJoined.measurements(), fit, draws);
         if (reddeningMode == ReddeningMode.CALLED_FOR
                 && !ReddeningCall.isBelieved(fit.get(), placement)) {
-            return new Placed(
-                    spectra, asSeen, Optional.of(notBelieved(call.orElseThrow(), fit.get())));
+            Finding finding = notBelieved(call.orElseThrow(), fit.get());
+            return new Placed(spectra, joined, asSeen, Optional.of(finding));
         }
-        return new Placed(
-                freedSpectra, placement, Optional.of(fitted(call.orElseThrow(), fit.get())));
+        Finding finding = fitted(call.orElseThrow(), fit.get());
+        return new Placed(freed, freedJoined, placement, Optional.of(finding));
     }
 
-    private Measurements measuredAt(double avMag, Map<String, Degraded> used) {
+    private static SeveralSpectra.Joined joined(Placer placer, List<SpectrumResult> spectra) {
+        return placer.join(spectra.stream().map(SpectrumResult::measurements).toList());
+    }
+
+    /** One spectrum listed twice would have its noise counted as if it were two. */
+    private static Finding countedOnce(String path, SpectrumResult same) {
+        return Finding.caution(
+                "spectrum-twice",
+                path
+                        + " is the same file as "
+                        + same.path()
+                        + " byte for byte; it was counted once");
+    }
+
+    /** An object without a spectrum. */
+    private ObjectResult byColours(Candidate candidate) {
+        PhotometricType type = colours.witness(CandidatePhotometry.of(candidate));
+        if (type.posterior().isEmpty()) {
+            return failed(candidate, "no spectrum is listed, and " + type.reason());
+        }
+        List<Finding> findings = new ArrayList<>();
+        findings.add(
+                Finding.note(
+                        "photometric-type",
+                        "there is no spectrum; type and kind rest on the colours "
+                                + String.join(", ", type.colours())
+                                + " alone, and the intervals are those of colours"));
+        findings.addAll(type.findings());
+        return judging.judged(
+                new ObjectResult(
+                        candidate,
+                        Status.PHOTOMETRIC,
+                        type.reason().isEmpty()
+                                ? "no spectrum: type from colours"
+                                : "no spectrum, and no type from colours: " + type.reason(),
+                        List.of(),
+                        Optional.empty(),
+                        Optional.of(Placement.byColours(type)),
+                        findings));
+    }
+
+    private Measurements measuredAt(double avMag, Map<String, Degraded> used, Placer placer) {
         List<Measurements> all = new ArrayList<>();
         for (Degraded one : used.values()) {
             try {
@@ -223,7 +280,7 @@ public final class Chain {
                 throw new IllegalStateException("prepared before, but not now", e);
             }
         }
-        return Measurements.best(all);
+        return placer.join(all).measurements();
     }
 
     /** Measures a spectrum that was measured before, with another extinction taken out. */
@@ -296,12 +353,19 @@ public final class Chain {
             Candidate candidate,
             List<SpectrumResult> asSeen,
             Map<String, Degraded> used,
-            List<String> troubles) {
+            List<String> troubles,
+            List<Finding> twice) {
         Placed placed = place(candidate, asSeen, used);
         List<SpectrumResult> spectra = placed.spectra();
-        Placement placement = placed.placement();
+        SeveralSpectra.Joined joined = placed.joined();
+        Placement placement = withColours(candidate, placed.placement());
+        List<SpectrumResult> apart = new ArrayList<>();
+        for (int i = 0; i < spectra.size(); i++) {
+            apart.add(spectra.get(i).withTypeAlone(joined.apart().get(i)));
+        }
         List<Finding> findings = new ArrayList<>();
         spectra.forEach(spectrum -> findings.addAll(spectrum.prepared().findings()));
+        findings.addAll(twice);
         for (String trouble : troubles) {
             findings.add(Finding.warning("spectrum-unreadable", trouble));
         }
@@ -310,11 +374,14 @@ public final class Chain {
                     Finding.note(
                             "several-spectra",
                             spectra.size()
-                                    + " spectra were measured apart; of each feature the"
-                                    + " measurement with the smallest error was placed"));
+                                    + " spectra were measured apart and placed together; what"
+                                    + " several of them have entered as a mean weighted by noise"
+                                    + " and calibration error"));
+            findings.addAll(joined.findings());
         }
         placed.reddening().ifPresent(findings::add);
         findings.addAll(placement.findings());
+        findings.addAll(unlikeColours(candidate, placement));
         List<String> reasons = new ArrayList<>(troubles);
         if (placement.type().isEmpty()) {
             reasons.add(placement.typeReason());
@@ -324,8 +391,8 @@ public final class Chain {
                         candidate,
                         reasons.isEmpty() ? Status.MEASURED : Status.PARTIAL,
                         String.join(" | ", reasons),
-                        spectra,
-                        Optional.of(placed.best()),
+                        apart,
+                        Optional.of(joined.measurements()),
                         Optional.of(placement),
                         findings);
         return judging.judged(
@@ -342,6 +409,24 @@ public final class Chain {
         return comparison.compare(
                 result.spectra().stream().map(SpectrumResult::prepared).toList(),
                 standard -> standard.group().equals(group) || own.contains(standard.sha256()));
+    }
+
+    /** The placement with what the colours say, where two magnitudes are listed at least. */
+    private Placement withColours(Candidate candidate, Placement placement) {
+        PhotometricType byColours = colours.witness(CandidatePhotometry.of(candidate));
+        return byColours.posterior().isPresent() ? placement.with(byColours) : placement;
+    }
+
+    private List<Finding> unlikeColours(Candidate candidate, Placement placement) {
+        if (placement.type().isEmpty() || placement.photometric().isEmpty()) {
+            return List.of();
+        }
+        return colours.disagreement(
+                        CandidatePhotometry.of(candidate),
+                        placement.type().get(),
+                        placement.reddening().map(ReddeningFit::avMag).orElse(0.0))
+                .map(List::of)
+                .orElse(List.of());
     }
 
     private static Finding fitted(String reason, ReddeningFit fit) {

@@ -4,6 +4,7 @@ import emberline.judge.Judgement;
 import emberline.measure.Measurements;
 import emberline.place.Placement;
 import emberline.place.standard.StandardVerdict;
+import emberline.prepare.BandSignal;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
 import emberline.survey.verdict.Verdict;
@@ -18,8 +19,8 @@ import java.util.Optional;
  * @param status how far the object came
  * @param reason why it did not come further; empty where it is measured
  * @param spectra its spectra, those that could be read, in the order of the list
- * @param best the measurements that were placed: those of the one spectrum, or of each feature the
- *     one with the smallest error; empty where nothing was read
+ * @param best the measurements that were placed: those of the one spectrum, or those of several
+ *     joined; empty where nothing was read
  * @param placement type and gravity; empty where nothing was read
  * @param judgement mass, age and decision; empty where there is no type or it means nothing
  * @param standards the comparison with the standards of the run; empty where none were given or
@@ -78,6 +79,31 @@ public record ObjectResult(
     }
 
     /**
+     * The spectrum that stands for an object where one number is wanted, such as its resolving
+     * power: the one with the highest signal-to-noise, the first of equals.
+     *
+     * @return its leading spectrum; empty where none was read
+     */
+    public Optional<SpectrumResult> leading() {
+        if (spectra.size() == 1) {
+            return Optional.of(spectra.get(0));
+        }
+        SpectrumResult leading = null;
+        double highest = Double.NEGATIVE_INFINITY;
+        for (SpectrumResult spectrum : spectra) {
+            double signal =
+                    BandSignal.best(spectrum.prepared().spectrum())
+                            .map(BandSignal::medianSignalToNoise)
+                            .orElse(Double.NEGATIVE_INFINITY);
+            if (leading == null || signal > highest) {
+                leading = spectrum;
+                highest = signal;
+            }
+        }
+        return Optional.ofNullable(leading);
+    }
+
+    /**
      * The same object with a judgement, whose findings come after the others.
      *
      * @param made the judgement
@@ -107,15 +133,7 @@ public record ObjectResult(
      */
     public ObjectResult withVerdict(Optional<Verdict> said) {
         return new ObjectResult(
-                candidate,
-                status,
-                reason,
-                spectra,
-                best,
-                placement,
-                judgement,
-                standards,
-                findings,
+                candidate, status, reason, spectra, best, placement, judgement, standards, findings,
                 said);
     }
 
@@ -129,7 +147,8 @@ public record ObjectResult(
         List<Finding> all = new ArrayList<>(findings);
         all.addAll(more);
         return new ObjectResult(
-                candidate, status, reason, spectra, best, placement, judgement, standards, all, verdict);
+                candidate, status, reason, spectra, best, placement, judgement, standards, all,
+                verdict);
     }
 
     /**

@@ -46,7 +46,7 @@ public final class ReferenceMaker {
                 features.put(one.feature().id(), value);
             }
         }
-        PreparedSpectrum prepared = result.spectra().get(0).prepared();
+        PreparedSpectrum prepared = result.leading().orElseThrow().prepared();
         ReferenceRow row =
                 new ReferenceRow(
                         candidate.name(),

@@ -8,6 +8,8 @@ public enum Status {
     MEASURED,
     /** Read and measured, but some spectra failed or no type could be given. */
     PARTIAL,
+    /** No spectrum is listed; placed by its colours alone. */
+    PHOTOMETRIC,
     /** Nothing could be measured; the reason says why. */
     FAILED;
 

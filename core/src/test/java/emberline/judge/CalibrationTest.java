@@ -5,6 +5,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.judge.PropertyRelations.Quantity;
 import emberline.place.GravityClass;
+import emberline.spectrum.Magnitude;
+import emberline.spectrum.MagnitudeBand;
 import java.util.Arrays;
 import java.util.Map;
 import java.util.Optional;

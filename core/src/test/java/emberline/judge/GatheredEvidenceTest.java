@@ -12,6 +12,8 @@ import emberline.place.calibrated.CalibratedType;
 import emberline.place.calibrated.TypePrior;
 import emberline.place.calibrated.TypePriors;
 import emberline.spectrum.Candidate;
+import emberline.spectrum.Magnitude;
+import emberline.spectrum.MagnitudeBand;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;

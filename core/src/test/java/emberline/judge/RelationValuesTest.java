@@ -8,6 +8,7 @@ import emberline.PublishedRows;
 import emberline.catalogue.HowKnown;
 import emberline.catalogue.Source;
 import emberline.judge.PropertyRelations.Quantity;
+import emberline.spectrum.MagnitudeBand;
 import java.io.IOException;
 import java.util.List;
 import java.util.Optional;

@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import emberline.spectrum.Candidate;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
@@ -232,5 +233,45 @@ class CandidateListReaderTest {
             assertEquals(List.of("b.fits", "c.fits"), list.rows().get(1).candidate().spectra());
             assertEquals(OptionalDouble.of(15.5), list.rows().get(1).candidate().number("k_mag"));
         }
+    }
+
+    @Test
+    void spectraMayBeMissingWhereMagnitudesStand() throws IOException {
+        CandidateList list =
+                read("name,spectrum,y_mag,J_mag,k_mag\nA,,17.1,16,\nB,,,16,\nC,c.fits,,,\n");
+        assertTrue(list.rows().get(0).problem().isEmpty());
+        assertTrue(list.rows().get(0).candidate().spectra().isEmpty());
+        assertTrue(problem(list, 2).contains("or two magnitudes"), problem(list, 2));
+        assertTrue(list.rows().get(2).problem().isEmpty());
+        CandidateList colours = read("name,j_mag,h_mag\nA,16,15\n");
+        assertTrue(colours.rows().get(0).problem().isEmpty());
+        assertTrue(refusal("name,j_mag\nA,16\n").contains("no column 'spectrum'"));
+    }
+
+    @Test
+    void someCellsMayHoldAValueForEachSpectrum() throws IOException {
+        CandidateList list =
+                read(
+                        """
+                        name,spectrum,medium,resolution,rv_kms
+                        A,"a.fits;b.fits",air;vacuum,2000;,10;-3
+                        B,"a.fits;b.fits",air,120,
+                        C,"a.fits;b.fits",air;steam,120,
+                        D,"a.fits;b.fits",air,120;-7,
+                        E,a.fits,,120;300,
+                        """);
+        Candidate both = list.rows().get(0).candidate();
+        assertTrue(list.rows().get(0).problem().isEmpty());
+        assertEquals("air", both.forSpectrum(0).text("medium").orElseThrow());
+        assertEquals("vacuum", both.forSpectrum(1).text("medium").orElseThrow());
+        assertEquals(2000, both.forSpectrum(0).number("resolution").orElseThrow());
+        assertTrue(both.forSpectrum(1).number("resolution").isEmpty());
+        assertEquals(-3, both.forSpectrum(1).number("rv_kms").orElseThrow());
+        assertEquals(
+                120,
+                list.rows().get(1).candidate().forSpectrum(1).number("resolution").orElseThrow());
+        assertTrue(problem(list, 3).contains("'steam'; expected air or vacuum, or as many"));
+        assertTrue(problem(list, 4).contains("'-7'; expected a positive number"));
+        assertTrue(problem(list, 5).contains("'120;300'"));
     }
 }

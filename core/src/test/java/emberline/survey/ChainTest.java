@@ -124,14 +124,73 @@ class ChainTest {
     }
 
     @Test
-    void severalSpectraGiveTheBestOfEachFeature() throws IOException {
+    void severalSpectraAreMeasuredApartAndPlacedTogether() throws IOException {
         write("one", alkali(0), Map.of());
+        write("other", micron -> 1.7 * alkali(0).applyAsDouble(micron), Map.of());
         Candidate two =
                 new Candidate(
-                        "two", 1, List.of("one.csv", "one.csv"), Map.of("resolution", "2000"));
+                        "two",
+                        1,
+                        List.of("one.csv", "other.csv"),
+                        Map.of("resolution", "2000;1000"));
         ObjectResult result = chain(SurveySettings.withDefaults()).run(two, folder);
         assertEquals(2, result.spectra().size());
         assertTrue(has(result, "several-spectra"));
+        assertFalse(has(result, "spectrum-twice"));
+        assertEquals(2000, result.spectra().get(0).prepared().resolvingPower().value());
+        assertEquals(1000, result.spectra().get(1).prepared().resolvingPower().value());
+        assertEquals("other.csv", result.leading().orElseThrow().path());
+        String id = "burgasser2006/h2o-h";
+        double one = result.spectra().get(0).measurements().measured(id).orElseThrow().oneSigma();
+        double other = result.spectra().get(1).measurements().measured(id).orElseThrow().oneSigma();
+        double both = result.best().orElseThrow().measured(id).orElseThrow().oneSigma();
+        assertTrue(both < one && both > one * other / Math.hypot(one, other) * 0.999);
+    }
+
+    @Test
+    void aSpectrumListedTwiceCountsOnce() throws IOException {
+        write("one", alkali(0), Map.of());
+        Candidate two = new Candidate("two", 1, List.of("one.csv", "one.csv"), Map.of());
+        ObjectResult result = chain(SurveySettings.withDefaults()).run(two, folder);
+        assertEquals(1, result.spectra().size());
+        assertTrue(has(result, "spectrum-twice"));
+        assertFalse(has(result, "several-spectra"));
+    }
+
+    @Test
+    void aCandidateWithColoursAloneIsTypedAndJudgedByThem() {
+        Map<String, String> cells =
+                Map.of(
+                        "mag_system",
+                        "2MASS",
+                        "j_mag",
+                        "14.00",
+                        "j_mag_err",
+                        "0.03",
+                        "h_mag",
+                        "13.00",
+                        "h_mag_err",
+                        "0.03",
+                        "k_mag",
+                        "12.37",
+                        "k_mag_err",
+                        "0.03",
+                        "w1_mag",
+                        "11.78",
+                        "w1_mag_err",
+                        "0.03",
+                        "w2_mag",
+                        "11.51");
+        ObjectResult result =
+                chain(SurveySettings.withDefaults())
+                        .run(new Candidate("colours", 1, List.of(), cells), folder);
+        assertEquals(Status.PHOTOMETRIC, result.status());
+        assertTrue(has(result, "photometric-type"));
+        assertTrue(has(result, "magnitude-error-assumed"));
+        assertEquals(14, result.placement().orElseThrow().type().orElseThrow().typeNumber(), 2);
+        assertTrue(result.judgement().isPresent(), result.findings().toString());
+        assertTrue(result.judgement().get().properties().distance().isPresent());
+        assertTrue(result.best().isEmpty() && result.spectra().isEmpty());
     }
 
     @Test

@@ -162,8 +162,7 @@ class HostileNamesTest {
                     List.of(rows.get(0).getField("name"), rows.get(0).getField("note"))) {
                 assertFalse(cell.matches("(?s)[=@\\t\\r\\n\uff1d+-].*"), cell);
                 String bare = cell.startsWith("'") ? cell.substring(1) : cell;
-                assertTrue(
-                        bare.equals(name) || cell.equals(name), cell);
+                assertTrue(bare.equals(name) || cell.equals(name), cell);
             }
         }
     }

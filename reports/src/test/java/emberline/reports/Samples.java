@@ -8,6 +8,7 @@ import emberline.measure.Measurements;
 import emberline.measure.Measurer;
 import emberline.measure.Measuring;
 import emberline.measure.Site;
+import emberline.measure.SpectraMerger;
 import emberline.measure.line.LineReporter;
 import emberline.place.Placement;
 import emberline.place.Placer;
@@ -130,7 +131,8 @@ public final class Samples {
                             LINES.report(prepared, measurements)));
         }
         Measurements best =
-                Measurements.best(results.stream().map(SpectrumResult::measurements).toList());
+                new SpectraMerger(id -> java.util.OptionalDouble.empty())
+                        .merge(results.stream().map(SpectrumResult::measurements).toList());
         Placement placement = PLACER.place(best, 1);
         List<Finding> findings = new ArrayList<>();
         findings.add(Finding.note("medium-assumed", "no medium is stated; vacuum was assumed"));

@@ -1,5 +1,8 @@
 package emberline.place.calibrated;
 
+import java.util.Arrays;
+import java.util.List;
+
 /**
  * The normal likelihood of a sample around one knot. The covariance of the knot, scatter and noise
  * together, is taken for the types between its neighbours; the mean runs linearly between knots, so
@@ -92,8 +95,25 @@ final class KnotLikelihood {
         return a;
     }
 
-    /** Solves the lower triangle for a vector, in place. */
+    /**
+     * Chi-square of a vector.
+     *
+     * @param covariance its covariance, row by row; used up
+     * @param vector the vector
+     */
+    static double chiSquare(double[] covariance, List<Double> vector) {
+        double[] white = vector.stream().mapToDouble(Double::doubleValue).toArray();
+        whiten(cholesky(covariance, white.length), white);
+        return Arrays.stream(white).map(z -> z * z).sum();
+    }
+
     private double[] whiten(double[] vector) {
+        return whiten(lower, vector);
+    }
+
+    /** Solves the lower triangle for a vector, in place. */
+    private static double[] whiten(double[] lower, double[] vector) {
+        int size = vector.length;
         for (int row = 0; row < size; row++) {
             double sum = vector[row];
             for (int k = 0; k < row; k++) {

@@ -13,7 +13,6 @@ import emberline.survey.ObjectGroup;
 import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
 import emberline.survey.Status;
-import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -137,9 +136,7 @@ public record ScoredObject(
      */
     public static ScoredObject of(ObjectResult result) {
         Candidate candidate = result.candidate();
-        Optional<SpectrumResult> best =
-                result.spectra().stream()
-                        .max(Comparator.comparingDouble(s -> signal(s).orElse(-1)));
+        Optional<SpectrumResult> best = result.leading();
         Optional<Placement> placement = result.placement();
         return new ScoredObject(
                 candidate.name(),

@@ -38,8 +38,12 @@ class StandardComparisonTest {
                             + Math.exp(-Math.pow((w - 2.0) / 0.08, 2));
             double methane =
                     Math.max(0, type - 15) * 0.1 * Math.exp(-Math.pow((w - 2.25) / 0.06, 2))
-                            + Math.max(0, type - 18) * 0.25 * Math.exp(-Math.pow((w - 1.68) / 0.05, 2))
-                            + Math.max(0, type - 21) * 0.6 * Math.exp(-Math.pow((w - 1.31) / 0.03, 2));
+                            + Math.max(0, type - 18)
+                                    * 0.25
+                                    * Math.exp(-Math.pow((w - 1.68) / 0.05, 2))
+                            + Math.max(0, type - 21)
+                                    * 0.6
+                                    * Math.exp(-Math.pow((w - 1.31) / 0.03, 2));
             double flux = scale * Math.exp(-depth * water - methane) / w;
             pixels.add(new double[] {w, flux, 0.01 * flux});
         }

@@ -32,6 +32,7 @@ final class ListedColumn {
                             new Known(
                                     "mas/yr", "pos.pm;pos.eq.dec", "proper motion in declination")),
                     Map.entry("rv_kms", new Known("km/s", "spect.dopplerVeloc", "radial velocity")),
+                    Map.entry("y_mag", new Known("mag", "phot.mag;em.IR.NIR", MAGNITUDE + "Y")),
                     Map.entry("j_mag", new Known("mag", "phot.mag;em.IR.J", MAGNITUDE + "J")),
                     Map.entry("h_mag", new Known("mag", "phot.mag;em.IR.H", MAGNITUDE + "H")),
                     Map.entry("k_mag", new Known("mag", "phot.mag;em.IR.K", MAGNITUDE + "K")),

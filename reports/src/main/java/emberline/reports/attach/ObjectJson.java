@@ -74,6 +74,12 @@ public final class ObjectJson {
                 result.placement()
                         .map(p -> (Object) CalibratedJson.map(p.calibrated()))
                         .orElse(null));
+        map.put(
+                "photometric",
+                result.placement()
+                        .flatMap(Placement::photometric)
+                        .map(p -> (Object) PhotometricJson.map(p))
+                        .orElse(null));
         map.put("gravity_reason", result.placement().map(p -> p.gravity().reason()).orElse(""));
         map.put("relations", result.placement().map(ObjectJson::relations).orElse(List.of()));
         map.put("gravity_scores", result.placement().map(ObjectJson::scores).orElse(List.of()));
@@ -85,7 +91,12 @@ public final class ObjectJson {
                 "judgement",
                 result.judgement().map(j -> (Object) JudgementJson.map(j)).orElse(null));
         map.put("features", result.best().map(ObjectJson::features).orElse(List.of()));
-        map.put("spectra", result.spectra().stream().map(ObjectJson::spectrum).toList());
+        boolean several = result.spectra().size() > 1;
+        map.put(
+                "spectra",
+                result.spectra().stream()
+                        .map(one -> several ? oneOfSeveral(one) : spectrum(one))
+                        .toList());
         return map;
     }
 
@@ -195,6 +206,20 @@ public final class ObjectJson {
                         : null);
         map.put("why", measurement.result().fold(v -> "", n -> n.why().words()));
         map.put("detail", measurement.result().fold(v -> "", Measurement.NotMeasured::detail));
+        return map;
+    }
+
+    /** A spectrum beside others: the type by it alone and its own measurements come with it. */
+    private static Map<String, Object> oneOfSeveral(SpectrumResult result) {
+        Map<String, Object> map = spectrum(result);
+        map.put("type_alone", result.typeAlone().map(TypeText::code).orElse(""));
+        map.put(
+                "type_alone_number",
+                number(result.typeAlone().map(t -> Digits.type(t.typeNumber()))));
+        map.put(
+                "type_alone_sigma",
+                number(result.typeAlone().map(t -> Digits.type(t.sigmaSubclass()))));
+        map.put("features", features(result.measurements()));
         return map;
     }
 

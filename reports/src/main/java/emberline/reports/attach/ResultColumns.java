@@ -4,13 +4,13 @@ import emberline.place.Placement;
 import emberline.place.TypeEstimate;
 import emberline.place.kind.ObjectKind;
 import emberline.place.pair.PairVerdict;
+import emberline.place.photometric.PhotometricType;
 import emberline.place.reddening.ReddeningFit;
 import emberline.prepare.BandSignal;
 import emberline.prepare.Quality;
 import emberline.reports.attach.ResultColumn.Content;
 import emberline.spectrum.Finding;
 import emberline.survey.ObjectResult;
-import emberline.survey.SpectrumResult;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
@@ -62,32 +62,6 @@ public final class ResultColumns {
         return List.copyOf(columns);
     }
 
-    /**
-     * The spectrum that stands for an object where one number is wanted, such as its resolving
-     * power: the one with the highest signal-to-noise.
-     *
-     * @param result the result of an object
-     * @return its leading spectrum; empty where none was read
-     */
-    public static Optional<SpectrumResult> leading(ObjectResult result) {
-        if (result.spectra().size() == 1) {
-            return Optional.of(result.spectra().get(0));
-        }
-        SpectrumResult leading = null;
-        double highest = Double.NEGATIVE_INFINITY;
-        for (SpectrumResult spectrum : result.spectra()) {
-            double signal =
-                    BandSignal.best(spectrum.prepared().spectrum())
-                            .map(BandSignal::medianSignalToNoise)
-                            .orElse(Double.NEGATIVE_INFINITY);
-            if (leading == null || signal > highest) {
-                leading = spectrum;
-                highest = signal;
-            }
-        }
-        return Optional.ofNullable(leading);
-    }
-
     private static List<ResultColumn> standardColumns() {
         List<ResultColumn> columns = new ArrayList<>();
         columns.add(
@@ -122,6 +96,7 @@ public final class ResultColumns {
                         .withUcd("stat.error;src.spType"));
         addGravity(columns);
         addKindShares(columns);
+        addColours(columns);
         addReddening(columns);
         addMetallicity(columns);
         addPair(columns);
@@ -233,6 +208,69 @@ public final class ResultColumns {
                         TypeEstimate::hi95));
     }
 
+    private static void addColours(List<ResultColumn> columns) {
+        columns.add(
+                text(
+                                "photometric_type",
+                                "type by the colours alone; empty where there are none or the object is"
+                                        + " hardly a late dwarf by them",
+                                r ->
+                                        colours(r)
+                                                .flatMap(PhotometricType::type)
+                                                .map(TypeText::code)
+                                                .orElse(""))
+                        .withUcd("src.spType"));
+        columns.add(
+                number(
+                                "photometric_type_sigma",
+                                "subclass",
+                                "one-sigma error of the type by the colours",
+                                r ->
+                                        colours(r)
+                                                .flatMap(PhotometricType::type)
+                                                .map(t -> Digits.type(t.sigmaSubclass()))
+                                                .orElse(""))
+                        .withUcd("stat.error;src.spType"));
+        columns.add(
+                number(
+                                "photometric_chi2",
+                                "",
+                                "reduced chi-square of the colours at the template that fits best; empty"
+                                        + " where no freedom is left",
+                                r -> {
+                                    OptionalDouble reduced =
+                                            colours(r)
+                                                    .map(PhotometricType::reducedChiSquare)
+                                                    .orElse(OptionalDouble.empty());
+                                    return reduced.isPresent()
+                                            ? Digits.fixed(reduced.getAsDouble(), 2)
+                                            : "";
+                                })
+                        .withUcd("stat.fit.chi2"));
+        columns.add(
+                number(
+                                "spectrum_gain",
+                                "bit",
+                                "what a spectrum is expected to tell beyond the colours, of kind and type;"
+                                        + " ranks objects without one, the largest first",
+                                r ->
+                                        r.spectra().isEmpty()
+                                                ? colours(r)
+                                                        .map(
+                                                                c ->
+                                                                        Digits.fixed(
+                                                                                c
+                                                                                        .spectrumGainBits(),
+                                                                                2))
+                                                        .orElse("")
+                                                : "")
+                        .withUcd("stat.value"));
+    }
+
+    private static Optional<PhotometricType> colours(ObjectResult result) {
+        return result.placement().flatMap(Placement::photometric);
+    }
+
     private static void addReddening(List<ResultColumn> columns) {
         columns.add(
                 reddening(
@@ -275,7 +313,7 @@ public final class ResultColumns {
                                 "",
                                 "median signal-to-noise per pixel in the band that is covered best",
                                 r ->
-                                        leading(r)
+                                        r.leading()
                                                 .flatMap(
                                                         s ->
                                                                 BandSignal.best(
@@ -288,7 +326,7 @@ public final class ResultColumns {
                                 "quality",
                                 "grade of the best spectrum: good, usable, poor or unusable",
                                 r ->
-                                        leading(r)
+                                        r.leading()
                                                 .map(s -> Quality.of(s.prepared()).grade().word())
                                                 .orElse(""))
                         .withUcd("meta.code.qual"));
@@ -298,7 +336,7 @@ public final class ResultColumns {
                                 "",
                                 "resolving power of the spectrum with the highest signal-to-noise",
                                 r ->
-                                        leading(r)
+                                        r.leading()
                                                 .map(s -> s.prepared().resolvingPower().value())
                                                 .map(Digits::significant)
                                                 .orElse(""))

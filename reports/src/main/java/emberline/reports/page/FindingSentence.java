@@ -8,7 +8,6 @@ import emberline.place.RelationEstimate.Use;
 import emberline.place.TypeEstimate;
 import emberline.prepare.BandSignal;
 import emberline.reports.attach.Digits;
-import emberline.reports.attach.ResultColumns;
 import emberline.reports.attach.TypeText;
 import emberline.survey.ObjectResult;
 import java.util.Locale;
@@ -119,7 +118,7 @@ public final class FindingSentence {
     }
 
     private static Optional<String> signal(ObjectResult result) {
-        return ResultColumns.leading(result)
+        return result.leading()
                 .flatMap(s -> BandSignal.best(s.prepared().spectrum()))
                 .map(
                         s ->

@@ -13,7 +13,6 @@ import emberline.place.standard.StandardVerdict;
 import emberline.prepare.BandSignal;
 import emberline.prepare.Quality;
 import emberline.reports.attach.Digits;
-import emberline.reports.attach.ResultColumns;
 import emberline.reports.attach.StandardsText;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.SpectralType;
@@ -223,7 +222,7 @@ final class KeyNumbers {
     }
 
     private static void addSpectra(List<Entry> entries, ObjectResult result) {
-        Optional<SpectrumResult> leading = ResultColumns.leading(result);
+        Optional<SpectrumResult> leading = result.leading();
         if (leading.isEmpty()) {
             return;
         }

@@ -27,7 +27,12 @@ class ColumnMetadataTest {
 
     /** Primary words under which a number has no unit. */
     private static final Set<String> PURE =
-            Set.of("stat.probability", "stat.snr", "stat.value", "spect.resolution");
+            Set.of(
+                    "stat.probability",
+                    "stat.snr",
+                    "stat.value",
+                    "stat.fit.chi2",
+                    "spect.resolution");
 
     static List<ResultColumn> columns() {
         return ResultColumns.standard();

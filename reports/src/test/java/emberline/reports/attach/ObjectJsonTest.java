@@ -79,7 +79,8 @@ class ObjectJsonTest {
         Map<String, Object> map = JSON.std.mapFrom(run.text());
         assertEquals(2, map.get("objects"));
         assertEquals(
-                Map.of("measured", 1, "partial", 0, "failed", 1), map.get("objects_by_status"));
+                Map.of("measured", 1, "partial", 0, "photometric", 0, "failed", 1),
+                map.get("objects_by_status"));
         Map<?, ?> input = (Map<?, ?>) ((List<?>) map.get("inputs")).get(0);
         assertEquals(Samples.SHA256, input.get("sha256"));
     }

@@ -84,7 +84,7 @@ public class StandardsReportTest {
                 new SpectrumChart(
                                 Samples.CATALOGUE,
                                 new ChartSize(500, 250, 7),
-                                text -> 4 * text.length())
+                                (text, sizePoint) -> 4 * text.length())
                         .of(compared());
         Curve overlay =
                 drawn.chart().layers().stream()

@@ -1,4 +1,4 @@
-package emberline.judge;
+package emberline.spectrum;
 
 import java.util.Locale;
 import java.util.Optional;
@@ -20,17 +20,22 @@ public enum MagnitudeBand {
     /** W1, WISE. */
     W1,
     /** W2, WISE. */
-    W2;
+    W2,
+    /** Y, MKO; 2MASS has none. */
+    Y_MKO;
 
     /**
      * A band of a list.
      *
-     * @param letter {@code j}, {@code h}, {@code k}, {@code w1} or {@code w2}
-     * @param system {@code 2MASS} or {@code MKO}; not looked at for W1 and W2
+     * @param letter {@code y}, {@code j}, {@code h}, {@code k}, {@code w1} or {@code w2}
+     * @param system {@code 2MASS} or {@code MKO}; not looked at for Y, W1 and W2
      * @return the band, or empty where the system is neither
      */
     public static Optional<MagnitudeBand> of(String letter, String system) {
         String name = letter.toUpperCase(Locale.ROOT);
+        if (name.equals("Y")) {
+            return Optional.of(Y_MKO);
+        }
         String full =
                 name.startsWith("W") ? name : name + "_" + system.trim().toUpperCase(Locale.ROOT);
         for (MagnitudeBand band : values()) {

@@ -1,4 +1,4 @@
-package emberline.judge;
+package emberline.spectrum;
 
 /**
  * A magnitude.
