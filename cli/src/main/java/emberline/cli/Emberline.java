@@ -21,6 +21,8 @@ import picocli.CommandLine.Spec;
         },
         subcommands = {
             SortCommand.class,
+            SurveyStatusCommand.class,
+            MergeCommand.class,
             MeasureCommand.class,
             PlaceCommand.class,
             JudgeCommand.class,

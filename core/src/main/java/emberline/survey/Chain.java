@@ -26,6 +26,7 @@ import emberline.read.SpectrumReader;
 import emberline.read.UnreadableSpectrumException;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
+import emberline.survey.StageTimes.Stage;
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -58,6 +59,7 @@ public final class Chain {
     private final ReddeningMode reddeningMode;
     private final Optional<StandardComparison> standards;
     private final boolean toMeasuredRest;
+    private final StageTimes times = new StageTimes();
 
     /**
      * A chain.
@@ -118,6 +120,15 @@ public final class Chain {
     }
 
     /**
+     * Where the time of this chain went so far.
+     *
+     * @return times that go on counting
+     */
+    public StageTimes times() {
+        return times;
+    }
+
+    /**
      * Takes one object through the chain.
      *
      * @param candidate the object
@@ -125,8 +136,44 @@ public final class Chain {
      * @return the result, whatever happened; a fault of the product itself is a failed object too
      */
     public ObjectResult run(Candidate candidate, Path folder) {
+        List<String> troubles = new ArrayList<>();
+        return run(
+                candidate,
+                addresses(candidate, folder, troubles),
+                address -> reader.read(folder, address),
+                troubles);
+    }
+
+    /** Gives the spectra of an object by their addresses. */
+    @FunctionalInterface
+    public interface Spectra {
+
+        /**
+         * A spectrum.
+         *
+         * @param address one of those that the object lists
+         * @return the spectrum as read
+         * @throws UnreadableSpectrumException if there is none; its message says what to do
+         */
+        Observation at(String address) throws UnreadableSpectrumException;
+    }
+
+    /**
+     * Takes one object through the chain whose spectra come from elsewhere than files, such as a
+     * table in memory.
+     *
+     * @param candidate the object
+     * @param spectra gives its spectra
+     * @return the result, whatever happened
+     */
+    public ObjectResult run(Candidate candidate, Spectra spectra) {
+        return run(candidate, candidate.spectra(), spectra, new ArrayList<>());
+    }
+
+    private ObjectResult run(
+            Candidate candidate, List<String> addresses, Spectra spectra, List<String> troubles) {
         try {
-            return attempt(candidate, folder);
+            return attempt(candidate, addresses, spectra, troubles);
         } catch (RuntimeException e) { // must not end a night's run
             return internalError(candidate, e);
         }
@@ -145,15 +192,15 @@ public final class Chain {
                 "internal error: " + fault + "; please report it with the spectrum, and go on");
     }
 
-    private ObjectResult attempt(Candidate candidate, Path folder) {
+    private ObjectResult attempt(
+            Candidate candidate, List<String> addresses, Spectra from, List<String> troubles) {
         Map<String, Degraded> used = new LinkedHashMap<>();
         List<SpectrumResult> spectra = new ArrayList<>();
-        List<String> troubles = new ArrayList<>();
-        for (String path : candidate.spectra()) {
+        for (String path : addresses) {
             try {
                 Degraded degraded =
                         degrader.degrade(
-                                reader.read(folder.resolve(path)),
+                                times.timed(Stage.READ, () -> from.at(path)),
                                 Statements.of(candidate, defaults),
                                 degrading,
                                 ObjectSeed.of(candidate.name() + "; " + path, seed));
@@ -214,6 +261,19 @@ public final class Chain {
                 freedSpectra, placement, Optional.of(fitted(call.orElseThrow(), fit.get())));
     }
 
+    /** The addresses of the spectra of an object, patterns expanded. */
+    private List<String> addresses(Candidate candidate, Path folder, List<String> troubles) {
+        List<String> addresses = new ArrayList<>();
+        for (String listed : candidate.spectra()) {
+            try {
+                addresses.addAll(reader.expanded(folder, listed));
+            } catch (UnreadableSpectrumException e) {
+                troubles.add(e.getMessage());
+            }
+        }
+        return addresses;
+    }
+
     private Measurements measuredAt(double avMag, Map<String, Degraded> used) {
         List<Measurements> all = new ArrayList<>();
         for (Degraded one : used.values()) {
@@ -260,9 +320,10 @@ public final class Chain {
 
     private SpectrumResult measure(String path, Observation observation, Preparing stated)
             throws UnreadableSpectrumException {
-        PreparedSpectrum prepared = preparer.prepare(observation, stated);
-        Measurements measurements = measurer.measure(prepared);
-        LineReport seen = lines.report(prepared, measurements);
+        PreparedSpectrum prepared =
+                times.timed(Stage.PREPARE, () -> preparer.prepare(observation, stated));
+        Measurements measurements = times.timed(Stage.MEASURE, () -> measurer.measure(prepared));
+        LineReport seen = times.timed(Stage.MEASURE, () -> lines.report(prepared, measurements));
         OptionalDouble velocity =
                 stated.radialVelocityKms().isPresent()
                         ? OptionalDouble.empty()
@@ -297,7 +358,7 @@ public final class Chain {
             List<SpectrumResult> asSeen,
             Map<String, Degraded> used,
             List<String> troubles) {
-        Placed placed = place(candidate, asSeen, used);
+        Placed placed = times.timed(Stage.PLACE, () -> place(candidate, asSeen, used));
         List<SpectrumResult> spectra = placed.spectra();
         Placement placement = placed.placement();
         List<Finding> findings = new ArrayList<>();
@@ -328,10 +389,16 @@ public final class Chain {
                         Optional.of(placed.best()),
                         Optional.of(placement),
                         findings);
-        return judging.judged(
-                standards
-                        .map(comparison -> result.withStandards(compared(comparison, result)))
-                        .orElse(result));
+        return times.timed(
+                Stage.JUDGE,
+                () ->
+                        judging.judged(
+                                standards
+                                        .map(
+                                                comparison ->
+                                                        result.withStandards(
+                                                                compared(comparison, result)))
+                                        .orElse(result)));
     }
 
     /** Compares an object with the standards, of which itself is none. */

@@ -6,7 +6,6 @@ import emberline.place.kind.ObjectKind;
 import emberline.place.pair.PairVerdict;
 import emberline.place.reddening.ReddeningFit;
 import emberline.prepare.BandSignal;
-import emberline.prepare.Quality;
 import emberline.reports.attach.ResultColumn.Content;
 import emberline.spectrum.Finding;
 import emberline.survey.ObjectResult;
@@ -77,7 +76,7 @@ public final class ResultColumns {
         double highest = Double.NEGATIVE_INFINITY;
         for (SpectrumResult spectrum : result.spectra()) {
             double signal =
-                    BandSignal.best(spectrum.prepared().spectrum())
+                    BandSignal.best(spectrum.quality().bands())
                             .map(BandSignal::medianSignalToNoise)
                             .orElse(Double.NEGATIVE_INFINITY);
             if (leading == null || signal > highest) {
@@ -276,10 +275,7 @@ public final class ResultColumns {
                                 "median signal-to-noise per pixel in the band that is covered best",
                                 r ->
                                         leading(r)
-                                                .flatMap(
-                                                        s ->
-                                                                BandSignal.best(
-                                                                        s.prepared().spectrum()))
+                                                .flatMap(s -> BandSignal.best(s.quality().bands()))
                                                 .map(s -> Digits.signal(s.medianSignalToNoise()))
                                                 .orElse(""))
                         .withUcd("stat.snr"));
@@ -287,10 +283,7 @@ public final class ResultColumns {
                 text(
                                 "quality",
                                 "grade of the best spectrum: good, usable, poor or unusable",
-                                r ->
-                                        leading(r)
-                                                .map(s -> Quality.of(s.prepared()).grade().word())
-                                                .orElse(""))
+                                r -> leading(r).map(s -> s.quality().grade().word()).orElse(""))
                         .withUcd("meta.code.qual"));
         columns.add(
                 number(
