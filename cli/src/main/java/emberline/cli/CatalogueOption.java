@@ -2,7 +2,14 @@ package emberline.cli;
 
 import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.InvalidCatalogueException;
+import java.io.IOException;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
 import java.nio.file.Path;
+import java.security.MessageDigest;
+import java.security.NoSuchAlgorithmException;
+import java.util.HexFormat;
+import java.util.stream.Stream;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
@@ -30,6 +37,23 @@ final class CatalogueOption {
             return standard.with(folder);
         } catch (InvalidCatalogueException e) {
             throw new ParameterException(spec.commandLine(), "--catalogue: " + e.getMessage());
+        }
+    }
+
+    /** Checksum of the files of the user's definitions; empty where there are none. */
+    String sha256() throws IOException {
+        if (folder == null) {
+            return "";
+        }
+        try (Stream<Path> files = Files.walk(folder)) {
+            MessageDigest digest = MessageDigest.getInstance("SHA-256");
+            for (Path file : files.filter(Files::isRegularFile).sorted().toList()) {
+                digest.update((folder.relativize(file) + "\n").getBytes(StandardCharsets.UTF_8));
+                digest.update(Files.readAllBytes(file));
+            }
+            return HexFormat.of().formatHex(digest.digest());
+        } catch (NoSuchAlgorithmException e) {
+            throw new IllegalStateException("every Java platform has SHA-256", e);
         }
     }
 }

@@ -21,6 +21,8 @@ import picocli.CommandLine.Spec;
         },
         subcommands = {
             SortCommand.class,
+            SurveyStatusCommand.class,
+            MergeCommand.class,
             MeasureCommand.class,
             PlaceCommand.class,
             JudgeCommand.class,
@@ -41,7 +43,8 @@ import picocli.CommandLine.Spec;
             "1:finished, but some objects failed",
             "2:wrong arguments",
             "3:nothing could be read",
-            "4:an output could not be written"
+            "4:an output could not be written",
+            "130, 143:sort was asked to end (SIGINT, SIGTERM); run it again to go on"
         })
 public final class Emberline implements Runnable {
 

@@ -4,10 +4,13 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measuring;
 import emberline.read.CandidateList;
 import emberline.read.CandidateListReader;
+import emberline.read.CandidateSource;
 import emberline.read.ColumnSpelling;
 import emberline.read.UnreadableListException;
 import emberline.survey.SurveySettings;
+import java.io.IOException;
 import java.nio.file.Path;
+import java.util.List;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
@@ -39,12 +42,22 @@ final class ListOptions {
         return list;
     }
 
+    /** The objects of the list, one by one. */
+    CandidateSource source() throws UnreadableListException {
+        return CandidateSource.of(list);
+    }
+
+    /** What to ask about columns that look misspelt. */
+    List<String> doubts(List<String> columns) {
+        return ColumnSpelling.doubts(columns).stream()
+                .map(doubt -> list.getFileName() + ": " + doubt)
+                .toList();
+    }
+
     /** Reads the list, and asks about columns that look misspelt. */
     CandidateList read() throws UnreadableListException {
         CandidateList read = new CandidateListReader().read(list);
-        for (String doubt : ColumnSpelling.doubts(read)) {
-            spec.commandLine().getErr().println(list.getFileName() + ": " + doubt);
-        }
+        doubts(read.columns()).forEach(spec.commandLine().getErr()::println);
         return read;
     }
 
@@ -56,6 +69,11 @@ final class ListOptions {
     /** How features are measured. */
     Measuring measuring() {
         return spectrumOptions.measuring();
+    }
+
+    /** Checksum of the user's own definitions; empty where there are none. */
+    String catalogueSha256() throws IOException {
+        return catalogueOption.sha256();
     }
 
     /** What is measured. */

@@ -1,17 +1,33 @@
 package emberline.cli;
 
+import emberline.reports.ledger.LedgerException;
 import java.io.IOException;
 import java.nio.file.AccessDeniedException;
 import java.nio.file.FileAlreadyExistsException;
 import java.nio.file.FileSystemException;
 import java.nio.file.NoSuchFileException;
+import java.util.Locale;
 
 /** Says what is wrong with an output that cannot be written, and what to do. */
 final class OutputTrouble {
 
     private OutputTrouble() {}
 
+    /** Whether an output could not be written for want of room. */
+    static boolean isDiskFull(IOException trouble) {
+        if (trouble instanceof LedgerException ledger) {
+            return ledger.isDiskFull();
+        }
+        String message = String.valueOf(trouble.getMessage()).toLowerCase(Locale.ROOT);
+        return message.contains("no space left")
+                || message.contains("disk quota exceeded")
+                || message.contains("not enough space");
+    }
+
     static String message(IOException trouble) {
+        if (trouble instanceof LedgerException || trouble instanceof RunRefusedException) {
+            return trouble.getMessage();
+        }
         String where =
                 trouble instanceof FileSystemException file && file.getFile() != null
                         ? file.getFile()

@@ -1,20 +1,19 @@
 package emberline.cli;
 
 import emberline.catalogue.FeatureCatalogue;
-import emberline.read.CandidateList;
-import emberline.reports.attach.RunJson;
-import emberline.reports.note.Attachments;
+import emberline.read.CandidateRows;
+import emberline.read.CandidateSource;
+import emberline.reports.ledger.RunIdentity;
+import emberline.reports.ledger.RunProgress;
 import emberline.reports.page.PdfReport;
 import emberline.reports.page.ReportSettings;
 import emberline.survey.Chain;
-import emberline.survey.ObjectResult;
 import emberline.survey.Status;
-import emberline.survey.SurveyRunner;
+import emberline.survey.SurveyPart;
 import emberline.survey.SurveySettings;
 import emberline.survey.verdict.Verdicts;
 import java.io.IOException;
 import java.nio.file.Path;
-import java.util.EnumMap;
 import java.util.LinkedHashMap;
 import java.util.Locale;
 import java.util.Map;
@@ -24,6 +23,7 @@ import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
+import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
 
 /** {@code sort}: takes a candidate list through the whole chain. */
@@ -35,7 +35,10 @@ import picocli.CommandLine.Spec;
                     + " what goes into a note: results.ecsv, results.vot, results.mrt, table.tex,"
                     + " sources.bib and methods.txt.",
             "The list needs the columns name and spectrum (path relative to the list; several"
-                    + " joined by ;)."
+                    + " joined by ;, or a pattern such as night1/*.fits).",
+            "In place of the list: a FITS file that holds many spectra (table with array columns,"
+                    + " a row each; an HDU each; an image with a row each), a folder of spectra, or"
+                    + " a pattern in quotes."
         },
         mixinStandardHelpOptions = true)
 final class SortCommand implements Callable<Integer> {
@@ -57,60 +60,82 @@ final class SortCommand implements Callable<Integer> {
 
     @Mixin private VerdictOptions verdictOptions;
 
-    private final Map<Status, Long> counts = new EnumMap<>(Status.class);
+    @Option(
+            names = "--no-objects",
+            description = "Write no JSON file for each object; results.csv and the ledger remain.")
+    private boolean noObjects;
+
+    @Option(
+            names = "--part",
+            paramLabel = "I/N",
+            description =
+                    "Run part I of N parts of the list; merge joins the folders of all parts.")
+    private String part;
+
+    @Option(
+            names = "--timings",
+            description = "Say where time went, how many objects a second, and peak memory.")
+    private boolean timings;
 
     @Override
     public Integer call() throws IOException, InterruptedException {
+        try (StopSignal stop = new StopSignal()) {
+            return sort(stop);
+        }
+    }
+
+    private int sort(StopSignal stop) throws IOException, InterruptedException {
+        long start = System.nanoTime();
         SurveySettings settings =
                 standardsOption.addTo(
                         listOptions.settings().withJudging(judgingOptions.judging()),
                         spec.commandLine().getErr());
+        SurveyPart mine = part();
         FeatureCatalogue catalogue = listOptions.catalogue();
-        CandidateList candidates = listOptions.read();
+        CandidateSource source = listOptions.source();
         Verdicts verdicts = verdictOptions.verdicts(out);
+        RunIdentity identity = identity(source, settings, verdicts, mine);
+        listOptions.doubts(identity.listColumns()).forEach(spec.commandLine().getErr()::println);
+        verdictOptions.strangers(verdicts, source).forEach(spec.commandLine().getErr()::println);
+        RunFolder folder =
+                new RunFolder(out, identity, catalogue, !noObjects, pdf(settings, catalogue));
         Chain chain = new Chain(catalogue, listOptions.measuring(), settings);
-        Progress progress =
-                new Progress(
-                        spec.commandLine().getErr(),
-                        Progress.isTerminal(),
-                        candidates.rows().size());
-        verdictOptions.strangers(verdicts, candidates).forEach(progress::say);
-        try (RunFolder folder =
-                new RunFolder(
-                        out,
-                        candidates,
-                        record(settings, verdicts),
-                        pdf(settings, catalogue),
-                        note(settings, candidates),
-                        catalogue)) {
-            verdictOptions.keep(verdicts, out);
-            new SurveyRunner(chain, settings.threads())
-                    .run(
-                            candidates,
-                            measured -> {
-                                ObjectResult result =
-                                        measured.withVerdict(
-                                                verdicts.of(measured.candidate().name()));
-                                folder.writeObject(result);
-                                return result;
-                            },
-                            result -> {
-                                folder.add(result);
-                                tell(result, progress);
-                            });
-            folder.complete();
-            long left = folder.leftovers();
-            if (left > 0) {
-                progress.say(
-                        out
-                                + ": holds "
-                                + left
-                                + " files of objects of an earlier run, which are not in this list;"
-                                + " remove them, or give each list a folder of its own");
-            }
+        Progress[] progress = new Progress[1];
+        SurveyRun run = new SurveyRun(out, identity, folder, chain, source, mine, verdicts);
+        SurveyRun.Ending ending =
+                run.run(
+                        settings.threads(),
+                        stop,
+                        objects -> {
+                            verdictOptions.keep(verdicts, out);
+                            progress[0] = progress(objects);
+                            return progress[0];
+                        });
+        progress[0].finish(summary(ending));
+        RunProgress reached = ending.progress();
+        if (timings) {
+            double seconds = (System.nanoTime() - start) * 1e-9;
+            progress[0].say(
+                    TimingText.of(
+                            chain.times(), settings.threads(), reached.doneThisTime(), seconds));
         }
-        progress.finish(summary(candidates.rows().size()));
-        return ExitCode.of(candidates.rows().size(), counts.getOrDefault(Status.FAILED, 0L));
+        return ending.complete()
+                ? ExitCode.of(
+                        reached.done(),
+                        reached.doneByStatus().getOrDefault(Status.FAILED.word(), 0L))
+                : ExitCode.SOME_FAILED;
+    }
+
+    private Progress progress(long objects) {
+        return new Progress(spec.commandLine().getErr(), Progress.isTerminal(), objects);
+    }
+
+    private SurveyPart part() {
+        try {
+            return part == null ? SurveyPart.whole() : SurveyPart.parse(part);
+        } catch (IllegalArgumentException e) {
+            throw new ParameterException(spec.commandLine(), "--part: " + e.getMessage());
+        }
     }
 
     private Optional<PdfReport> pdf(SurveySettings settings, FeatureCatalogue catalogue) {
@@ -122,48 +147,54 @@ final class SortCommand implements Callable<Integer> {
                                 catalogue));
     }
 
-    private void tell(ObjectResult result, Progress progress) {
-        counts.merge(result.status(), 1L, Long::sum);
-        if (result.status() == Status.FAILED) {
-            progress.say(result.candidate().name() + ": failed: " + result.reason());
+    private String summary(SurveyRun.Ending ending) {
+        RunProgress run = ending.progress();
+        long objects = ending.complete() ? run.objects() : run.done();
+        StringBuilder text = new StringBuilder();
+        if (!ending.complete()) {
+            text.append("stopped; run the same command again to go on. So far ");
         }
-        progress.step();
-    }
-
-    private String summary(int objects) {
-        StringBuilder text = new StringBuilder(objects + (objects == 1 ? " object:" : " objects:"));
+        text.append(objects).append(objects == 1 ? " object:" : " objects:");
         for (Status status : Status.values()) {
             text.append(
                     String.format(
                             Locale.ROOT,
                             " %d %s,",
-                            counts.getOrDefault(status, 0L),
+                            run.doneByStatus().getOrDefault(status.word(), 0L),
                             status.word()));
+        }
+        if (ending.unchanged() > 0) {
+            text.append(" ").append(ending.unchanged()).append(" of them unchanged,");
         }
         return text.append(" written to ").append(out).toString();
     }
 
-    private Attachments.Run note(SurveySettings settings, CandidateList candidates) {
-        return new Attachments.Run(
-                candidates.file().getFileName().toString(),
-                ProgramVersion.number(),
-                RunOptions.of(settings, listOptions.measuring(), !noReports),
-                settings.seed());
+    private RunIdentity identity(
+            CandidateSource source, SurveySettings settings, Verdicts verdicts, SurveyPart mine)
+            throws IOException {
+        try (CandidateRows rows = source.open()) {
+            return new RunIdentity(
+                    ProgramVersion.number(),
+                    options(settings),
+                    Map.of("verdicts_sha256", VerdictOptions.checksum(verdicts)),
+                    settings.seed(),
+                    source.name(),
+                    source.sha256(),
+                    rows.columns(),
+                    mine.text());
+        }
     }
 
-    private RunJson record(SurveySettings settings, Verdicts verdicts) throws IOException {
+    private Map<String, String> options(SurveySettings settings) throws IOException {
         Map<String, String> options =
                 new LinkedHashMap<>(RunOptions.of(settings, listOptions.measuring(), !noReports));
-        options.put("verdicts_sha256", VerdictOptions.checksum(verdicts));
+        options.put("catalogue", listOptions.catalogueSha256());
+        options.put("objects", noObjects ? "none" : "json");
         if (standardsOption.file().isPresent()) {
             Path standards = standardsOption.file().get();
             options.put("standards", standards.getFileName().toString());
             options.put("standards_sha256", FileChecksum.sha256(standards));
         }
-        return new RunJson(
-                ProgramVersion.number(),
-                options,
-                settings.seed(),
-                FileChecksum.sha256(listOptions.file()));
+        return options;
     }
 }

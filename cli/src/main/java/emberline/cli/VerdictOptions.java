@@ -1,6 +1,8 @@
 package emberline.cli;
 
-import emberline.read.CandidateList;
+import emberline.read.CandidateRows;
+import emberline.read.CandidateSource;
+import emberline.read.ListedCandidate;
 import emberline.reports.attach.AtomicFile;
 import emberline.reports.attach.VerdictTable;
 import emberline.survey.verdict.UnreadableVerdictsException;
@@ -10,7 +12,9 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import picocli.CommandLine.Option;
 
 /**
@@ -44,8 +48,21 @@ final class VerdictOptions {
     }
 
     /** What is to be said of verdicts on objects that are not in the list. */
-    List<String> strangers(Verdicts verdicts, CandidateList list) {
-        return verdicts.strangers(list.rows().stream().map(row -> row.candidate().name()).toList());
+    List<String> strangers(Verdicts verdicts, CandidateSource source) throws IOException {
+        if (verdicts.entries().isEmpty()) {
+            return List.of();
+        }
+        List<String> met = new ArrayList<>();
+        try (CandidateRows rows = source.open()) {
+            for (Optional<ListedCandidate> row = rows.next();
+                    row.isPresent();
+                    row = rows.next()) {
+                if (verdicts.entries().containsKey(row.get().candidate().name())) {
+                    met.add(row.get().candidate().name());
+                }
+            }
+        }
+        return verdicts.strangers(met);
     }
 
     /**

@@ -47,7 +47,12 @@ final class TypeRelation {
     }
 
     boolean covers(double x) {
-        return pieces.stream().anyMatch(piece -> x >= piece.low && x <= piece.high);
+        for (Piece piece : pieces) {
+            if (x >= piece.low && x <= piece.high) {
+                return true;
+            }
+        }
+        return false;
     }
 
     /** The value; only where it covers. */

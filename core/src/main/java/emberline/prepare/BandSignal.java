@@ -93,8 +93,18 @@ public record BandSignal(Range range, double coverage, double medianSignalToNois
      * @return the signal; empty where no good pixel has a sigma above zero
      */
     public static Optional<BandSignal> best(Spectrum spectrum) {
+        return best(of(spectrum));
+    }
+
+    /**
+     * The signal in the band that is covered best, of those that are known.
+     *
+     * @param signals what {@link #of} gave
+     * @return the signal; empty where there is none
+     */
+    public static Optional<BandSignal> best(List<BandSignal> signals) {
         BandSignal best = null;
-        for (BandSignal signal : of(spectrum)) {
+        for (BandSignal signal : signals) {
             boolean better =
                     best == null
                             || (signal.range != Range.WHOLE

@@ -5,7 +5,6 @@ import emberline.spectrum.Medium;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.HashMap;
 import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -85,34 +84,100 @@ public final class CandidateListReader {
      *     {@code name} or {@code spectrum}, or has no rows; its message says what to do
      */
     public CandidateList read(Path list) throws UnreadableListException {
+        return all(list, open(list));
+    }
+
+    /** Reads a list from what lies at a path. */
+    static CandidateList read(FileContent content, Path list) throws UnreadableListException {
         try {
-            return read(FileContent.load(list), list);
+            return all(list, open(content.name(), ListTableReader.open(content)));
         } catch (UnreadableSpectrumException e) {
             throw new UnreadableListException(e);
         }
     }
 
-    /** Reads a list from what lies at a path. */
-    static CandidateList read(FileContent content, Path list) throws UnreadableListException {
-        ListTable table;
-        String name = content.name();
+    private static CandidateList all(Path list, CandidateRows open)
+            throws UnreadableListException {
+        List<ListedCandidate> rows = new ArrayList<>();
+        try (open) {
+            for (Optional<ListedCandidate> row = open.next(); row.isPresent(); row = open.next()) {
+                rows.add(row.get());
+            }
+            return new CandidateList(list, open.columns(), rows);
+        }
+    }
+
+    /**
+     * Opens a list whose rows are wanted one by one. Of a list as text no more than a row is held,
+     * and {@value NameRows#BYTES_A_ROW} bytes a row to know repeated names.
+     *
+     * @param list path of the list
+     * @return its rows
+     * @throws UnreadableListException as {@link #read}, where the fault shows at the beginning;
+     *     what is wrong further down is said when the row is reached
+     */
+    public CandidateRows open(Path list) throws UnreadableListException {
         try {
-            table = ListTableReader.read(content);
+            return open(FileContent.name(list), ListTableReader.open(list));
         } catch (UnreadableSpectrumException e) {
             throw new UnreadableListException(e);
         }
-        List<String> keys = table.columns().stream().map(CandidateListReader::key).toList();
-        requireColumns(name, keys, table.columns());
-        if (table.rows().isEmpty()) {
-            throw new UnreadableListException(
-                    name, "no rows below the names", "one row for each object", "Add the objects.");
+    }
+
+    private static CandidateRows open(String name, TableRows table)
+            throws UnreadableListException {
+        try {
+            List<String> keys = table.columns().stream().map(CandidateListReader::key).toList();
+            requireColumns(name, keys, table.columns());
+            Optional<List<String>> first = table.next();
+            if (first.isEmpty()) {
+                throw new UnreadableListException(
+                        name,
+                        "no rows below the names",
+                        "one row for each object",
+                        "Add the objects.");
+            }
+            return new TableCandidates(keys, table, first);
+        } catch (UnreadableListException e) {
+            table.close();
+            throw e;
         }
-        Map<String, Integer> rowOfName = new HashMap<>();
-        List<ListedCandidate> rows = new ArrayList<>();
-        for (int i = 0; i < table.rows().size(); i++) {
-            rows.add(listed(keys, table.rows().get(i), i + 1, rowOfName));
+    }
+
+    /** The rows of a table as candidates. */
+    private static final class TableCandidates implements CandidateRows {
+
+        private final List<String> keys;
+        private final TableRows table;
+        private final NameRows names = new NameRows();
+        private Optional<List<String>> next;
+        private int row;
+
+        TableCandidates(List<String> keys, TableRows table, Optional<List<String>> first) {
+            this.keys = keys;
+            this.table = table;
+            this.next = first;
         }
-        return new CandidateList(list, keys, rows);
+
+        @Override
+        public List<String> columns() {
+            return keys;
+        }
+
+        @Override
+        public Optional<ListedCandidate> next() throws UnreadableListException {
+            if (next.isEmpty()) {
+                return Optional.empty();
+            }
+            ListedCandidate listed = listed(keys, next.get(), ++row, names);
+            next = table.next();
+            return Optional.of(listed);
+        }
+
+        @Override
+        public void close() throws UnreadableListException {
+            table.close();
+        }
     }
 
     /** The columns that the product uses, sorted. */
@@ -124,7 +189,7 @@ public final class CandidateListReader {
     }
 
     /** The known name of a column whatever its case; other names as they are. */
-    private static String key(String column) {
+    static String key(String column) {
         String lower = column.toLowerCase(Locale.ROOT).trim();
         return NUMBER_COLUMNS.contains(lower) || TEXT_COLUMNS.contains(lower) ? lower : column;
     }
@@ -166,8 +231,9 @@ public final class CandidateListReader {
         return text.length() > 200 ? text.substring(0, 200) + "..." : text;
     }
 
-    private static ListedCandidate listed(
-            List<String> keys, List<String> cells, int row, Map<String, Integer> rowOfName) {
+    /** A row of cells as a candidate; says what makes it unusable. */
+    static ListedCandidate listed(
+            List<String> keys, List<String> cells, int row, NameRows rowOfName) {
         Map<String, String> byColumn = new LinkedHashMap<>();
         for (int i = 0; i < keys.size(); i++) {
             byColumn.put(keys.get(i), i < cells.size() ? cells.get(i) : "");
@@ -181,8 +247,8 @@ public final class CandidateListReader {
                         .toList();
         Candidate candidate = new Candidate(name, row, spectra, byColumn);
         Optional<String> problem = problem(candidate, keys.size(), cells.size(), written);
-        Integer first = rowOfName.putIfAbsent(name.toLowerCase(Locale.ROOT), row);
-        if (first != null && problem.isEmpty()) {
+        int first = rowOfName.firstRow(name.toLowerCase(Locale.ROOT), row);
+        if (first != row && problem.isEmpty()) {
             problem =
                     Optional.of(
                             at("name", row)

@@ -20,15 +20,15 @@ public final class ColumnSpelling {
     /**
      * What to ask the observer about the columns of a list.
      *
-     * @param list the list
+     * @param columns names of its columns
      * @return a sentence for each column that may be misspelt
      */
-    public static List<String> doubts(CandidateList list) {
+    public static List<String> doubts(List<String> columns) {
         List<String> doubts = new ArrayList<>();
         List<String> known = CandidateListReader.knownColumns();
         List<String> unused =
-                known.stream().filter(name -> !list.columns().contains(name)).toList();
-        for (String column : list.columns()) {
+                known.stream().filter(name -> !columns.contains(name)).toList();
+        for (String column : columns) {
             if (!known.contains(column)) {
                 meant(column, unused)
                         .ifPresent(

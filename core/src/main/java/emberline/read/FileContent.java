@@ -11,6 +11,7 @@ import java.nio.file.Path;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
+import java.util.List;
 import java.util.zip.GZIPInputStream;
 import java.util.zip.ZipException;
 
@@ -32,18 +33,79 @@ final class FileContent {
     private final byte[] bytes;
     private final String sha256;
     private final boolean packed;
+    private final List<String> units;
 
-    private FileContent(String name, byte[] bytes, String sha256, boolean packed) {
+    private FileContent(
+            String name, byte[] bytes, String sha256, boolean packed, List<String> units) {
         this.name = name;
         this.bytes = bytes;
         this.sha256 = sha256;
         this.packed = packed;
+        this.units = units;
+    }
+
+    /**
+     * Takes a FITS file that was cut out of a larger one.
+     *
+     * @param bytes the file as it would stand alone
+     * @param file name of the larger file
+     * @param units where each of its HDUs stands in the larger file, such as {@code HDU 1, row 17}
+     * @param main which of them is the spectrum
+     */
+    static FileContent cut(byte[] bytes, String file, List<String> units, int main) {
+        return new FileContent(
+                file + ", " + units.get(main), bytes, sha256(bytes), false, List.copyOf(units));
+    }
+
+    /** Where an HDU stands in the file, such as {@code HDU 1}. */
+    String unit(int index) {
+        return index < units.size() ? units.get(index) : "HDU " + index;
+    }
+
+    /** Name of the file and of one of its HDUs, to begin a message. */
+    String where(int index) {
+        String unit = unit(index);
+        return !units.isEmpty() && name.endsWith(", " + unit) ? name : name + ", " + unit;
+    }
+
+    /** Whether this was cut out of a larger file. */
+    boolean isCut() {
+        return !units.isEmpty();
     }
 
     /** Reads a file; refuses what is missing, no plain file, unreadable, empty or too large. */
     static FileContent load(Path file) throws UnreadableSpectrumException {
+        String name = name(file);
+        return reading(
+                file,
+                () -> {
+                    long size = Files.size(file);
+                    if (size > MAX_BYTES) {
+                        throw tooLarge(name, size + " bytes");
+                    }
+                    return of(Files.readAllBytes(file), name);
+                });
+    }
+
+    /** The name of a file as shown to the observer: without its folder. */
+    static String name(Path file) {
         Path fileName = file.getFileName();
-        String name = fileName == null ? file.toString() : fileName.toString();
+        return fileName == null ? file.toString() : fileName.toString();
+    }
+
+    /**
+     * What is done with a plain file.
+     *
+     * @param <T> what comes of it
+     */
+    @FunctionalInterface
+    interface Reading<T> {
+        T read() throws IOException;
+    }
+
+    /** Reads a file in some way; says what is wrong where it cannot be read. */
+    static <T> T reading(Path file, Reading<T> how) throws UnreadableSpectrumException {
+        String name = name(file);
         if (Files.isDirectory(file)) {
             throw new UnreadableSpectrumException(
                     name, "a folder", "a file", "Name the spectrum file within it.");
@@ -56,11 +118,7 @@ final class FileContent {
                         "a plain file",
                         "Save the data to a file first.");
             }
-            long size = Files.size(file);
-            if (size > MAX_BYTES) {
-                throw tooLarge(name, size + " bytes");
-            }
-            return of(Files.readAllBytes(file), name);
+            return how.read();
         } catch (NoSuchFileException e) {
             throw new UnreadableSpectrumException(
                     name,
@@ -97,7 +155,7 @@ final class FileContent {
                     "a spectrum",
                     "Fetch or write the file again.");
         }
-        return new FileContent(name, bytes, sha256, packed);
+        return new FileContent(name, bytes, sha256, packed, List.of());
     }
 
     String name() {
@@ -160,7 +218,8 @@ final class FileContent {
                 "One file should hold one spectrum; cut it out of the larger one.");
     }
 
-    private static String sha256(byte[] bytes) {
+    /** The SHA-256 checksum of some bytes, hexadecimal. */
+    static String sha256(byte[] bytes) {
         try {
             return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
         } catch (NoSuchAlgorithmException e) {

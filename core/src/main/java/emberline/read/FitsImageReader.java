@@ -16,7 +16,7 @@ import java.util.Optional;
 final class FitsImageReader {
 
     private static final int MOST_ROWS = 4;
-    private static final int MOST_PLANES = 8;
+    static final int MOST_PLANES = 8;
 
     /** Share of steps that must go one way for a row to be taken as wavelengths. */
     private static final double MONOTONIC = 0.9;
@@ -143,7 +143,7 @@ final class FitsImageReader {
                     "an image of " + sizes(axes) + " numbers that holds several spectra",
                     "one spectrum: a row of fluxes with wavelength keywords, or two to four rows"
                             + " of wavelength, flux, sigma",
-                    "Write each spectrum to a file of its own.");
+                    "Name one of them by its row, FILE#row=1, or sort the file as it is.");
         }
         FitsWavelengths axis = FitsWavelengths.of(unit, length);
         findings.addAll(axis.findings());
@@ -191,7 +191,7 @@ final class FitsImageReader {
         if (power.isEmpty() && unit.index() > 0) {
             power = units.get(0).resolvingPower(findings);
         }
-        String place = unit.index() == 0 ? "pixel " : "HDU " + unit.index() + ", pixel ";
+        String place = unit.isPlain() ? "pixel " : unit.place() + ", pixel ";
         return new RawSpectrum(
                 "FITS image, " + shape,
                 samples,

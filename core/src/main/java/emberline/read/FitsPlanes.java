@@ -87,8 +87,8 @@ final class FitsPlanes {
                 findings.add(
                         Finding.note(
                                 "noise-from-extension",
-                                "The noise was taken from HDU "
-                                        + other.index()
+                                "The noise was taken from "
+                                        + other.place()
                                         + " ("
                                         + other.text("EXTNAME").orElse("")
                                         + ")."));
@@ -109,6 +109,11 @@ final class FitsPlanes {
             }
         }
         return "";
+    }
+
+    /** Whether a name is that of a noise. */
+    static boolean namesNoise(String name) {
+        return noiseKind(name).isPresent();
     }
 
     private static Optional<ColumnRoles.NoiseKind> noiseKind(String name) {

@@ -119,7 +119,7 @@ final class FitsTableColumns implements TabularReader.Columns {
                 unit.where(),
                 table.getNRows() + " rows of arrays in column '" + labels.get(column).name() + "'",
                 "one row a pixel, or a single row of arrays",
-                "Write each spectrum to a file of its own.");
+                "Name one of them by its row, FILE#row=1, or sort the file as it is.");
     }
 
     private double[] scaled(double[] values, int field) {
@@ -150,7 +150,7 @@ final class FitsTableColumns implements TabularReader.Columns {
     @Override
     public IntFunction<String> place() {
         String word = table.getNRows() == 1 ? ", element " : ", row ";
-        return row -> "HDU " + unit.index() + word + (row + 1);
+        return row -> unit.place() + word + (row + 1);
     }
 
     @Override

@@ -69,7 +69,7 @@ final class FitsUnit implements Keywords {
     private static FitsUnit at(FileContent content, int index, int offset)
             throws UnreadableSpectrumException {
         byte[] bytes = content.bytes();
-        String where = content.name() + ", HDU " + index;
+        String where = content.where(index);
         int end = endOfHeader(bytes, offset);
         if (end < 0) {
             throw cutOff(where, "the file ends within the header");
@@ -212,7 +212,17 @@ final class FitsUnit implements Keywords {
 
     /** File name and number of this unit, to begin a message. */
     String where() {
-        return content.name() + ", HDU " + index;
+        return content.where(index);
+    }
+
+    /** Where this unit stands in the file, such as {@code HDU 1}. */
+    String place() {
+        return content.unit(index);
+    }
+
+    /** Whether this is all that there is to a file, so that nobody wonders which unit is meant. */
+    boolean isPlain() {
+        return index == 0 && !content.isCut();
     }
 
     int index() {

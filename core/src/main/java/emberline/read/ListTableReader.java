@@ -1,12 +1,11 @@
 package emberline.read;
 
-import de.siegmar.fastcsv.reader.CommentStrategy;
-import de.siegmar.fastcsv.reader.CsvParseException;
-import de.siegmar.fastcsv.reader.CsvReader;
-import de.siegmar.fastcsv.reader.CsvRecord;
 import java.io.IOException;
+import java.io.InputStream;
 import java.math.BigDecimal;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import uk.ac.starlink.fits.FitsTableBuilder;
@@ -15,18 +14,31 @@ import uk.ac.starlink.table.StarTable;
 import uk.ac.starlink.table.StoragePolicy;
 import uk.ac.starlink.util.ByteArrayDataSource;
 
-/** Reads a table of text from CSV (by commas, semicolons or tabs), ECSV, VOTable or FITS. */
+/** Opens a table of text: CSV (by commas, semicolons or tabs), ECSV, VOTable or FITS. */
 final class ListTableReader {
 
-    private static final int MOST_CELL_CHARS = 1 << 20;
+    private static final int HEAD_BYTES = 8192;
 
     private ListTableReader() {}
 
-    static ListTable read(FileContent content)
+    /**
+     * Opens a table: text is read row by row, whatever its length; every other kind is read at
+     * once.
+     */
+    static TableRows open(Path file) throws UnreadableSpectrumException, UnreadableListException {
+        ContentKind kind = kind(file);
+        if (kind == ContentKind.TEXT) {
+            return CsvRows.open(file);
+        }
+        return open(FileContent.load(file));
+    }
+
+    /** Opens a table that is held already. */
+    static TableRows open(FileContent content)
             throws UnreadableSpectrumException, UnreadableListException {
         ContentKind kind = ContentKind.of(content.bytes());
         return switch (kind) {
-            case TEXT -> csv(content);
+            case TEXT -> CsvRows.open(content);
             case FITS -> star(content.name(), fits(content));
             case VOTABLE, ECSV -> {
                 List<StarTable> tables = StarTables.open(content, kind);
@@ -39,75 +51,26 @@ final class ListTableReader {
         };
     }
 
+    private static ContentKind kind(Path file) throws UnreadableSpectrumException {
+        return FileContent.reading(
+                file,
+                () -> {
+                    try (InputStream in = CsvRows.unpacked(file)) {
+                        byte[] head = in.readNBytes(HEAD_BYTES);
+                        if (head.length == 0) {
+                            FileContent.of(Files.readAllBytes(file), FileContent.name(file));
+                        }
+                        return ContentKind.of(head);
+                    }
+                });
+    }
+
     private static UnreadableListException noTable(String name, String found) {
         return new UnreadableListException(
                 name,
                 found,
                 "a candidate list as CSV, ECSV, VOTable or FITS table",
                 "Save the list in one of these formats.");
-    }
-
-    private static ListTable csv(FileContent content) throws UnreadableListException {
-        String text = TextCells.decode(content.bytes(), 0, content.bytes().length);
-        String body = text.startsWith("\ufeff") ? text.substring(1) : text;
-        List<String> columns = List.of();
-        List<List<String>> rows = new ArrayList<>();
-        try (CsvReader<CsvRecord> reader =
-                CsvReader.builder()
-                        .fieldSeparator(separator(body))
-                        .commentStrategy(CommentStrategy.SKIP)
-                        .allowExtraFields(true)
-                        .allowMissingFields(true)
-                        .trimWhitespacesAroundQuotes(true)
-                        .maxBufferSize(MOST_CELL_CHARS * 16)
-                        .ofCsvRecord(body)) {
-            for (CsvRecord row : reader) {
-                List<String> cells = row.getFields().stream().map(String::trim).toList();
-                if (cells.stream().allMatch(String::isEmpty) && columns.isEmpty()) {
-                    continue;
-                }
-                if (columns.isEmpty()) {
-                    columns = cells;
-                } else {
-                    rows.add(cells);
-                }
-            }
-        } catch (IOException | CsvParseException e) {
-            throw new UnreadableListException(
-                    content.name(),
-                    "no proper CSV (" + FitsReader.reason(e) + ")",
-                    "rows of cells, with each quote closed",
-                    "Write the list again with a spreadsheet or a table library.");
-        }
-        boolean swallowed =
-                rows.stream().flatMap(List::stream).anyMatch(cell -> cell.contains("\n"));
-        if (swallowed && body.chars().filter(c -> c == '"').count() % 2 == 1) {
-            throw new UnreadableListException(
-                    content.name(),
-                    "a quote that is never closed",
-                    "rows of cells, with each quote closed",
-                    "Close the quote; the rows after it would be lost.");
-        }
-        return new ListTable(columns, rows);
-    }
-
-    /** The separator that stands most often in the line of names. */
-    private static char separator(String body) {
-        String names =
-                body.lines()
-                        .filter(line -> !line.isBlank() && !line.startsWith("#"))
-                        .findFirst()
-                        .orElse("");
-        char best = ',';
-        long most = 0;
-        for (char candidate : new char[] {',', ';', '\t'}) {
-            long count = names.chars().filter(c -> c == candidate).count();
-            if (count > most) {
-                most = count;
-                best = candidate;
-            }
-        }
-        return best;
     }
 
     private static StarTable fits(FileContent content)
@@ -141,7 +104,7 @@ final class ListTableReader {
                 "Write the list again with a table library.");
     }
 
-    private static ListTable star(String name, StarTable table) throws UnreadableListException {
+    private static TableRows star(String name, StarTable table) throws UnreadableListException {
         List<String> columns = new ArrayList<>();
         for (int i = 0; i < table.getColumnCount(); i++) {
             String column = table.getColumnInfo(i).getName();
@@ -159,7 +122,7 @@ final class ListTableReader {
         } catch (IOException | RuntimeException e) {
             throw unreadable(name, e);
         }
-        return new ListTable(columns, rows);
+        return TableRows.of(columns, rows);
     }
 
     /** A cell as text; a number as its shortest decimal without exponent. */

@@ -30,6 +30,7 @@ import emberline.read.SpectrumReader;
 import emberline.read.UnreadableSpectrumException;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
+import emberline.survey.StageTimes.Stage;
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -63,6 +64,7 @@ public final class Chain {
     private final ReddeningMode reddeningMode;
     private final Optional<StandardComparison> standards;
     private final boolean toMeasuredRest;
+    private final StageTimes times = new StageTimes();
 
     /**
      * A chain.
@@ -124,6 +126,15 @@ public final class Chain {
     }
 
     /**
+     * Where the time of this chain went so far.
+     *
+     * @return times that go on counting
+     */
+    public StageTimes times() {
+        return times;
+    }
+
+    /**
      * Takes one object through the chain.
      *
      * @param candidate the object
@@ -131,8 +142,44 @@ public final class Chain {
      * @return the result, whatever happened; a fault of the product itself is a failed object too
      */
     public ObjectResult run(Candidate candidate, Path folder) {
+        List<String> troubles = new ArrayList<>();
+        return run(
+                candidate,
+                addresses(candidate, folder, troubles),
+                address -> reader.read(folder, address),
+                troubles);
+    }
+
+    /** Gives the spectra of an object by their addresses. */
+    @FunctionalInterface
+    public interface Spectra {
+
+        /**
+         * A spectrum.
+         *
+         * @param address one of those that the object lists
+         * @return the spectrum as read
+         * @throws UnreadableSpectrumException if there is none; its message says what to do
+         */
+        Observation at(String address) throws UnreadableSpectrumException;
+    }
+
+    /**
+     * Takes one object through the chain whose spectra come from elsewhere than files, such as a
+     * table in memory.
+     *
+     * @param candidate the object
+     * @param spectra gives its spectra
+     * @return the result, whatever happened
+     */
+    public ObjectResult run(Candidate candidate, Spectra spectra) {
+        return run(candidate, candidate.spectra(), spectra, new ArrayList<>());
+    }
+
+    private ObjectResult run(
+            Candidate candidate, List<String> addresses, Spectra spectra, List<String> troubles) {
         try {
-            return attempt(candidate, folder);
+            return attempt(candidate, addresses, spectra, troubles);
         } catch (RuntimeException e) { // must not end a night's run
             return internalError(candidate, e);
         }
@@ -151,21 +198,26 @@ public final class Chain {
                 "internal error: " + fault + "; please report it with the spectrum, and go on");
     }
 
-    private ObjectResult attempt(Candidate candidate, Path folder) {
+    private ObjectResult attempt(
+            Candidate candidate, List<String> addresses, Spectra from, List<String> troubles) {
         Map<String, Degraded> used = new LinkedHashMap<>();
         List<SpectrumResult> spectra = new ArrayList<>();
-        List<String> troubles = new ArrayList<>();
         List<Finding> twice = new ArrayList<>();
         if (candidate.spectra().isEmpty()) {
             return byColours(candidate);
         }
-        for (int place = 0; place < candidate.spectra().size(); place++) {
-            String path = candidate.spectra().get(place);
+        for (int place = 0; place < addresses.size(); place++) {
+            String path = addresses.get(place);
+            // cells of a list hold one statement a spectrum as listed; patterns share theirs
+            Candidate stating =
+                    addresses.size() == candidate.spectra().size()
+                            ? candidate.forSpectrum(place)
+                            : candidate;
             try {
                 Degraded degraded =
                         degrader.degrade(
-                                reader.read(folder.resolve(path)),
-                                Statements.of(candidate.forSpectrum(place), defaults),
+                                times.timed(Stage.READ, () -> from.at(path)),
+                                Statements.of(stating, defaults),
                                 degrading,
                                 ObjectSeed.of(candidate.name() + "; " + path, seed));
                 SpectrumResult result = measure(path, degraded.observation(), degraded.stated());
@@ -271,6 +323,19 @@ public final class Chain {
                         findings));
     }
 
+    /** The addresses of the spectra of an object, patterns expanded. */
+    private List<String> addresses(Candidate candidate, Path folder, List<String> troubles) {
+        List<String> addresses = new ArrayList<>();
+        for (String listed : candidate.spectra()) {
+            try {
+                addresses.addAll(reader.expanded(folder, listed));
+            } catch (UnreadableSpectrumException e) {
+                troubles.add(e.getMessage());
+            }
+        }
+        return addresses;
+    }
+
     private Measurements measuredAt(double avMag, Map<String, Degraded> used, Placer placer) {
         List<Measurements> all = new ArrayList<>();
         for (Degraded one : used.values()) {
@@ -317,9 +382,10 @@ public final class Chain {
 
     private SpectrumResult measure(String path, Observation observation, Preparing stated)
             throws UnreadableSpectrumException {
-        PreparedSpectrum prepared = preparer.prepare(observation, stated);
-        Measurements measurements = measurer.measure(prepared);
-        LineReport seen = lines.report(prepared, measurements);
+        PreparedSpectrum prepared =
+                times.timed(Stage.PREPARE, () -> preparer.prepare(observation, stated));
+        Measurements measurements = times.timed(Stage.MEASURE, () -> measurer.measure(prepared));
+        LineReport seen = times.timed(Stage.MEASURE, () -> lines.report(prepared, measurements));
         OptionalDouble velocity =
                 stated.radialVelocityKms().isPresent()
                         ? OptionalDouble.empty()
@@ -355,7 +421,7 @@ public final class Chain {
             Map<String, Degraded> used,
             List<String> troubles,
             List<Finding> twice) {
-        Placed placed = place(candidate, asSeen, used);
+        Placed placed = times.timed(Stage.PLACE, () -> place(candidate, asSeen, used));
         List<SpectrumResult> spectra = placed.spectra();
         SeveralSpectra.Joined joined = placed.joined();
         Placement placement = withColours(candidate, placed.placement());
@@ -395,10 +461,16 @@ public final class Chain {
                         Optional.of(joined.measurements()),
                         Optional.of(placement),
                         findings);
-        return judging.judged(
-                standards
-                        .map(comparison -> result.withStandards(compared(comparison, result)))
-                        .orElse(result));
+        return times.timed(
+                Stage.JUDGE,
+                () ->
+                        judging.judged(
+                                standards
+                                        .map(
+                                                comparison ->
+                                                        result.withStandards(
+                                                                compared(comparison, result)))
+                                        .orElse(result)));
     }
 
     /** Compares an object with the standards, of which itself is none. */

@@ -92,7 +92,7 @@ public record ObjectResult(
         double highest = Double.NEGATIVE_INFINITY;
         for (SpectrumResult spectrum : spectra) {
             double signal =
-                    BandSignal.best(spectrum.prepared().spectrum())
+                    BandSignal.best(spectrum.quality().bands())
                             .map(BandSignal::medianSignalToNoise)
                             .orElse(Double.NEGATIVE_INFINITY);
             if (leading == null || signal > highest) {

@@ -5,6 +5,7 @@ import emberline.measure.line.LineReport;
 import emberline.place.TypeEstimate;
 import emberline.prepare.PreparedSpectrum;
 import java.util.Optional;
+import emberline.prepare.Quality;
 
 /**
  * One spectrum of an object after reading, preparing and measuring.
@@ -13,6 +14,7 @@ import java.util.Optional;
  * @param format what kind of file it is, in words
  * @param sha256 checksum of the file's bytes, hexadecimal
  * @param prepared the prepared spectrum
+ * @param quality how good it is
  * @param measurements every feature of the catalogue
  * @param lines what its lines say: widths seen or limits, radial velocity
  * @param typeAlone the type by this spectrum alone; empty where it is the only one of the object,
@@ -23,12 +25,13 @@ public record SpectrumResult(
         String format,
         String sha256,
         PreparedSpectrum prepared,
+        Quality quality,
         Measurements measurements,
         LineReport lines,
         Optional<TypeEstimate> typeAlone) {
 
     /**
-     * An only spectrum.
+     * An only spectrum, which is graded now.
      *
      * @param path the path as listed or given
      * @param format what kind of file it is, in words
@@ -44,7 +47,15 @@ public record SpectrumResult(
             PreparedSpectrum prepared,
             Measurements measurements,
             LineReport lines) {
-        this(path, format, sha256, prepared, measurements, lines, Optional.empty());
+        this(
+                path,
+                format,
+                sha256,
+                prepared,
+                Quality.of(prepared),
+                measurements,
+                lines,
+                Optional.empty());
     }
 
     /**
@@ -54,6 +65,7 @@ public record SpectrumResult(
      * @return the same with that type
      */
     SpectrumResult withTypeAlone(Optional<TypeEstimate> alone) {
-        return new SpectrumResult(path, format, sha256, prepared, measurements, lines, alone);
+        return new SpectrumResult(
+                path, format, sha256, prepared, quality, measurements, lines, alone);
     }
 }

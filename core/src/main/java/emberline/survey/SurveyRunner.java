@@ -7,6 +7,7 @@ import java.nio.file.Path;
 import java.util.ArrayDeque;
 import java.util.Deque;
 import java.util.Iterator;
+import java.util.Optional;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
@@ -76,6 +77,42 @@ public final class SurveyRunner {
     }
 
     /**
+     * Gives the rows of a run one after the other.
+     *
+     * @param <R> a row and whatever is known of it
+     */
+    @FunctionalInterface
+    public interface Feed<R> {
+
+        /**
+         * The next row.
+         *
+         * @return the row, or empty after the last or where the run shall end early
+         * @throws IOException if the rows cannot be read on; this stops the run
+         */
+        Optional<R> next() throws IOException;
+    }
+
+    /**
+     * What is done with a row, on several threads at once.
+     *
+     * @param <R> the row
+     * @param <T> what is handed on
+     */
+    @FunctionalInterface
+    public interface Work<R, T> {
+
+        /**
+         * Does the work of one row.
+         *
+         * @param row the row
+         * @return what is handed on in the order of the rows
+         * @throws IOException if a file cannot be written; this stops the run
+         */
+        T done(R row) throws IOException;
+    }
+
+    /**
      * Runs the list.
      *
      * @param <T> what is made of each object
@@ -88,16 +125,39 @@ public final class SurveyRunner {
     public <T> void run(CandidateList list, Output<T> output, Sink<T> sink)
             throws IOException, InterruptedException {
         Path folder = list.file().toAbsolutePath().getParent();
+        Iterator<ListedCandidate> rows = list.rows().iterator();
+        run(
+                () -> rows.hasNext() ? Optional.of(rows.next()) : Optional.empty(),
+                row -> output(row, folder, output),
+                sink);
+    }
+
+    /**
+     * Runs rows of any kind; at most {@value #AHEAD} a thread are in flight at once.
+     *
+     * @param <R> a row
+     * @param <T> what is made of each row
+     * @param feed gives the rows, called on the calling thread
+     * @param work what is done with each, called on several threads at once
+     * @param sink what takes the outputs in the order of the rows, called on the calling thread
+     * @throws IOException if the rows cannot be read or an output cannot be written
+     * @throws InterruptedException if the calling thread is interrupted
+     */
+    public <R, T> void run(Feed<R> feed, Work<R, T> work, Sink<T> sink)
+            throws IOException, InterruptedException {
         ExecutorService workers = Executors.newFixedThreadPool(threads);
         try {
             Deque<Future<T>> flying = new ArrayDeque<>();
-            Iterator<ListedCandidate> rows = list.rows().iterator();
-            while (rows.hasNext() || !flying.isEmpty()) {
-                while (rows.hasNext() && flying.size() < AHEAD * threads) {
-                    ListedCandidate row = rows.next();
-                    flying.add(workers.submit(() -> made(output, result(row, folder))));
+            boolean more = true;
+            while (more || !flying.isEmpty()) {
+                while (more && flying.size() < AHEAD * threads) {
+                    Optional<R> row = feed.next();
+                    more = row.isPresent();
+                    row.ifPresent(one -> flying.add(workers.submit(() -> work.done(one))));
                 }
-                sink.take(finished(flying.remove()));
+                if (!flying.isEmpty()) {
+                    sink.take(finished(flying.remove()));
+                }
             }
         } finally {
             workers.shutdownNow();
@@ -105,17 +165,22 @@ public final class SurveyRunner {
         }
     }
 
-    private ObjectResult result(ListedCandidate row, Path folder) {
-        if (row.problem().isPresent()) {
-            return Chain.failed(row.candidate(), row.problem().get());
-        }
-        return chain.run(row.candidate(), folder);
-    }
-
     /**
-     * The output of a result; where making it fails by a fault of the product, that of a failure.
+     * Takes a row through the chain and makes its output; where making it fails by a fault of the
+     * product, that of a failure.
+     *
+     * @param <T> what is made
+     * @param row the row; one with a problem is a failed object
+     * @param folder the folder to which the paths of its spectra are relative
+     * @param output what is made of the result
+     * @return the output
+     * @throws IOException if a file cannot be written
      */
-    private static <T> T made(Output<T> output, ObjectResult result) throws IOException {
+    public <T> T output(ListedCandidate row, Path folder, Output<T> output) throws IOException {
+        ObjectResult result =
+                row.problem().isPresent()
+                        ? Chain.failed(row.candidate(), row.problem().get())
+                        : chain.run(row.candidate(), folder);
         try {
             return output.make(result);
         } catch (RuntimeException e) {

@@ -22,7 +22,7 @@ class ColumnSpellingTest {
     private List<String> doubts(String column) throws IOException {
         Path list = folder.resolve("list.csv");
         Files.writeString(list, "name,spectrum," + column + "\na,a.csv,1\n");
-        return ColumnSpelling.doubts(new CandidateListReader().read(list));
+        return ColumnSpelling.doubts(new CandidateListReader().read(list).columns());
     }
 
     @ParameterizedTest

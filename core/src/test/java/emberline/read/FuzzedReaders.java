@@ -47,7 +47,7 @@ public final class FuzzedReaders {
                 require(!row.candidate().name().isBlank(), "an object without name");
                 row.problem().ifPresent(problem -> require(!problem.isBlank(), "no words"));
             }
-            ColumnSpelling.doubts(list);
+            ColumnSpelling.doubts(list.columns());
         } catch (UnreadableSpectrumException | UnreadableListException e) {
             requireMessage(e.getMessage());
         }

@@ -67,15 +67,17 @@ class RealSpectraTest {
 
     /** The row of each original in the manifest beside the spectra. */
     private static Map<String, Map<String, String>> manifest() throws IOException {
-        ListTable table = ListTableReader.read(FileContent.load(SPECTRA.resolve("manifest.csv")));
-        int original = table.columns().indexOf("original_file");
         Map<String, Map<String, String>> rows = new HashMap<>();
-        for (List<String> cells : table.rows()) {
-            Map<String, String> row = new HashMap<>();
-            for (int i = 0; i < cells.size(); i++) {
-                row.put(table.columns().get(i), cells.get(i));
+        try (TableRows table = ListTableReader.open(SPECTRA.resolve("manifest.csv"))) {
+            int original = table.columns().indexOf("original_file");
+            for (var next = table.next(); next.isPresent(); next = table.next()) {
+                List<String> cells = next.get();
+                Map<String, String> row = new HashMap<>();
+                for (int i = 0; i < cells.size(); i++) {
+                    row.put(table.columns().get(i), cells.get(i));
+                }
+                rows.put(cells.get(original), row);
             }
-            rows.put(cells.get(original), row);
         }
         return rows;
     }

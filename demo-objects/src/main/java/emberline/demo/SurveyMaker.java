@@ -45,6 +45,25 @@ final class SurveyMaker {
         return files;
     }
 
+    /**
+     * Observes all objects, without writing the spectra down.
+     *
+     * @return what was observed by how, in the order of the survey
+     */
+    Map<Exposure, ObservedSpectrum> observed() {
+        Map<Exposure, ObservedSpectrum> observed = new LinkedHashMap<>();
+        List<Exposure> exposures = Exposure.all();
+        for (SurveyObject object : SurveyObject.all()) {
+            double[] flux = calibrated(object);
+            for (Exposure exposure : exposures) {
+                if (exposure.object().equals(object.name())) {
+                    observed.put(exposure, observer.observe(flux, exposure));
+                }
+            }
+        }
+        return observed;
+    }
+
     private byte[] bytes(double[] flux, Exposure exposure) throws IOException {
         ObservedSpectrum spectrum = observer.observe(flux, exposure);
         byte[] plain = exposure.format().file().bytes(spectrum, exposure);

@@ -235,10 +235,10 @@ public final class ObjectJson {
                 "high_micron",
                 JsonText.number(Digits.fixed(spectrum.wavelengthMicron(spectrum.size() - 1), 5)));
         map.put("pixels", spectrum.size());
-        Optional<BandSignal> signal = BandSignal.best(spectrum);
+        Optional<BandSignal> signal = BandSignal.best(result.quality().bands());
         map.put("snr", number(signal.map(s -> Digits.signal(s.medianSignalToNoise()))));
         map.put("snr_band", signal.map(s -> word(s.range())).orElse(""));
-        map.put("quality", quality(Quality.of(result.prepared())));
+        map.put("quality", quality(result.quality()));
         map.put(
                 "resolution",
                 JsonText.number(Digits.significant(result.prepared().resolvingPower().value())));

@@ -7,7 +7,6 @@ import emberline.place.pair.PairVerdict;
 import emberline.place.photometric.PhotometricType;
 import emberline.place.reddening.ReddeningFit;
 import emberline.prepare.BandSignal;
-import emberline.prepare.Quality;
 import emberline.reports.attach.ResultColumn.Content;
 import emberline.spectrum.Finding;
 import emberline.survey.ObjectResult;
@@ -314,10 +313,7 @@ public final class ResultColumns {
                                 "median signal-to-noise per pixel in the band that is covered best",
                                 r ->
                                         r.leading()
-                                                .flatMap(
-                                                        s ->
-                                                                BandSignal.best(
-                                                                        s.prepared().spectrum()))
+                                                .flatMap(s -> BandSignal.best(s.quality().bands()))
                                                 .map(s -> Digits.signal(s.medianSignalToNoise()))
                                                 .orElse(""))
                         .withUcd("stat.snr"));
@@ -325,10 +321,7 @@ public final class ResultColumns {
                 text(
                                 "quality",
                                 "grade of the best spectrum: good, usable, poor or unusable",
-                                r ->
-                                        r.leading()
-                                                .map(s -> Quality.of(s.prepared()).grade().word())
-                                                .orElse(""))
+                                r -> r.leading().map(s -> s.quality().grade().word()).orElse(""))
                         .withUcd("meta.code.qual"));
         columns.add(
                 number(

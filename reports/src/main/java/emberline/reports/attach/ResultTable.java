@@ -65,6 +65,21 @@ public final class ResultTable implements Closeable {
     }
 
     /**
+     * Writes a row whose cells are known.
+     *
+     * @param cells the texts of all columns in their order
+     * @throws IOException if it cannot be written
+     * @throws IllegalArgumentException if there are not as many cells as columns
+     */
+    public void writeRow(List<String> cells) throws IOException {
+        if (cells.size() != columns.size()) {
+            throw new IllegalArgumentException(
+                    cells.size() + " cells: expected " + columns.size() + ", one a column");
+        }
+        writeCells(cells);
+    }
+
+    /**
      * Gives the table up: what was written is deleted when it is closed and the former file stays.
      */
     public void abandon() {

@@ -1,10 +1,16 @@
 package emberline.reports.attach;
 
+import com.fasterxml.jackson.jr.ob.JSON;
 import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
-import emberline.survey.Status;
+import java.io.Closeable;
+import java.io.IOException;
+import java.io.Writer;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.ArrayList;
-import java.util.EnumMap;
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -13,71 +19,147 @@ import java.util.TreeMap;
 /**
  * The record of a run: program version, options, seed, checksums of the list and of all spectra,
  * and how many objects had which status. It holds no times and no number of threads, so that the
- * same input gives the same bytes. Fed object by object in the order of the list; not for use by
- * several threads at once.
+ * same input gives the same bytes. The inputs are written object by object in the order of the
+ * list; the file appears when it is closed. Not for use by several threads at once.
  */
-public final class RunJson {
+public final class RunJson implements Closeable {
 
-    private final String version;
-    private final Map<String, String> options;
-    private final long seed;
-    private final String listSha256;
-    private final Map<Status, Integer> counts = new EnumMap<>(Status.class);
-    private final List<Map<String, Object>> inputs = new ArrayList<>();
+    private static final String NO_INPUTS = "[ ]\n}\n";
+
+    private final AtomicFile file;
+    private final Writer writer;
+    private boolean empty = true;
+    private boolean failed;
+
+    private RunJson(AtomicFile file, Writer writer) {
+        this.file = file;
+        this.writer = writer;
+    }
 
     /**
-     * The record of a run of which no object is done.
+     * What holds for the whole run.
      *
      * @param version version of the program
      * @param options the options that bear on the results, as given
      * @param seed start of all random draws
      * @param listSha256 checksum of the candidate list, hexadecimal; empty where there is no list
+     * @param part which part of the list was run, such as {@code 3/10}; empty for all of it
      */
-    public RunJson(String version, Map<String, String> options, long seed, String listSha256) {
-        this.version = version;
-        this.options = new TreeMap<>(options);
-        this.seed = seed;
-        this.listSha256 = listSha256;
-    }
+    public record Facts(
+            String version,
+            Map<String, String> options,
+            long seed,
+            String listSha256,
+            String part) {
 
-    /**
-     * Adds an object.
-     *
-     * @param result its result
-     */
-    public void add(ObjectResult result) {
-        counts.merge(result.status(), 1, Integer::sum);
-        for (SpectrumResult spectrum : result.spectra()) {
-            Map<String, Object> input = new LinkedHashMap<>();
-            input.put("name", result.candidate().name());
-            input.put("path", spectrum.path());
-            input.put("sha256", spectrum.sha256());
-            inputs.add(input);
+        /** Copies the options in the order of their names. */
+        public Facts {
+            options = Collections.unmodifiableMap(new TreeMap<>(options));
         }
     }
 
     /**
-     * The record as JSON.
+     * Opens a record and writes all but the inputs.
      *
-     * @return one JSON object over several lines, with a line end
+     * @param target the file that will be the record; its folder exists
+     * @param facts what holds for the whole run
+     * @param objectsByStatus number of objects by the word of their status, all of them
+     * @return a record to which inputs can be added
+     * @throws IOException if the folder cannot be written to
      */
-    public String text() {
-        Map<String, Object> byStatus = new LinkedHashMap<>();
-        int total = 0;
-        for (Status status : Status.values()) {
-            int count = counts.getOrDefault(status, 0);
-            byStatus.put(status.word(), count);
-            total += count;
-        }
+    public static RunJson open(Path target, Facts facts, Map<String, Long> objectsByStatus)
+            throws IOException {
+        String text = head(facts, objectsByStatus);
+        AtomicFile file = AtomicFile.beside(target);
+        Writer writer = Files.newBufferedWriter(file.temporary(), StandardCharsets.UTF_8);
+        RunJson json = new RunJson(file, writer);
+        json.append(text.substring(0, text.length() - NO_INPUTS.length()) + "[");
+        return json;
+    }
+
+    private static String head(Facts facts, Map<String, Long> objectsByStatus) {
         Map<String, Object> map = new LinkedHashMap<>();
         map.put("program", "emberline");
-        map.put("version", version);
-        map.put("options", options);
-        map.put("seed", seed);
-        map.put("list_sha256", listSha256);
-        map.put("objects", total);
-        map.put("objects_by_status", byStatus);
-        map.put("inputs", inputs);
-        return JsonText.of(map);
+        map.put("version", facts.version());
+        map.put("options", facts.options());
+        map.put("seed", facts.seed());
+        map.put("list_sha256", facts.listSha256());
+        if (!facts.part().isEmpty()) {
+            map.put("part", facts.part());
+        }
+        map.put("objects", objectsByStatus.values().stream().mapToLong(n -> n).sum());
+        map.put("objects_by_status", objectsByStatus);
+        map.put("inputs", List.of());
+        String text = JsonText.of(map);
+        if (!text.endsWith(NO_INPUTS)) {
+            throw new IllegalStateException("the layout of JSON has changed: " + text);
+        }
+        return text;
+    }
+
+    /**
+     * The inputs of an object: name, path and checksum of each of its spectra.
+     *
+     * @param result its result
+     * @return one JSON object a spectrum, each on one line; nothing where none was read
+     * @throws IOException if a text cannot be written as JSON
+     */
+    public static List<String> inputs(ObjectResult result) throws IOException {
+        List<String> lines = new ArrayList<>();
+        for (SpectrumResult spectrum : result.spectra()) {
+            lines.add(
+                    "{\"name\": "
+                            + JSON.std.asString(result.candidate().name())
+                            + ", \"path\": "
+                            + JSON.std.asString(spectrum.path())
+                            + ", \"sha256\": "
+                            + JSON.std.asString(spectrum.sha256())
+                            + "}");
+        }
+        return lines;
+    }
+
+    /**
+     * Adds an input.
+     *
+     * @param line one of {@link #inputs}
+     * @throws IOException if it cannot be written
+     */
+    public void add(String line) throws IOException {
+        append((empty ? "\n    " : ",\n    ") + line);
+        empty = false;
+    }
+
+    /** Gives the record up: when it is closed the former one stays. */
+    public void abandon() {
+        failed = true;
+    }
+
+    @Override
+    public void close() throws IOException {
+        try (writer) {
+            if (!failed) {
+                append((empty ? " " : "\n  ") + "]\n}\n");
+            }
+        } catch (IOException e) {
+            failed = true;
+            throw e;
+        } finally {
+            if (failed) {
+                file.discard();
+            }
+        }
+        if (!failed) {
+            file.commit();
+        }
+    }
+
+    private void append(String text) throws IOException {
+        try {
+            writer.write(text);
+        } catch (IOException e) {
+            failed = true;
+            throw e;
+        }
     }
 }

@@ -22,6 +22,9 @@ import java.util.regex.Pattern;
  */
 public final class SafeFileNames {
 
+    /** Most rounds after which all stems differ. */
+    public static final int ROUNDS = 5;
+
     private static final int LONGEST = 100;
     private static final int SHORT_HASH = 8;
     private static final int FULL_HASH = 64;
@@ -60,6 +63,21 @@ public final class SafeFileNames {
             stemByName.putIfAbsent(names.get(i), stems.get(i));
         }
         return new SafeFileNames(List.copyOf(stems), stemByName);
+    }
+
+    /**
+     * The stem of a name in one round of making stems unique, for those who keep the names of a run
+     * elsewhere: round 0 for all, then the next round for those whose stems are still shared
+     * without regard to case, until none is or {@link #ROUNDS} are done.
+     *
+     * @param name a name
+     * @param before how many rows before it have the same name
+     * @param round number of the round, from 0, less than {@link #ROUNDS}
+     * @return file name without folder and ending
+     */
+    public static String stemInRound(String name, int before, int round) {
+        String unique = before == 0 ? name : name + '\0' + before;
+        return stem(unique, round == 0 ? 0 : SHORT_HASH << (round - 1));
     }
 
     /**

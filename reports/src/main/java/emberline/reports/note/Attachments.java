@@ -86,6 +86,19 @@ public final class Attachments implements Closeable {
     }
 
     /**
+     * Adds an object whose row was made before.
+     *
+     * @param cells the texts of all columns in their order
+     * @param status the word of its status
+     * @param methods what {@link MethodsUsed#text} gave for it alone
+     * @throws IOException if it cannot be written
+     */
+    public void add(List<String> cells, String status, String methods) throws IOException {
+        rows.add(cells);
+        used.add(status, methods);
+    }
+
+    /**
      * Writes the files.
      *
      * @throws IOException if one cannot be written

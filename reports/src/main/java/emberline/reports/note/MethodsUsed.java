@@ -17,6 +17,7 @@ import java.util.Map;
 import java.util.NavigableSet;
 import java.util.Optional;
 import java.util.TreeSet;
+import java.util.stream.Collectors;
 import java.util.stream.Stream;
 
 /**
@@ -70,6 +71,66 @@ public final class MethodsUsed {
                                                 judgement,
                                                 result.placement().flatMap(Placement::type))
                                                 .stream()));
+    }
+
+    /**
+     * What was added so far as a short text, to be added again later: each part with the keys of
+     * its papers, such as {@code GRAVITY=allers2013;PAIR=}.
+     *
+     * @return one line
+     */
+    public String text() {
+        return Stream.of(Part.values())
+                .filter(part -> sources.containsKey(part) || wasDone(part))
+                .map(
+                        part ->
+                                part
+                                        + (wasDone(part) ? "=" : "~")
+                                        + papers(part).stream()
+                                                .map(Source::key)
+                                                .collect(Collectors.joining(",")))
+                .collect(Collectors.joining(";"));
+    }
+
+    /**
+     * Adds an object of which only the text is known.
+     *
+     * @param status the word of its status
+     * @param text what {@link #text} gave for it alone
+     * @throws IllegalArgumentException if the text was made with other definitions
+     */
+    public void add(String status, String text) {
+        Stream.of(Status.values())
+                .filter(one -> one.word().equals(status))
+                .forEach(one -> statuses.merge(one, 1, Integer::sum));
+        for (String part : text.split(";", -1)) {
+            int mark = Math.max(part.indexOf('='), part.indexOf('~'));
+            if (mark < 0) {
+                continue;
+            }
+            Part name = Part.valueOf(part.substring(0, mark));
+            if (part.charAt(mark) == '=') {
+                objects.merge(name, 1, Integer::sum);
+            }
+            for (String key : part.substring(mark + 1).split(",", -1)) {
+                if (!key.isEmpty()) {
+                    of(name).add(paper(key));
+                }
+            }
+        }
+    }
+
+    private Source paper(String key) {
+        return Stream.concat(catalogue.source(key).stream(), Judge.sources().stream())
+                .filter(source -> source.key().equals(key))
+                .findFirst()
+                .orElseThrow(
+                        () ->
+                                new IllegalArgumentException(
+                                        "paper '"
+                                                + key
+                                                + "': expected a paper of the definitions; give"
+                                                + " the same --catalogue as before"));
     }
 
     private void add(Placement placement) {

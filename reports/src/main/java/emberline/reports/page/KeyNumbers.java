@@ -227,7 +227,7 @@ final class KeyNumbers {
             return;
         }
         Spectrum spectrum = leading.get().prepared().spectrum();
-        List<BandSignal> signals = BandSignal.of(spectrum);
+        List<BandSignal> signals = leading.get().quality().bands();
         boolean bands = signals.stream().anyMatch(s -> s.range() != BandSignal.Range.WHOLE);
         String signal =
                 signals.stream()
@@ -241,7 +241,7 @@ final class KeyNumbers {
                                                 + s.range().words().replace("the optical", "opt")
                                                 + ")")
                         .collect(Collectors.joining(", "));
-        Quality quality = Quality.of(leading.get().prepared());
+        Quality quality = leading.get().quality();
         entries.add(new Entry("Quality", quality.grade().word() + ": " + quality.reason()));
         entries.add(new Entry("S/N per pixel", signal.isEmpty() ? "not known" : signal));
         double resolvingPower = leading.get().prepared().resolvingPower().value();

@@ -9,11 +9,17 @@ import com.fasterxml.jackson.jr.ob.JSON;
 import emberline.reports.Samples;
 import emberline.survey.ObjectResult;
 import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
 
 class ObjectJsonTest {
+
+    @TempDir private Path folder;
 
     @Test
     void jsonIsReadBackWithTheNumbersOfTheTable() throws IOException {
@@ -73,14 +79,19 @@ class ObjectJsonTest {
 
     @Test
     void aRunCountsItsObjectsAndNamesItsInputs() throws IOException {
-        RunJson run = new RunJson("0.1.0", Map.of("medium", "vacuum"), 7, "ab12");
-        run.add(Samples.lDwarf());
-        run.add(Samples.failed("x", "gone"));
-        Map<String, Object> map = JSON.std.mapFrom(run.text());
+        Path file = folder.resolve("run.json");
+        Map<String, Long> counts = new LinkedHashMap<>();
+        counts.put("measured", 1L);
+        counts.put("failed", 1L);
+        RunJson.Facts facts = new RunJson.Facts("0.1.0", Map.of("medium", "air"), 7, "ab12", "");
+        try (RunJson run = RunJson.open(file, facts, counts)) {
+            for (String input : RunJson.inputs(Samples.lDwarf())) {
+                run.add(input);
+            }
+        }
+        Map<String, Object> map = JSON.std.mapFrom(Files.readString(file));
         assertEquals(2, map.get("objects"));
-        assertEquals(
-                Map.of("measured", 1, "partial", 0, "photometric", 0, "failed", 1),
-                map.get("objects_by_status"));
+        assertEquals(Map.of("measured", 1, "failed", 1), map.get("objects_by_status"));
         Map<?, ?> input = (Map<?, ?>) ((List<?>) map.get("inputs")).get(0);
         assertEquals(Samples.SHA256, input.get("sha256"));
     }
