@@ -113,16 +113,14 @@ final class SurveyRun {
      * @throws IOException if the list cannot be read or something not be written
      */
     @SuppressWarnings("try") // the lock is held, not used
-    Ending run(int threads, StopSignal stop, Start start)
-            throws IOException, InterruptedException {
+    Ending run(int threads, StopSignal stop, Start start) throws IOException, InterruptedException {
         try (RunLock lock = RunLock.of(out);
                 RunLedger ledger = RunLedger.open(out, identity)) {
             return kept(ledger, () -> run(ledger, threads, stop, start));
         }
     }
 
-    private Ending run(
-            RunLedger ledger, int threads, StopSignal stop, Start start)
+    private Ending run(RunLedger ledger, int threads, StopSignal stop, Start start)
             throws IOException, InterruptedException {
         ledger.takeList(this::giveRows);
         RunProgress before = ledger.progress();
@@ -191,9 +189,7 @@ final class SurveyRun {
     private boolean isUnchanged(PlannedRow row, PlannedEntry.Done done) throws IOException {
         return row.listed().problem().isEmpty()
                 && folder.holds(row.planned().stem(), done)
-                && key(
-                                row.listed().candidate().name(),
-                                inputs.of(row.listed().candidate()))
+                && key(row.listed().candidate().name(), inputs.of(row.listed().candidate()))
                         .equals(done.inputSha256());
     }
 

@@ -54,9 +54,7 @@ final class VerdictOptions {
         }
         List<String> met = new ArrayList<>();
         try (CandidateRows rows = source.open()) {
-            for (Optional<ListedCandidate> row = rows.next();
-                    row.isPresent();
-                    row = rows.next()) {
+            for (Optional<ListedCandidate> row = rows.next(); row.isPresent(); row = rows.next()) {
                 if (verdicts.entries().containsKey(row.get().candidate().name())) {
                     met.add(row.get().candidate().name());
                 }

@@ -96,8 +96,7 @@ public final class CandidateListReader {
         }
     }
 
-    private static CandidateList all(Path list, CandidateRows open)
-            throws UnreadableListException {
+    private static CandidateList all(Path list, CandidateRows open) throws UnreadableListException {
         List<ListedCandidate> rows = new ArrayList<>();
         try (open) {
             for (Optional<ListedCandidate> row = open.next(); row.isPresent(); row = open.next()) {
@@ -124,8 +123,7 @@ public final class CandidateListReader {
         }
     }
 
-    private static CandidateRows open(String name, TableRows table)
-            throws UnreadableListException {
+    private static CandidateRows open(String name, TableRows table) throws UnreadableListException {
         try {
             List<String> keys = table.columns().stream().map(CandidateListReader::key).toList();
             requireColumns(name, keys, table.columns());

@@ -26,8 +26,7 @@ public final class ColumnSpelling {
     public static List<String> doubts(List<String> columns) {
         List<String> doubts = new ArrayList<>();
         List<String> known = CandidateListReader.knownColumns();
-        List<String> unused =
-                known.stream().filter(name -> !columns.contains(name)).toList();
+        List<String> unused = known.stream().filter(name -> !columns.contains(name)).toList();
         for (String column : columns) {
             if (!known.contains(column)) {
                 meant(column, unused)

@@ -54,7 +54,8 @@ final class CsvRows implements TableRows {
     /** Opens a file, which is never held as a whole. */
     static CsvRows open(Path file) throws UnreadableSpectrumException, UnreadableListException {
         return FileContent.reading(
-                        file, () -> Optional.of(opened(FileContent.name(file), () -> unpacked(file))))
+                        file,
+                        () -> Optional.of(opened(FileContent.name(file), () -> unpacked(file))))
                 .orElseThrow()
                 .withColumns();
     }

@@ -146,7 +146,7 @@ public final class Chain {
         return run(
                 candidate,
                 addresses(candidate, folder, troubles),
-                address -> reader.read(folder, address),
+                path -> reader.read(folder, path),
                 troubles);
     }
 
@@ -173,11 +173,15 @@ public final class Chain {
      * @return the result, whatever happened
      */
     public ObjectResult run(Candidate candidate, Spectra spectra) {
-        return run(candidate, candidate.spectra(), spectra, new ArrayList<>());
+        List<Address> addresses = new ArrayList<>();
+        for (String path : candidate.spectra()) {
+            addresses.add(new Address(path, addresses.size()));
+        }
+        return run(candidate, addresses, spectra, new ArrayList<>());
     }
 
     private ObjectResult run(
-            Candidate candidate, List<String> addresses, Spectra spectra, List<String> troubles) {
+            Candidate candidate, List<Address> addresses, Spectra spectra, List<String> troubles) {
         try {
             return attempt(candidate, addresses, spectra, troubles);
         } catch (RuntimeException e) { // must not end a night's run
@@ -199,25 +203,20 @@ public final class Chain {
     }
 
     private ObjectResult attempt(
-            Candidate candidate, List<String> addresses, Spectra from, List<String> troubles) {
+            Candidate candidate, List<Address> addresses, Spectra from, List<String> troubles) {
         Map<String, Degraded> used = new LinkedHashMap<>();
         List<SpectrumResult> spectra = new ArrayList<>();
         List<Finding> twice = new ArrayList<>();
         if (candidate.spectra().isEmpty()) {
             return byColours(candidate);
         }
-        for (int place = 0; place < addresses.size(); place++) {
-            String path = addresses.get(place);
-            // cells of a list hold one statement a spectrum as listed; patterns share theirs
-            Candidate stating =
-                    addresses.size() == candidate.spectra().size()
-                            ? candidate.forSpectrum(place)
-                            : candidate;
+        for (Address address : addresses) {
+            String path = address.path();
             try {
                 Degraded degraded =
                         degrader.degrade(
                                 times.timed(Stage.READ, () -> from.at(path)),
-                                Statements.of(stating, defaults),
+                                Statements.of(candidate.forSpectrum(address.place()), defaults),
                                 degrading,
                                 ObjectSeed.of(candidate.name() + "; " + path, seed));
                 SpectrumResult result = measure(path, degraded.observation(), degraded.stated());
@@ -323,12 +322,22 @@ public final class Chain {
                         findings));
     }
 
+    /**
+     * Where a spectrum of an object is.
+     *
+     * @param path path as listed, or one of those that a listed pattern stands for
+     * @param place which of the listed ones it is, from 0
+     */
+    private record Address(String path, int place) {}
+
     /** The addresses of the spectra of an object, patterns expanded. */
-    private List<String> addresses(Candidate candidate, Path folder, List<String> troubles) {
-        List<String> addresses = new ArrayList<>();
-        for (String listed : candidate.spectra()) {
+    private List<Address> addresses(Candidate candidate, Path folder, List<String> troubles) {
+        List<Address> addresses = new ArrayList<>();
+        for (int place = 0; place < candidate.spectra().size(); place++) {
             try {
-                addresses.addAll(reader.expanded(folder, listed));
+                for (String path : reader.expanded(folder, candidate.spectra().get(place))) {
+                    addresses.add(new Address(path, place));
+                }
             } catch (UnreadableSpectrumException e) {
                 troubles.add(e.getMessage());
             }

@@ -4,8 +4,8 @@ import emberline.measure.Measurements;
 import emberline.measure.line.LineReport;
 import emberline.place.TypeEstimate;
 import emberline.prepare.PreparedSpectrum;
-import java.util.Optional;
 import emberline.prepare.Quality;
+import java.util.Optional;
 
 /**
  * One spectrum of an object after reading, preparing and measuring.

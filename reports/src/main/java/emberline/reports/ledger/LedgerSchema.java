@@ -9,11 +9,11 @@ import java.util.stream.Collectors;
  * The tables of a ledger. Other tools may read them while a run goes on; only the program writes.
  *
  * <p>Table {@code run}, one row a fact: {@code key}, {@code value} (texts). Keys: {@code schema}
- * (of this format, {@value #VERSION}), {@code version}, {@code options} (JSON), {@code recorded} (JSON), {@code seed},
- * {@code list}, {@code list_sha256}, {@code list_columns} (JSON), {@code part}, {@code settings}
- * (JSON), {@code state} ({@code running}, {@code complete}, {@code stopped}), {@code host}, {@code
- * pid}, {@code started_ms}, {@code updated_ms} (milliseconds since 1970, UTC) and {@code
- * done_this_time}.
+ * (of this format, {@value #VERSION}), {@code version}, {@code options} (JSON), {@code recorded}
+ * (JSON), {@code seed}, {@code list}, {@code list_sha256}, {@code list_columns} (JSON), {@code
+ * part}, {@code settings} (JSON), {@code state} ({@code running}, {@code complete}, {@code
+ * stopped}), {@code host}, {@code pid}, {@code started_ms}, {@code updated_ms} (milliseconds since
+ * 1970, UTC) and {@code done_this_time}.
  *
  * <p>Table {@code object}, one row an object of the run, done or not:
  *

@@ -119,7 +119,7 @@ public final class FindingSentence {
 
     private static Optional<String> signal(ObjectResult result) {
         return result.leading()
-                .flatMap(s -> BandSignal.best(s.prepared().spectrum()))
+                .flatMap(s -> BandSignal.best(s.quality().bands()))
                 .map(
                         s ->
                                 String.format(
