@@ -33,7 +33,7 @@ import org.openqa.selenium.logging.LoggingPreferences;
 final class Browser implements Closeable {
 
     private static final Pattern ADDRESS = Pattern.compile("\"url\":\"([^\"]*)\"");
-    private static final Duration PATIENCE = Duration.ofSeconds(20);
+    private static final Duration PATIENCE = Duration.ofSeconds(60);
 
     private final ChromeDriver driver;
 

@@ -4,6 +4,8 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
+import java.io.PrintWriter;
+import java.io.StringWriter;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -34,7 +36,14 @@ class ManualTest {
     void everyCommandHasAPageThatNamesAllItsOptions() throws IOException {
         CommandRun run = CommandRun.of("manual", "--out", folder);
         assertEquals(ExitCode.DONE, run.code(), run.err());
-        assertEquals(12, run.out().lines().count());
+        int commands =
+                Emberline.commandLine(
+                                new PrintWriter(new StringWriter()),
+                                new PrintWriter(new StringWriter()))
+                        .getSubcommands()
+                        .size();
+        assertTrue(commands > 9, "commands: " + commands);
+        assertEquals(1 + commands, run.out().lines().count(), run.out());
         String sort = Files.readString(folder.resolve("emberline-sort.1"));
         for (String word :
                 List.of(
@@ -57,7 +66,7 @@ class ManualTest {
         CommandRun.of("manual", "--out", folder);
         try (var pages = Files.list(folder)) {
             for (Path page : pages.toList()) {
-                String text = output("groff", "-man", "-Tascii", "-ww", "-P-c", page.toString());
+                String text = output("groff", "-man", "-Tascii", "-ww", "-P-cbou", page.toString());
                 assertTrue(text.contains("NAME"), text);
                 assertTrue(!text.contains("warning") && !text.contains("${"), text);
             }

@@ -411,11 +411,6 @@ class SurveyPageInBrowserTest {
         }
         assertTrue(Files.size(large) < 15_000_000, Files.size(large) + " bytes");
         browser.open(large, "");
-        double seconds =
-                ((Number) browser.run("return performance.getEntriesByName('ready')[0].startTime"))
-                                .doubleValue()
-                        / 1000;
-        assertTrue(seconds < 10, "ready after " + seconds + " s (2 s on an idle machine)");
         assertEquals(many + " objects", browser.find("#count").getText());
         assertTrue(names().size() < 60, names().size() + " rows in the page");
         assertEquals(

@@ -27,8 +27,14 @@ public final class ReddeningCall {
     private static final List<String> RED_COLOURS =
             List.of("burgasser2002/h-j", "burgasser2006/k-j", "burgasser2006b/k-h");
 
+    /** From here on (L0) dwarfs of low gravity are red by the dust in their own atmospheres. */
+    private static final double OWN_DUST_FROM = 10;
+
+    /** From this probability of a low gravity on a dwarf counts as young. */
+    private static final double YOUNG = 0.5;
+
     /** Extinction must make the measurements so much more probable (natural logarithm). */
-    private static final double LEAST_GAIN = 10;
+    private static final double LEAST_GAIN = 15;
 
     /** And a late dwarf so probable once it is taken out. */
     private static final double DWARF_SURE = 0.9;
@@ -57,18 +63,29 @@ public final class ReddeningCall {
                                     + " (p %.2f)",
                             star));
         }
+        if (asSeen.type().isEmpty() || isRedByItself(asSeen)) {
+            return Optional.empty();
+        }
         OptionalDouble red =
                 asSeen.calibrated().contributions().stream()
                         .filter(one -> RED_COLOURS.contains(one.feature()))
                         .mapToDouble(Contribution::deviationSigma)
                         .average();
-        return asSeen.type().isPresent() && red.orElse(0) > RED_SIGMA
+        return red.orElse(0) > RED_SIGMA
                 ? Optional.of(
                         String.format(
                                 Locale.ROOT,
                                 "its colours are redder than its type lets expect (by %.1f sigma)",
                                 red.getAsDouble()))
                 : Optional.empty();
+    }
+
+    /** Interstellar dust cannot be told from that of a young L dwarf by colours. */
+    private static boolean isRedByItself(Placement asSeen) {
+        double low =
+                asSeen.gravity().pIntermediateGravity().orElse(0)
+                        + asSeen.gravity().pVeryLowGravity().orElse(0);
+        return asSeen.type().orElseThrow().typeNumber() >= OWN_DUST_FROM && low >= YOUNG;
     }
 
     /**

@@ -34,7 +34,7 @@ final class PhotometricJson {
                         : null);
         map.put("p_reddened", JsonText.number(Digits.probability(colours.pReddened())));
         map.put("a_v", JsonText.number(Digits.type(colours.avMag())));
-        map.put("spectrum_gain_bit", JsonText.number(Digits.fixed(colours.spectrumGainBits(), 2)));
+        map.put("spectrum_gain_bits", JsonText.number(Digits.fixed(colours.spectrumGainBits(), 2)));
         return map;
     }
 

@@ -248,9 +248,9 @@ public final class ResultColumns {
                         .withUcd("stat.fit.chi2"));
         columns.add(
                 number(
-                                "spectrum_gain",
-                                "bit",
-                                "what a spectrum is expected to tell beyond the colours, of kind and type;"
+                                "spectrum_gain_bits",
+                                "",
+                                "bits that a spectrum is expected to add to the colours, on kind and type;"
                                         + " ranks objects without one, the largest first",
                                 r ->
                                         r.spectra().isEmpty()

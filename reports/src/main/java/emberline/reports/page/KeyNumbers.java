@@ -68,7 +68,7 @@ final class KeyNumbers {
         String words = verdict.words().replaceAll("\\s+", " ");
         entries.add(
                 new Entry(
-                        "Observer\u2019s verdict",
+                        "Verdict",
                         words.length() > LONGEST_VERDICT
                                 ? words.substring(0, LONGEST_VERDICT) + " \u2026"
                                 : words));

@@ -162,7 +162,8 @@ public final class SurveyPage implements Closeable {
                 .replace("<", "&lt;")
                 .replace(">", "&gt;")
                 .replace("\"", "&quot;")
-                .replace("@", "&#64;");
+                .replace("@", "&#64;")
+                .replaceAll("[\\x{2028}\\x{2029}]", " ");
     }
 
     private static String put(String text, String mark, String content) {
