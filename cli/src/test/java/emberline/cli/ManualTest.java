@@ -43,7 +43,8 @@ class ManualTest {
                         .getSubcommands()
                         .size();
         assertTrue(commands > 9, "commands: " + commands);
-        assertEquals(1 + commands, run.out().lines().count(), run.out());
+        // the command that writes the pages is hidden and has none; the program has one
+        assertEquals(commands, run.out().lines().count(), run.out());
         String sort = Files.readString(folder.resolve("emberline-sort.1"));
         for (String word :
                 List.of(

@@ -24,7 +24,10 @@ class ThirdPartyTest {
 
     /** Libraries of the tests and checks, which are not shipped. */
     private static final String TESTS_ONLY =
-            "(junit-|opentest4j|apiguardian|archunit|surefire|org\\.jacoco|plexus-|maven-).*";
+            "(junit-|opentest4j|apiguardian|archunit|surefire|org\\.jacoco|plexus-|maven-"
+                    + "|selenium-|opentelemetry-|guava-|failureaccess-|listenablefuture-|byte-buddy-"
+                    + "|error_prone_annotations-|j2objc-annotations-|jspecify-"
+                    + "|annotations-\\d).*";
 
     private static List<String[]> listed() throws IOException {
         try (Stream<String> lines = Files.lines(DIST.resolve("THIRD-PARTY.csv"))) {

@@ -88,11 +88,11 @@ class ReddeningCallTest {
 
     @Test
     void aLateDwarfBehindDustGetsItsTypeAndItsExtinction() throws Exception {
-        Candidate dusty = reddened(M9, 6);
+        Candidate dusty = reddened(M9, 8);
         ObjectResult result = chain(ReddeningMode.CALLED_FOR).run(dusty, folder);
         ReddeningFit fit = result.placement().flatMap(Placement::reddening).orElseThrow();
-        assertTrue(fit.lo95Mag() - 0.5 <= 6 && 6 <= fit.hi95Mag() + 0.5, fit.toString());
-        assertTrue(fit.logGain() > 10, fit.toString());
+        assertTrue(fit.lo95Mag() - 0.5 <= 8 && 8 <= fit.hi95Mag() + 0.5, fit.toString());
+        assertTrue(fit.logGain() > 15, fit.toString());
         assertEquals(9, type(result), 1.2);
         assertTrue(has(result, "reddening-fitted"), result.findings().toString());
         ObjectResult never = chain(ReddeningMode.NEVER).run(dusty, folder);

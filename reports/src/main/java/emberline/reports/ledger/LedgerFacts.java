@@ -10,6 +10,7 @@ import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.NavigableSet;
 import java.util.TreeSet;
 
 /** The facts of a run as the table {@code run} of a ledger holds them. */
@@ -68,7 +69,7 @@ final class LedgerFacts {
 
     /** Which settings differ and how, in words. */
     static String difference(Map<String, String> former, Map<String, String> now) {
-        TreeSet<String> names = new TreeSet<>(former.keySet());
+        NavigableSet<String> names = new TreeSet<>(former.keySet());
         names.addAll(now.keySet());
         List<String> words = new ArrayList<>();
         for (String name : names) {
