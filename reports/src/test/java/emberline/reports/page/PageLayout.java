@@ -19,14 +19,13 @@ final class PageLayout {
                 new Rectangle2D.Double(30, 24, paper.widthPoint() - 60, paper.heightPoint() - 54);
         List<Box> boxes = PdfText.boxes(pdf);
         assertTrue(boxes.size() > 500, "only " + boxes.size() + " signs");
+        List<Rectangle2D> places = boxes.stream().map(box -> shrunk(box.place())).toList();
         for (int i = 0; i < boxes.size(); i++) {
             Box box = boxes.get(i);
             assertTrue(page.contains(box.place()), box + " leaves the page");
-            Rectangle2D place = shrunk(box.place());
-            for (Box other : boxes.subList(0, i)) {
-                boolean overlap =
-                        box.page() == other.page() && place.intersects(shrunk(other.place()));
-                if (overlap) {
+            for (int j = 0; j < i; j++) {
+                Box other = boxes.get(j);
+                if (box.page() == other.page() && places.get(i).intersects(places.get(j))) {
                     fail(box + " overlaps " + other);
                 }
             }
