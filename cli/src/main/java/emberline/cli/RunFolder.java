@@ -17,15 +17,19 @@ import emberline.reports.survey.SurveyPage;
 import emberline.reports.survey.SurveyRow;
 import emberline.survey.ObjectResult;
 import emberline.survey.Status;
+import emberline.survey.SurveyOrder;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.Iterator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.concurrent.atomic.AtomicInteger;
 import java.util.stream.Stream;
 
 /**
@@ -132,11 +136,17 @@ final class RunFolder {
                         RunJson.open(folder.resolve("run.json"), facts(identity), counts(ledger))) {
             boolean whole = false;
             try {
+                int[] ranks = ranks(ledger);
+                AtomicInteger done = new AtomicInteger();
+                int rankColumn = place("rank");
                 ledger.forEachDone(
                         object -> {
-                            table.writeRow(object.cells());
-                            note.add(object.cells(), object.status(), object.methods());
-                            page.add(SurveyRow.parse(object.pageLine()));
+                            int rank = ranks[done.getAndIncrement()];
+                            List<String> cells = new ArrayList<>(object.cells());
+                            cells.set(rankColumn, Integer.toString(rank));
+                            table.writeRow(cells);
+                            note.add(cells, object.status(), object.methods());
+                            page.add(SurveyRow.parse(object.pageLine(), rank));
                             for (String input : object.inputs()) {
                                 run.add(input);
                             }
@@ -151,6 +161,25 @@ final class RunFolder {
                 }
             }
         }
+    }
+
+    private int place(String column) {
+        return columns.stream().map(ResultColumn::name).toList().indexOf(column);
+    }
+
+    /** The order of the survey by the scores of all its objects. */
+    private int[] ranks(RunLedger ledger) throws IOException {
+        List<OptionalDouble> scores = new ArrayList<>();
+        int score = place("score");
+        ledger.forEachDone(
+                object -> {
+                    String cell = object.cells().get(score);
+                    scores.add(
+                            cell.isEmpty()
+                                    ? OptionalDouble.empty()
+                                    : OptionalDouble.of(Double.parseDouble(cell)));
+                });
+        return SurveyOrder.ranks(scores);
     }
 
     private static Attachments.Run note(RunIdentity identity, String list) {

@@ -406,7 +406,8 @@ class SurveyPageInBrowserTest {
                 page.add(
                         SurveyRow.parse(
                                 rows.get(i % rows.size())
-                                        .replaceFirst("Tamarisk", "Object " + i + " ")));
+                                        .replaceFirst("Tamarisk", "Object " + i + " "),
+                                i + 1));
             }
         }
         assertTrue(Files.size(large) < 15_000_000, Files.size(large) + " bytes");

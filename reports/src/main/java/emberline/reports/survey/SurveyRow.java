@@ -150,11 +150,12 @@ public final class SurveyRow {
      * A row from its line.
      *
      * @param text what {@link #text} gave in a run of the same version
+     * @param rank its place when the survey is ordered by score, from 1
      * @return the row
      * @throws IOException if it is no such line
      */
-    public static SurveyRow parse(String text) throws IOException {
-        List<Object> cells = JSON.std.listFrom(text);
+    public static SurveyRow parse(String text, int rank) throws IOException {
+        List<Object> cells = new ArrayList<>(JSON.std.listFrom(text));
         int map = keys().indexOf("map");
         if (cells.size() != keys().size()) {
             throw new IOException(
@@ -170,8 +171,9 @@ public final class SurveyRow {
                         : new double[0];
         List<String> cautions =
                 ((List<?>) cells.get(cells.size() - 1)).stream().map(Object::toString).toList();
-        int end = text.length() - PageJson.of(cautions).length() - 2;
-        return new SurveyRow(text.substring(0, end), cautions, place);
+        cells.set(keys().indexOf("rank"), rank);
+        String head = PageJson.of(cells.subList(0, cells.size() - 1));
+        return new SurveyRow(head.substring(0, head.length() - 1), cautions, place);
     }
 
     /**
