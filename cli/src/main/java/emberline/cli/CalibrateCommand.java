@@ -4,6 +4,7 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurer;
 import emberline.place.calibrated.CalibrationFiles;
 import emberline.place.calibrated.Calibrator;
+import emberline.place.calibrated.FeatureNoise;
 import emberline.place.kind.KindTrainer;
 import emberline.place.kind.KindTrialTable;
 import emberline.place.reference.ReferenceTable;
@@ -86,12 +87,12 @@ final class CalibrateCommand implements Callable<Integer> {
         StringWriter text = new StringWriter();
         table.write(text, remarks("Values with one-sigma errors from the pixel noise; no pixels."));
         AtomicFile.write(out.resolve("reference.csv"), text.toString());
-        Calibrator.Outcome learned =
-                new Calibrator(asWritten(text.toString()), catalogue).calibrate();
+        ReferenceTable written = asWritten(text.toString());
+        Calibrator.Outcome learned = new Calibrator(written, catalogue).calibrate();
         Map<String, String> files =
                 CalibrationFiles.text(
                         learned.calibration(),
-                        learned.noise(),
+                        FeatureNoise.of(written),
                         remarks("Learned from reference.csv."));
         for (Map.Entry<String, String> file : files.entrySet()) {
             AtomicFile.write(out.resolve(file.getKey()), file.getValue());

@@ -1,16 +1,15 @@
 package emberline.cli;
 
+import emberline.reports.attach.AtomicFile;
 import emberline.reports.ledger.LedgerMerge;
 import emberline.reports.ledger.RunIdentity;
 import emberline.reports.ledger.RunLedger;
 import emberline.reports.ledger.RunProgress;
 import emberline.survey.Status;
 import java.io.IOException;
-import java.nio.file.AtomicMoveNotSupportedException;
 import java.nio.file.FileSystemException;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.nio.file.StandardCopyOption;
 import java.util.Iterator;
 import java.util.List;
 import java.util.Optional;
@@ -98,7 +97,7 @@ final class MergeCommand implements Callable<Integer> {
                 Path file = all.next();
                 String name = file.getFileName().toString();
                 if (!name.startsWith(".")) {
-                    take(file, to.resolve(name), to.resolve("." + name + ".part"));
+                    take(file, to.resolve(name));
                 }
             }
         }
@@ -108,29 +107,23 @@ final class MergeCommand implements Callable<Integer> {
     private void takeVerdicts(Path part) throws IOException {
         Path verdicts = part.resolve("verdicts.csv");
         if (Files.exists(verdicts)) {
-            take(verdicts, out.resolve("verdicts.csv"), out.resolve(".verdicts.csv.part"));
+            take(verdicts, out.resolve("verdicts.csv"));
         }
     }
 
-    private static void take(Path file, Path target, Path temporary) throws IOException {
-        Files.deleteIfExists(temporary);
+    /** Puts a file of a part in its place, by a link where the file system has them. */
+    private static void take(Path file, Path target) throws IOException {
+        AtomicFile taken = AtomicFile.beside(target);
         try {
+            Path temporary = taken.temporary();
             try {
                 Files.createLink(temporary, file);
             } catch (UnsupportedOperationException | FileSystemException e) {
                 Files.copy(file, temporary);
             }
-            try {
-                Files.move(
-                        temporary,
-                        target,
-                        StandardCopyOption.ATOMIC_MOVE,
-                        StandardCopyOption.REPLACE_EXISTING);
-            } catch (AtomicMoveNotSupportedException e) {
-                Files.move(temporary, target, StandardCopyOption.REPLACE_EXISTING);
-            }
+            taken.commit();
         } finally {
-            Files.deleteIfExists(temporary);
+            taken.discard();
         }
     }
 }

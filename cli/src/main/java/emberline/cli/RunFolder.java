@@ -4,6 +4,7 @@ import emberline.catalogue.FeatureCatalogue;
 import emberline.reports.attach.AtomicFile;
 import emberline.reports.attach.ObjectJson;
 import emberline.reports.attach.ResultColumn;
+import emberline.reports.attach.ResultColumns;
 import emberline.reports.attach.ResultTable;
 import emberline.reports.attach.RunJson;
 import emberline.reports.ledger.ObjectEntry;
@@ -28,7 +29,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.concurrent.atomic.AtomicInteger;
 import java.util.stream.Stream;
 
@@ -136,9 +136,13 @@ final class RunFolder {
                         RunJson.open(folder.resolve("run.json"), facts(identity), counts(ledger))) {
             boolean whole = false;
             try {
-                int[] ranks = ranks(ledger);
+                int[] ranks = SurveyOrder.ranks(ledger.scores());
                 AtomicInteger done = new AtomicInteger();
-                int rankColumn = place("rank");
+                int rankColumn =
+                        columns.stream()
+                                .map(ResultColumn::name)
+                                .toList()
+                                .indexOf(ResultColumns.RANK);
                 ledger.forEachDone(
                         object -> {
                             int rank = ranks[done.getAndIncrement()];
@@ -146,7 +150,7 @@ final class RunFolder {
                             cells.set(rankColumn, Integer.toString(rank));
                             table.writeRow(cells);
                             note.add(cells, object.status(), object.methods());
-                            page.add(SurveyRow.parse(object.pageLine(), rank));
+                            page.add(SurveyRow.parse(object.pageLine()).ranked(rank));
                             for (String input : object.inputs()) {
                                 run.add(input);
                             }
@@ -161,25 +165,6 @@ final class RunFolder {
                 }
             }
         }
-    }
-
-    private int place(String column) {
-        return columns.stream().map(ResultColumn::name).toList().indexOf(column);
-    }
-
-    /** The order of the survey by the scores of all its objects. */
-    private int[] ranks(RunLedger ledger) throws IOException {
-        List<OptionalDouble> scores = new ArrayList<>();
-        int score = place("score");
-        ledger.forEachDone(
-                object -> {
-                    String cell = object.cells().get(score);
-                    scores.add(
-                            cell.isEmpty()
-                                    ? OptionalDouble.empty()
-                                    : OptionalDouble.of(Double.parseDouble(cell)));
-                });
-        return SurveyOrder.ranks(scores);
     }
 
     private static Attachments.Run note(RunIdentity identity, String list) {

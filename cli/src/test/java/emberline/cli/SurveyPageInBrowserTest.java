@@ -405,9 +405,9 @@ class SurveyPageInBrowserTest {
             for (int i = 0; i < many; i++) {
                 page.add(
                         SurveyRow.parse(
-                                rows.get(i % rows.size())
-                                        .replaceFirst("Tamarisk", "Object " + i + " "),
-                                i + 1));
+                                        rows.get(i % rows.size())
+                                                .replaceFirst("Tamarisk", "Object " + i + " "))
+                                .ranked(i + 1));
             }
         }
         assertTrue(Files.size(large) < 15_000_000, Files.size(large) + " bytes");

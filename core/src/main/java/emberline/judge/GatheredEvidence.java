@@ -77,15 +77,7 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
                         .posterior()
                         .or(() -> placement.photometric().flatMap(PhotometricType::posterior));
         if (posterior.isPresent() && isOf(verdict, posterior.get())) {
-            Map<GravityClass, Double> before = new EnumMap<>(GravityClass.class);
-            double sum = 0;
-            for (GravityClass gravity : GravityClass.values()) {
-                sum += prior.density(type.typeNumber(), gravity);
-            }
-            for (GravityClass gravity : GravityClass.values()) {
-                before.put(gravity, prior.density(type.typeNumber(), gravity) / sum);
-            }
-            return new TypeAndGravity(posterior.get(), before);
+            return new TypeAndGravity(posterior.get(), prior.classShares(type.typeNumber()));
         }
         Map<GravityClass, Double> share = new EnumMap<>(GravityClass.class);
         Map<GravityClass, Double> flat = new EnumMap<>(GravityClass.class);

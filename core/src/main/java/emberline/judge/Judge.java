@@ -5,6 +5,7 @@ import emberline.judge.PropertyRelations.Quantity;
 import emberline.place.TypeEstimate;
 import emberline.spectrum.Finding;
 import emberline.spectrum.MagnitudeBand;
+import emberline.spectrum.RecentlyUsed;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;
@@ -21,6 +22,9 @@ public final class Judge {
     /** Fineness of the grids that only show how far models differ. */
     private static final double COARSE = 0.5;
 
+    /** So many stated ages are kept laid out: objects of one group share theirs. */
+    private static final int STATED_AGES = 16;
+
     private static final EvolutionGrid.Name MAIN = EvolutionGrid.Name.MERGED;
 
     private final Judging judging;
@@ -36,8 +40,8 @@ public final class Judge {
     private final SideQuestions sideQuestions = new SideQuestions(numbers, age, nextSteps);
     private final Map<EvolutionGrid.Name, EvolutionGrid> grids = EvolutionGrid.all();
     private final Map<EvolutionGrid.Name, NodeTable> openTables;
-    private final StatedAges<Map<EvolutionGrid.Name, NodeTable>> statedTables =
-            new StatedAges<>(this::tables);
+    private final RecentlyUsed<AgeStatement, Map<EvolutionGrid.Name, NodeTable>> statedTables =
+            new RecentlyUsed<>(STATED_AGES);
     private final int fineness;
 
     /**
@@ -152,7 +156,11 @@ public final class Judge {
     }
 
     private Map<EvolutionGrid.Name, NodeTable> tablesFor(Evidence evidence) {
-        return evidence.age().map(statedTables::of).orElse(openTables);
+        if (evidence.age().isEmpty()) {
+            return openTables;
+        }
+        AgeStatement stated = evidence.age().get();
+        return statedTables.get(stated).orElseGet(() -> statedTables.keep(stated, tables(stated)));
     }
 
     private List<GridComparison> comparisons(

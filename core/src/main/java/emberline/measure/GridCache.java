@@ -1,10 +1,9 @@
 package emberline.measure;
 
+import emberline.spectrum.RecentlyUsed;
 import emberline.spectrum.ResolvingPower;
 import emberline.spectrum.Spectrum;
 import java.util.Arrays;
-import java.util.LinkedHashMap;
-import java.util.Map;
 import java.util.function.Supplier;
 
 /**
@@ -15,31 +14,13 @@ final class GridCache {
 
     private static final int CAPACITY = 16;
 
-    private final Map<Key, Measurer.Plan> plans =
-            new LinkedHashMap<>(CAPACITY, 0.75f, true) {
-                private static final long serialVersionUID = 1L;
-
-                @Override
-                protected boolean removeEldestEntry(Map.Entry<Key, Measurer.Plan> eldest) {
-                    return size() > CAPACITY;
-                }
-            };
+    private final RecentlyUsed<Key, Measurer.Plan> plans = new RecentlyUsed<>(CAPACITY);
 
     /** What was prepared for the grid of a spectrum; prepared now if it was not yet. */
     Measurer.Plan of(
             Spectrum spectrum, ResolvingPower resolvingPower, Supplier<Measurer.Plan> prepare) {
         Key key = Key.of(spectrum, resolvingPower);
-        synchronized (plans) {
-            Measurer.Plan known = plans.get(key);
-            if (known != null) {
-                return known;
-            }
-        }
-        Measurer.Plan plan = prepare.get();
-        synchronized (plans) {
-            plans.put(key, plan);
-        }
-        return plan;
+        return plans.get(key).orElseGet(() -> plans.keep(key, prepare.get()));
     }
 
     /** Identity of a grid: wavelengths, good pixels, resolving power. */

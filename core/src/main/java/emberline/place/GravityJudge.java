@@ -3,7 +3,6 @@ package emberline.place;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurements;
 import emberline.place.calibrated.CalibratedType;
-import emberline.spectrum.SpectralType;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -15,12 +14,6 @@ import java.util.OptionalDouble;
  * the type found; elsewhere the scores stand alone.
  */
 final class GravityJudge {
-
-    /** Earliest type for which gravity is calibrated: M5. */
-    private static final double EARLIEST = 5;
-
-    /** Latest type for which gravity is calibrated: L7. */
-    private static final double LATEST = 17.5;
 
     /**
      * Least distance between field and very low gravity, in sigma of scatter and noise, at which
@@ -45,7 +38,7 @@ final class GravityJudge {
      */
     GravityVerdict judge(
             Measurements measurements, TypeEstimate type, CalibratedType calibrated, long seed) {
-        boolean inRange = type.typeNumber() >= EARLIEST && type.typeNumber() <= LATEST;
+        boolean inRange = GravityRange.contains(type.typeNumber());
         boolean telling = calibrated.gravitySeparationSigma() >= LEAST_SEPARATION;
         Optional<TypePosterior> posterior = calibrated.posterior();
         if (posterior.isPresent() && inRange && telling) {
@@ -57,9 +50,7 @@ final class GravityJudge {
                     "type "
                             + type.code()
                             + " lies outside "
-                            + new SpectralType(EARLIEST).code()
-                            + " to "
-                            + new SpectralType(Math.floor(LATEST)).code()
+                            + GravityRange.words()
                             + ", for which gravity is calibrated",
                     List.of());
         }

@@ -1,26 +1,18 @@
 package emberline.read;
 
+import emberline.spectrum.RecentlyUsed;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.attribute.FileTime;
-import java.util.LinkedHashMap;
-import java.util.Map;
+import java.util.Optional;
 
 /** Keeps the packed files that were read last, as long as they do not change on disk. */
 final class PackedFiles {
 
     private static final int CAPACITY = 16;
 
-    private final Map<Key, PackedSpectra> files =
-            new LinkedHashMap<>(CAPACITY, 0.75f, true) {
-                private static final long serialVersionUID = 1L;
-
-                @Override
-                protected boolean removeEldestEntry(Map.Entry<Key, PackedSpectra> eldest) {
-                    return size() > CAPACITY;
-                }
-            };
+    private final RecentlyUsed<Key, PackedSpectra> files = new RecentlyUsed<>(CAPACITY);
 
     /** A file as it was at some time. */
     private record Key(Path file, long size, FileTime changed) {}
@@ -28,12 +20,10 @@ final class PackedFiles {
     PackedSpectra of(Path file) throws UnreadableSpectrumException {
         Key key = FileContent.reading(file, () -> key(file));
         synchronized (files) {
-            PackedSpectra known = files.get(key);
-            if (known == null) {
-                known = new PackedSpectra(PackedFits.of(file));
-                files.put(key, known);
-            }
-            return known;
+            Optional<PackedSpectra> known = files.get(key);
+            return known.isPresent()
+                    ? known.get()
+                    : files.keep(key, new PackedSpectra(PackedFits.of(file)));
         }
     }
 

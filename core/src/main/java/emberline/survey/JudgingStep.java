@@ -26,7 +26,10 @@ final class JudgingStep {
 
     /** The object with its judgement, or as it was where there is nothing to judge. */
     ObjectResult judged(ObjectResult placed) {
-        Placement placement = placed.placement().orElseThrow();
+        if (placed.placement().isEmpty()) {
+            return placed;
+        }
+        Placement placement = placed.placement().get();
         if (placement.findings().stream().anyMatch(f -> f.code().equals(NO_BANDS))) {
             return placed;
         }

@@ -5,7 +5,6 @@ import emberline.measure.Measurement.Measured;
 import emberline.place.reference.ReferenceRow;
 import emberline.place.reference.ReferenceTable;
 import emberline.prepare.BandSignal;
-import emberline.prepare.PreparedSpectrum;
 import emberline.spectrum.Candidate;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -46,7 +45,7 @@ public final class ReferenceMaker {
                 features.put(one.feature().id(), value);
             }
         }
-        PreparedSpectrum prepared = result.leading().orElseThrow().prepared();
+        SpectrumResult leading = result.leading().orElseThrow();
         ReferenceRow row =
                 new ReferenceRow(
                         candidate.name(),
@@ -56,8 +55,8 @@ public final class ReferenceMaker {
                         candidate.text("known_kind").orElse(""),
                         candidate.text("tier").orElse(""),
                         candidate.text("dataset").orElse(""),
-                        prepared.resolvingPower().value(),
-                        BandSignal.best(prepared.spectrum())
+                        leading.prepared().resolvingPower().value(),
+                        BandSignal.best(leading.quality().bands())
                                 .map(best -> OptionalDouble.of(best.medianSignalToNoise()))
                                 .orElse(OptionalDouble.empty()),
                         features);

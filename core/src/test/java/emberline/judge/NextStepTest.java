@@ -141,6 +141,24 @@ class NextStepTest {
         assertTrue(step(fast, FollowUp.PARALLAX, Aim.NEARBY).orElseThrow().gainBits() > 0.01);
     }
 
+    /**
+     * Expected by Bayes from the shares in settings.csv: 0.15 pairs, criteria met by 0.5 and 0.08.
+     */
+    @Test
+    void theCriteriaOfABlendMoveTheAimPairs() {
+        Judge byPairs = new Judge(Judging.withDefaults().withAims(Aim.parse("pairs")));
+        Evidence unknown = Evidence.ofType(14, 0.5, Optional.empty());
+        Judgement open = byPairs.judge(unknown);
+        Judgement met = byPairs.judge(unknown.withBlendCriteria(1));
+        Judgement missed = byPairs.judge(unknown.withBlendCriteria(0));
+        assertEquals(0.15, open.priority().pByAim().get(Aim.PAIRS), 1e-9);
+        double yes = 0.15 * 0.5;
+        assertEquals(yes / (yes + 0.85 * 0.08), met.priority().pByAim().get(Aim.PAIRS), 1e-9);
+        assertEquals(yes / (yes + 0.85 * 0.92), missed.priority().pByAim().get(Aim.PAIRS), 1e-9);
+        assertTrue(met.priority().score() > open.priority().score());
+        assertTrue(step(met, FollowUp.IMAGING, Aim.PAIRS).orElseThrow().gainBits() > 0.1);
+    }
+
     @Test
     void aimsAreRead() {
         assertEquals(Map.of(Aim.YOUNG, 2.0, Aim.METAL_POOR, 1.0), Aim.parse("young=2, metal-poor"));

@@ -1,5 +1,6 @@
 package emberline.judge.plan;
 
+import emberline.place.GravityRange;
 import emberline.place.calibrated.Forecast;
 import java.util.List;
 
@@ -27,12 +28,6 @@ public record PlanQuestion(
                     3.0, 5.0, 7.0, 10.0, 15.0, 20.0, 30.0, 40.0, 60.0, 80.0, 120.0, 160.0, 240.0,
                     320.0);
 
-    /** Earliest type for which gravity is calibrated: M5. */
-    private static final double EARLIEST = 5;
-
-    /** Latest type for which gravity is calibrated: L7. */
-    private static final double LATEST = 17.5;
-
     /** Checks the numbers. */
     public PlanQuestion {
         signals = List.copyOf(signals);
@@ -43,10 +38,11 @@ public record PlanQuestion(
         if (draws < 20) {
             throw new IllegalArgumentException(draws + " draws: expected at least 20");
         }
-        double type = setting.typeNumber();
-        if (aim == PlanAim.GRAVITY && (type < EARLIEST || type > LATEST)) {
+        if (aim == PlanAim.GRAVITY && !GravityRange.contains(setting.typeNumber())) {
             throw new IllegalArgumentException(
-                    "gravity is judged from M5 to L7; for other types plan another aim");
+                    "gravity is judged from "
+                            + GravityRange.words()
+                            + "; for other types plan another aim");
         }
     }
 }

@@ -10,12 +10,10 @@ import emberline.place.calibrated.Forecast;
 import emberline.place.calibrated.TypePrior;
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.EnumMap;
 import java.util.List;
-import java.util.Map;
-import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.function.Function;
+import java.util.function.ToDoubleFunction;
+import org.apache.commons.math3.stat.descriptive.rank.Median;
 
 /**
  * Plans spectra: for each signal-to-noise it draws what would be measured, places it as any
@@ -92,10 +90,8 @@ public final class SignalPlanner {
                 median(told, Told::typeSigma));
     }
 
-    private static double median(List<Told> told, Function<Told, Double> of) {
-        double[] sorted = told.stream().mapToDouble(of::apply).sorted().toArray();
-        int middle = sorted.length / 2;
-        return sorted.length % 2 == 1 ? sorted[middle] : (sorted[middle - 1] + sorted[middle]) / 2;
+    private static double median(List<Told> told, ToDoubleFunction<Told> of) {
+        return new Median().evaluate(told.stream().mapToDouble(of).toArray());
     }
 
     private Told told(PlanQuestion question, TypePosterior posterior) {
@@ -108,26 +104,12 @@ public final class SignalPlanner {
                             .anyMatch(g -> posterior.probability(g) >= question.sure());
             return new Told(posterior.probability(truth), wrong, typeSigma, "");
         }
-        Judgement judgement = judge.judge(Evidence.of(posterior, classPrior(posterior)));
+        Judgement judgement =
+                judge.judge(
+                        Evidence.of(
+                                posterior, prior.classShares(posterior.estimate().typeNumber())));
         return new Told(
-                certainty(question.aim(), judgement),
-                false,
-                typeSigma,
-                Optional.of(judgement.nextStepWords()).filter(w -> !w.isBlank()).orElse(""));
-    }
-
-    /** The classes in the prior of the posterior, at its most probable type. */
-    private Map<GravityClass, Double> classPrior(TypePosterior posterior) {
-        double type = posterior.estimate().typeNumber();
-        Map<GravityClass, Double> share = new EnumMap<>(GravityClass.class);
-        double sum = 0;
-        for (GravityClass gravity : GravityClass.values()) {
-            sum += prior.density(type, gravity);
-        }
-        for (GravityClass gravity : GravityClass.values()) {
-            share.put(gravity, prior.density(type, gravity) / sum);
-        }
-        return share;
+                certainty(question.aim(), judgement), false, typeSigma, judgement.nextStepWords());
     }
 
     private static double certainty(PlanAim aim, Judgement judgement) {

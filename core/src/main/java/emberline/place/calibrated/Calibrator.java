@@ -11,7 +11,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import java.util.TreeSet;
 import java.util.stream.Collectors;
 
 /**
@@ -33,7 +32,6 @@ public final class Calibrator {
     private final TrainingSet training;
     private final List<String> features;
     private final TypePrior prior;
-    private final FeatureNoise noise;
 
     /**
      * A calibrator.
@@ -43,10 +41,8 @@ public final class Calibrator {
      */
     public Calibrator(ReferenceTable table, FeatureCatalogue catalogue) {
         this.training = TrainingSet.of(table, RelationAnchors.of(catalogue));
-        Set<String> placing = new TreeSet<>(LocusFeatures.standard());
-        this.features = table.features().stream().filter(placing::contains).toList();
+        this.features = LocusFeatures.among(table);
         this.prior = TypePriors.FLAT.load();
-        this.noise = FeatureNoise.of(table, features);
     }
 
     /**
@@ -61,16 +57,12 @@ public final class Calibrator {
      * What was learned, and how well it does.
      *
      * @param calibration from all objects
-     * @param noise how noisy features are
      * @param unseen all dwarfs of known type, each placed without having been learned from
      * @param withoutGroup by the name of a group the calibration that has not seen its spectra;
      *     groups from which nothing was learned are absent
      */
     public record Outcome(
-            Calibration calibration,
-            FeatureNoise noise,
-            List<Unseen> unseen,
-            Map<String, Calibration> withoutGroup) {
+            Calibration calibration, List<Unseen> unseen, Map<String, Calibration> withoutGroup) {
 
         /** Copies the collections. */
         public Outcome {
@@ -95,7 +87,7 @@ public final class Calibrator {
             for (TrainingSet.Dwarf dwarf : training.dwarfs()) {
                 if (fold.get(dwarf.row().group()) == f) {
                     Optional<TypePosterior> posterior =
-                            witness.withoutLabelError(Sample.of(learned, dwarf.row()));
+                            witness.withoutLabelError(Sample.of(learned, dwarf.row().features()));
                     posterior.ifPresent(
                             found ->
                                     labelled.add(
@@ -112,12 +104,12 @@ public final class Calibrator {
                     new Unseen(
                             dwarf.row(),
                             new CalibratedWitness(learned, prior)
-                                    .witness(Sample.of(learned, dwarf.row()))));
+                                    .witness(Sample.of(learned, dwarf.row().features()))));
         }
         withoutFold.replaceAll((number, learned) -> learned.with(error));
         Map<String, Calibration> withoutGroup = new LinkedHashMap<>();
         fold.forEach((group, number) -> withoutGroup.put(group, withoutFold.get(number)));
-        return new Outcome(learn(training).with(error), noise, unseen, withoutGroup);
+        return new Outcome(learn(training).with(error), unseen, withoutGroup);
     }
 
     private Calibration learn(TrainingSet from) {

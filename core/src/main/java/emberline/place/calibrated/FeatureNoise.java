@@ -13,6 +13,7 @@ import java.util.Map;
 import java.util.OptionalDouble;
 import java.util.TreeMap;
 import java.util.stream.IntStream;
+import org.apache.commons.math3.stat.descriptive.rank.Median;
 
 /**
  * How noisy a feature is at a signal-to-noise of one: the median, over spectra of known type, of
@@ -95,10 +96,11 @@ public final class FeatureNoise {
      * Learns from dwarfs of known type.
      *
      * @param table what was measured on them
-     * @param features ids of the features
-     * @return the table; a bin without three spectra is left out
+     * @return the noise of the features by which objects are placed; a bin without three spectra is
+     *     left out
      */
-    public static FeatureNoise of(ReferenceTable table, List<String> features) {
+    public static FeatureNoise of(ReferenceTable table) {
+        List<String> features = LocusFeatures.among(table);
         Map<Resolution, Map<String, double[]>> noise = empty();
         for (Resolution resolution : Resolution.values()) {
             for (String feature : features) {
@@ -138,14 +140,9 @@ public final class FeatureNoise {
                         .ifPresent(sigma -> scaled.add(sigma * row.signalToNoise().getAsDouble()));
             }
         }
-        if (scaled.size() < FEWEST) {
-            return Double.NaN;
-        }
-        scaled.sort(null);
-        int middle = scaled.size() / 2;
-        return scaled.size() % 2 == 1
-                ? scaled.get(middle)
-                : (scaled.get(middle - 1) + scaled.get(middle)) / 2;
+        return scaled.size() < FEWEST
+                ? Double.NaN
+                : new Median().evaluate(scaled.stream().mapToDouble(s -> s).toArray());
     }
 
     private static int bin(double typeNumber) {

@@ -2,7 +2,6 @@ package emberline.place.calibrated;
 
 import emberline.measure.Measurement.Measured;
 import emberline.place.GravityClass;
-import emberline.place.reference.ReferenceRow;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -100,20 +99,7 @@ public final class Forecast {
                             + errors.get(f) * normal.sample();
             values.put(locus.feature(), new Measured(value, errors.get(f)));
         }
-        return witness.witness(
-                Sample.of(
-                        calibration,
-                        new ReferenceRow(
-                                "forecast",
-                                "forecast",
-                                OptionalDouble.of(setting.typeNumber()),
-                                setting.gravity().label(),
-                                "dwarf",
-                                "",
-                                "",
-                                setting.resolvingPower(),
-                                OptionalDouble.of(signalToNoise),
-                                values)));
+        return witness.witness(Sample.of(calibration, values));
     }
 
     /** Normal deviates with the correlation of the residuals of some loci. */

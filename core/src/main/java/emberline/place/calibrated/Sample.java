@@ -2,9 +2,9 @@ package emberline.place.calibrated;
 
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurements;
-import emberline.place.reference.ReferenceRow;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /** The values of one object that have a locus, with the covariance of their noise. */
@@ -34,16 +34,17 @@ final class Sample {
     }
 
     /**
-     * A row of the reference table, whose noise is known feature by feature only.
+     * Values whose noise is known feature by feature only, as in the reference table.
      *
      * @param calibration the loci
-     * @param row the row
+     * @param measured values with errors by feature id
      * @return the sample, perhaps empty
      */
-    static Sample of(Calibration calibration, ReferenceRow row) {
+    static Sample of(Calibration calibration, Map<String, Measured> measured) {
         Sample sample = new Sample();
         for (int i = 0; i < calibration.loci().size(); i++) {
-            sample.add(calibration, i, row.feature(calibration.loci().get(i).feature()));
+            String feature = calibration.loci().get(i).feature();
+            sample.add(calibration, i, Optional.ofNullable(measured.get(feature)));
         }
         sample.noise = new double[sample.size()][sample.size()];
         for (int f = 0; f < sample.size(); f++) {

@@ -6,11 +6,9 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import emberline.measure.Measurement.Measured;
 import emberline.place.GravityClass;
 import emberline.place.TypeEstimate;
-import emberline.place.reference.ReferenceRow;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
 
 /** Objects made of the product's own loci, whose type and gravity are therefore known. */
@@ -34,20 +32,7 @@ class CalibratedWitnessTest {
     }
 
     private static CalibratedType place(Map<String, Measured> values) {
-        return WITNESS.witness(
-                Sample.of(
-                        CALIBRATION,
-                        new ReferenceRow(
-                                "x",
-                                "x",
-                                OptionalDouble.empty(),
-                                "",
-                                "",
-                                "",
-                                "",
-                                120,
-                                OptionalDouble.empty(),
-                                values)));
+        return WITNESS.witness(Sample.of(CALIBRATION, values));
     }
 
     private static TypeEstimate type(Map<String, Measured> values) {
@@ -123,20 +108,7 @@ class CalibratedWitnessTest {
     }
 
     private static double typeBy(CalibratedWitness witness, Map<String, Measured> values) {
-        return witness.witness(
-                        Sample.of(
-                                CALIBRATION,
-                                new ReferenceRow(
-                                        "x",
-                                        "x",
-                                        OptionalDouble.empty(),
-                                        "",
-                                        "",
-                                        "",
-                                        "",
-                                        120,
-                                        OptionalDouble.empty(),
-                                        values)))
+        return witness.witness(Sample.of(CALIBRATION, values))
                 .posterior()
                 .orElseThrow()
                 .estimate()

@@ -3,12 +3,10 @@ package emberline.place.calibrated;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import emberline.measure.Measurement.Measured;
-import emberline.place.reference.ReferenceRow;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.OptionalDouble;
 import org.apache.commons.math3.distribution.MultivariateNormalDistribution;
 import org.junit.jupiter.api.Test;
 
@@ -46,19 +44,7 @@ class KnotLikelihoodTest {
         for (int f = 0; f < VALUE.length; f++) {
             values.put("invented/" + f, new Measured(VALUE[f], NOISE[f]));
         }
-        return Sample.of(
-                calibration(),
-                new ReferenceRow(
-                        "x",
-                        "x",
-                        OptionalDouble.empty(),
-                        "",
-                        "",
-                        "",
-                        "",
-                        120,
-                        OptionalDouble.empty(),
-                        values));
+        return Sample.of(calibration(), values);
     }
 
     private static double expected(double type, double lowGravity) {

@@ -195,15 +195,6 @@ final class JudgementColumns {
                                 j -> Optional.of(Digits.fixed(j.priority().score(), 4)))
                         .withUcd("stat.value"));
         columns.add(
-                new ResultColumn(
-                                "rank",
-                                "",
-                                "place of the object when the survey is ordered by score, from 1;"
-                                        + " empty outside a survey",
-                                Content.NUMBER,
-                                result -> "")
-                        .withUcd("stat.value"));
-        columns.add(
                 text("priority", "what the score rests on", j -> j.priority().reason())
                         .withUcd("meta.note"));
     }

@@ -27,6 +27,9 @@ public final class ResultColumns {
 
     private ResultColumns() {}
 
+    /** The column that is filled once all objects of a survey are known. */
+    public static final String RANK = "rank";
+
     /**
      * The columns that every results table has.
      *
@@ -112,6 +115,14 @@ public final class ResultColumns {
                                                 .collect(Collectors.joining(" ")))
                         .withUcd("meta.code"));
         columns.addAll(JudgementColumns.all());
+        columns.add(
+                number(
+                                RANK,
+                                "",
+                                "place of the object when the survey is ordered by score, from 1;"
+                                        + " in the tables and on the page of a survey only",
+                                result -> "")
+                        .withUcd("stat.value"));
         columns.addAll(VerdictColumns.all(columns));
         return List.copyOf(columns);
     }

@@ -5,9 +5,6 @@ import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
 import java.io.Closeable;
 import java.io.IOException;
-import java.io.Writer;
-import java.nio.charset.StandardCharsets;
-import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Collections;
@@ -26,14 +23,11 @@ public final class RunJson implements Closeable {
 
     private static final String NO_INPUTS = "[ ]\n}\n";
 
-    private final AtomicFile file;
-    private final Writer writer;
+    private final AtomicText written;
     private boolean empty = true;
-    private boolean failed;
 
-    private RunJson(AtomicFile file, Writer writer) {
-        this.file = file;
-        this.writer = writer;
+    private RunJson(AtomicText written) {
+        this.written = written;
     }
 
     /**
@@ -70,10 +64,8 @@ public final class RunJson implements Closeable {
     public static RunJson open(Path target, Facts facts, Map<String, Long> objectsByStatus)
             throws IOException {
         String text = head(facts, objectsByStatus);
-        AtomicFile file = AtomicFile.beside(target);
-        Writer writer = Files.newBufferedWriter(file.temporary(), StandardCharsets.UTF_8);
-        RunJson json = new RunJson(file, writer);
-        json.append(text.substring(0, text.length() - NO_INPUTS.length()) + "[");
+        RunJson json = new RunJson(AtomicText.open(target));
+        json.written.append(text.substring(0, text.length() - NO_INPUTS.length()) + "[");
         return json;
     }
 
@@ -126,40 +118,21 @@ public final class RunJson implements Closeable {
      * @throws IOException if it cannot be written
      */
     public void add(String line) throws IOException {
-        append((empty ? "\n    " : ",\n    ") + line);
+        written.append((empty ? "\n    " : ",\n    ") + line);
         empty = false;
     }
 
     /** Gives the record up: when it is closed the former one stays. */
     public void abandon() {
-        failed = true;
+        written.abandon();
     }
 
     @Override
     public void close() throws IOException {
-        try (writer) {
-            if (!failed) {
-                append((empty ? " " : "\n  ") + "]\n}\n");
+        try (written) {
+            if (!written.isGivenUp()) {
+                written.append((empty ? " " : "\n  ") + "]\n}\n");
             }
-        } catch (IOException e) {
-            failed = true;
-            throw e;
-        } finally {
-            if (failed) {
-                file.discard();
-            }
-        }
-        if (!failed) {
-            file.commit();
-        }
-    }
-
-    private void append(String text) throws IOException {
-        try {
-            writer.write(text);
-        } catch (IOException e) {
-            failed = true;
-            throw e;
         }
     }
 }

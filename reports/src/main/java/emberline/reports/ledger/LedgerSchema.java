@@ -24,7 +24,8 @@ import java.util.stream.Collectors;
  *   <li>{@code input_sha256}: checksum of its row and its spectra; NULL until it is done
  *   <li>{@code done_ms}, {@code seconds}: when it was done, and how long it took on its thread
  *   <li>every standard column of the results table under its own name: numbers as REAL, texts as
- *       TEXT, NULL where there is none
+ *       TEXT, NULL where there is none; {@code rank} is NULL too, since it follows from the scores
+ *       of all objects once they are done
  *   <li>{@code result_cells}: the row of the results table, a JSON array of texts with the digits
  *       as printed and the columns of the list at the end
  *   <li>{@code page_line}, {@code methods}, {@code inputs}, {@code json_bytes}, {@code pdf_bytes}:

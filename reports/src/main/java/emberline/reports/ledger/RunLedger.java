@@ -15,6 +15,7 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * The ledger of a run that is being written: which objects there are, and a record of each that is
@@ -416,6 +417,29 @@ public final class RunLedger implements Closeable {
                                 rows.getString(4),
                                 inputs.isEmpty() ? List.of() : List.of(inputs.split("\n", -1))));
             }
+        } catch (SQLException e) {
+            throw database.trouble(e);
+        }
+    }
+
+    /**
+     * The scores of all objects that are done, by which the survey is ordered.
+     *
+     * @return one an object in the order of the list; empty where it could not be judged
+     * @throws LedgerException if the ledger cannot be read
+     */
+    public List<OptionalDouble> scores() throws LedgerException {
+        List<OptionalDouble> scores = new ArrayList<>();
+        try (PreparedStatement statement =
+                        database.prepare(
+                                "SELECT score FROM object WHERE input_sha256 IS NOT NULL"
+                                        + " ORDER BY list_row");
+                ResultSet rows = statement.executeQuery()) {
+            while (rows.next()) {
+                double score = rows.getDouble(1);
+                scores.add(rows.wasNull() ? OptionalDouble.empty() : OptionalDouble.of(score));
+            }
+            return scores;
         } catch (SQLException e) {
             throw database.trouble(e);
         }

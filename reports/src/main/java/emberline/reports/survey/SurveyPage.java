@@ -1,15 +1,13 @@
 package emberline.reports.survey;
 
-import emberline.reports.attach.AtomicFile;
+import emberline.reports.attach.AtomicText;
 import emberline.survey.ObjectResult;
 import emberline.survey.verdict.VerdictCall;
 import java.io.Closeable;
 import java.io.FileNotFoundException;
 import java.io.IOException;
 import java.io.InputStream;
-import java.io.Writer;
 import java.nio.charset.StandardCharsets;
-import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
@@ -30,8 +28,7 @@ public final class SurveyPage implements Closeable {
     private static final List<String> SCRIPTS =
             List.of("objects.js", "verdicts.js", "charts.js", "table.js", "page.js");
 
-    private final AtomicFile file;
-    private final Writer writer;
+    private final AtomicText written;
     private final String end;
     private final PageMap map = new PageMap();
 
@@ -39,11 +36,9 @@ public final class SurveyPage implements Closeable {
     private final Map<String, Integer> texts = new LinkedHashMap<>();
 
     private boolean empty = true;
-    private boolean failed;
 
-    private SurveyPage(AtomicFile file, Writer writer, String end) {
-        this.file = file;
-        this.writer = writer;
+    private SurveyPage(AtomicText written, String end) {
+        this.written = written;
         this.end = end;
     }
 
@@ -69,13 +64,12 @@ public final class SurveyPage implements Closeable {
         }
         filled = put(filled, "@SCRIPT@", script.toString());
         int data = filled.indexOf("@DATA@");
-        AtomicFile file = AtomicFile.beside(target);
-        Writer writer = Files.newBufferedWriter(file.temporary(), StandardCharsets.UTF_8);
-        SurveyPage page = new SurveyPage(file, writer, filled.substring(data + "@DATA@".length()));
-        page.append(filled.substring(0, data));
-        page.append(
+        SurveyPage page =
+                new SurveyPage(AtomicText.open(target), filled.substring(data + "@DATA@".length()));
+        page.written.append(filled.substring(0, data));
+        page.written.append(
                 "{\"keys\":"
-                        + PageJson.of(SurveyRow.keys())
+                        + PageJson.of(SurveyRow.pageKeys())
                         + ",\"quantities\":"
                         + PageJson.of(Quantities.titles())
                         + ",\"calls\":"
@@ -108,14 +102,14 @@ public final class SurveyPage implements Closeable {
                 row.cautions().stream()
                         .map(text -> texts.computeIfAbsent(text, t -> texts.size()))
                         .toList();
-        append((empty ? "\n" : ",\n") + row.text(numbers));
+        written.append((empty ? "\n" : ",\n") + row.text(numbers));
         map.add(row);
         empty = false;
     }
 
     /** Gives the page up: when it is closed the former page stays. */
     public void abandon() {
-        failed = true;
+        written.abandon();
     }
 
     /**
@@ -125,34 +119,23 @@ public final class SurveyPage implements Closeable {
      */
     @Override
     public void close() throws IOException {
-        try (writer) {
-            if (!failed) {
-                append(
-                        "\n],\"texts\":"
-                                + PageJson.of(texts.keySet())
-                                + ",\"map\":"
-                                + map.json()
-                                + "}"
-                                + end);
+        try (written) {
+            if (!written.isGivenUp()) {
+                written.append(tail());
             }
-        } catch (IOException | RuntimeException e) {
-            failed = true;
-            throw e;
-        } finally {
-            if (failed) {
-                file.discard();
-            }
-        }
-        if (!failed) {
-            file.commit();
         }
     }
 
-    private void append(String text) throws IOException {
+    private String tail() {
         try {
-            writer.write(text);
-        } catch (IOException e) {
-            failed = true;
+            return "\n],\"texts\":"
+                    + PageJson.of(texts.keySet())
+                    + ",\"map\":"
+                    + map.json()
+                    + "}"
+                    + end;
+        } catch (RuntimeException e) {
+            written.abandon();
             throw e;
         }
     }

@@ -17,6 +17,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalInt;
 
 /**
  * What the survey page holds of one object: a line of JSON, and its place on the map. The line is
@@ -46,7 +47,6 @@ public final class SurveyRow {
                     "decision",
                     "p_substellar",
                     "next_step",
-                    "rank",
                     "score",
                     "priority",
                     "verdict",
@@ -78,14 +78,23 @@ public final class SurveyRow {
 
     private final List<String> cautions;
     private final double[] place;
+    private final OptionalInt rank;
 
-    private SurveyRow(String head, List<String> cautions, double[] place) {
+    private SurveyRow(String head, List<String> cautions, double[] place, OptionalInt rank) {
         this.head = head;
         this.cautions = cautions;
         this.place = place;
+        this.rank = rank;
     }
 
-    /** The keys of the cells in their order. */
+    /** The keys of the cells on the page in their order. */
+    static List<String> pageKeys() {
+        List<String> keys = new ArrayList<>(keys());
+        keys.add(ResultColumns.RANK);
+        return keys;
+    }
+
+    /** The keys of the cells in their order, as far as they are known with the object alone. */
     static List<String> keys() {
         List<String> keys = new ArrayList<>(COLUMNS.stream().map(ResultColumn::name).toList());
         keys.addAll(MORE);
@@ -143,19 +152,29 @@ public final class SurveyRow {
                         .distinct()
                         .toList();
         String text = PageJson.of(cells);
-        return new SurveyRow(text.substring(0, text.length() - 1), cautions, place);
+        return new SurveyRow(
+                text.substring(0, text.length() - 1), cautions, place, OptionalInt.empty());
+    }
+
+    /**
+     * The row with the place of its object.
+     *
+     * @param among place when the survey is ordered by score, from 1
+     * @return a new row
+     */
+    public SurveyRow ranked(int among) {
+        return new SurveyRow(head, cautions, place, OptionalInt.of(among));
     }
 
     /**
      * A row from its line.
      *
      * @param text what {@link #text} gave in a run of the same version
-     * @param rank its place when the survey is ordered by score, from 1
      * @return the row
      * @throws IOException if it is no such line
      */
-    public static SurveyRow parse(String text, int rank) throws IOException {
-        List<Object> cells = new ArrayList<>(JSON.std.listFrom(text));
+    public static SurveyRow parse(String text) throws IOException {
+        List<Object> cells = JSON.std.listFrom(text);
         int map = keys().indexOf("map");
         if (cells.size() != keys().size()) {
             throw new IOException(
@@ -171,13 +190,12 @@ public final class SurveyRow {
                         : new double[0];
         List<String> cautions =
                 ((List<?>) cells.get(cells.size() - 1)).stream().map(Object::toString).toList();
-        cells.set(keys().indexOf("rank"), rank);
-        String head = PageJson.of(cells.subList(0, cells.size() - 1));
-        return new SurveyRow(head.substring(0, head.length() - 1), cautions, place);
+        int end = text.length() - PageJson.of(cautions).length() - 2;
+        return new SurveyRow(text.substring(0, end), cautions, place, OptionalInt.empty());
     }
 
     /**
-     * The row as text.
+     * The row as text, without its rank.
      *
      * @return a JSON array on one line that may stand in a script element
      */
@@ -185,9 +203,10 @@ public final class SurveyRow {
         return head + "," + PageJson.of(cautions) + "]";
     }
 
-    /** The row with its cautions by their numbers. */
+    /** The row for the page, with its cautions by their numbers. */
     String text(List<Integer> numbers) {
-        return head + "," + PageJson.of(numbers) + "]";
+        String place = rank.isPresent() ? Integer.toString(rank.getAsInt()) : "null";
+        return head + "," + PageJson.of(numbers) + "," + place + "]";
     }
 
     /** What the observer should beware of, each a sentence; a warning begins with {@code !}. */
