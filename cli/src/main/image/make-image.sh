@@ -10,7 +10,7 @@ fi
 rm -rf "$target/image"
 mkdir -p "$target/image"
 "$java_home/bin/jlink" --module-path "$java_home/jmods" \
-  --add-modules java.base,java.desktop,java.logging,java.management,java.naming,java.sql,java.xml,jdk.unsupported,jdk.charsets,jdk.zipfs \
+  --add-modules java.base,java.desktop,java.logging,java.management,java.naming,java.sql,java.xml,jdk.management,jdk.unsupported,jdk.charsets,jdk.zipfs \
   --strip-debug --no-header-files --no-man-pages --compress=2 --output "$target/image/runtime"
 cp -R "$target/lib" "$target/image/lib"
 cp "$target/emberline.jar" "$target/emberline" "$target/image/"

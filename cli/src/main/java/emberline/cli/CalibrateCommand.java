@@ -80,7 +80,9 @@ final class CalibrateCommand implements Callable<Integer> {
                                             row ->
                                                     trainer.add(
                                                             row,
-                                                            result.spectra().get(0).prepared()));
+                                                            result.leading()
+                                                                    .orElseThrow()
+                                                                    .prepared()));
                         });
         ReferenceTable table = maker.table();
         Files.createDirectories(out);

@@ -2,12 +2,12 @@ package emberline.cli;
 
 import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.InvalidCatalogueException;
+import emberline.read.Checksum;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.security.MessageDigest;
-import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
 import java.util.stream.Stream;
 import picocli.CommandLine.Model.CommandSpec;
@@ -46,14 +46,12 @@ final class CatalogueOption {
             return "";
         }
         try (Stream<Path> files = Files.walk(folder)) {
-            MessageDigest digest = MessageDigest.getInstance("SHA-256");
+            MessageDigest digest = Checksum.sha256();
             for (Path file : files.filter(Files::isRegularFile).sorted().toList()) {
                 digest.update((folder.relativize(file) + "\n").getBytes(StandardCharsets.UTF_8));
                 digest.update(Files.readAllBytes(file));
             }
             return HexFormat.of().formatHex(digest.digest());
-        } catch (NoSuchAlgorithmException e) {
-            throw new IllegalStateException("every Java platform has SHA-256", e);
         }
     }
 }

@@ -3,6 +3,7 @@ package emberline.cli;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.read.CandidateRows;
 import emberline.read.CandidateSource;
+import emberline.read.Checksum;
 import emberline.reports.ledger.RunIdentity;
 import emberline.reports.ledger.RunProgress;
 import emberline.reports.page.PdfReport;
@@ -13,6 +14,7 @@ import emberline.survey.SurveyPart;
 import emberline.survey.SurveySettings;
 import emberline.survey.verdict.Verdicts;
 import java.io.IOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.LinkedHashMap;
 import java.util.Locale;
@@ -193,7 +195,9 @@ final class SortCommand implements Callable<Integer> {
         if (standardsOption.file().isPresent()) {
             Path standards = standardsOption.file().get();
             options.put("standards", standards.getFileName().toString());
-            options.put("standards_sha256", FileChecksum.sha256(standards));
+            String spectra = String.join("\n", settings.standards().get().checksums());
+            String all = Checksum.of(standards) + "\n" + spectra;
+            options.put("standards_sha256", Checksum.of(all.getBytes(StandardCharsets.UTF_8)));
         }
         return options;
     }

@@ -2,6 +2,7 @@ package emberline.cli;
 
 import emberline.read.CandidateRows;
 import emberline.read.CandidateSource;
+import emberline.read.Checksum;
 import emberline.read.ListedCandidate;
 import emberline.reports.ledger.LedgerException;
 import emberline.reports.ledger.ObjectEntry;
@@ -197,7 +198,7 @@ final class SurveyRun {
     private String key(String name, String inputs) {
         return verdicts.of(name)
                 .map(verdict -> (inputs + " " + verdict).getBytes(StandardCharsets.UTF_8))
-                .map(FileChecksum::sha256)
+                .map(bytes -> Checksum.of(bytes))
                 .orElse(inputs);
     }
 

@@ -57,7 +57,7 @@ final class TimingText {
         text.append(
                 String.format(
                         Locale.ROOT,
-                        "peak memory: heap %.0f MB%s",
+                        "peak memory: heap at most %.0f MB%s",
                         peakHeapBytes() / MEGABYTE,
                         residentText()));
         return text.toString();

@@ -2,6 +2,7 @@ package emberline.cli;
 
 import emberline.read.CandidateRows;
 import emberline.read.CandidateSource;
+import emberline.read.Checksum;
 import emberline.read.ListedCandidate;
 import emberline.reports.attach.AtomicFile;
 import emberline.reports.attach.VerdictTable;
@@ -79,6 +80,6 @@ final class VerdictOptions {
     static String checksum(Verdicts verdicts) {
         return verdicts.entries().isEmpty()
                 ? ""
-                : FileChecksum.sha256(VerdictTable.text(verdicts).getBytes(StandardCharsets.UTF_8));
+                : Checksum.of(VerdictTable.text(verdicts).getBytes(StandardCharsets.UTF_8));
     }
 }

@@ -49,9 +49,9 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
      * Gathers the evidence of an object.
      *
      * <p>Type and gravity come from the posterior of the calibrated witness where there is one,
-     * else from that of the colours, else the type from the adopted one with normal errors. Where
-     * the gravity class rests on the published scores, their probabilities take the place of those
-     * of the posterior.
+     * else the type from the adopted one with normal errors, else, without a spectrum, from the
+     * posterior of the colours. Where the gravity class rests on the published scores, their
+     * probabilities take the place of those of the posterior.
      *
      * @param candidate the row of the list
      * @param placement type and gravity
@@ -69,13 +69,17 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
     /** A posterior and the prior of the classes in it; no prior where the class says nothing. */
     private record TypeAndGravity(TypePosterior posterior, Map<GravityClass, Double> prior) {}
 
+    /** The posterior of the colours where nothing else gives the type. */
+    private static Optional<TypePosterior> byColoursAlone(Placement placement) {
+        return placement.published().type().isPresent()
+                ? Optional.empty()
+                : placement.photometric().flatMap(PhotometricType::posterior);
+    }
+
     private static TypeAndGravity gravity(Placement placement, TypeEstimate type, TypePrior prior) {
         GravityVerdict verdict = placement.gravity();
         Optional<TypePosterior> posterior =
-                placement
-                        .calibrated()
-                        .posterior()
-                        .or(() -> placement.photometric().flatMap(PhotometricType::posterior));
+                placement.calibrated().posterior().or(() -> byColoursAlone(placement));
         if (posterior.isPresent() && isOf(verdict, posterior.get())) {
             return new TypeAndGravity(posterior.get(), prior.classShares(type.typeNumber()));
         }
@@ -133,7 +137,7 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
                         placed.prior(),
                         lithium(candidate, lines, numbers, findings),
                         halpha(placement, numbers),
-                        photometry(candidate, findings),
+                        photometry(candidate, placement, findings),
                         astrometry(candidate, findings),
                         age(candidate, findings),
                         placement.metallicity().pSubdwarf(),
@@ -200,9 +204,12 @@ public record GatheredEvidence(Evidence evidence, List<Finding> findings) {
     }
 
     private static Map<MagnitudeBand, Magnitude> photometry(
-            Candidate candidate, List<Finding> findings) {
+            Candidate candidate, Placement placement, List<Finding> findings) {
         CandidatePhotometry photometry = CandidatePhotometry.of(candidate);
-        findings.addAll(photometry.findings());
+        // a placement by colours has told them already
+        photometry.findings().stream()
+                .filter(finding -> !placement.findings().contains(finding))
+                .forEach(findings::add);
         if (photometry.systemAssumed()) {
             findings.add(
                     Finding.note(

@@ -8,9 +8,6 @@ import java.nio.file.AccessDeniedException;
 import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
-import java.security.MessageDigest;
-import java.security.NoSuchAlgorithmException;
-import java.util.HexFormat;
 import java.util.List;
 import java.util.zip.GZIPInputStream;
 import java.util.zip.ZipException;
@@ -54,7 +51,11 @@ final class FileContent {
      */
     static FileContent cut(byte[] bytes, String file, List<String> units, int main) {
         return new FileContent(
-                file + ", " + units.get(main), bytes, sha256(bytes), false, List.copyOf(units));
+                file + ", " + units.get(main),
+                bytes,
+                Checksum.of(bytes),
+                false,
+                List.copyOf(units));
     }
 
     /** Where an HDU stands in the file, such as {@code HDU 1}. */
@@ -144,7 +145,7 @@ final class FileContent {
 
     /** Takes bytes as they lie on disk; unpacks gzip; refuses what is empty. */
     static FileContent of(byte[] onDisk, String name) throws UnreadableSpectrumException {
-        String sha256 = sha256(onDisk);
+        String sha256 = Checksum.of(onDisk);
         boolean packed =
                 onDisk.length > 2 && (onDisk[0] & 0xff) == 0x1f && (onDisk[1] & 0xff) == 0x8b;
         byte[] bytes = packed ? unpack(onDisk, name) : onDisk;
@@ -216,14 +217,5 @@ final class FileContent {
                         + " MB, and no more than gzip of a real spectrum"
                         + " unpacks to",
                 "One file should hold one spectrum; cut it out of the larger one.");
-    }
-
-    /** The SHA-256 checksum of some bytes, hexadecimal. */
-    static String sha256(byte[] bytes) {
-        try {
-            return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
-        } catch (NoSuchAlgorithmException e) {
-            throw new IllegalStateException("every Java platform has SHA-256", e);
-        }
     }
 }

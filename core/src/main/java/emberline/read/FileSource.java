@@ -98,6 +98,6 @@ final class FileSource implements CandidateSource {
 
     @Override
     public String sha256() {
-        return FileContent.sha256(String.join("\n", files).getBytes(StandardCharsets.UTF_8));
+        return Checksum.of(String.join("\n", files).getBytes(StandardCharsets.UTF_8));
     }
 }

@@ -17,7 +17,7 @@ import java.util.regex.Pattern;
  */
 final class FitsTableRow {
 
-    private static final Pattern FORM = Pattern.compile("(\\d*)([LXBIJKAEDCMPQ])(.?).*");
+    private static final Pattern FORM = Pattern.compile("(\\d{0,9})([LXBIJKAEDCMPQ])(.?).*");
     private static final int MOST_FIELDS = 999;
 
     private FitsTableRow() {}
@@ -47,14 +47,17 @@ final class FitsTableRow {
         }
     }
 
-    /** The columns of a table in their order. */
+    /**
+     * The columns of a table in their order; none where the forms are no forms, or need more room
+     * than a row has.
+     */
     static List<Column> columns(FitsCards header) {
         List<Column> columns = new ArrayList<>();
         long offset = 0;
         for (int field = 1; field <= Math.min(header.number("TFIELDS", 0), MOST_FIELDS); field++) {
             Matcher form = FORM.matcher(header.text("TFORM" + field).orElse(""));
             if (!form.matches()) {
-                return columns;
+                return List.of();
             }
             long count = form.group(1).isEmpty() ? 1 : Long.parseLong(form.group(1));
             char kind = form.group(2).charAt(0);
@@ -71,7 +74,7 @@ final class FitsTableRow {
             columns.add(column);
             offset += column.bytes();
         }
-        return columns;
+        return offset <= header.number("NAXIS1", 0) ? columns : List.of();
     }
 
     private static long width(char kind) {

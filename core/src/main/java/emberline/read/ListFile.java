@@ -1,12 +1,7 @@
 package emberline.read;
 
 import java.io.IOException;
-import java.io.InputStream;
-import java.nio.file.Files;
 import java.nio.file.Path;
-import java.security.MessageDigest;
-import java.security.NoSuchAlgorithmException;
-import java.util.HexFormat;
 
 /**
  * A candidate list in a file.
@@ -58,15 +53,6 @@ record ListFile(Path file) implements CandidateSource {
 
     @Override
     public String sha256() throws IOException {
-        try (InputStream bytes = Files.newInputStream(file)) {
-            MessageDigest digest = MessageDigest.getInstance("SHA-256");
-            byte[] buffer = new byte[1 << 16];
-            for (int n = bytes.read(buffer); n >= 0; n = bytes.read(buffer)) {
-                digest.update(buffer, 0, n);
-            }
-            return HexFormat.of().formatHex(digest.digest());
-        } catch (NoSuchAlgorithmException e) {
-            throw new IllegalStateException("every Java platform has SHA-256", e);
-        }
+        return Checksum.of(file);
     }
 }

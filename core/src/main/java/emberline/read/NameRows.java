@@ -7,8 +7,8 @@ package emberline.read;
  */
 final class NameRows {
 
-    /** Most bytes that a name takes, while the table grows. */
-    static final int BYTES_A_ROW = 48;
+    /** Most bytes that a name takes: while the table grows, the old and the new are held. */
+    static final int BYTES_A_ROW = 72;
 
     private static final int FIRST_SIZE = 1 << 10;
 

@@ -34,12 +34,8 @@ final class SpectrumPattern {
 
     /** The deepest folder that a pattern names without its signs. */
     static Path root(Path folder, String pattern) {
-        int sign = 0;
-        while (sign < pattern.length() && "*?".indexOf(pattern.charAt(sign)) < 0) {
-            sign++;
-        }
-        int slash = pattern.lastIndexOf('/', sign);
-        return slash < 0 ? folder : folder.resolve(pattern.substring(0, slash + 1));
+        int cut = prefix(pattern);
+        return cut == 0 ? folder : folder.resolve(pattern.substring(0, cut));
     }
 
     /**
@@ -50,8 +46,18 @@ final class SpectrumPattern {
      * @return paths, relative to the folder where the pattern is
      */
     static List<String> files(Path folder, String pattern) throws UnreadableSpectrumException {
-        Path root = root(folder, pattern);
-        String rest = pattern.substring(Math.max(0, folder.equals(root) ? 0 : prefix(pattern)));
+        Path root;
+        try {
+            root = root(folder, pattern);
+        } catch (InvalidPathException e) {
+            throw new UnreadableSpectrumException(
+                    pattern,
+                    "no name of a folder (" + e.getReason() + ")",
+                    "a path with * or ? in it",
+                    "Correct the path.");
+        }
+        String head = pattern.substring(0, prefix(pattern));
+        String rest = pattern.substring(prefix(pattern));
         String escaped = rest.replaceAll("([\\[\\]{}\\\\])", "\\\\$1");
         PathMatcher matcher = FileSystems.getDefault().getPathMatcher("glob:" + escaped);
         int levels =
@@ -62,7 +68,6 @@ final class SpectrumPattern {
             return List.of();
         }
         try (Stream<Path> found = Files.walk(root, levels)) {
-            String head = folder.equals(root) ? "" : pattern.substring(0, prefix(pattern));
             return found.filter(Files::isRegularFile)
                     .map(root::relativize)
                     .filter(matcher::matches)
@@ -78,6 +83,7 @@ final class SpectrumPattern {
         }
     }
 
+    /** How much of a pattern names a folder without signs, the last slash included. */
     private static int prefix(String pattern) {
         int sign = 0;
         while (sign < pattern.length() && "*?".indexOf(pattern.charAt(sign)) < 0) {

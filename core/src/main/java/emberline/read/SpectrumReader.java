@@ -67,9 +67,7 @@ public final class SpectrumReader {
             Path file = folder.resolve(address);
             return address.indexOf('#') >= 0 && !Files.exists(file)
                     ? Optional.of(content(folder, address).sha256())
-                    : Optional.of(
-                            FileContent.reading(
-                                    file, () -> FileContent.sha256(Files.readAllBytes(file))));
+                    : Optional.of(FileContent.reading(file, () -> Checksum.of(file)));
         } catch (UnreadableSpectrumException | InvalidPathException e) {
             return Optional.empty();
         }

@@ -1,12 +1,12 @@
 package emberline.survey;
 
+import emberline.read.Checksum;
 import emberline.read.SpectrumReader;
 import emberline.read.UnreadableSpectrumException;
 import emberline.spectrum.Candidate;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.security.MessageDigest;
-import java.security.NoSuchAlgorithmException;
 import java.util.HashMap;
 import java.util.HexFormat;
 import java.util.List;
@@ -57,7 +57,7 @@ public final class InputChecksum {
     }
 
     private String of(Candidate candidate, Map<String, String> known) {
-        MessageDigest digest = sha256();
+        MessageDigest digest = Checksum.sha256();
         add(digest, candidate.name());
         candidate
                 .cells()
@@ -89,13 +89,5 @@ public final class InputChecksum {
         byte[] bytes = text.getBytes(StandardCharsets.UTF_8);
         digest.update((bytes.length + ":").getBytes(StandardCharsets.US_ASCII));
         digest.update(bytes);
-    }
-
-    private static MessageDigest sha256() {
-        try {
-            return MessageDigest.getInstance("SHA-256");
-        } catch (NoSuchAlgorithmException e) {
-            throw new IllegalStateException("every Java platform has SHA-256", e);
-        }
     }
 }

@@ -2,7 +2,6 @@ package emberline.survey;
 
 import emberline.place.standard.Standard;
 import emberline.place.standard.StandardComparison;
-import emberline.prepare.PreparedSpectrum;
 import emberline.prepare.Preparer;
 import emberline.prepare.Preparing;
 import emberline.read.CandidateList;
@@ -59,6 +58,8 @@ public record StandardList(StandardComparison comparison, int spectra, List<Stri
                     "a column " + TYPE + " with the type of each standard, such as L3.5",
                     "Add it.");
         }
+        SpectrumReader reader = new SpectrumReader();
+        Preparer preparer = new Preparer();
         List<Standard> standards = new ArrayList<>();
         List<String> leftOut = new ArrayList<>();
         for (ListedCandidate row : list.rows()) {
@@ -67,7 +68,7 @@ public record StandardList(StandardComparison comparison, int spectra, List<Stri
             }
             Candidate candidate = row.candidate();
             if (DWARFS.contains(candidate.text("known_kind").orElse("dwarf"))) {
-                add(file, candidate, standards);
+                add(file, candidate, reader, preparer, standards);
             } else {
                 leftOut.add(candidate.name());
             }
@@ -82,25 +83,37 @@ public record StandardList(StandardComparison comparison, int spectra, List<Stri
         return new StandardList(new StandardComparison(standards), standards.size(), leftOut);
     }
 
-    private static void add(Path file, Candidate candidate, List<Standard> standards)
+    private static void add(
+            Path file,
+            Candidate candidate,
+            SpectrumReader reader,
+            Preparer preparer,
+            List<Standard> standards)
             throws UnreadableListException {
         double type = type(file, candidate);
+        if (candidate.spectra().isEmpty()) {
+            throw fault(
+                    file,
+                    at("spectrum", candidate)
+                            + "nothing; expected the path of a spectrum. Give it, or remove the"
+                            + " row.");
+        }
         Path folder = file.toAbsolutePath().getParent();
-        for (String path : candidate.spectra()) {
+        for (int place = 0; place < candidate.spectra().size(); place++) {
+            String path = candidate.spectra().get(place);
+            Preparing stated =
+                    Statements.of(candidate.forSpectrum(place), Preparing.withDefaults());
             try {
-                Observation observation = new SpectrumReader().read(folder.resolve(path));
-                PreparedSpectrum prepared =
-                        new Preparer()
-                                .prepare(
-                                        observation,
-                                        Statements.of(candidate, Preparing.withDefaults()));
-                standards.add(
-                        new Standard(
-                                candidate.name(),
-                                type,
-                                ObjectGroup.of(candidate),
-                                observation.sha256(),
-                                prepared));
+                for (String address : reader.expanded(folder, path)) {
+                    Observation observation = reader.read(folder, address);
+                    standards.add(
+                            new Standard(
+                                    candidate.name(),
+                                    type,
+                                    ObjectGroup.of(candidate),
+                                    observation.sha256(),
+                                    preparer.prepare(observation, stated)));
+                }
             } catch (UnreadableSpectrumException e) {
                 throw fault(file, at("spectrum", candidate) + e.getMessage());
             } catch (InvalidPathException e) {

@@ -4,15 +4,20 @@ import emberline.judge.Aim;
 import emberline.judge.Evidence;
 import emberline.judge.Judge;
 import emberline.judge.Judgement;
+import emberline.judge.NextStep;
 import emberline.place.GravityClass;
 import emberline.place.TypePosterior;
 import emberline.place.calibrated.Forecast;
 import emberline.place.calibrated.TypePrior;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.List;
+import java.util.Map;
 import java.util.OptionalDouble;
+import java.util.TreeMap;
 import java.util.function.ToDoubleFunction;
+import java.util.stream.Collectors;
 import org.apache.commons.math3.stat.descriptive.rank.Median;
 
 /**
@@ -72,7 +77,7 @@ public final class SignalPlanner {
                                 + " to T8 and a resolving power of about 120, 750 or 2000");
             }
             steps.add(step(question, signal, told));
-            next = told.get(told.size() / 2).next();
+            next = mostFrequent(told);
         }
         return new SignalPlan(question, features.size(), steps, next);
     }
@@ -94,6 +99,16 @@ public final class SignalPlanner {
         return new Median().evaluate(told.stream().mapToDouble(of).toArray());
     }
 
+    /** The words that most draws give; of equals the first by the alphabet. */
+    private static String mostFrequent(List<Told> told) {
+        Map<String, Long> counts =
+                told.stream()
+                        .collect(
+                                Collectors.groupingBy(
+                                        Told::next, TreeMap::new, Collectors.counting()));
+        return Collections.max(counts.entrySet(), Map.Entry.comparingByValue()).getKey();
+    }
+
     private Told told(PlanQuestion question, TypePosterior posterior) {
         double typeSigma = posterior.estimate().sigmaSubclass();
         if (question.aim() == PlanAim.GRAVITY) {
@@ -109,7 +124,12 @@ public final class SignalPlanner {
                         Evidence.of(
                                 posterior, prior.classShares(posterior.estimate().typeNumber())));
         return new Told(
-                certainty(question.aim(), judgement), false, typeSigma, judgement.nextStepWords());
+                certainty(question.aim(), judgement),
+                false,
+                typeSigma,
+                judgement.nextSteps().stream().anyMatch(NextStep::isRecommended)
+                        ? judgement.nextStepWords()
+                        : "");
     }
 
     private static double certainty(PlanAim aim, Judgement judgement) {

@@ -29,7 +29,10 @@ final class ColourKinds {
         this.settings = ColourSettings.standard();
     }
 
-    /** The kind by the colours of J, H and Ks; not judged where one is missing or in MKO. */
+    /**
+     * The kind by the colours of J, H and Ks, and by W1 - W2 where it is listed; not judged where
+     * one of the three is missing or in MKO.
+     */
     KindVerdict judge(ColourVector colours) {
         if (colours.size() < 2) {
             return KindVerdict.notJudged(
@@ -42,7 +45,8 @@ final class ColourKinds {
         addOthers(colours, weight);
         double sum = weight.values().stream().mapToDouble(Double::doubleValue).sum();
         if (!(sum > NEGLIGIBLE)) {
-            return KindVerdict.notJudged("J-H and H-K are like those of no star");
+            return KindVerdict.notJudged(
+                    String.join(", ", colours.labels()) + " are like those of no star at hand");
         }
         weight.replaceAll((kind, value) -> value / sum);
         return new KindVerdict(

@@ -79,13 +79,14 @@ final class ColourTemplates {
                 new EnumMap<>(TemplateColour.class);
         ProductTable table = ProductTable.at(FOLDER + "templates.csv");
         for (NamedCsvRecord row : table.rows()) {
-            GravityClass gravity = null;
-            for (GravityClass one : GravityClass.values()) {
-                gravity = one.label().equals(row.getField("gravity")) ? one : gravity;
-            }
-            if (gravity == null) {
-                throw table.fault(row, "expected a gravity class");
-            }
+            GravityClass gravity =
+                    GravityClass.ofLabel(row.getField("gravity"))
+                            .orElseThrow(
+                                    () ->
+                                            table.fault(
+                                                    row,
+                                                    "gravity: expected one of "
+                                                            + GravityClass.labels()));
             points.computeIfAbsent(
                             TemplateColour.valueOf(row.getField("colour")),
                             colour -> new EnumMap<>(GravityClass.class))

@@ -97,7 +97,7 @@ public final class ReddeningFitter {
             Measurements asSeen,
             DoubleFunction<Measurements> measuredAt,
             NavigableMap<Integer, Trial> trials) {
-        Measurements freed = measuredAt.apply(tenths * FINE);
+        Measurements freed = tenths == 0 ? asSeen : measuredAt.apply(tenths * FINE);
         CalibratedType placed = witness.witness(freed);
         double stretch = 0;
         for (Contribution one : placed.contributions()) {

@@ -20,6 +20,16 @@ public record PairFit(StandardMatch single, StandardMatch pair, OptionalDouble p
     /** Greatest share of false alarms of a candidate. */
     private static final double RARE = 0.05;
 
+    /**
+     * The same fit with what is known of false alarms.
+     *
+     * @param share as {@link #pFalseAlarm}
+     * @return a new fit
+     */
+    PairFit withFalseAlarms(OptionalDouble share) {
+        return new PairFit(single, pair, share);
+    }
+
     /** What the comparison with sums says. */
     public enum Outcome {
         /** The sum fits better, and single objects seldom look so. */

@@ -40,7 +40,7 @@ final class PairSearch {
     private record Sum(int first, int second, double chiSquare) {}
 
     /** The best single object and the best sum, of the standards that are allowed. */
-    Optional<PairFit> fit(Binned object, IntPredicate allowed, OptionalDouble pFalseAlarm) {
+    Optional<PairFit> fit(Binned object, IntPredicate allowed) {
         ScaleFit.Target target = new ScaleFit.Target(object, ranges);
         int[] usable = level.covering(ranges, allowed);
         double[][] fluxes = new double[level.size()][];
@@ -65,7 +65,7 @@ final class PairSearch {
         }
         return single.isEmpty() || pair.isEmpty()
                 ? Optional.empty()
-                : Optional.of(new PairFit(single.get(), pair.get(), pFalseAlarm));
+                : Optional.of(new PairFit(single.get(), pair.get(), OptionalDouble.empty()));
     }
 
     private static Optional<StandardMatch> better(

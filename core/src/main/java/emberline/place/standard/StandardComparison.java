@@ -11,7 +11,6 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.Set;
 import java.util.function.IntPredicate;
 import java.util.function.Predicate;
@@ -26,6 +25,7 @@ public final class StandardComparison {
     private static final int BEST = 5;
 
     private final StandardLibrary library;
+    private final List<String> checksums;
 
     /**
      * A comparison.
@@ -38,6 +38,16 @@ public final class StandardComparison {
             throw new IllegalArgumentException("no standards: expected at least one");
         }
         this.library = new StandardLibrary(standards);
+        this.checksums = standards.stream().map(Standard::sha256).toList();
+    }
+
+    /**
+     * The checksums of the spectra that are compared with.
+     *
+     * @return hexadecimal, in the order of the standards
+     */
+    public List<String> checksums() {
+        return checksums;
     }
 
     /**
@@ -115,19 +125,14 @@ public final class StandardComparison {
 
     /** The best of each object. */
     private static List<StandardMatch> best(List<StandardMatch> matches) {
-        Set<String> names = new HashSet<>();
-        return matches.stream().filter(m -> names.add(m.first().name())).limit(BEST).toList();
+        Set<String> groups = new HashSet<>();
+        return matches.stream().filter(m -> groups.add(m.first().group())).limit(BEST).toList();
     }
 
     private static Optional<PairFit> pair(
             StandardLibrary.Level level, Binned object, List<Range> ranges, IntPredicate allowed) {
         return new PairSearch(level, ranges)
-                .fit(object, allowed, OptionalDouble.empty())
-                .map(
-                        fit ->
-                                new PairFit(
-                                        fit.single(),
-                                        fit.pair(),
-                                        level.pFalseAlarm(ranges, fit.ratio())));
+                .fit(object, allowed)
+                .map(fit -> fit.withFalseAlarms(level.pFalseAlarm(ranges, fit.ratio())));
     }
 }

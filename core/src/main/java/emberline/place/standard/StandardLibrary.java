@@ -127,7 +127,7 @@ final class StandardLibrary {
             int taken = Math.min(MOST_SINGLES, covering.length);
             return IntStream.range(0, taken)
                     .map(i -> covering[(int) ((long) i * covering.length / taken)])
-                    .mapToObj(k -> search.fit(binned.get(k), others(k), OptionalDouble.empty()))
+                    .mapToObj(k -> search.fit(binned.get(k), others(k)))
                     .mapToDouble(fit -> fit.map(PairFit::ratio).orElse(1.0))
                     .toArray();
         }

@@ -12,13 +12,11 @@ import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import java.util.stream.Collectors;
 
 /**
  * Reads a file of verdicts: CSV in UTF-8, separated by commas, semicolons or tabs, with a line of
@@ -35,12 +33,14 @@ public final class VerdictFile {
 
     private static final int MOST_FAULTS = 20;
     private static final int MOST_BYTES = 200 << 20;
-    private static final String GUARDED = "'[=+\\-@\\t\\r\\n][\\s\\S]*";
+    private static final String GUARDED = "'[=+\\-@\\t\\r\\n\uff1d\uff0b\uff0d\uff20][\\s\\S]*";
 
     private final String file;
     private final List<String> faults = new ArrayList<>();
     private final Map<String, Integer> columns = new LinkedHashMap<>();
     private final Map<String, Verdicts.Entry> entries = new LinkedHashMap<>();
+
+    private int width;
 
     private VerdictFile(String file) {
         this.file = file;
@@ -150,6 +150,7 @@ public final class VerdictFile {
 
     private void names(CsvRecord row) throws UnreadableVerdictsException {
         List<String> cells = row.getFields();
+        width = cells.size();
         for (int i = 0; i < cells.size(); i++) {
             columns.putIfAbsent(cells.get(i).strip().toLowerCase(Locale.ROOT), i);
         }
@@ -169,12 +170,12 @@ public final class VerdictFile {
 
     private void row(CsvRecord row) {
         int before = faults.size();
-        if (row.getFieldCount() > columns.size()) {
+        if (row.getFieldCount() > width) {
             fault(
                     row,
                     "row",
                     row.getFieldCount() + " cells",
-                    columns.size() + " as in the line of names",
+                    width + " as in the line of names",
                     "Put a cell that holds a separator in quotes.");
         }
         String name = cell(row, "name");
@@ -237,19 +238,13 @@ public final class VerdictFile {
 
     private Optional<GravityClass> gravity(CsvRecord row) {
         String word = cell(row, "verdict_gravity");
-        Optional<GravityClass> gravity =
-                Arrays.stream(GravityClass.values())
-                        .filter(g -> g.label().equalsIgnoreCase(word))
-                        .findFirst();
+        Optional<GravityClass> gravity = GravityClass.ofLabel(word);
         if (!word.isEmpty() && gravity.isEmpty()) {
             fault(
                     row,
                     "verdict_gravity",
                     "'" + shortened(word) + "'",
-                    Arrays.stream(GravityClass.values())
-                                    .map(GravityClass::label)
-                                    .collect(Collectors.joining(", "))
-                            + ", or nothing",
+                    GravityClass.labels() + ", or nothing",
                     "Choose one; put other words into verdict_note.");
         }
         return gravity;

@@ -31,6 +31,33 @@ final class ListedColumn {
                             "pmdec_masyr",
                             new Known(
                                     "mas/yr", "pos.pm;pos.eq.dec", "proper motion in declination")),
+                    Map.entry(
+                            "pmra_masyr_err",
+                            new Known(
+                                    "mas/yr",
+                                    "stat.error;pos.pm;pos.eq.ra",
+                                    "error of pmra_masyr")),
+                    Map.entry(
+                            "pmdec_masyr_err",
+                            new Known(
+                                    "mas/yr",
+                                    "stat.error;pos.pm;pos.eq.dec",
+                                    "error of pmdec_masyr")),
+                    Map.entry(
+                            "rv_kms_err",
+                            new Known("km/s", "stat.error;spect.dopplerVeloc", "error of rv_kms")),
+                    Map.entry(
+                            "resolution",
+                            new Known("", "spect.resolution", "resolving power as listed")),
+                    Map.entry(
+                            "y_mag_err",
+                            new Known("mag", "stat.error;phot.mag;em.IR.NIR", "error of y_mag")),
+                    Map.entry(
+                            "w1_mag_err",
+                            new Known("mag", "stat.error;phot.mag;em.IR.3-4um", "error of w1_mag")),
+                    Map.entry(
+                            "w2_mag_err",
+                            new Known("mag", "stat.error;phot.mag;em.IR.4-8um", "error of w2_mag")),
                     Map.entry("rv_kms", new Known("km/s", "spect.dopplerVeloc", "radial velocity")),
                     Map.entry("y_mag", new Known("mag", "phot.mag;em.IR.NIR", MAGNITUDE + "Y")),
                     Map.entry("j_mag", new Known("mag", "phot.mag;em.IR.J", MAGNITUDE + "J")),

@@ -115,16 +115,20 @@ public final class ResultColumns {
                                                 .collect(Collectors.joining(" ")))
                         .withUcd("meta.code"));
         columns.addAll(JudgementColumns.all());
-        columns.add(
-                number(
-                                RANK,
-                                "",
-                                "place of the object when the survey is ordered by score, from 1;"
-                                        + " in the tables and on the page of a survey only",
-                                result -> "")
-                        .withUcd("stat.value"));
+        columns.add(rank());
         columns.addAll(VerdictColumns.all(columns));
         return List.copyOf(columns);
+    }
+
+    /** Empty here: only a whole survey gives its objects a place. */
+    private static ResultColumn rank() {
+        return number(
+                        RANK,
+                        "",
+                        "place of the object when the survey is ordered by score, from 1;"
+                                + " in the tables and on the page of a survey only",
+                        result -> "")
+                .withUcd("stat.value");
     }
 
     private static void addKind(List<ResultColumn> columns) {

@@ -77,6 +77,8 @@ final class ListedObjects implements Closeable {
                                 + " WHERE stem = file_stem AND mine = 1"
                                 + " AND listed.name = object.name)",
                         "UPDATE object SET list_row ="
+                                + " (SELECT row FROM listed WHERE stem = file_stem)"
+                                + " WHERE list_row <>"
                                 + " (SELECT row FROM listed WHERE stem = file_stem)",
                         "INSERT INTO object (file_stem, list_row, name)"
                                 + " SELECT stem, row, name FROM listed WHERE mine = 1"

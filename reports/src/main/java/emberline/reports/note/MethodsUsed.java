@@ -12,10 +12,12 @@ import emberline.survey.ObjectResult;
 import emberline.survey.Status;
 import java.util.Comparator;
 import java.util.EnumMap;
+import java.util.EnumSet;
 import java.util.List;
 import java.util.Map;
 import java.util.NavigableSet;
 import java.util.Optional;
+import java.util.Set;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
@@ -29,7 +31,7 @@ public final class MethodsUsed {
 
     private final FeatureCatalogue catalogue;
     private final Map<Part, NavigableSet<Source>> sources = new EnumMap<>(Part.class);
-    private final Map<Part, Integer> objects = new EnumMap<>(Part.class);
+    private final Set<Part> done = EnumSet.noneOf(Part.class);
     private final Map<Status, Integer> statuses = new EnumMap<>(Status.class);
 
     /** A part of the work. */
@@ -110,7 +112,7 @@ public final class MethodsUsed {
             }
             Part name = Part.valueOf(part.substring(0, mark));
             if (part.charAt(mark) == '=') {
-                objects.merge(name, 1, Integer::sum);
+                done.add(name);
             }
             for (String key : part.substring(mark + 1).split(",", -1)) {
                 if (!key.isEmpty()) {
@@ -182,7 +184,7 @@ public final class MethodsUsed {
     }
 
     private void note(Part part, Stream<Source> papers) {
-        objects.merge(part, 1, Integer::sum);
+        done.add(part);
         papers.forEach(of(part)::add);
     }
 
@@ -197,7 +199,7 @@ public final class MethodsUsed {
 
     /** Whether a part was done for any object. */
     boolean wasDone(Part part) {
-        return objects.containsKey(part);
+        return done.contains(part);
     }
 
     /** How many objects came how far. */

@@ -11,6 +11,7 @@ import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.nio.file.StandardOpenOption;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.regex.Pattern;
@@ -35,7 +36,14 @@ final class TableRows implements Closeable {
     TableRows(List<ResultColumn> columns, Path file) throws IOException {
         this.columns = List.copyOf(columns);
         this.file = file;
-        this.writer = CsvWriter.builder().build(file, StandardCharsets.UTF_8);
+        Files.deleteIfExists(file); // perhaps a link to something outside the folder
+        this.writer =
+                CsvWriter.builder()
+                        .build(
+                                file,
+                                StandardCharsets.UTF_8,
+                                StandardOpenOption.CREATE_NEW,
+                                StandardOpenOption.WRITE);
         this.facts = new Facts[columns.size()];
         for (int c = 0; c < facts.length; c++) {
             facts[c] = new Facts();
@@ -61,9 +69,11 @@ final class TableRows implements Closeable {
             }
             numeric &= NUMBER.matcher(cell).matches();
             whole &= WHOLE.matcher(cell).matches();
-            exponent |= cell.indexOf('e') >= 0 || cell.indexOf('E') >= 0;
+            int power = Math.max(cell.indexOf('e'), cell.indexOf('E'));
+            exponent |= power >= 0;
             int point = cell.indexOf('.');
-            decimals = Math.max(decimals, point < 0 ? 0 : cell.length() - point - 1);
+            int end = power < 0 ? cell.length() : power;
+            decimals = Math.max(decimals, point < 0 ? 0 : end - point - 1);
         }
 
         /** The widest cell in ASCII, at least 1. */

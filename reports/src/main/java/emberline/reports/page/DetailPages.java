@@ -289,8 +289,8 @@ final class DetailPages {
     private void relations(Flow flow, Placement placement, SourceList sources) {
         flow.heading("Type relations");
         List<RelationEstimate> estimates = placement.published().estimates();
-        if (placement.type().isPresent()) {
-            TypeEstimate type = placement.type().get();
+        if (placement.published().type().isPresent()) {
+            TypeEstimate type = placement.published().type().get();
             flow.paragraph(
                     styles.table(),
                     "Combined: "

@@ -129,11 +129,13 @@
       say(picked, field, $(id).value.trim());
       made = new Map();
       tellSaid();
-      fillFilters();
-      legend();
-      histogram();
-      mapPlot.draw();
-      diagramPlot.draw();
+      if (field !== 'note') {
+        fillFilters();
+        legend();
+        histogram();
+        mapPlot.draw();
+        setDiagram(false);
+      }
       render();
     });
   };

@@ -70,7 +70,7 @@
 
   const csvCell = text => {
     const number = /^[+-](\d+\.?\d*|\.\d+)([eE][+-]?\d{1,3})?$/.test(text);
-    const safe = /^[=+\-@\t\r\n]/.test(text) && !number ? "'" + text : text;
+    const safe = /^[=+\-@\t\r\n\uff1d\uff0b\uff0d\uff20]/.test(text) && !number ? "'" + text : text;
     return /[",\r\n]/.test(safe) || safe !== safe.trim() ? '"' + safe.replace(/"/g, '""') + '"' : safe;
   };
 
