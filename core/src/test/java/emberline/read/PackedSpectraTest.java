@@ -298,6 +298,15 @@ class PackedSpectraTest {
         assertEquals(List.of("in/a.txt"), reader.expanded(folder, "in/a.*"));
         assertEquals(List.of("in/b.csv", "in/deep/c.csv"), reader.expanded(folder, "in/**.csv"));
         assertEquals(List.of("in/z*"), reader.expanded(folder, "in/z*"));
+        String whole = folder.resolve("in") + "/b.*";
+        assertEquals(
+                List.of(folder.resolve("in/b.csv").toString()), reader.expanded(folder, whole));
+        assertEquals(3, reader.read(folder, reader.expanded(folder, whole).get(0)).size());
+        String noFolder = "in\0/*.csv";
+        UnreadableSpectrumException badName =
+                assertThrows(
+                        UnreadableSpectrumException.class, () -> reader.expanded(folder, noFolder));
+        assertTrue(badName.getMessage().contains("no name of a folder"), badName.getMessage());
         UnreadableListException none =
                 assertThrows(UnreadableListException.class, () -> rows(folder.resolve("in/*.vot")));
         assertTrue(none.getMessage().contains("no files"), none.getMessage());

@@ -1,6 +1,7 @@
 package emberline.survey;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
@@ -52,6 +53,29 @@ class StandardListTest {
     }
 
     @Test
+    void standardsMayBeNamedByAPattern() throws IOException {
+        Path file = list("name,spectrum,known_type", "a,s*.csv;s.csv,L3", "b,t?.csv,L4");
+        Files.copy(folder.resolve("s.csv"), folder.resolve("s2.csv"));
+        Files.copy(folder.resolve("s.csv"), folder.resolve("t1.csv"));
+        Files.copy(folder.resolve("s.csv"), folder.resolve("standards-of-mine.txt"));
+        Files.move(file, folder.resolve("list.txt"));
+        StandardList standards = StandardList.read(folder.resolve("list.txt"));
+        assertEquals(4, standards.spectra());
+        assertEquals(4, standards.comparison().checksums().size());
+    }
+
+    @Test
+    void theChecksumsChangeWithTheSpectra() throws IOException {
+        Path file = list("name,spectrum,known_type", "a,s.csv,L3");
+        List<String> before = StandardList.read(file).comparison().checksums();
+        String text = Files.readString(folder.resolve("s.csv"));
+        Files.writeString(folder.resolve("s.csv"), text.replace("0.9025,", "0.9026,"));
+        List<String> after = StandardList.read(file).comparison().checksums();
+        assertEquals(before.size(), after.size());
+        assertNotEquals(before, after);
+    }
+
+    @Test
     void faultsNameFileRowAndColumn() throws IOException {
         String none = trouble("name,spectrum", "a,s.csv");
         assertTrue(none.contains("no column 'known_type'"), none);
@@ -63,6 +87,8 @@ class StandardListTest {
         assertTrue(number.contains("row 1, column known_type_number: 77"), number);
         String missing = trouble("name,spectrum,known_type", "a,gone.csv,L1");
         assertTrue(missing.contains("row 1, column spectrum: "), missing);
+        String empty = trouble("name,spectrum,known_type,j_mag,k_mag", "a,,L1,14,13");
+        assertTrue(empty.contains("row 1, column spectrum: nothing; expected"), empty);
         String twice = trouble("name,spectrum,known_type", "a,s.csv,L1", "a,s.csv,L2");
         assertTrue(twice.contains("row 2, column name"), twice);
         String giants = trouble("name,spectrum,known_type,known_kind", "a,s.csv,M8,giant");

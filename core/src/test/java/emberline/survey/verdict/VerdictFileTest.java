@@ -56,6 +56,8 @@ class VerdictFileTest {
                 "\ufeffname,verdict,verdict_note~A,giant,x|x",
                 "NAME,other,Verdict,verdict_note~A,7,giant,x|x",
                 "name,verdict,verdict_note~~A,giant,'=1+1|=1+1",
+                "name,verdict,verdict_note~A,giant,'\uff1d1\uff0b1|\uff1d1\uff0b1",
+                "name,verdict,verdict_note,mine,mine~A,giant,x,1,2|x",
                 "name,verdict,verdict_note~A,giant,'tis bright|'tis bright"
             })
     void otherFormsAreRead(String file, String note) throws IOException {

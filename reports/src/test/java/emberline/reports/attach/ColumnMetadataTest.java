@@ -13,6 +13,7 @@ import java.util.stream.Collectors;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 /** Whoever adds a column says what it holds, in which unit, and with which content descriptor. */
 class ColumnMetadataTest {
@@ -70,6 +71,31 @@ class ColumnMetadataTest {
     void namesAreUnique() {
         Set<String> names = columns().stream().map(ResultColumn::name).collect(Collectors.toSet());
         assertEquals(columns().size(), names.size());
+    }
+
+    @ParameterizedTest
+    @ValueSource(
+            strings = {
+                "resolution",
+                "parallax_mas_err",
+                "pmra_masyr_err",
+                "pmdec_masyr_err",
+                "rv_kms_err",
+                "y_mag_err",
+                "w1_mag_err",
+                "w2_mag_err"
+            })
+    void listedNumbersOfTheProductAreDescribed(String listed) {
+        ResultColumn column =
+                ResultColumns.forList(List.of("name", listed)).stream()
+                        .filter(c -> c.description().contains("column " + listed + " of the"))
+                        .findFirst()
+                        .orElseThrow();
+        assertFalse(column.ucd().isEmpty(), listed);
+        assertEquals(
+                listed.equals("resolution"),
+                column.unit().isEmpty(),
+                listed + " in '" + column.unit() + "'");
     }
 
     @Test
