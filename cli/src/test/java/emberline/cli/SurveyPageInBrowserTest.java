@@ -394,8 +394,8 @@ class SurveyPageInBrowserTest {
                         browser.run(
                                 "const d=JSON.parse(document.getElementById('data').textContent);"
                                         + "return d.rows.filter(r=>r[0].startsWith('Tamarisk'))"
-                                        + ".map(r=>JSON.stringify(r.slice(0,-1)"
-                                        + ".concat([r[r.length-1].map(n=>d.texts[n])])))")) {
+                                        + ".map(r=>JSON.stringify(r.slice(0,-2)"
+                                        + ".concat([r[r.length-2].map(n=>d.texts[n])])))")) {
             rows.add(row.toString());
         }
         assertEquals(13, rows.size());

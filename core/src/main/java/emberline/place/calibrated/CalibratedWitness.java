@@ -128,13 +128,16 @@ public final class CalibratedWitness {
     private KnotLikelihood[] fit(Sample sample, double[] inflation) {
         Arrays.fill(inflation, 1);
         Map<GravityClass, double[]> logAtKnots = firstLook(sample);
+        KnotLikelihood[] prepared = new KnotLikelihood[TypeKnots.COUNT];
         KnotLikelihood[] knots = new KnotLikelihood[TypeKnots.COUNT];
         for (int round = 0; round <= ROUNDS; round++) {
             widen(sample, logAtKnots, inflation);
             boolean[] probable = probable(logAtKnots);
             for (int k = 0; k < TypeKnots.COUNT; k++) {
-                knots[k] =
-                        probable[k] ? new KnotLikelihood(sample, calibration, inflation, k) : null;
+                if (probable[k] && prepared[k] == null) {
+                    prepared[k] = KnotLikelihood.at(sample, calibration, k);
+                }
+                knots[k] = probable[k] ? prepared[k].widened(inflation) : null;
             }
             logAtKnots = atKnots(knots);
         }
@@ -146,15 +149,18 @@ public final class CalibratedWitness {
         double temper = Math.min(1, INDEPENDENT / sample.size());
         Map<GravityClass, double[]> log = new EnumMap<>(GravityClass.class);
         for (GravityClass gravity : GravityClass.values()) {
+            double lowGravity = lowGravity(gravity);
             double[] ofClass = new double[TypeKnots.COUNT];
             for (int k = 0; k < TypeKnots.COUNT; k++) {
-                double sum = 0;
+                LogProduct tails = new LogProduct();
+                LogProduct variances = new LogProduct();
                 for (int f = 0; f < sample.size(); f++) {
                     double variance = variance(sample, f, k);
-                    double rest = sample.value(f) - sample.locus(f).mean(k, lowGravity(gravity));
-                    sum -= (FREEDOM + 1) / 2 * Math.log1p(rest * rest / variance / FREEDOM);
-                    sum -= 0.5 * Math.log(variance);
+                    double rest = sample.value(f) - sample.locus(f).mean(k, lowGravity);
+                    tails.times(1 + rest * rest / variance / FREEDOM);
+                    variances.times(variance);
                 }
+                double sum = -(FREEDOM + 1) / 2 * tails.value() - 0.5 * variances.value();
                 ofClass[k] =
                         temper * sum + Math.log(prior.density(TypeKnots.typeNumber(k), gravity));
             }

@@ -2,6 +2,7 @@ package emberline.place.calibrated;
 
 import emberline.measure.Measurement.Measured;
 import emberline.place.GravityClass;
+import emberline.place.LowerFactor;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -105,25 +106,15 @@ public final class Forecast {
     /** Normal deviates with the correlation of the residuals of some loci. */
     private double[] correlated(List<Integer> places, ZigguratSampler.NormalizedGaussian normal) {
         int size = places.size();
-        double[][] lower = new double[size][size];
+        double[] matrix = new double[size * size];
         double[] independent = new double[size];
-        double[] deviates = new double[size];
         for (int row = 0; row < size; row++) {
             for (int column = 0; column <= row; column++) {
-                double sum = calibration.correlation(places.get(row), places.get(column));
-                for (int k = 0; k < column; k++) {
-                    sum -= lower[row][k] * lower[column][k];
-                }
-                lower[row][column] =
-                        row == column
-                                ? Math.sqrt(Math.max(sum, 1e-9))
-                                : sum / lower[column][column];
+                matrix[row * size + column] =
+                        calibration.correlation(places.get(row), places.get(column));
             }
             independent[row] = normal.sample();
-            for (int k = 0; k <= row; k++) {
-                deviates[row] += lower[row][k] * independent[k];
-            }
         }
-        return deviates;
+        return LowerFactor.of(matrix, size).colour(independent);
     }
 }

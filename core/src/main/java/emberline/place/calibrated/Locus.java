@@ -54,6 +54,16 @@ final class Locus {
     }
 
     /**
+     * What very low gravity adds to the mean at a knot.
+     *
+     * @param knot index of the knot
+     * @return expected difference to field gravity
+     */
+    double shift(int knot) {
+        return lowGravityShift[knot];
+    }
+
+    /**
      * The mean at a type.
      *
      * @param typeNumber type number (M0 = 0)

@@ -3,6 +3,7 @@ package emberline.place.calibrated;
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurements;
 import emberline.measure.SpectraMerger;
+import emberline.place.LowerFactor;
 import emberline.place.TypeEstimate;
 import emberline.place.TypePosterior;
 import emberline.spectrum.Finding;
@@ -170,21 +171,26 @@ public final class SeveralSpectra {
         double[][] ofOne = one.covariance(ids);
         double[][] ofTwo = two.covariance(ids);
         double[] matrix = new double[ids.size() * ids.size()];
+        double[] scatter =
+                ids.stream()
+                        .mapToDouble(id -> calibrationSigma(id, typeNumber).orElseThrow())
+                        .toArray();
         List<String> far = new ArrayList<>();
         for (int f = 0; f < ids.size(); f++) {
             for (int g = 0; g < ids.size(); g++) {
                 double shared =
                         2
                                 * calibration.correlation(places.get(f), places.get(g))
-                                * calibrationSigma(ids.get(f), typeNumber).orElseThrow()
-                                * calibrationSigma(ids.get(g), typeNumber).orElseThrow();
+                                * scatter[f]
+                                * scatter[g];
                 matrix[f * ids.size() + g] = ofOne[f][g] + ofTwo[f][g] + shared;
             }
             if (Math.abs(difference.get(f)) > NAMED * Math.sqrt(matrix[f * ids.size() + f])) {
                 far.add(ids.get(f));
             }
         }
-        return new Repeats(ids, KnotLikelihood.chiSquare(matrix, difference), far);
+        double[] apart = difference.stream().mapToDouble(Double::doubleValue).toArray();
+        return new Repeats(ids, LowerFactor.of(matrix, apart.length).chiSquare(apart), far);
     }
 
     private static Finding finding(

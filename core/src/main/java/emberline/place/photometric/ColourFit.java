@@ -1,6 +1,7 @@
 package emberline.place.photometric;
 
 import emberline.place.GravityClass;
+import emberline.place.LowerFactor;
 import emberline.place.photometric.ColourVector.Term;
 import java.util.List;
 
@@ -11,8 +12,7 @@ import java.util.List;
 final class ColourFit {
 
     private final ColourVector colours;
-    private final double[][] lower = new double[ColourTemplates.SIZE][];
-    private final double[] logDeterminant = new double[ColourTemplates.SIZE];
+    private final LowerFactor[] factor = new LowerFactor[ColourTemplates.SIZE];
     private final double[][][] residual =
             new double[GravityClass.values().length][ColourTemplates.SIZE][];
 
@@ -24,11 +24,7 @@ final class ColourFit {
             terms.add(colours.terms(c));
         }
         for (int point = 0; point < ColourTemplates.SIZE; point++) {
-            double[] matrix = covariance(templates, terms, point);
-            lower[point] = cholesky(matrix, size);
-            for (int c = 0; c < size; c++) {
-                logDeterminant[point] += 2 * Math.log(lower[point][c * size + c]);
-            }
+            factor[point] = LowerFactor.of(covariance(templates, terms, point), size);
             int g = 0;
             for (GravityClass gravity : GravityClass.values()) {
                 double[] rest = new double[size];
@@ -67,35 +63,6 @@ final class ColourFit {
         return matrix;
     }
 
-    /** The lower factor of a positive definite matrix, in place. */
-    static double[] cholesky(double[] a, int size) {
-        for (int row = 0; row < size; row++) {
-            for (int col = 0; col <= row; col++) {
-                double sum = a[row * size + col];
-                for (int k = 0; k < col; k++) {
-                    sum -= a[row * size + k] * a[col * size + k];
-                }
-                a[row * size + col] = row == col ? Math.sqrt(sum) : sum / a[col * size + col];
-            }
-        }
-        return a;
-    }
-
-    /** The squared length of a vector once the triangle is solved for it; the vector is used up. */
-    static double solved(double[] lower, double[] vector) {
-        int size = vector.length;
-        double square = 0;
-        for (int row = 0; row < size; row++) {
-            double sum = vector[row];
-            for (int k = 0; k < row; k++) {
-                sum -= lower[row * size + k] * vector[k];
-            }
-            vector[row] = sum / lower[row * size + row];
-            square += vector[row] * vector[row];
-        }
-        return square;
-    }
-
     /**
      * Chi-square of a template.
      *
@@ -109,11 +76,11 @@ final class ColourFit {
         for (int c = 0; c < rest.length; c++) {
             rest[c] -= avMag * colours.reddening(c);
         }
-        return solved(lower[point], rest);
+        return factor[point].chiSquare(rest);
     }
 
     /** Logarithm of the likelihood, up to a constant of the object. */
     double logLikelihood(int point, int gravity, double avMag) {
-        return -0.5 * (chiSquare(point, gravity, avMag) + logDeterminant[point]);
+        return -0.5 * (chiSquare(point, gravity, avMag) + factor[point].logDeterminant());
     }
 }

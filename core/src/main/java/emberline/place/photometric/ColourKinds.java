@@ -1,6 +1,7 @@
 package emberline.place.photometric;
 
 import emberline.place.GravityClass;
+import emberline.place.LowerFactor;
 import emberline.place.calibrated.TypePrior;
 import emberline.place.kind.KindPrior;
 import emberline.place.kind.KindVerdict;
@@ -78,11 +79,8 @@ final class ColourKinds {
                 matrix[c * size + d] = colours.noise(c, d) + (c == d ? scatter * scatter : 0);
             }
         }
-        double[] lower = ColourFit.cholesky(matrix, size);
-        double scale = 1;
-        for (int c = 0; c < size; c++) {
-            scale /= lower[c * size + c];
-        }
+        LowerFactor factor = LowerFactor.of(matrix, size);
+        double scale = Math.exp(-0.5 * factor.logDeterminant());
         Map<ObjectKind, Integer> count = new EnumMap<>(ObjectKind.class);
         Map<ObjectKind, Double> clear = new EnumMap<>(ObjectKind.class);
         double reddened = 0;
@@ -90,9 +88,9 @@ final class ColourKinds {
         int steps = (int) Math.round(settings.of("a-v-greatest") / step);
         for (ColourTemplates.Other other : templates.others()) {
             count.merge(other.kind(), 1, Integer::sum);
-            clear.merge(other.kind(), scale * likelihood(colours, lower, other, 0), Double::sum);
+            clear.merge(other.kind(), scale * likelihood(colours, factor, other, 0), Double::sum);
             for (int i = 1; i <= steps; i++) {
-                reddened += scale * likelihood(colours, lower, other, i * step) / steps;
+                reddened += scale * likelihood(colours, factor, other, i * step) / steps;
             }
         }
         clear.forEach(
@@ -105,12 +103,12 @@ final class ColourKinds {
     }
 
     private double likelihood(
-            ColourVector colours, double[] lower, ColourTemplates.Other other, double avMag) {
+            ColourVector colours, LowerFactor factor, ColourTemplates.Other other, double avMag) {
         double[] expected = {other.jMinusH(), other.hMinusK(), settings.of("w1-w2-other")};
         double[] rest = new double[colours.size()];
         for (int c = 0; c < rest.length; c++) {
             rest[c] = colours.value(c) - expected[c] - avMag * colours.reddening(c);
         }
-        return Math.exp(-0.5 * ColourFit.solved(lower, rest));
+        return Math.exp(-0.5 * factor.chiSquare(rest));
     }
 }

@@ -48,14 +48,20 @@ class KnotLikelihoodTest {
     }
 
     private static double expected(double type, double lowGravity) {
+        return expected(type, lowGravity, new double[] {1, 1, 1});
+    }
+
+    private static double expected(double type, double lowGravity, double[] inflation) {
         double[] means = new double[VALUE.length];
         double[][] covariance = new double[VALUE.length][VALUE.length];
         for (int f = 0; f < VALUE.length; f++) {
             means[f] = mean(f, type, lowGravity);
             for (int g = 0; g < VALUE.length; g++) {
+                double own = f == g ? NOISE[f] * NOISE[f] : 0;
                 covariance[f][g] =
-                        CORRELATION[f][g] * SCATTER[f] * SCATTER[g]
-                                + (f == g ? NOISE[f] * NOISE[f] : 0);
+                        inflation[f]
+                                * inflation[g]
+                                * (CORRELATION[f][g] * SCATTER[f] * SCATTER[g] + own);
             }
         }
         return Math.log(new MultivariateNormalDistribution(means, covariance).density(VALUE))
@@ -64,9 +70,8 @@ class KnotLikelihoodTest {
 
     @Test
     void itIsTheMultivariateNormalDensity() {
-        double[] none = {1, 1, 1};
         for (int knot : new int[] {3, 20, 40}) {
-            KnotLikelihood likelihood = new KnotLikelihood(sample(), calibration(), none, knot);
+            KnotLikelihood likelihood = KnotLikelihood.at(sample(), calibration(), knot);
             for (double steps : new double[] {-1, -0.4, 0, 0.2, 1}) {
                 for (double lowGravity : new double[] {0, 0.5, 1}) {
                     double type = TypeKnots.typeNumber(knot) + steps * TypeKnots.STEP;
@@ -80,12 +85,23 @@ class KnotLikelihoodTest {
         }
     }
 
+    @Test
+    void widerSigmasScaleRowsAndColumnsOfTheCovariance() {
+        double[] inflation = {1, 3.5, 1.2};
+        KnotLikelihood likelihood =
+                KnotLikelihood.at(sample(), calibration(), 20).widened(inflation);
+        for (double steps : new double[] {-0.7, 0, 0.4}) {
+            double type = TypeKnots.typeNumber(20) + steps * TypeKnots.STEP;
+            assertEquals(
+                    expected(type, 0.5, inflation), likelihood.logLikelihood(steps, 0.5), 1e-8);
+        }
+    }
+
     /** At the best type of a linear model the pulls balance, and the shares are all of it. */
     @Test
     void pullsBalanceAtTheBestTypeAndSharesAddUp() {
-        double[] none = {1, 1, 1};
         int knot = 20;
-        KnotLikelihood likelihood = new KnotLikelihood(sample(), calibration(), none, knot);
+        KnotLikelihood likelihood = KnotLikelihood.at(sample(), calibration(), knot);
         KnotLikelihood.Pull[] pulls = likelihood.pulls(0, 0);
         double pull = Arrays.stream(pulls).mapToDouble(KnotLikelihood.Pull::subclass).sum();
         double share = Arrays.stream(pulls).mapToDouble(KnotLikelihood.Pull::share).sum();
