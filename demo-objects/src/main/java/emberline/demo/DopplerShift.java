@@ -18,8 +18,7 @@ final class DopplerShift {
         if (velocityKms == 0) {
             return flux.clone();
         }
-        double points =
-                ModelGrid.PIXELS_PER_E * StrictMath.log1p(velocityKms / SPEED_OF_LIGHT_KMS);
+        double points = ModelGrid.PIXELS_PER_E * StrictMath.log1p(velocityKms / SPEED_OF_LIGHT_KMS);
         double[] moved = new double[flux.length];
         for (int i = 0; i < moved.length; i++) {
             double from = Math.max(0, Math.min(flux.length - 1.0, i - points));

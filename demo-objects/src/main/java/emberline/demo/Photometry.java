@@ -10,8 +10,8 @@ import org.apache.commons.rng.simple.RandomSource;
 
 /**
  * Magnitudes and parallax of an object: as {@code objects.csv} gives them, else from the absolute
- * magnitudes of its type ({@code magnitudes.csv}) and its made-up distance;
- * with errors that grow towards the faint end.
+ * magnitudes of its type ({@code magnitudes.csv}) and its made-up distance; with errors that grow
+ * towards the faint end.
  */
 final class Photometry {
 

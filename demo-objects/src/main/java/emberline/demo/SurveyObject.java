@@ -44,9 +44,7 @@ record SurveyObject(
     }
 
     private static OptionalDouble optional(DemoTable.Row row, String column) {
-        return row.isBlank(column)
-                ? OptionalDouble.empty()
-                : OptionalDouble.of(row.number(column));
+        return row.isBlank(column) ? OptionalDouble.empty() : OptionalDouble.of(row.number(column));
     }
 
     /** The names of the lists in the order of their objects, without the ending of a file. */

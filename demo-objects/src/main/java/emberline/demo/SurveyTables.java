@@ -140,8 +140,7 @@ final class SurveyTables {
     }
 
     /** One cell for all spectra where they are alike, else one for each. */
-    private static String joinDiffering(
-            List<Exposure> exposures, Function<Exposure, String> cell) {
+    private static String joinDiffering(List<Exposure> exposures, Function<Exposure, String> cell) {
         long different = exposures.stream().map(cell).distinct().count();
         return join(different == 1 ? exposures.subList(0, 1) : exposures, cell);
     }
