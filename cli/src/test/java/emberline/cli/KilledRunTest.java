@@ -33,7 +33,7 @@ class KilledRunTest {
 
     @BeforeEach
     void runUndisturbed() throws IOException {
-        list = RunFiles.repeatedDemo(folder.resolve("list.csv"), 2);
+        list = RunFiles.repeatedDemo(folder.resolve("list.csv"), 1);
         objects = Files.readAllLines(list).size() - 1;
         undisturbed = folder.resolve("undisturbed");
         CommandRun run = CommandRun.of("sort", list, "--out", undisturbed, "--no-reports");
