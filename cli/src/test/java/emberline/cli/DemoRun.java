@@ -1,5 +1,7 @@
 package emberline.cli;
 
+import java.io.IOException;
+import java.nio.file.Files;
 import java.nio.file.Path;
 
 /** Where the demo survey stands. */
@@ -10,5 +12,12 @@ final class DemoRun {
     static Path survey() {
         return Path.of(System.getProperty("emberline.root", ".."))
                 .resolve("demo-objects/survey/candidates.csv");
+    }
+
+    /** How many of its objects are known by photometry alone. */
+    static long withoutSpectrum() throws IOException {
+        return Files.readAllLines(survey()).stream()
+                .filter(row -> row.split(",", -1)[1].isEmpty())
+                .count();
     }
 }

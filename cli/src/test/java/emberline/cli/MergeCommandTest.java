@@ -47,21 +47,22 @@ class MergeCommandTest {
     @Test
     void tenPartsMergedEqualTheSingleRun() throws IOException {
         list = DemoRun.survey();
+        int listed = Files.readAllLines(list).size() - 1;
         List<Path> parts = new ArrayList<>();
         int rows = 0;
         for (int number = 1; number <= PARTS; number++) {
             parts.add(0, part(number, PARTS));
             rows += Files.readAllLines(parts.get(0).resolve("results.csv")).size() - 1;
         }
-        assertEquals(20, rows);
+        assertEquals(listed, rows);
         CommandRun run = merge(parts);
         assertEquals(ExitCode.DONE, run.code(), run.err());
         Path single = folder.resolve("single");
         CommandRun.of("sort", list, "--out", single);
         assertEquals(List.of(), RunFiles.differences(single, folder.resolve("merged")));
-        assertTrue(RunFiles.of(single).size() >= 43, "20 JSON files, 20 reports, tables");
+        assertTrue(RunFiles.of(single).size() > 2 * listed, "JSON files, reports, tables");
         CommandRun again = CommandRun.of("sort", list, "--out", folder.resolve("merged"));
-        assertTrue(again.err().contains("20 of them unchanged"), again.err());
+        assertTrue(again.err().contains(listed + " of them unchanged"), again.err());
     }
 
     @Test

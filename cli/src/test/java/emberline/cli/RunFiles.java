@@ -4,9 +4,11 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
+import java.util.stream.Collectors;
 import java.util.stream.Stream;
 
 /** The results of a run: every file that two runs of the same input must have alike. */
@@ -47,10 +49,18 @@ final class RunFiles {
             for (String line : lines.subList(1, lines.size())) {
                 String[] cells = line.split(",", 3);
                 text.append(cells[0] + "-" + k + ",")
-                        .append(demo.toAbsolutePath().resolveSibling(cells[1]) + ",")
+                        .append(absolute(cells[1]) + ",")
                         .append(cells[2] + "\n");
             }
         }
         return Files.writeString(list, text);
+    }
+
+    /** The cell of the spectra of a demo object, with paths that hold from everywhere. */
+    private static String absolute(String spectra) {
+        return Arrays.stream(spectra.split(";"))
+                .filter(path -> !path.isEmpty())
+                .map(path -> DemoRun.survey().toAbsolutePath().resolveSibling(path).toString())
+                .collect(Collectors.joining(";"));
     }
 }

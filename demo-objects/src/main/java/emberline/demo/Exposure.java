@@ -16,6 +16,7 @@ import java.util.OptionalDouble;
  * @param fluxUnit unit of the flux in the file
  * @param withSigma whether the file holds the noise
  * @param leastTransmission pixels where the atmosphere lets through less are left out
+ * @param fault what is wrong with the file
  */
 record Exposure(
         String object,
@@ -27,7 +28,8 @@ record Exposure(
         boolean air,
         FluxScale fluxUnit,
         boolean withSigma,
-        OptionalDouble leastTransmission) {
+        OptionalDouble leastTransmission,
+        Fault fault) {
 
     /** All observations in the order of {@code observations.csv}. */
     static List<Exposure> all() {
@@ -47,6 +49,7 @@ record Exposure(
                 row.text("sigma").equals("yes"),
                 row.isBlank("gaps")
                         ? OptionalDouble.empty()
-                        : OptionalDouble.of(row.number("gaps")));
+                        : OptionalDouble.of(row.number("gaps")),
+                row.isBlank("fault") ? Fault.NONE : Fault.valueOf(row.text("fault")));
     }
 }

@@ -1,6 +1,5 @@
 package emberline.demo;
 
-import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -10,9 +9,9 @@ import org.apache.commons.rng.sampling.distribution.ZigguratSampler;
 import org.apache.commons.rng.simple.RandomSource;
 
 /**
- * Magnitudes and parallax of an object: for a dwarf from the absolute magnitudes of its type
- * ({@code magnitudes.csv}) and its made-up distance, for others as {@code objects.csv} gives them;
- * with errors that grow towards the faint end.
+ * Magnitudes and parallax of an object: as {@code objects.csv} gives them, else from the absolute
+ * magnitudes of its type ({@code magnitudes.csv}) and its made-up distance; with errors that grow
+ * towards the faint end.
  */
 final class Photometry {
 
@@ -41,12 +40,7 @@ final class Photometry {
         ZigguratSampler.NormalizedGaussian normal = ZigguratSampler.NormalizedGaussian.of(random);
         DemoTable.Row row = object.row();
         for (String band : BANDS) {
-            double magnitude =
-                    object.isDwarf()
-                            ? absolute(object, band)
-                                    + 5 * StrictMath.log10(row.number("distance_pc"))
-                                    - 5
-                            : row.number(band);
+            double magnitude = apparent(object, band);
             double sigma =
                     Math.hypot(
                             LEAST_ERROR_MAG,
@@ -79,26 +73,21 @@ final class Photometry {
         };
     }
 
-    /** The absolute magnitude of a type: linear between the rows of its gravity class. */
-    private static double absolute(SurveyObject object, String band) {
+    /** The true apparent magnitude, as given or by type and distance; of a pair that of both. */
+    private static double apparent(SurveyObject object, String band) {
+        DemoTable.Row row = object.row();
+        if (!row.isBlank(band)) {
+            return row.number(band);
+        }
         double type = object.typeNumber().orElseThrow();
-        List<DemoTable.Row> rows = new ArrayList<>();
-        for (DemoTable.Row row : DemoTable.named("magnitudes.csv").rows()) {
-            if (row.text("gravity").equals(object.gravity())) {
-                rows.add(row);
-            }
+        double absolute = AbsoluteMagnitudes.of(type, object.gravity(), band);
+        if (object.pairTypeNumber().isPresent()) {
+            double other =
+                    AbsoluteMagnitudes.of(
+                            object.pairTypeNumber().getAsDouble(), object.gravity(), band);
+            absolute -= 2.5 * StrictMath.log10(1 + StrictMath.pow(10, 0.4 * (absolute - other)));
         }
-        DemoTable.Row below = rows.get(0);
-        for (DemoTable.Row above : rows) {
-            double high = above.number("type_number");
-            if (high >= type) {
-                double low = below.number("type_number");
-                double share = high > low ? Math.max(0, (type - low) / (high - low)) : 0;
-                return below.number(band) + share * (above.number(band) - below.number(band));
-            }
-            below = above;
-        }
-        return below.number(band);
+        return absolute + 5 * StrictMath.log10(row.number("distance_pc")) - 5;
     }
 
     /** The magnitude without error, e.g. of {@code j_mag}. */

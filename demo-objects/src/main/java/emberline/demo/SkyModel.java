@@ -2,6 +2,7 @@ package emberline.demo;
 
 import java.util.LinkedHashMap;
 import java.util.Map;
+import java.util.function.BinaryOperator;
 
 /**
  * The light of an invented object above the atmosphere: a smooth continuum times the transmission
@@ -20,6 +21,9 @@ final class SkyModel {
     private static final double EXTINCTION_AT_ONE_MICRON = 0.404;
 
     private static final double EXTINCTION_SLOPE = 1.61;
+
+    /** The word of a recipe that changes a dwarf of the type of the object. */
+    private static final String OWN_TYPE = "own";
 
     private static final double MAG_TO_DEPTH = 0.4 * StrictMath.log(10);
 
@@ -44,6 +48,26 @@ final class SkyModel {
      * @return flux per unit wavelength on the grid, on an arbitrary scale
      */
     double[] flux(SurveyObject object) {
+        if (object.pairTypeNumber().isEmpty()) {
+            return fluxOfOne(object);
+        }
+        double[] sum = inAbsoluteUnits(object, object.typeNumber().orElseThrow());
+        double[] other = inAbsoluteUnits(object, object.pairTypeNumber().getAsDouble());
+        for (int i = 0; i < sum.length; i++) {
+            sum[i] += other[i];
+        }
+        return sum;
+    }
+
+    /** One of a pair, so bright as its type is at ten parsec (erg/s/cm2/A). */
+    private double[] inAbsoluteUnits(SurveyObject pair, double type) {
+        return JBand.scaled(
+                fluxOfOne(pair.component(type)),
+                grid,
+                AbsoluteMagnitudes.of(type, pair.gravity(), "j_mag"));
+    }
+
+    private double[] fluxOfOne(SurveyObject object) {
         Map<String, Double> ingredients = ingredients(object);
         double temperature = ingredients.remove(Strengths.TEMPERATURE);
         double[] logFlux = new double[grid.size()];
@@ -82,12 +106,11 @@ final class SkyModel {
         }
         for (DemoTable.Row row : DemoTable.named("recipes.csv").rows()) {
             if (row.text("recipe").equals(object.recipe())) {
-                if (ingredients.isEmpty() && !row.isBlank("base_type")) {
-                    addDwarf(row.number("base_type"), 0, ingredients);
+                if (ingredients.isEmpty() && row.text("base_type").equals(OWN_TYPE)) {
+                    addDwarf(object.typeNumber().orElseThrow(), 0, ingredients);
                 }
-                boolean times = row.text("how").equals("TIMES");
                 ingredients.merge(
-                        row.text("component"), row.number("value"), (a, b) -> times ? a * b : b);
+                        row.text("component"), row.number("value"), change(row.text("how")));
             }
         }
         if (ingredients.isEmpty()) {
@@ -98,6 +121,19 @@ final class SkyModel {
                             + " stands in no row of recipes.csv: add it there");
         }
         return ingredients;
+    }
+
+    private static BinaryOperator<Double> change(String how) {
+        return switch (how) {
+            case "TIMES" -> (strength, value) -> strength * value;
+            case "PLUS" -> Double::sum;
+            case "SET" -> (strength, value) -> value;
+            default ->
+                    throw new IllegalStateException(
+                            "recipes.csv, column how: found "
+                                    + how
+                                    + ", expected TIMES, PLUS or SET");
+        };
     }
 
     private void addDwarf(double type, double lowGravity, Map<String, Double> ingredients) {

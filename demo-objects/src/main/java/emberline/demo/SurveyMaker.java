@@ -5,6 +5,7 @@ import java.io.IOException;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.zip.GZIPOutputStream;
 
 /** Makes the invented survey: every file by its name relative to the folder of the survey. */
@@ -12,12 +13,6 @@ final class SurveyMaker {
 
     /** Folder of the spectra within the survey. */
     static final String SPECTRA = "spectra/";
-
-    /** Flux of a star of magnitude 0 in 2MASS J (erg/s/cm2/A), Cohen et al. 2003, AJ 126, 1090. */
-    private static final double J_ZERO_CGS = 3.129e-10;
-
-    private static final double J_LOW_MICRON = 1.17;
-    private static final double J_HIGH_MICRON = 1.33;
 
     private final SkyModel model = new SkyModel();
     private final Observer observer = new Observer(model.grid());
@@ -32,14 +27,21 @@ final class SurveyMaker {
         List<SurveyObject> objects = SurveyObject.all();
         List<Exposure> exposures = Exposure.all();
         Map<String, byte[]> files = new LinkedHashMap<>();
-        files.put("candidates.csv", SurveyTables.candidates(objects, exposures));
+        for (String list : SurveyObject.lists()) {
+            files.put(
+                    list + ".csv",
+                    SurveyTables.candidates(
+                            objects.stream().filter(o -> o.list().equals(list)).toList(),
+                            exposures));
+        }
         files.put("truth.csv", SurveyTables.truth(objects, exposures));
-        for (SurveyObject object : objects) {
-            double[] flux = calibrated(object);
-            for (Exposure exposure : exposures) {
-                if (exposure.object().equals(object.name())) {
-                    files.put(SPECTRA + exposure.file(), bytes(flux, exposure));
-                }
+        for (Map.Entry<Exposure, ObservedSpectrum> seen : observed().entrySet()) {
+            Exposure exposure = seen.getKey();
+            Optional<byte[]> bytes = exposure.fault().spoil(sound(seen.getValue(), exposure));
+            if (bytes.isPresent()) {
+                files.put(
+                        SPECTRA + exposure.file(),
+                        exposure.file().endsWith(".gz") ? packed(bytes.get()) : bytes.get());
             }
         }
         return files;
@@ -64,12 +66,11 @@ final class SurveyMaker {
         return observed;
     }
 
-    private byte[] bytes(double[] flux, Exposure exposure) throws IOException {
-        ObservedSpectrum spectrum = observer.observe(flux, exposure);
-        byte[] plain = exposure.format().file().bytes(spectrum, exposure);
-        if (!exposure.file().endsWith(".gz")) {
-            return plain;
-        }
+    private static byte[] sound(ObservedSpectrum spectrum, Exposure exposure) throws IOException {
+        return exposure.format().file().bytes(spectrum, exposure);
+    }
+
+    private static byte[] packed(byte[] plain) throws IOException {
         ByteArrayOutputStream packed = new ByteArrayOutputStream();
         try (GZIPOutputStream gzip = new GZIPOutputStream(packed)) {
             gzip.write(plain);
@@ -79,21 +80,8 @@ final class SurveyMaker {
 
     /** The flux of an object on the grid of the model (erg/s/cm2/A), scaled to its J magnitude. */
     private double[] calibrated(SurveyObject object) {
-        double[] flux = model.flux(object);
-        ModelGrid grid = model.grid();
-        double sum = 0;
-        double width = 0;
-        for (int i = 0; i < grid.size(); i++) {
-            if (grid.micron(i) >= J_LOW_MICRON && grid.micron(i) <= J_HIGH_MICRON) {
-                sum += flux[i] * grid.micron(i);
-                width += grid.micron(i);
-            }
-        }
         double magnitude = Photometry.of(object).trueMagnitude("j_mag");
-        double scale = J_ZERO_CGS * StrictMath.pow(10, -0.4 * magnitude) / (sum / width);
-        for (int i = 0; i < flux.length; i++) {
-            flux[i] *= scale;
-        }
-        return flux;
+        double[] atRest = JBand.scaled(model.flux(object), model.grid(), magnitude);
+        return DopplerShift.of(atRest, object.radialVelocityKms().orElse(0));
     }
 }

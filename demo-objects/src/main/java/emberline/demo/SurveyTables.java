@@ -25,6 +25,9 @@ final class SurveyTables {
                     "dec_deg",
                     "parallax_mas",
                     "parallax_mas_err",
+                    "pmra_masyr",
+                    "pmdec_masyr",
+                    "rv_kms",
                     "j_mag",
                     "j_mag_err",
                     "h_mag",
@@ -49,7 +52,13 @@ final class SurveyTables {
                     "distance_pc",
                     "instrument",
                     "signal_to_noise",
-                    "remark");
+                    "remark",
+                    "metallicity",
+                    "pair_type_number",
+                    "spectra",
+                    "rv_kms",
+                    "list",
+                    "faults");
 
     private SurveyTables() {}
 
@@ -64,11 +73,14 @@ final class SurveyTables {
             List<String> row = new ArrayList<>();
             row.add(object.name());
             row.add(join(own, exposure -> SurveyMaker.SPECTRA + exposure.file()));
-            row.add(own.get(0).air() ? "air" : "vacuum");
-            row.add(number("%.0f", own.get(0).instrument().resolvingPower()));
+            row.add(joinDiffering(own, exposure -> exposure.air() ? "air" : "vacuum"));
+            row.add(joinDiffering(own, e -> number("%.0f", e.instrument().resolvingPower())));
             row.add(number("%.4f", object.row().number("ra_deg")));
             row.add(number("%.4f", object.row().number("dec_deg")));
             addMeasured(row, photometry, "parallax_mas", "%.2f");
+            row.add(object.row().text("pmra_masyr"));
+            row.add(object.row().text("pmdec_masyr"));
+            row.add(object.isVelocityListed() ? object.row().text("rv_kms") : "");
             for (String band : List.of("j_mag", "h_mag", "k_mag", "w1_mag", "w2_mag")) {
                 addMeasured(row, photometry, band, "%.3f");
             }
@@ -96,32 +108,41 @@ final class SurveyTables {
                             object.row().text("distance_pc"),
                             join(own, exposure -> exposure.instrument().name()),
                             join(own, exposure -> number("%.0f", exposure.signalToNoise())),
-                            object.row().text("remark")));
+                            object.row().text("remark"),
+                            object.metallicity().orElse(""),
+                            optional("%.1f", object.pairTypeNumber()),
+                            String.valueOf(own.size()),
+                            object.row().text("rv_kms"),
+                            object.list(),
+                            joinDiffering(own, exposure -> exposure.fault().words())));
         }
         return csv(rows);
     }
 
     private static String kind(SurveyObject object) {
         return switch (object.recipe()) {
-            case "" -> "late dwarf";
+            case "", "sd", "esd" -> "late dwarf";
             case "background" -> "reddened background";
             case "quasar" -> "extragalactic";
+            case "giant_late" -> "giant";
+            case "early" -> "early star";
+            case "carbon" -> "carbon star";
             default -> object.recipe();
         };
     }
 
     private static List<Exposure> of(SurveyObject object, List<Exposure> exposures) {
-        List<Exposure> own =
-                exposures.stream().filter(e -> e.object().equals(object.name())).toList();
-        if (own.isEmpty()) {
-            throw new IllegalStateException(
-                    object.name() + " has no row in observations.csv: expected at least one");
-        }
-        return own;
+        return exposures.stream().filter(e -> e.object().equals(object.name())).toList();
     }
 
     private static String join(List<Exposure> exposures, Function<Exposure, String> cell) {
         return exposures.stream().map(cell).collect(Collectors.joining(";"));
+    }
+
+    /** One cell for all spectra where they are alike, else one for each. */
+    private static String joinDiffering(List<Exposure> exposures, Function<Exposure, String> cell) {
+        long different = exposures.stream().map(cell).distinct().count();
+        return join(different == 1 ? exposures.subList(0, 1) : exposures, cell);
     }
 
     private static void addMeasured(

@@ -23,8 +23,16 @@ final class Bench {
     private final Observer observer = new Observer(model.grid());
 
     Measurements measureDwarf(double type, String gravity, String instrument) {
+        return measure(SurveyObject.dwarf(type, gravity), instrument);
+    }
+
+    Measurements measureRecipe(String recipe, double type, String instrument) {
+        return measure(SurveyObject.made(recipe, type, "FLD-G", 0, 0), instrument);
+    }
+
+    private Measurements measure(SurveyObject object, String instrument) {
         Instrument with = Instrument.named(instrument);
-        double[] flux = model.flux(SurveyObject.dwarf(type, gravity));
+        double[] flux = model.flux(object);
         ObservedSpectrum ideal = observer.noiseless(flux, with);
         return measure(ideal.microns(), ideal.fluxes(), ideal.sigmas(), with.resolvingPower());
     }

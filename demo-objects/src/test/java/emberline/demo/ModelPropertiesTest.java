@@ -5,7 +5,6 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.measure.Measurement.Measured;
-import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -61,8 +60,8 @@ class ModelPropertiesTest {
 
     @Test
     void lithiumLineShowsOnlyWhereThereIsLithium() {
-        SurveyObject young = new SurveyObject("", "", OptionalDouble.of(9), "VL-G", 1, 0, null);
-        SurveyObject old = new SurveyObject("", "", OptionalDouble.of(9), "VL-G", 0, 0, null);
+        SurveyObject young = SurveyObject.made("", 9, "VL-G", 1, 0);
+        SurveyObject old = SurveyObject.made("", 9, "VL-G", 0, 0);
         ModelGrid grid = BENCH.model().grid();
         int line = (int) Math.round(grid.place(0.670972));
         int beside = (int) Math.round(grid.place(0.6735));
@@ -74,8 +73,8 @@ class ModelPropertiesTest {
 
     @Test
     void reddeningDimsTheBlueMore() {
-        SurveyObject clear = new SurveyObject("", "", OptionalDouble.of(6), "FLD-G", 0, 0, null);
-        SurveyObject dusty = new SurveyObject("", "", OptionalDouble.of(6), "FLD-G", 0, 5, null);
+        SurveyObject clear = SurveyObject.made("", 6, "FLD-G", 0, 0);
+        SurveyObject dusty = SurveyObject.made("", 6, "FLD-G", 0, 5);
         ModelGrid grid = BENCH.model().grid();
         int blue = (int) grid.place(1.0);
         int red = (int) grid.place(2.2);
@@ -98,8 +97,7 @@ class ModelPropertiesTest {
 
     private static Measured measured(String recipe, String feature) {
         Instrument cross = Instrument.named("cross");
-        SurveyObject object =
-                new SurveyObject("", recipe, OptionalDouble.of(6), "FLD-G", 0, 0, null);
+        SurveyObject object = SurveyObject.made(recipe, 6, "FLD-G", 0, 0);
         ObservedSpectrum seen = BENCH.observer().noiseless(BENCH.model().flux(object), cross);
         return BENCH.measure(seen.microns(), seen.fluxes(), seen.sigmas(), cross.resolvingPower())
                 .measured(feature)
@@ -108,7 +106,7 @@ class ModelPropertiesTest {
 
     @Test
     void anUnknownRecipeIsRefused() {
-        SurveyObject odd = new SurveyObject("X", "comet", OptionalDouble.empty(), "", 0, 0, null);
+        SurveyObject odd = SurveyObject.made("comet", 6, "", 0, 0);
         IllegalStateException thrown =
                 assertThrows(IllegalStateException.class, () -> BENCH.model().flux(odd));
         assertTrue(thrown.getMessage().contains("comet"), thrown.getMessage());

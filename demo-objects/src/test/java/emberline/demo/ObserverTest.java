@@ -25,7 +25,8 @@ class ObserverTest {
                 false,
                 FluxScale.CGS,
                 true,
-                gaps);
+                gaps,
+                Fault.NONE);
     }
 
     private static double[] flat() {

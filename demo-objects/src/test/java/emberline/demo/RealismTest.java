@@ -1,34 +1,25 @@
 package emberline.demo;
 
 import static org.junit.jupiter.api.Assertions.assertTrue;
-import static org.junit.jupiter.api.Assumptions.assumeTrue;
 
-import de.siegmar.fastcsv.reader.CsvReader;
-import de.siegmar.fastcsv.reader.NamedCsvRecord;
-import emberline.measure.Measurement.Measured;
+import emberline.demo.RealObjects.RealObject;
 import emberline.measure.Measurements;
+import emberline.place.calibrated.Calibration;
 import java.io.IOException;
-import java.nio.charset.StandardCharsets;
-import java.nio.file.Files;
-import java.nio.file.Path;
-import java.util.ArrayList;
-import java.util.Arrays;
-import java.util.HashMap;
 import java.util.List;
-import java.util.Locale;
-import java.util.Map;
-import java.util.Optional;
+import java.util.function.Predicate;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 /**
- * The model beside real dwarfs: every index is measured by the product on both, and the model must
+ * The model beside real objects: every index is measured by the product on both, and the model must
  * lie within the distribution of real objects of its type. Real spectra are not part of this
- * project; without them the test is skipped. It writes its figures to {@code target/realism.csv}.
+ * project; without them the tests that need them are skipped. They write their figures to {@code
+ * target/realism-*.csv}.
  */
 class RealismTest {
-
-    private static final Path REAL =
-            Path.of(System.getProperty("emberline.root", ".."), "..", "shared", "spectra");
 
     /** Indices with windows of 10 nm and more, which every resolution from 75 on can measure. */
     private static final List<String> INDICES =
@@ -76,148 +67,164 @@ class RealismTest {
     private static final List<double[]> VERY_LOW =
             List.of(new double[] {9, 1}, new double[] {10.5, 1}, new double[] {13, 1.5});
 
-    private static final String NUMBER = "\\s*[+-]?[0-9.]+([eE][+-]?[0-9]+)?\\s*";
+    private static final List<double[]> T_DWARFS =
+            List.of(new double[] {22, 1}, new double[] {25, 1.25}, new double[] {27.5, 1.5});
 
     private static final int LEAST_OBJECTS = 4;
 
-    /**
-     * Two in three of a normal distribution lie within one sigma, nineteen in twenty within two.
-     */
-    private static final double LEAST_SHARE_WITHIN_TWO = 0.93;
-
     private static final Bench BENCH = new Bench();
 
-    /** A real dwarf and what the product measures on it. */
-    private record RealDwarf(double type, String gravity, Measurements measurements) {}
+    private static Measurements field(double type) {
+        return BENCH.measureDwarf(type, "FLD-G", "prism");
+    }
 
+    private static List<Measurements> near(
+            List<RealObject> objects, double[] at, Predicate<RealObject> which) {
+        return objects.stream()
+                .filter(which)
+                .filter(object -> Math.abs(object.type() - at[0]) <= at[1])
+                .map(RealObject::measurements)
+                .toList();
+    }
+
+    /** Two in three of a normal distribution lie within one sigma, 95% within two. */
     @Test
     void indicesOfTheModelLieWithinThoseOfRealDwarfs() throws IOException {
-        assumeTrue(
-                Files.isDirectory(REAL),
-                "no real spectra at " + REAL + ": realism of the demo model not checked");
-        List<RealDwarf> dwarfs = realDwarfs();
-        List<String> report = new ArrayList<>();
-        report.add("index,gravity,type,objects,real_median,real_sigma,model,deviation_sigma");
-        List<Double> deviations = new ArrayList<>();
-        FIELD.forEach(at -> compare(dwarfs, "", at, report, deviations));
-        VERY_LOW.forEach(at -> compare(dwarfs, "VL-G", at, report, deviations));
-        Files.write(Path.of("target", "realism.csv"), report);
-        assertTrue(deviations.size() > 150, "comparisons: " + deviations.size());
-        double within = deviations.stream().filter(x -> Math.abs(x) <= 2).count();
-        double share = within / deviations.size();
-        assertTrue(share >= LEAST_SHARE_WITHIN_TWO, "share within two sigma: " + share);
-    }
-
-    private static void compare(
-            List<RealDwarf> dwarfs,
-            String gravity,
-            double[] at,
-            List<String> report,
-            List<Double> deviations) {
-        Measurements model =
-                BENCH.measureDwarf(at[0], gravity.isEmpty() ? "FLD-G" : gravity, "prism");
-        for (String index : INDICES) {
-            double[] real =
-                    dwarfs.stream()
-                            .filter(d -> d.gravity.equals(gravity))
-                            .filter(d -> Math.abs(d.type - at[0]) <= at[1])
-                            .map(d -> d.measurements.measured(index))
-                            .flatMap(Optional::stream)
-                            .mapToDouble(Measured::value)
-                            .sorted()
-                            .toArray();
-            Optional<Measured> mine = model.measured(index);
-            if (real.length < LEAST_OBJECTS || mine.isEmpty()) {
-                continue;
-            }
-            double median = median(real);
-            double sigma =
-                    1.4826
-                            * median(
-                                    Arrays.stream(real)
-                                            .map(v -> Math.abs(v - median))
-                                            .sorted()
-                                            .toArray());
-            double floor = 0.01 * Math.max(1, Math.abs(median));
-            double deviation = (mine.get().value() - median) / Math.max(sigma, floor);
-            deviations.add(deviation);
-            report.add(
-                    String.format(
-                            Locale.ROOT,
-                            "%s,%s,%.1f,%d,%.4f,%.4f,%.4f,%.2f",
-                            index,
-                            gravity,
-                            at[0],
-                            real.length,
-                            median,
-                            sigma,
-                            mine.get().value(),
-                            deviation));
+        RealObjects.assumePresent();
+        List<RealObject> dwarfs =
+                RealObjects.read(
+                        BENCH,
+                        row ->
+                                row.getField("known_kind").equals("dwarf")
+                                        && row.getField("tier").matches("[AB]"));
+        IndexComparison comparison = new IndexComparison();
+        for (double[] at : FIELD) {
+            comparison.withObjects(
+                    "FLD-G " + at[0],
+                    INDICES,
+                    field(at[0]),
+                    near(dwarfs, at, dwarf -> dwarf.gravity().isEmpty()),
+                    LEAST_OBJECTS);
         }
+        for (double[] at : VERY_LOW) {
+            comparison.withObjects(
+                    "VL-G " + at[0],
+                    INDICES,
+                    BENCH.measureDwarf(at[0], "VL-G", "prism"),
+                    near(dwarfs, at, dwarf -> dwarf.gravity().equals("VL-G")),
+                    LEAST_OBJECTS);
+        }
+        comparison.write("realism-dwarfs.csv");
+        assertTrue(comparison.size() > 150, "comparisons: " + comparison.size());
+        assertTrue(comparison.shareWithin(2) >= 0.93, "share: " + comparison.shareWithin(2));
     }
 
-    private static double median(double[] sorted) {
-        int half = sorted.length / 2;
-        return sorted.length % 2 == 1 ? sorted[half] : (sorted[half - 1] + sorted[half]) / 2;
+    /** Noisy and doubtful spectra count too: there are hardly others. */
+    @Test
+    void indicesOfTheModelLieWithinThoseOfRealTDwarfs() throws IOException {
+        RealObjects.assumePresent();
+        List<RealObject> dwarfs =
+                RealObjects.read(
+                        BENCH,
+                        row ->
+                                row.getField("known_kind").equals("dwarf")
+                                        && row.getField("known_type_number")
+                                                .matches("2[0-9](\\.\\d)?"));
+        IndexComparison comparison = new IndexComparison();
+        for (double[] at : T_DWARFS) {
+            comparison.withObjects(
+                    "T " + at[0],
+                    INDICES,
+                    field(at[0]),
+                    near(dwarfs, at, dwarf -> true),
+                    LEAST_OBJECTS);
+        }
+        comparison.write("realism-t-dwarfs.csv");
+        assertTrue(comparison.size() > 60, "comparisons: " + comparison.size());
+        assertTrue(comparison.shareWithin(2) >= 0.8, "share: " + comparison.shareWithin(2));
     }
 
-    private static List<RealDwarf> realDwarfs() throws IOException {
-        List<RealDwarf> dwarfs = new ArrayList<>();
-        try (CsvReader<NamedCsvRecord> list =
-                CsvReader.builder().ofNamedCsvRecord(REAL.resolve("list.csv"))) {
-            for (NamedCsvRecord row : list) {
-                boolean usable =
-                        row.getField("known_kind").equals("dwarf")
-                                && row.getField("tier").matches("[AB]")
-                                && !row.getField("known_type_number").isEmpty();
-                if (usable) {
-                    spectrum(REAL.resolve(row.getField("spectrum")))
-                            .map(rows -> measured(row, rows))
-                            .ifPresent(dwarfs::add);
-                }
+    /** The loci were learned from real objects; those of T dwarfs lean on published relations. */
+    @Test
+    void indicesOfTheModelLieAlongTheCalibratedLoci() throws IOException {
+        Calibration calibration = Calibration.standard();
+        IndexComparison comparison = new IndexComparison();
+        for (double type : new double[] {6, 8, 10, 12, 14, 16, 18, 20, 22, 25, 27}) {
+            Measurements model = field(type);
+            for (String index : INDICES) {
+                calibration
+                        .expected(index, type, 0)
+                        .ifPresent(
+                                locus ->
+                                        comparison.withMean(
+                                                index,
+                                                "FLD-G " + type,
+                                                locus.mean(),
+                                                locus.scatter(),
+                                                model));
             }
         }
-        return dwarfs;
+        comparison.write("realism-loci.csv");
+        assertTrue(comparison.size() > 150, "comparisons: " + comparison.size());
+        assertTrue(comparison.shareWithin(2) >= 0.9, "share: " + comparison.shareWithin(2));
     }
 
-    private static RealDwarf measured(NamedCsvRecord row, double[][] spectrum) {
-        String stated = row.getField("resolution");
-        double[] micron = spectrum[0];
-        int half = micron.length / 2;
-        double sampled = micron[half] / (micron[half + 1] - micron[half]) / 2;
-        double resolvingPower = stated.isEmpty() ? sampled : Double.parseDouble(stated);
-        String gravity = row.getField("known_gravity");
-        return new RealDwarf(
-                Double.parseDouble(row.getField("known_type_number")),
-                gravity.equals("FLD-G") ? "" : gravity,
-                BENCH.measure(micron, spectrum[1], spectrum[2], resolvingPower));
+    /** Objects that are made by a recipe, beside real ones of that kind and type. */
+    @ParameterizedTest
+    @CsvSource({
+        "giant, 6, giant, M(5|5.5|6|7)[^eI]* ?III.*, 4, 0.9",
+        "giant_late, 7.5, giant, M(7|8|9|8-9)[^I]* ?III.*, 4, 0.9",
+        "carbon, 0, carbon, C.*, 5, 0.8",
+        "early, 0, early, [AF].* V, 4, 0.9"
+    })
+    void indicesOfRecipesLieWithinThoseOfRealObjects(
+            String recipe, double type, String kind, String published, int least, double share)
+            throws IOException {
+        RealObjects.assumePresent();
+        List<Measurements> real =
+                RealObjects.read(
+                                BENCH,
+                                row ->
+                                        row.getField("known_kind").equals(kind)
+                                                && row.getField("known_type").matches(published))
+                        .stream()
+                        .map(RealObject::measurements)
+                        .toList();
+        IndexComparison comparison = new IndexComparison();
+        comparison.withObjects(
+                recipe + " " + type,
+                INDICES,
+                BENCH.measureRecipe(recipe, type, "prism"),
+                real,
+                least);
+        comparison.write("realism-" + recipe + "-" + type + ".csv");
+        assertTrue(comparison.size() > 15, "comparisons: " + comparison.size());
+        assertTrue(comparison.shareWithin(2) >= share, "share: " + comparison.shareWithin(2));
     }
 
-    /** Wavelength, flux and a nominal sigma; empty where the near infrared is not covered. */
-    private static Optional<double[][]> spectrum(Path file) throws IOException {
-        Map<Integer, double[]> rows = new HashMap<>();
-        double last = 0;
-        for (String line : Files.readAllLines(file, StandardCharsets.ISO_8859_1)) {
-            String[] cells = line.split(",", -1);
-            if (cells.length >= 2 && cells[0].matches(NUMBER)) {
-                double micron = Double.parseDouble(cells[0]);
-                double flux = cells[1].matches(NUMBER) ? Double.parseDouble(cells[1]) : Double.NaN;
-                if (micron > last) {
-                    rows.put(rows.size(), new double[] {micron, flux, 0.03 * Math.abs(flux)});
-                    last = micron;
-                }
-            }
-        }
-        if (rows.size() < 50 || last < 1.3) {
-            return Optional.empty();
-        }
-        double[][] columns = new double[3][rows.size()];
-        rows.forEach(
-                (i, row) -> {
-                    for (int k = 0; k < 3; k++) {
-                        columns[k][i] = row[k];
-                    }
-                });
-        return Optional.of(columns);
+    /**
+     * There is one real subdwarf, noisy and of doubtful type, so only the sense is held in which
+     * its indices differ from those of dwarfs of solar metallicity.
+     */
+    @ParameterizedTest
+    @ValueSource(strings = {"burgasser2006/k-j", "burgasser2006b/k-h", "burgasser2002/h-j"})
+    void aMetalPoorLDwarfIsBlueAsTheRealOneIs(String index) throws IOException {
+        RealObjects.assumePresent();
+        double real =
+                RealObjects.read(BENCH, row -> row.getField("known_type").startsWith("sdL"))
+                        .get(0)
+                        .measurements()
+                        .measured(index)
+                        .orElseThrow()
+                        .value();
+        double solar = Calibration.standard().expected(index, 17, 0).orElseThrow().mean();
+        double model = value(BENCH.measureRecipe("sd", 17, "prism"), index);
+        double difference = model - value(field(17), index);
+        assertTrue(real < solar, "real " + real + ", solar " + solar);
+        assertTrue(difference < -0.02, "model: " + difference);
+    }
+
+    private static double value(Measurements measurements, String index) {
+        return measurements.measured(index).orElseThrow().value();
     }
 }

@@ -94,6 +94,9 @@ class SparkSurveyTest {
         List<String> columns = new CandidateListReader().read(LIST).columns();
         for (ListedCandidate listed : new CandidateListReader().read(LIST).rows()) {
             Candidate candidate = listed.candidate();
+            if (candidate.spectra().size() != 1) {
+                continue;
+            }
             Observation read = reader.read(beside, candidate.spectra().get(0));
             // What other files say beside their arrays would not be in the table.
             if (read.findings().isEmpty() && read.resolvingPower().isEmpty()) {
