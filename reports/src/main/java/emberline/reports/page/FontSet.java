@@ -6,6 +6,7 @@ import java.awt.Font;
 import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.util.EnumMap;
+import java.util.HashMap;
 import java.util.Map;
 import org.apache.fontbox.ttf.CmapLookup;
 import org.apache.fontbox.ttf.TrueTypeFont;
@@ -22,10 +23,14 @@ final class FontSet {
     private final Map<Face, PDFont> fonts = new EnumMap<>(Face.class);
     private final Map<Face, CmapLookup> glyphs = new EnumMap<>(Face.class);
 
+    /** Widths of single characters, in thousandths of the size, once they are asked for. */
+    private final Map<Face, Map<Integer, Float>> widths = new EnumMap<>(Face.class);
+
     FontSet(PDDocument document, Map<Face, TrueTypeFont> files) throws IOException {
         for (Map.Entry<Face, TrueTypeFont> file : files.entrySet()) {
             fonts.put(file.getKey(), PDType0Font.load(document, file.getValue(), true));
             glyphs.put(file.getKey(), file.getValue().getUnicodeCmapLookup());
+            widths.put(file.getKey(), new HashMap<>());
         }
     }
 
@@ -59,10 +64,26 @@ final class FontSet {
         return clean.toString();
     }
 
-    /** The width of a text that the font can write (point). */
+    /** The width of a text that the font can write (point): its characters stand side by side. */
     float width(Face face, String text, float sizePoint) {
+        Map<Integer, Float> ofFace = widths.get(face);
+        float sum = 0;
+        for (int i = 0; i < text.length(); ) {
+            int sign = text.codePointAt(i);
+            Float width = ofFace.get(sign);
+            if (width == null) {
+                width = measured(face, sign);
+                ofFace.put(sign, width);
+            }
+            sum += width;
+            i += Character.charCount(sign);
+        }
+        return sum / 1000 * sizePoint;
+    }
+
+    private float measured(Face face, int sign) {
         try {
-            return fonts.get(face).getStringWidth(text) / 1000 * sizePoint;
+            return fonts.get(face).getStringWidth(Character.toString(sign));
         } catch (IOException e) {
             throw new UncheckedIOException(e);
         }

@@ -15,31 +15,39 @@ final class Lines {
     }
 
     float width(Style style, String text) {
-        return fonts.width(style.face(), fonts.clean(style.face(), text), style.sizePoint());
+        return cleanWidth(style, fonts.clean(style.face(), text));
+    }
+
+    private float cleanWidth(Style style, String clean) {
+        return fonts.width(style.face(), clean, style.sizePoint());
     }
 
     /** Lines of at most a width; a word that is longer is broken. At least one line. */
     List<String> wrap(Style style, String text, float width) {
         List<String> lines = new ArrayList<>();
         StringBuilder line = new StringBuilder();
+        float reached = 0;
+        float blank = cleanWidth(style, " ");
         for (String word : fonts.clean(style.face(), text).split(" +", -1)) {
-            String rest = word;
-            String joined = line.isEmpty() ? rest : line + " " + rest;
-            if (width(style, joined) <= width) {
-                line.setLength(0);
-                line.append(joined);
+            float wide = cleanWidth(style, word);
+            if (!line.isEmpty() && reached + blank + wide <= width) {
+                line.append(' ').append(word);
+                reached += blank + wide;
                 continue;
             }
             if (!line.isEmpty()) {
                 lines.add(line.toString());
                 line.setLength(0);
             }
-            while (width(style, rest) > width && rest.length() > 1) {
+            String rest = word;
+            while (wide > width && rest.length() > 1) {
                 int end = fitting(style, rest, width);
                 lines.add(rest.substring(0, end));
                 rest = rest.substring(end);
+                wide = cleanWidth(style, rest);
             }
             line.append(rest);
+            reached = wide;
         }
         if (!line.isEmpty() || lines.isEmpty()) {
             lines.add(line.toString());
@@ -63,11 +71,11 @@ final class Lines {
     /** The text, or as much of it as fits with an ellipsis. */
     String fit(Style style, String text, float width) {
         String clean = fonts.clean(style.face(), text);
-        if (width(style, clean) <= width) {
+        if (cleanWidth(style, clean) <= width) {
             return clean;
         }
         int end = clean.length();
-        while (end > 0 && width(style, clean.substring(0, end) + ELLIPSIS) > width) {
+        while (end > 0 && cleanWidth(style, clean.substring(0, end) + ELLIPSIS) > width) {
             end -= Character.isLowSurrogate(clean.charAt(end - 1)) ? 2 : 1;
         }
         return clean.substring(0, Math.max(0, end)).stripTrailing() + ELLIPSIS;
@@ -75,7 +83,7 @@ final class Lines {
 
     private int fitting(Style style, String word, float width) {
         int end = 1;
-        while (end < word.length() && width(style, word.substring(0, end + 1)) <= width) {
+        while (end < word.length() && cleanWidth(style, word.substring(0, end + 1)) <= width) {
             end++;
         }
         boolean split = Character.isHighSurrogate(word.charAt(end - 1)) && end < word.length();
