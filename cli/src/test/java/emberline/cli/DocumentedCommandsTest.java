@@ -31,7 +31,10 @@ class DocumentedCommandsTest {
         for (FencedBlock block : document.blocks()) {
             if (!block.isConsole()) {
                 calls.addAll(
-                        List.of(String.join("\n", block.lines()).replace("\\\n", " ").split("\n", -1)));
+                        List.of(
+                                String.join("\n", block.lines())
+                                        .replace("\\\n", " ")
+                                        .split("\n", -1)));
             }
         }
         return calls;

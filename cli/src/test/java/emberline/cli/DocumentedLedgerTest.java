@@ -35,8 +35,7 @@ class DocumentedLedgerTest {
         Files.writeString(
                 list, "name,j_mag,h_mag,k_mag,w1_mag,w2_mag\nX,15.4,14.5,13.9,13.2,12.9\n");
         Path out = folder.resolve("out");
-        CommandRun run =
-                CommandRun.of("sort", list, "--no-reports", "--no-objects", "--out", out);
+        CommandRun run = CommandRun.of("sort", list, "--no-reports", "--no-objects", "--out", out);
         assertEquals(ExitCode.DONE, run.code(), run.err());
         return DriverManager.getConnection("jdbc:sqlite:" + out.resolve("ledger.sqlite"));
     }
