@@ -89,10 +89,22 @@ public final class KindTrainer {
     /**
      * Whether there is enough to learn from.
      *
-     * @return true if some coverage has late dwarfs and other objects enough
+     * @return true if there are late dwarfs and other objects for every fold, and some coverage has
+     *     spectra of both enough
      */
     public boolean isEnough() {
-        return Coverage.forests().stream().anyMatch(c -> isEnough(fitting(c)));
+        return objects(true) >= FOLDS
+                && objects(false) >= FOLDS
+                && Coverage.forests().stream().anyMatch(c -> isEnough(fitting(c)));
+    }
+
+    /** How many objects, whatever the number of their spectra, are late dwarfs or are none. */
+    private long objects(boolean lateDwarfs) {
+        return rows.stream()
+                .filter(row -> (row.kind() == ObjectKind.LATE_DWARF) == lateDwarfs)
+                .map(TrainingRow::group)
+                .distinct()
+                .count();
     }
 
     private List<TrainingRow> fitting(Coverage coverage) {

@@ -74,6 +74,9 @@ public final class UnseenSummary {
             in68 += type.lo68() <= known && known <= type.hi68() ? 1 : 0;
             in95 += type.lo95() <= known && known <= type.hi95() ? 1 : 0;
         }
+        if (placed.isEmpty()) {
+            return String.format(Locale.ROOT, "  %-24s   0 of %3d placed%n", name, chosen.size());
+        }
         double n = placed.size();
         Arrays.sort(off);
         return String.format(
@@ -85,7 +88,7 @@ public final class UnseenSummary {
                 chosen.size(),
                 sum / n,
                 Math.sqrt(squares / n),
-                off.length == 0 ? Double.NaN : off[off.length / 2],
+                off[off.length / 2],
                 in68 / n,
                 in95 / n);
     }
