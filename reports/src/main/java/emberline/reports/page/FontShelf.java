@@ -28,7 +28,9 @@ final class FontShelf {
         Map<Face, TrueTypeFont> parsed = new EnumMap<>(Face.class);
         for (Face face : Face.values()) {
             try (InputStream stream = face.open()) {
-                parsed.put(face, new TTFParser().parse(new RandomAccessReadBuffer(stream)));
+                TrueTypeFont font = new TTFParser().parse(new RandomAccessReadBuffer(stream));
+                font.setEnableGsub(false); // ligatures are as wide as nobody measured
+                parsed.put(face, font);
             }
         }
         return parsed;
