@@ -74,6 +74,12 @@ final class CalibrateCommand implements Callable<Integer> {
                             if (result.status() == Status.FAILED) {
                                 failed++;
                                 SingleSpectra.tellFailure(result, spec.commandLine().getErr());
+                            } else if (result.best().isEmpty()) {
+                                spec.commandLine()
+                                        .getErr()
+                                        .println(
+                                                result.candidate().name()
+                                                        + ": left out: no spectrum to measure");
                             }
                             maker.add(result)
                                     .ifPresent(

@@ -1,11 +1,15 @@
 package emberline.reports.page;
 
+import emberline.catalogue.MetallicityClass;
 import emberline.judge.Decision;
 import emberline.judge.Judgement;
 import emberline.place.GravityVerdict;
 import emberline.place.Placement;
 import emberline.place.RelationEstimate.Use;
 import emberline.place.TypeEstimate;
+import emberline.place.metallicity.MetallicityVerdict;
+import emberline.place.pair.PairVerdict;
+import emberline.place.pair.PairVerdict.Strength;
 import emberline.prepare.BandSignal;
 import emberline.reports.attach.Digits;
 import emberline.reports.attach.TypeText;
@@ -40,6 +44,8 @@ public final class FindingSentence {
                     .append(witnesses(placement))
                     .append("; ")
                     .append(gravity(placement.gravity()));
+            metallicity(placement.metallicity()).ifPresent(m -> text.append("; ").append(m));
+            pair(placement.pair()).ifPresent(p -> text.append("; ").append(p));
             result.judgement().ifPresent(j -> text.append("; ").append(decision(j)));
         } else {
             text.append("No spectral type: ").append(placement.typeReason());
@@ -115,6 +121,27 @@ public final class FindingSentence {
                                                 + " by "
                                                 + count(scores, "published score"))
                         .orElse("");
+    }
+
+    /** Said where an object is poor in metals. */
+    static Optional<String> metallicity(MetallicityVerdict verdict) {
+        return verdict.adopted()
+                .filter(found -> found != MetallicityClass.Name.DWARF)
+                .map(found -> "metal-poor, class " + found.prefix());
+    }
+
+    /** Said where the criteria point to an unresolved pair. */
+    static Optional<String> pair(PairVerdict verdict) {
+        return verdict.strength()
+                .filter(strength -> strength != Strength.NONE)
+                .map(
+                        strength ->
+                                (strength == Strength.CANDIDATE ? "perhaps" : "weak hint of")
+                                        + " an unresolved pair ("
+                                        + verdict.criteriaMet()
+                                        + " of "
+                                        + verdict.criteriaJudged()
+                                        + " criteria)");
     }
 
     private static Optional<String> signal(ObjectResult result) {

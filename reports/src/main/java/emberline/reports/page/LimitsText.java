@@ -20,9 +20,12 @@ final class LimitsText {
 
     static String of(ObjectResult result) {
         List<String> sentences = new ArrayList<>();
+        boolean typed = result.placement().flatMap(Placement::type).isPresent();
         sentences.add(
-                "The type supposes a single late dwarf of near-solar metallicity. "
-                        + result.placement().map(LimitsText::kind).orElse(""));
+                typed
+                        ? "The type supposes a single late dwarf of near-solar metallicity."
+                        : "No type is given; what is shown of types supposes a single late dwarf.");
+        result.placement().map(LimitsText::kind).ifPresent(sentences::add);
         boolean judged =
                 result.placement().map(p -> p.gravity().gravityClass().isPresent()).orElse(false);
         sentences.add(
@@ -67,7 +70,7 @@ final class LimitsText {
         OptionalDouble pLateDwarf = placement.kind().probability(ObjectKind.LATE_DWARF);
         return pLateDwarf.isEmpty()
                 ? "The kind of object is not judged: " + placement.kind().reason() + "."
-                : "That it is a late dwarf was judged by likeness to public spectra (P "
+                : "The kind was judged by likeness to public spectra (late dwarf: P "
                         + FindingSentence.probability(pLateDwarf.getAsDouble())
                         + ", for about half of all candidates being late dwarfs); subdwarfs and"
                         + " unresolved pairs count as late dwarfs there.";

@@ -3,8 +3,16 @@ package emberline.reports.page;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import emberline.catalogue.MetallicityClass.Name;
+import emberline.place.metallicity.MetallicityVerdict;
+import emberline.place.pair.PairVerdict;
+import emberline.place.pair.PairVerdict.Strength;
 import emberline.reports.Samples;
 import emberline.reports.Samples.Bands;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
 
 class FindingSentenceTest {
@@ -34,6 +42,34 @@ class FindingSentenceTest {
         assertEquals(
                 "Nothing was measured: no such file.",
                 FindingSentence.of(Samples.failed("x", "no such file")));
+    }
+
+    @Test
+    void pairsAndMetalPoorObjectsAreSaid() {
+        assertEquals(
+                Optional.of("perhaps an unresolved pair (4 of 6 criteria)"),
+                FindingSentence.pair(pair(Strength.CANDIDATE, 4)));
+        assertEquals(
+                Optional.of("weak hint of an unresolved pair (2 of 6 criteria)"),
+                FindingSentence.pair(pair(Strength.WEAK, 2)));
+        assertEquals(Optional.empty(), FindingSentence.pair(pair(Strength.NONE, 0)));
+        assertEquals(Optional.empty(), FindingSentence.pair(PairVerdict.notJudged("too early")));
+        assertEquals(
+                Optional.of("metal-poor, class esd"),
+                FindingSentence.metallicity(metallicity(Optional.of(Name.EXTREME_SUBDWARF))));
+        assertEquals(
+                Optional.empty(),
+                FindingSentence.metallicity(metallicity(Optional.of(Name.DWARF))));
+        assertEquals(Optional.empty(), FindingSentence.metallicity(metallicity(Optional.empty())));
+    }
+
+    private static PairVerdict pair(Strength strength, int met) {
+        return new PairVerdict(
+                Optional.of(strength), met, 6, OptionalDouble.of(0.5), "", List.of());
+    }
+
+    private static MetallicityVerdict metallicity(Optional<Name> adopted) {
+        return new MetallicityVerdict(adopted, "", Map.of(), List.of(), "", "");
     }
 
     @Test
