@@ -22,7 +22,7 @@ import org.junit.jupiter.api.Test;
 
 /**
  * Types from real colours against published types from spectra: J, H and K (2MASS) of late-type
- * members of Upper Scorpius, table 1 of Slesnick, Carpenter & Hillenbrand 2006, AJ 131, 3016. It is
+ * members of Upper Scorpius, table 1 of Slesnick, Carpenter and Hillenbrand 2006, AJ 131, 3016. It is
  * the hardest case: three bands only, young objects, dust of the region before them; errors of 0.03
  * mag are supposed, the table gives none.
  */
