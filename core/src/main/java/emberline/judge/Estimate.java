@@ -44,25 +44,27 @@ public record Estimate(double median, double lo68, double hi68, double lo95, dou
      * @param edges edges of the cells, increasing, one more than weights
      * @param weights not negative, with a positive sum
      * @return the estimate
+     * @throws IllegalArgumentException if the sum is not positive and finite
      */
     static Estimate of(double[] edges, double[] weights) {
         double sum = 0;
         for (double weight : weights) {
             sum += weight;
         }
+        if (!(sum > 0) || Double.isInfinite(sum)) {
+            throw new IllegalArgumentException(
+                    "weights with the sum " + sum + ": expected a positive finite sum");
+        }
         double[] at = new double[SHARES.length];
         double below = 0;
         int next = 0;
-        for (int i = 0; i < weights.length && next < at.length; i++) {
+        for (int i = 0; next < at.length; i++) {
             double share = weights[i] / sum;
             while (next < at.length && below + share >= SHARES[next] && share > 0) {
                 at[next] = edges[i] + (edges[i + 1] - edges[i]) * (SHARES[next] - below) / share;
                 next++;
             }
             below += share;
-        }
-        for (; next < at.length; next++) {
-            at[next] = edges[edges.length - 1];
         }
         return new Estimate(at[2], at[1], at[3], at[0], at[4]);
     }

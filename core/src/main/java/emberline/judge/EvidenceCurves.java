@@ -79,20 +79,12 @@ final class EvidenceCurves {
         return evidence;
     }
 
-    double meanType() {
-        return meanType;
-    }
-
     double lithiumChance() {
         return lithiumChance;
     }
 
     Optional<Kinematics> kinematics() {
         return kinematics;
-    }
-
-    double velocityError() {
-        return velocityError;
     }
 
     /** The curves at one age. */

@@ -3,31 +3,29 @@ package emberline.judge;
 /** The pieces of evidence, in the order in which a ledger adds them. */
 public enum Piece {
     /** The spectral type, by way of the effective temperature. */
-    TYPE(0, "spectral type", true),
+    TYPE(0, "spectral type"),
     /** The luminosity from a parallax and a magnitude. */
-    LUMINOSITY(1, "luminosity", true),
+    LUMINOSITY(1, "luminosity"),
     /** An age that is stated. */
-    AGE(2, "stated age", false),
+    AGE(2, "stated age"),
     /** The gravity class. */
-    GRAVITY(3, "gravity class", false),
+    GRAVITY(3, "gravity class"),
     /** Li I 6708. */
-    LITHIUM(4, "lithium", true),
+    LITHIUM(4, "lithium"),
     /** H alpha. */
-    HALPHA(5, "H alpha", false),
+    HALPHA(5, "H alpha"),
     /** The tangential velocity. */
-    VELOCITY(6, "tangential velocity", false);
+    VELOCITY(6, "tangential velocity");
 
     /** Number of pieces. */
     static final int COUNT = 7;
 
     private final int order;
     private final String label;
-    private final boolean tellsMass;
 
-    Piece(int order, String label, boolean tellsMass) {
+    Piece(int order, String label) {
         this.order = order;
         this.label = label;
-        this.tellsMass = tellsMass;
     }
 
     /**
@@ -42,10 +40,5 @@ public enum Piece {
     /** Place in the order, from 0. */
     int order() {
         return order;
-    }
-
-    /** Whether it is more than another way to tell the age. */
-    boolean tellsMass() {
-        return tellsMass;
     }
 }

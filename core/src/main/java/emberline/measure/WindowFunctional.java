@@ -43,8 +43,4 @@ record WindowFunctional(Window window, OptionalDouble smoothedTo, Over measure) 
             return this != MEAN && this != MEDIAN;
         }
     }
-
-    static WindowFunctional mean(Window window, OptionalDouble smoothedTo) {
-        return new WindowFunctional(window, smoothedTo, Over.MEAN);
-    }
 }

@@ -141,10 +141,6 @@ final class WindowOperator {
         }
     }
 
-    int size() {
-        return weights.length;
-    }
-
     WindowFunctional functional(int row) {
         return functionals.get(row);
     }

@@ -13,6 +13,7 @@ import java.util.Optional;
 import org.apache.commons.rng.UniformRandomProvider;
 import org.apache.commons.rng.sampling.distribution.ZigguratSampler;
 import org.apache.commons.rng.simple.RandomSource;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 
 /**
@@ -92,6 +93,7 @@ class CalibrationTest {
         return Optional.of(evidence);
     }
 
+    @Tag("slow")
     @Test
     void theStatedProbabilityIsTheShare() {
         double[] massWeights = new double[table.masses()];
@@ -129,6 +131,7 @@ class CalibrationTest {
     }
 
     /** A parallax on the true luminosity: the same test where the luminosity counts. */
+    @Tag("slow")
     @Test
     void withAParallaxToo() {
         double[] massWeights = new double[table.masses()];

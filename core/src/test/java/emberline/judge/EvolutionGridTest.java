@@ -123,4 +123,35 @@ class EvolutionGridTest {
         assertEquals(1, curve.at(2.5), 1e-12);
         assertEquals(9, curve.at(5), 1e-12);
     }
+
+    /**
+     * Steps 1 and 2 over widths 1 and 2: the slope between them is (5 + 4) / (5 / 1 + 4 / 2) = 9/7
+     * by the harmonic mean of Fritsch and Butland. The Hermite cubic half way up the first step is
+     * 1/2 + (1 - 9/7) / 8; beyond the ends it goes on along the outermost steps.
+     */
+    @Test
+    void slopesAreHarmonicMeans() {
+        MonotoneCurve curve = new MonotoneCurve(new double[] {0, 1, 3}, new double[] {0, 1, 5});
+        assertEquals(0.5 + (1 - 9.0 / 7) / 8, curve.at(0.5), 1e-12);
+        assertEquals(1, curve.at(1), 1e-12);
+        // t = 1/4 on the second step: 27/32 of 1, 5/32 of 5, slopes 9/7 and 2 times width 2
+        assertEquals(
+                27.0 / 32 + 25.0 / 32 + 2 * 9.0 / 7 * 9 / 64 - 2 * 2 * 3.0 / 64,
+                curve.at(1.5),
+                1e-12);
+        assertEquals(-1, curve.at(-1), 1e-12);
+        assertEquals(9, curve.at(5), 1e-12);
+        assertEquals(5, curve.at(3), 1e-12);
+    }
+
+    /** Depletion is kept as log10 of minus its natural logarithm, cut where all or none is left. */
+    @Test
+    void lithiumLeftFollowsFromTheColumn() {
+        assertEquals(Math.exp(-1), EvolutionGrid.lithiumLeft(0), 1e-12);
+        assertEquals(1, EvolutionGrid.lithiumLeft(-3));
+        assertEquals(Math.exp(-0.01), EvolutionGrid.lithiumLeft(-2), 1e-12);
+        assertEquals(1, EvolutionGrid.lithiumLeft(at(MERGED, Column.LITHIUM, 100, 0.02)));
+        assertEquals(0, EvolutionGrid.lithiumLeft(at(MERGED, Column.LITHIUM, 5000, 0.1)), 1e-6);
+        assertEquals("DUSTY00", EvolutionGrid.Name.DUSTY00.label());
+    }
 }

@@ -11,13 +11,14 @@ import emberline.spectrum.SpectralType;
 import java.io.IOException;
 import java.util.Arrays;
 import java.util.Optional;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
 class JudgeTest {
 
-    private static final Judge JUDGE = new Judge(Judging.withDefaults());
+    private final Judge judge = new Judge(Judging.withDefaults());
     private static final double JUPITERS_PER_SUN = 1047.57;
 
     static Evidence evidence(String type, double sigma, String gravity) {
@@ -55,7 +56,7 @@ class JudgeTest {
         int within = 0;
         int decided = 0;
         for (NamedCsvRecord row : PublishedRows.of("judged-objects.csv")) {
-            Judgement judgement = JUDGE.judge(evidence(row));
+            Judgement judgement = judge.judge(evidence(row));
             if (!row.getField("mass_mjup").isBlank()) {
                 Estimate mass = judgement.massMsun().times(JUPITERS_PER_SUN);
                 double known = PublishedRows.number(row, "mass_mjup");
@@ -87,7 +88,7 @@ class JudgeTest {
     void probabilitiesAgreeWithAnIndependentCalculation() throws IOException {
         for (NamedCsvRecord row : PublishedRows.of("judged-types.csv")) {
             Judgement judgement =
-                    JUDGE.judge(
+                    judge.judge(
                             evidence(
                                     row.getField("type"),
                                     PublishedRows.number(row, "type_sigma"),
@@ -132,7 +133,7 @@ class JudgeTest {
         if (Boolean.TRUE.equals(lithium)) {
             evidence = evidence.withLithium(LithiumTest.seen());
         }
-        Judgement judgement = JUDGE.judge(evidence);
+        Judgement judgement = judge.judge(evidence);
         assertEquals(decision, judgement.decision());
         double p = judgement.limits().pSubstellar();
         assertTrue(p >= low && p <= high, "p = " + p);
@@ -143,9 +144,10 @@ class JudgeTest {
     @CsvSource({"L2", "L3", "L5", "L6", "L8"})
     void lithiumSettlesCoolTypes(String type) {
         Evidence seen = evidence(type, 0.5, "").withLithium(LithiumTest.seen());
-        assertTrue(JUDGE.judge(seen).limits().pSubstellar() > 0.99);
+        assertTrue(judge.judge(seen).limits().pSubstellar() > 0.99);
     }
 
+    @Tag("slow")
     @Test
     void laterTypeNeverLowersAndOlderAgeNeverRaises() {
         String[] ages = {"20..30Myr", "100..130Myr", "500..700Myr", "2..3Gyr", "8..10Gyr"};
@@ -168,19 +170,20 @@ class JudgeTest {
     }
 
     /** Halving the steps of mass and age moves no probability by 0.005. */
+    @Tag("slow")
     @Test
     void theGridIsFineEnough() {
         Judge fine = new Judge(Judging.withDefaults(), 2);
         for (double type = 6; type <= 29; type += 1) {
             for (GravityClass gravity : GravityClass.values()) {
                 Evidence evidence = Evidence.ofType(type, 0.5, Optional.of(gravity));
-                assertNear(fine.judge(evidence), JUDGE.judge(evidence), "type " + type);
+                assertNear(fine.judge(evidence), judge.judge(evidence), "type " + type);
             }
             Evidence aged =
                     Evidence.ofType(type, 0.2, Optional.empty())
                             .withAge(AgeStatement.parse("120+-8Myr"))
                             .withLithium(LithiumTest.seen());
-            assertNear(fine.judge(aged), JUDGE.judge(aged), "type " + type + " at 120 Myr");
+            assertNear(fine.judge(aged), judge.judge(aged), "type " + type + " at 120 Myr");
         }
     }
 
@@ -196,13 +199,13 @@ class JudgeTest {
 
     @Test
     void whatIsNotKnownIsSaid() {
-        Judgement field = JUDGE.judge(evidence("M8", 0.5, ""));
+        Judgement field = judge.judge(evidence("M8", 0.5, ""));
         assertTrue(field.ageWords().startsWith("no age information"), field.ageWords());
-        Judgement young = JUDGE.judge(evidence("L0", 0.5, "VL-G"));
+        Judgement young = judge.judge(evidence("L0", 0.5, "VL-G"));
         assertTrue(young.age().isTold() && young.age().pYoung() > 0.8);
         assertFalse(young.ageWords().contains("no age"));
         assertTrue(
-                JUDGE.judge(evidence("M1", 0.5, "")).findings().stream()
+                judge.judge(evidence("M1", 0.5, "")).findings().stream()
                         .anyMatch(f -> f.code().equals("type-off-relations")));
     }
 
@@ -224,9 +227,9 @@ class JudgeTest {
         Evidence uninformed = Evidence.of(NormalType.posterior(10, 0.5, local), local);
         Evidence unjudged = Evidence.of(NormalType.posterior(10, 0.5, nothing), java.util.Map.of());
         assertEquals(
-                JUDGE.judge(unjudged).limits().pSubstellar(),
-                JUDGE.judge(uninformed).limits().pSubstellar(),
+                judge.judge(unjudged).limits().pSubstellar(),
+                judge.judge(uninformed).limits().pSubstellar(),
                 1e-9);
-        assertTrue(JUDGE.judge(flat).age().pYoung() > 3 * JUDGE.judge(unjudged).age().pYoung());
+        assertTrue(judge.judge(flat).age().pYoung() > 3 * judge.judge(unjudged).age().pYoung());
     }
 }

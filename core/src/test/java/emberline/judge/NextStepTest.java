@@ -2,6 +2,7 @@ package emberline.judge;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.place.GravityClass;
@@ -10,11 +11,12 @@ import emberline.spectrum.MagnitudeBand;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
 
 class NextStepTest {
 
-    private static final Judge JUDGE =
+    private final Judge judge =
             new Judge(
                     Judging.withDefaults()
                             .withAims(Aim.parse("substellar,young,coolest,metal-poor,nearby")));
@@ -45,10 +47,10 @@ class NextStepTest {
     @Test
     void theGainIsThatOfJudgingBothOutcomes() {
         Evidence before = Evidence.ofType(12, 0.5, Optional.of(GravityClass.INT_G));
-        Judgement now = JUDGE.judge(before);
+        Judgement now = judge.judge(before);
         double p = now.limits().pSubstellar();
-        double seen = JUDGE.judge(test(before, LithiumTest.Outcome.SEEN)).limits().pSubstellar();
-        double not = JUDGE.judge(test(before, LithiumTest.Outcome.NOT_SEEN)).limits().pSubstellar();
+        double seen = judge.judge(test(before, LithiumTest.Outcome.SEEN)).limits().pSubstellar();
+        double not = judge.judge(test(before, LithiumTest.Outcome.NOT_SEEN)).limits().pSubstellar();
         double pSeen = (p - not) / (seen - not);
         assertTrue(pSeen > 0 && pSeen < 1, "p(seen) " + pSeen);
         double gain = entropy(p) - pSeen * entropy(seen) - (1 - pSeen) * entropy(not);
@@ -71,18 +73,18 @@ class NextStepTest {
     @Test
     void theGravityGainIsThatOfJudgingEachClass() {
         Evidence unjudged = Evidence.ofType(11, 0.4, Optional.empty());
-        double p = JUDGE.judge(unjudged).age().pYoung();
+        double p = judge.judge(unjudged).age().pYoung();
         NextStep potassium =
-                step(JUDGE.judge(unjudged), FollowUp.POTASSIUM, Aim.YOUNG).orElseThrow();
+                step(judge.judge(unjudged), FollowUp.POTASSIUM, Aim.YOUNG).orElseThrow();
         double most = 0;
         for (GravityClass gravity : GravityClass.values()) {
             double after =
-                    JUDGE.judge(Evidence.ofType(11, 0.4, Optional.of(gravity))).age().pYoung();
+                    judge.judge(Evidence.ofType(11, 0.4, Optional.of(gravity))).age().pYoung();
             most = Math.max(most, Math.abs(after - p));
         }
         assertTrue(potassium.gainBits() > 0 && potassium.gainBits() < entropy(p));
         assertTrue(most > 0.5, "the class matters: " + most);
-        Judgement sure = JUDGE.judge(Evidence.ofType(11, 0.4, Optional.of(GravityClass.VL_G)));
+        Judgement sure = judge.judge(Evidence.ofType(11, 0.4, Optional.of(GravityClass.VL_G)));
         double left = step(sure, FollowUp.POTASSIUM, Aim.YOUNG).orElseThrow().gainBits();
         assertEquals(0, left, 1e-9, "a class that is sure cannot be told again");
     }
@@ -90,7 +92,7 @@ class NextStepTest {
     @Test
     void nothingIsRecommendedThatCannotChangeTheDecision() {
         for (double type : new double[] {4, 18, 22, 27}) {
-            Judgement judgement = JUDGE.judge(Evidence.ofType(type, 0.3, Optional.empty()));
+            Judgement judgement = judge.judge(Evidence.ofType(type, 0.3, Optional.empty()));
             assertTrue(
                     judgement.nextSteps().stream()
                             .filter(s -> s.aim() == Aim.SUBSTELLAR)
@@ -109,13 +111,13 @@ class NextStepTest {
                         .withLithium(LithiumTest.notSeen(0.2))
                         .withPhotometry(Map.of(MagnitudeBand.H_2MASS, new Magnitude(14, 0.05)))
                         .withAstrometry(Astrometry.ofParallax(50, 0.5));
-        Judgement judgement = JUDGE.judge(tested);
+        Judgement judgement = judge.judge(tested);
         assertTrue(step(judgement, FollowUp.LITHIUM, Aim.SUBSTELLAR).isEmpty());
         assertTrue(step(judgement, FollowUp.PARALLAX, Aim.SUBSTELLAR).isEmpty());
         assertTrue(step(judgement, FollowUp.PARALLAX, Aim.NEARBY).isEmpty());
         Evidence shallow =
                 Evidence.ofType(12, 0.5, Optional.empty()).withLithium(LithiumTest.notSeen(20));
-        assertTrue(step(JUDGE.judge(shallow), FollowUp.LITHIUM, Aim.SUBSTELLAR).isPresent());
+        assertTrue(step(judge.judge(shallow), FollowUp.LITHIUM, Aim.SUBSTELLAR).isPresent());
     }
 
     @Test
@@ -129,7 +131,7 @@ class NextStepTest {
         assertTrue(byCool.judge(cool).priority().score() > byCool.judge(young).priority().score());
         assertTrue(byYouth.judge(young).priority().reason().contains("150 Myr"));
         Judgement fast =
-                JUDGE.judge(
+                judge.judge(
                         Evidence.ofType(11, 0.5, Optional.empty())
                                 .withMetalPoor(0.9)
                                 .withPhotometry(
@@ -172,5 +174,92 @@ class NextStepTest {
             assertTrue(refused, bad);
         }
         assertFalse(Aim.parse("nearby").isEmpty());
+    }
+
+    @Test
+    void wrongAimsAreNamed() {
+        Map<String, String> messages =
+                Map.of(
+                        "hot", "aim 'hot': expected substellar, young, coolest",
+                        "young=x", "aim 'young=x': expected a number after =",
+                        "young=-1", "aim 'young=-1': expected a positive weight",
+                        "young=0", "aim 'young=0': expected a positive weight",
+                        "young=Infinity", "aim 'young=Infinity': expected a positive weight");
+        messages.forEach(
+                (text, message) -> {
+                    IllegalArgumentException refused =
+                            assertThrows(IllegalArgumentException.class, () -> Aim.parse(text));
+                    assertTrue(refused.getMessage().startsWith(message), refused.getMessage());
+                });
+        assertEquals("metal-poor", Aim.METAL_POOR.word());
+        assertEquals("within 20 pc", Aim.NEARBY.claim());
+    }
+
+    /** 37.7 by the width, rounded up to five: 4 angstrom at L2 take 10, 0.7 at M8 take 55. */
+    @Test
+    void aWeakLineTakesMoreSignal() {
+        assertEquals(10, lithiumSnr(12));
+        assertEquals(55, lithiumSnr(8));
+        assertEquals(10, lithiumSnr(16), "no less than ten");
+    }
+
+    private double lithiumSnr(double type) {
+        Judgement judgement = judge.judge(Evidence.ofType(type, 0.01, Optional.empty()));
+        return step(judgement, FollowUp.LITHIUM, Aim.SUBSTELLAR).orElseThrow().snr().orElseThrow();
+    }
+
+    /** What is proposed depends on what is open: type, age, motion. */
+    @Test
+    void onlyWhatIsOpenIsProposed() {
+        Judgement sharp = judge.judge(Evidence.ofType(12, 0.5, Optional.empty()));
+        assertTrue(step(sharp, FollowUp.LOW_RESOLUTION, Aim.SUBSTELLAR).isEmpty());
+        assertTrue(step(sharp, FollowUp.VELOCITY, Aim.YOUNG).isEmpty(), "no proper motion");
+        Judgement vague = judge.judge(Evidence.ofType(12, 1.5, Optional.empty()));
+        NextStep type = step(vague, FollowUp.LOW_RESOLUTION, Aim.COOLEST).orElseThrow();
+        assertTrue(type.gainBits() > 0 && type.gainBits() < 1, type.toString());
+        OptionalDouble no = OptionalDouble.empty();
+        Evidence moving =
+                Evidence.ofType(12, 0.5, Optional.empty())
+                        .withAstrometry(
+                                new Astrometry(
+                                        no,
+                                        no,
+                                        OptionalDouble.of(50),
+                                        OptionalDouble.of(0.5),
+                                        OptionalDouble.of(100),
+                                        OptionalDouble.of(0),
+                                        no));
+        assertTrue(step(judge.judge(moving), FollowUp.VELOCITY, Aim.YOUNG).isPresent());
+        Judgement aged = judge.judge(moving.withAge(AgeStatement.parse("1..3Gyr")));
+        assertTrue(step(aged, FollowUp.VELOCITY, Aim.YOUNG).isEmpty());
+        assertTrue(step(aged, FollowUp.POTASSIUM, Aim.YOUNG).isEmpty());
+        Judgement late = judge.judge(Evidence.ofType(24, 0.5, Optional.empty()));
+        assertTrue(step(late, FollowUp.H_SHAPE, Aim.YOUNG).isEmpty(), "no class at T4");
+    }
+
+    /** A radial velocity tells youth as a test that is right for half of the young: by hand. */
+    @Test
+    void aVelocityTellsWhatMembersDo() {
+        OptionalDouble no = OptionalDouble.empty();
+        Astrometry motion =
+                new Astrometry(
+                        no,
+                        no,
+                        OptionalDouble.of(50),
+                        OptionalDouble.of(0.5),
+                        OptionalDouble.of(100),
+                        OptionalDouble.of(0),
+                        no);
+        Judgement judgement =
+                judge.judge(Evidence.ofType(12, 0.5, Optional.empty()).withAstrometry(motion));
+        double gain = step(judgement, FollowUp.VELOCITY, Aim.YOUNG).orElseThrow().gainBits();
+        double p = judgement.age().pYoung();
+        double yes = p * 0.5 + (1 - p) * 0.02;
+        double expected =
+                entropy(p)
+                        - yes * entropy(p * 0.5 / yes)
+                        - (1 - yes) * entropy(p * 0.5 / (1 - yes));
+        // objects of 150 to 200 Myr are members too but not young: somewhat less is told
+        assertEquals(expected, gain, 0.25 * expected);
     }
 }

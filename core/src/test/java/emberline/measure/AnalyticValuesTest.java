@@ -12,6 +12,7 @@ import java.io.IOException;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -26,6 +27,7 @@ class AnalyticValuesTest {
         return TestSpectra.measure(TestSpectra.fine(micron -> Math.pow(micron, exponent)));
     }
 
+    @Tag("slow")
     @ParameterizedTest
     @ValueSource(
             strings = {
@@ -57,6 +59,7 @@ class AnalyticValuesTest {
                                         }));
     }
 
+    @Tag("slow")
     @Test
     void reddeningOfAFlatFluxChangesIndicesAsComputed() throws IOException {
         Map<String, Measurements> byCase = new HashMap<>();

@@ -3,7 +3,6 @@ package emberline.measure;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import emberline.catalogue.FeatureCatalogue;
 import emberline.prepare.NoiseModel;
 import emberline.prepare.PreparedSpectrum;
 import emberline.spectrum.ResolvingPower;
@@ -17,8 +16,7 @@ import org.junit.jupiter.params.provider.CsvSource;
 /** Grids with fewer pixels than windows, with noise that neighbours share. */
 class CoarseGridTest {
 
-    private static final Measurer MEASURER =
-            new Measurer(FeatureCatalogue.standard(), Measuring.withDefaults());
+    private final Measurer measurer = new Measurer(TestSpectra.CATALOGUE, Measuring.withDefaults());
 
     private static PreparedSpectrum spectrum(
             int pixels, double lag1, double lag2, double sigmaGrowth) {
@@ -46,7 +44,7 @@ class CoarseGridTest {
         "250, 0.69, 0.24, 1", "400, 0.66, 0.17, 1", "700, 0.69, 0.24, 1"
     })
     void drawsScatterAsTheFeatureDoes(int pixels, double lag1, double lag2, double growth) {
-        Measurements measured = MEASURER.measure(spectrum(pixels, lag1, lag2, growth));
+        Measurements measured = measurer.measure(spectrum(pixels, lag1, lag2, growth));
         List<String> ids =
                 measured.all().stream()
                         .map(one -> one.feature().id())

@@ -5,7 +5,6 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurements.Interval68;
 import emberline.prepare.NoiseModel;
@@ -22,6 +21,7 @@ import org.apache.commons.math3.stat.correlation.PearsonsCorrelation;
 import org.apache.commons.math3.stat.descriptive.moment.Skewness;
 import org.apache.commons.math3.stat.descriptive.moment.StandardDeviation;
 import org.apache.commons.math3.stat.descriptive.rank.Percentile;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -83,7 +83,7 @@ class DrawsTest {
     private static double[][] byPixels(PreparedSpectrum prepared, List<String> ids) {
         Measurer measurer =
                 new Measurer(
-                        FeatureCatalogue.standard(),
+                        TestSpectra.CATALOGUE,
                         Measuring.withDefaults().withLeastContinuumSignal(0));
         Random random = new Random(7);
         double[][] values = new double[ids.size()][DRAWS];
@@ -108,6 +108,7 @@ class DrawsTest {
         return values;
     }
 
+    @Tag("slow")
     @ParameterizedTest
     @CsvSource({"20, false", "5, false", "2, false", "20, true"})
     void drawingWindowMeansIsDrawingPixels(double signalToNoise, boolean smoothed) {
@@ -118,7 +119,7 @@ class DrawsTest {
         double[][] pixels = byPixels(prepared, features);
         double[][] means =
                 new Measurer(
-                                FeatureCatalogue.standard(),
+                                TestSpectra.CATALOGUE,
                                 Measuring.withDefaults().withLeastContinuumSignal(0))
                         .measure(prepared)
                         .draws(features, DRAWS, 11);
@@ -215,6 +216,7 @@ class DrawsTest {
      * A width on too steep a continuum has no value: such draws are left out, or no interval is
      * given.
      */
+    @Tag("slow")
     @Test
     void drawsWithoutValueDoNotShiftTheInterval() {
         int given = 0;
@@ -222,7 +224,7 @@ class DrawsTest {
         for (double signalToNoise : new double[] {20, 5, 2, 1}) {
             Measurements measured =
                     new Measurer(
-                                    FeatureCatalogue.standard(),
+                                    TestSpectra.CATALOGUE,
                                     Measuring.withDefaults().withLeastContinuumSignal(0))
                             .measure(spectrum(signalToNoise, NoiseModel.INDEPENDENT));
             for (FeatureMeasurement one : measured.all()) {
@@ -301,5 +303,42 @@ class DrawsTest {
                         4 / Math.sqrt(size));
             }
         }
+    }
+
+    /**
+     * Below a signal of 15 the interval is that of the draws by rank: the 159th and 842nd of 1000.
+     */
+    @Test
+    void theIntervalOfANoisyContinuumIsThatOfItsDraws() {
+        Measurements measured = TestSpectra.measure(spectrum(2, NoiseModel.INDEPENDENT));
+        String id = "burgasser2006/h2o-j";
+        double signal = measured.of(id).orElseThrow().continuumSignal();
+        // 25 pixels of signal-to-noise 2
+        assertEquals(10, signal, 1);
+        double[] draws = measured.draws(List.of(id), 1000, 4)[0];
+        Arrays.sort(draws);
+        Interval68 interval = measured.interval68(id, 4).orElseThrow();
+        assertEquals(draws[158], interval.low());
+        assertEquals(draws[841], interval.high());
+        Measured value = measured.measured(id).orElseThrow();
+        assertTrue(
+                Math.abs(interval.low() - (value.value() - value.oneSigma())) > 1e-4,
+                "skewed, so not the symmetric one");
+    }
+
+    @Test
+    void theCovarianceOfAllIsThatOfEachPair() {
+        Measurements measured = TestSpectra.measure(spectrum(20, NoiseModel.INDEPENDENT));
+        List<String> ids = FEATURES.subList(0, 4);
+        double[][] matrix = measured.covariance(ids);
+        for (int a = 0; a < 4; a++) {
+            for (int b = 0; b < 4; b++) {
+                assertEquals(measured.covariance(ids.get(a), ids.get(b)), matrix[a][b], 1e-15);
+            }
+            double sigma = measured.measured(ids.get(a)).orElseThrow().oneSigma();
+            assertEquals(sigma * sigma, matrix[a][a], 1e-12);
+        }
+        assertTrue(measured.of("reid1995/no-such").isEmpty());
+        assertTrue(measured.measured("reid1995/no-such").isEmpty());
     }
 }

@@ -8,6 +8,7 @@ import java.util.Random;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
 import org.apache.commons.math3.linear.CholeskyDecomposition;
 import org.apache.commons.math3.linear.RealMatrix;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -148,6 +149,7 @@ class EnvelopeMatrixTest {
      * Five hundred overlapping windows on few pixels: rounding spoils the Cholesky factor, and the
      * factor from the vectors still returns the matrix.
      */
+    @Tag("slow")
     @ParameterizedTest
     @ValueSource(ints = {7, 60, 200})
     void moreWindowsThanPixelsHaveAFactor(int pixels) {

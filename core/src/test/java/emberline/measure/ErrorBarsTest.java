@@ -28,6 +28,7 @@ import java.util.Map;
 import java.util.TreeMap;
 import org.apache.commons.rng.sampling.distribution.ZigguratSampler;
 import org.apache.commons.rng.simple.RandomSource;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 
 /**
@@ -41,6 +42,7 @@ import org.junit.jupiter.api.Test;
  * -Demberline.copies=4000} no feature has an error above 0.74%, and all 147 hold 66.6% to 69.2%:
  * {@code emberline/measured/error-bars.csv}.
  */
+@Tag("slow")
 class ErrorBarsTest {
 
     private static final int COPIES = Integer.getInteger("emberline.copies", 500);

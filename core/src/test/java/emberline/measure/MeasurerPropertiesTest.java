@@ -6,7 +6,6 @@ import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.catalogue.Feature;
-import emberline.catalogue.FeatureCatalogue;
 import emberline.catalogue.Form;
 import emberline.catalogue.Kind;
 import emberline.catalogue.Role;
@@ -24,6 +23,7 @@ import emberline.spectrum.Spectrum;
 import java.util.List;
 import java.util.Optional;
 import java.util.Random;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -80,6 +80,7 @@ class MeasurerPropertiesTest {
                 1);
     }
 
+    @Tag("slow")
     @ParameterizedTest
     @ValueSource(longs = {1, 2, 3})
     void shiftingTheFrameAndBackChangesNothing(long seed) throws Exception {
@@ -201,11 +202,12 @@ class MeasurerPropertiesTest {
     }
 
     /** The line cannot be guessed in a gap; beside it the continuum can. */
+    @Tag("slow")
     @Test
     void aGapInALineIsRefusedAndOneInItsContinuumIsNot() {
         String id = "lepine2013/ew_halpha";
         Spectrum spectrum = rough(4, 2e-5, 0.02);
-        Feature halpha = FeatureCatalogue.standard().feature(id).orElseThrow();
+        Feature halpha = TestSpectra.CATALOGUE.feature(id).orElseThrow();
         Window line = halpha.window(Role.LINE);
         NotMeasured why =
                 assertInstanceOf(
@@ -317,6 +319,7 @@ class MeasurerPropertiesTest {
     /**
      * On a flat flux CaH2 + CaH3 is 2 and the solar TiO5 near 1: the shortfall divides by noise.
      */
+    @Tag("slow")
     @Test
     void aShortfallAgainstNothingIsRefused() {
         Window hydrides = new Window(0.6805, 0.7000);
@@ -349,5 +352,53 @@ class MeasurerPropertiesTest {
                         micron > window.lowMicron() && micron < window.highMicron()
                                 ? 1 - depth
                                 : 1);
+    }
+
+    /**
+     * On the flux of the wavelength a mean is the centre of its window: a continuum that is
+     * interpolated to the line is that of the line, and a normalised difference that of centres.
+     */
+    @Test
+    void onAStraightFluxMeansAreCentres() {
+        Measurements measured =
+                TestSpectra.measure(TestSpectra.of(0.6, 2.5, 1e-4, 3000, 0.01, micron -> micron));
+        int checked = 0;
+        for (FeatureMeasurement one : measured.all()) {
+            Feature feature = one.feature();
+            double expected;
+            if (feature.form() == Form.INTERPOLATED_CONTINUUM_OVER_LINE) {
+                expected = 1;
+            } else if (feature.form() == Form.NORMALISED_DIFFERENCE) {
+                double a = feature.windows(Role.BAND_A).get(0).window().centreMicron();
+                double b = feature.windows(Role.BAND_B).get(0).window().centreMicron();
+                expected = 2 * (a - b) / (a + b);
+            } else {
+                continue;
+            }
+            if (one.result() instanceof Measured value) {
+                assertEquals(expected, value.value(), 1e-5, feature.id());
+                checked++;
+            }
+        }
+        assertTrue(checked >= 3, checked + " features");
+    }
+
+    /** One hot pixel moves a mean, not a median. */
+    @Test
+    void aMedianIgnoresAHotPixel() {
+        String id = "canty2013/h2-k";
+        Feature feature = TestSpectra.CATALOGUE.feature(id).orElseThrow();
+        assertEquals(Statistic.MEDIAN, feature.statistic());
+        double centre = feature.windows(Role.NUMERATOR).get(0).window().centreMicron();
+        Measurements measured =
+                TestSpectra.measure(
+                        TestSpectra.of(
+                                2.0,
+                                2.4,
+                                5e-4,
+                                2000,
+                                0.01,
+                                micron -> Math.abs(micron - centre) < 2.6e-4 ? 1000 : 1));
+        assertEquals(1, TestSpectra.value(measured, id), 1e-9);
     }
 }

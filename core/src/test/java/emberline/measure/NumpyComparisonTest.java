@@ -22,6 +22,7 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 
 /**
@@ -32,6 +33,7 @@ import org.junit.jupiter.api.Test;
  * the continuum by a series whose rest is below 1e-10 for these slopes; the reader keeps the digits
  * of the files.
  */
+@Tag("slow")
 class NumpyComparisonTest {
 
     private static final double TOLERANCE = 1e-6;
@@ -63,7 +65,11 @@ class NumpyComparisonTest {
                     WindowOperator.of(
                             prepared.spectrum(),
                             prepared.resolvingPower().value(),
-                            List.of(WindowFunctional.mean(window, OptionalDouble.empty())));
+                            List.of(
+                                    new WindowFunctional(
+                                            window,
+                                            OptionalDouble.empty(),
+                                            WindowFunctional.Over.MEAN)));
             double expected = number(row, "value");
             double value = operator.apply(prepared.spectrum())[0];
             assertEquals(expected, value, TOLERANCE * Math.abs(expected), row.toString());

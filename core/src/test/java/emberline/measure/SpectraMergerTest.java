@@ -4,12 +4,14 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertSame;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import emberline.catalogue.Feature;
 import emberline.measure.Measurement.Measured;
 import emberline.spectrum.Spectrum;
 import java.util.Arrays;
 import java.util.List;
 import java.util.OptionalDouble;
 import java.util.Random;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 
 /** Several spectra of one object become one set of measurements. */
@@ -96,6 +98,7 @@ class SpectraMergerTest {
         assertEquals(measured(one, H2O_J), measured(both, H2O_J));
     }
 
+    @Tag("slow")
     @Test
     void theErrorOfTheMeanIsThatOfItsSpread() {
         double sum = 0;
@@ -134,6 +137,12 @@ class SpectraMergerTest {
         double[] draws = both.draws(List.of(H2O_H), 4000, 5)[0];
         double mean = Arrays.stream(draws).average().orElseThrow();
         assertEquals(measured(both, H2O_H).value(), mean, 0.1 * measured(both, H2O_H).oneSigma());
+        // the draws are widened as the error is
+        double spread =
+                Math.sqrt(
+                        Arrays.stream(draws).map(d -> (d - mean) * (d - mean)).sum()
+                                / draws.length);
+        assertEquals(1, spread / measured(both, H2O_H).oneSigma(), 0.05);
     }
 
     @Test
@@ -143,5 +152,53 @@ class SpectraMergerTest {
         Measurements best =
                 new SpectraMerger(id -> OptionalDouble.empty()).merge(List.of(one, two));
         assertEquals(measured(two, H2O_H), measured(best, H2O_H));
+    }
+
+    private static Measured of(double value, double sigma) {
+        return new Measured(value, sigma);
+    }
+
+    /** A list of measurements of one feature, by hand, without covariance. */
+    private static Measurements single(Measurement result, double signal) {
+        Feature feature = TestSpectra.CATALOGUE.feature(H2O_H).orElseThrow();
+        FeatureMeasurement one =
+                new FeatureMeasurement(feature, result, 1, signal, 0, OptionalDouble.empty());
+        return new Measurements(java.util.Map.of(H2O_H, new MeasuredEntry(one, List.of(), 1)));
+    }
+
+    /**
+     * Three sigma apart is chance, 3.4 is not: values 0 and d with errors of 1 have a chi-square of
+     * d^2 / 2, for one degree of freedom; the error of the mean, 0.7071, grows by its root.
+     */
+    @Test
+    void errorsGrowWhereSpectraAreFarApart() {
+        Measurements near = merged(0, single(of(0, 1), 50), single(of(4.6, 1), 80));
+        assertEquals(2.3, measured(near, H2O_H).value(), 1e-12);
+        assertEquals(Math.sqrt(0.5), measured(near, H2O_H).oneSigma(), 1e-12);
+        Measurements far = merged(0, single(of(0, 1), 50), single(of(4.8, 1), 80));
+        assertEquals(Math.sqrt(0.5) * 4.8 / Math.sqrt(2), measured(far, H2O_H).oneSigma(), 1e-12);
+        // three: mean 3, deviations -3, -3, 6: chi-square 54 for two degrees of freedom
+        Measurements three =
+                merged(0, single(of(0, 1), 50), single(of(0, 1), 80), single(of(9, 1), 20));
+        assertEquals(Math.sqrt(27.0 / 3), measured(three, H2O_H).oneSigma(), 1e-12);
+        assertEquals(80, three.of(H2O_H).orElseThrow().continuumSignal(), "the best signal");
+    }
+
+    /** Weights by noise and calibration: 1 / (9 + 16) and 1 / (0 + 16). */
+    @Test
+    void calibrationWeighsButDoesNotWiden() {
+        Measured both = measured(merged(4, single(of(1, 3), 50), single(of(2, 0), 50)), H2O_H);
+        double one = 16.0 / 41;
+        assertEquals(one + 2 * (1 - one), both.value(), 1e-12);
+        assertEquals(3 * one, both.oneSigma(), 1e-12);
+    }
+
+    @Test
+    void whatOneSpectrumLacksComesFromTheOther() {
+        Measurement none = new Measurement.NotMeasured(Measurement.Why.NOT_COVERED, "gap");
+        assertEquals(
+                of(2, 0.5), measured(merged(0, single(none, 0), single(of(2, 0.5), 50)), H2O_H));
+        Measurements neither = merged(0, single(none, 0), single(none, 0));
+        assertEquals(none, neither.of(H2O_H).orElseThrow().result());
     }
 }

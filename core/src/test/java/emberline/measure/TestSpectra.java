@@ -12,6 +12,8 @@ import java.util.function.DoubleUnaryOperator;
 /** Spectra with known fluxes. */
 final class TestSpectra {
 
+    static final FeatureCatalogue CATALOGUE = FeatureCatalogue.standard();
+
     private TestSpectra() {}
 
     static PreparedSpectrum of(
@@ -47,8 +49,7 @@ final class TestSpectra {
     }
 
     static Measurements measure(PreparedSpectrum prepared) {
-        return new Measurer(FeatureCatalogue.standard(), Measuring.withDefaults())
-                .measure(prepared);
+        return new Measurer(CATALOGUE, Measuring.withDefaults()).measure(prepared);
     }
 
     static double value(Measurements measurements, String id) {

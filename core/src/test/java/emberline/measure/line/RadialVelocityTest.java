@@ -12,6 +12,7 @@ import emberline.spectrum.Spectrum;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -30,6 +31,7 @@ class RadialVelocityTest {
      * and lines of 5 to 10 sigma are not there yet. The bias is to lie within four errors of the
      * mean and a hundredth of a resolution element.
      */
+    @Tag("slow")
     @ParameterizedTest
     @CsvSource({
         "1000, 40, 0.4, 60",
@@ -182,6 +184,107 @@ class RadialVelocityTest {
                         .mean();
         assertEquals(0, wild.value(), 1e-12);
         assertEquals(Math.sqrt(3600.0 / 3 / 4), wild.oneSigma(), 1e-9);
+    }
+
+    /** The reason says how many lines there were, and a twentieth of an element is the scale. */
+    @Test
+    void whatIsMissingIsCounted() {
+        RadialVelocity coarse = finder.find(InventedLines.spectrum(750, 0, 0.4, 100, 1));
+        assertEquals(
+                "resolving power 750; a velocity needs 1000 or more",
+                ((NotMeasured) coarse.kms()).detail());
+        assertEquals(299_792.458 / 750 / 20, coarse.scaleSigmaKms(), 1e-6);
+        RadialVelocity noisy = finder.find(InventedLines.spectrum(2000, 0, 0, 50, 1));
+        assertEquals(
+                noisy.used().size() + " lines seen at 5 sigma near one velocity; 3 are needed",
+                ((NotMeasured) noisy.kms()).detail());
+        assertTrue(
+                noisy.setAside().stream().anyMatch(l -> l.reason().contains("5 are needed")),
+                noisy.setAside().toString());
+        double[] wavelength = new double[200];
+        double[] flux = new double[200];
+        for (int i = 0; i < 200; i++) {
+            wavelength[i] = 1.55 + 1e-4 * i;
+            flux[i] = 1;
+        }
+        RadialVelocity none =
+                finder.find(InventedLines.prepared(Spectrum.of(wavelength, flux, flux), 2000));
+        NotMeasured why = (NotMeasured) none.kms();
+        assertEquals(Why.NOT_COVERED, why.why());
+        assertTrue(
+                why.detail().matches("[0-2] lines in reach and unblended; 3 are needed"),
+                why.detail());
+    }
+
+    /**
+     * Whether a line is blended depends on the resolution: K I at 1.1773 and 1.1776 is not at 30
+     * 000.
+     */
+    @Test
+    void linesArePartedWhereTheResolutionAllows() {
+        RadialVelocity fine = finder.find(InventedLines.spectrum(30_000, 12, 0.4, 60, 2));
+        assertEquals(12, value(fine), 0.5);
+        assertTrue(
+                fine.used().stream().anyMatch(l -> Math.abs(l.restMicron() - 1.1773) < 2e-4),
+                fine.used().toString());
+        LineSetAside blend =
+                finder.find(InventedLines.spectrum(2000, 0, 0.4, 100, 1)).setAside().stream()
+                        .filter(l -> l.reason().startsWith("blended"))
+                        .findFirst()
+                        .orElseThrow();
+        // 0.0004 micron of 1.1775 are about 100 km/s
+        assertTrue(
+                blend.reason()
+                        .matches(
+                                "blended: the nearest line is \\d+ km/s away, one resolution element"
+                                        + " is 150 km/s"),
+                blend.reason());
+    }
+
+    /** The outlier is named with its figures; the median of four lies between the middle two. */
+    @Test
+    void outliersAreNamedWithTheirFigures() {
+        VelocityMean mean =
+                new VelocityMean(
+                        List.of(
+                                line(1.1, 9, 1),
+                                line(1.2, 10, 1),
+                                line(1.25, 10, 1),
+                                line(1.3, 11, 1),
+                                line(1.4, 40, 3)));
+        assertEquals("outlier: 40 +- 3 km/s, the median is 10", mean.rejected().get(0).reason());
+        assertEquals(4, mean.used().size());
+        // 4 sigma of the line and the scatter: median 10.5, deviations 1.5, 0.5, 0.5 and 29.5
+        VelocityMean near =
+                new VelocityMean(
+                        List.of(
+                                line(1.1, 9, 1),
+                                line(1.2, 10, 1),
+                                line(1.3, 11, 1),
+                                line(1.4, 22, 3)));
+        assertEquals(List.of(), near.rejected());
+        assertEquals(1, new VelocityMean(List.of(line(1.1, 9, 2))).used().size());
+        assertEquals(2, new VelocityMean(List.of(line(1.1, 9, 2))).mean().oneSigma(), 1e-12);
+    }
+
+    /**
+     * DerSimonian and Laird by hand: values 0, 10, 20 with errors 1, 1, 2, so weights 1, 1, 1/4 and
+     * a mean of 15 / 2.25; the common variance follows from the chi-square about it.
+     */
+    @Test
+    void scatterBeyondTheErrorsIsAddedToAll() {
+        double mean = 15 / 2.25;
+        double chi = mean * mean + (10 - mean) * (10 - mean) + (20 - mean) * (20 - mean) / 4;
+        double extra = (chi - 2) / (2.25 - (1 + 1 + 1.0 / 16) / 2.25);
+        double w1 = 1 / (1 + extra);
+        double w3 = 1 / (4 + extra);
+        Measured found =
+                new VelocityMean(List.of(line(1, 0, 1), line(2, 10, 1), line(3, 20, 2))).mean();
+        assertEquals((10 * w1 + 20 * w3) / (2 * w1 + w3), found.value(), 1e-9);
+        assertEquals(1 / Math.sqrt(2 * w1 + w3), found.oneSigma(), 1e-9);
+        // two at 1.9 sigma of their difference: chance 5.7%, nothing is added
+        Measured chance = new VelocityMean(List.of(line(1, 0, 1), line(2, 2.687, 1))).mean();
+        assertEquals(Math.sqrt(0.5), chance.oneSigma(), 1e-9);
     }
 
     private static LineVelocity line(double micron, double kms, double sigma) {

@@ -26,9 +26,11 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 
 /** Lines and velocities of real spectra, and our own windows against published figures. */
+@Tag("slow")
 class RealLinesTest {
 
     private static final FeatureCatalogue CATALOGUE = FeatureCatalogue.standard();

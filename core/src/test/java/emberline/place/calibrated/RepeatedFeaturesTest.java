@@ -16,6 +16,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 
 /** How far spectra of one object differ beyond their noise, on the public spectra. */
@@ -60,6 +61,7 @@ class RepeatedFeaturesTest {
         return pairs;
     }
 
+    @Tag("slow")
     @Test
     void independentSpectraOfOneObjectSeldomContradictEachOther() throws Exception {
         Calibration calibration = Calibration.standard();
@@ -82,6 +84,7 @@ class RepeatedFeaturesTest {
     }
 
     /** The calibration error that is assumed, against the objects that two instruments saw. */
+    @Tag("slow")
     @Test
     void theCalibrationErrorIsThatOfRepeatedFeatures() throws Exception {
         List<String> independent =
