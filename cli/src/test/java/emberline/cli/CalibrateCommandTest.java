@@ -75,7 +75,7 @@ class CalibrateCommandTest {
                             .orElseThrow();
             Path spectrum = DemoRun.survey().toAbsolutePath().resolveSibling(cells[1]);
             others += kind.equals("dwarf") ? 0 : 1;
-            if (Files.exists(spectrum) && (kind.equals("dwarf") || others <= 2)) {
+            if (Files.isRegularFile(spectrum) && (kind.equals("dwarf") || others <= 2)) {
                 known.append(cells[0] + "," + spectrum + "," + kind + "\n");
             }
         }

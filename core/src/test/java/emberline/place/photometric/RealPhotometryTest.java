@@ -22,9 +22,9 @@ import org.junit.jupiter.api.Test;
 
 /**
  * Types from real colours against published types from spectra: J, H and K (2MASS) of late-type
- * members of Upper Scorpius, table 1 of Slesnick, Carpenter and Hillenbrand 2006, AJ 131, 3016. It is
- * the hardest case: three bands only, young objects, dust of the region before them; errors of 0.03
- * mag are supposed, the table gives none.
+ * members of Upper Scorpius, table 1 of Slesnick, Carpenter and Hillenbrand 2006, AJ 131, 3016. It
+ * is the hardest case: three bands only, young objects, dust of the region before them; errors of
+ * 0.03 mag are supposed, the table gives none.
  */
 class RealPhotometryTest {
 
@@ -67,14 +67,22 @@ class RealPhotometryTest {
                 1,
                 List.of(),
                 Map.of(
-                        "name", name,
-                        "mag_system", "2MASS",
-                        "j_mag", row.getField("J"),
-                        "j_mag_err", "0.03",
-                        "h_mag", row.getField("H"),
-                        "h_mag_err", "0.03",
-                        "k_mag", row.getField("KS"),
-                        "k_mag_err", "0.03"));
+                        "name",
+                        name,
+                        "mag_system",
+                        "2MASS",
+                        "j_mag",
+                        row.getField("J"),
+                        "j_mag_err",
+                        "0.03",
+                        "h_mag",
+                        row.getField("H"),
+                        "h_mag_err",
+                        "0.03",
+                        "k_mag",
+                        row.getField("KS"),
+                        "k_mag_err",
+                        "0.03"));
     }
 
     /** Measured: 31 objects, bias +1.92, rms 2.60 subclasses; the 95% intervals hold 24. */
