@@ -13,6 +13,7 @@ import emberline.reports.attach.AtomicFile;
 import emberline.reports.attach.UnseenSummary;
 import emberline.reports.attach.UnseenTable;
 import emberline.survey.Chain;
+import emberline.survey.ObjectResult;
 import emberline.survey.ReddeningMode;
 import emberline.survey.ReferenceMaker;
 import emberline.survey.Status;
@@ -71,16 +72,7 @@ final class CalibrateCommand implements Callable<Integer> {
                         candidates,
                         result -> result,
                         result -> {
-                            if (result.status() == Status.FAILED) {
-                                failed++;
-                                SingleSpectra.tellFailure(result, spec.commandLine().getErr());
-                            } else if (result.best().isEmpty()) {
-                                spec.commandLine()
-                                        .getErr()
-                                        .println(
-                                                result.candidate().name()
-                                                        + ": left out: no spectrum to measure");
-                            }
+                            tell(result);
                             maker.add(result)
                                     .ifPresent(
                                             row ->
@@ -121,6 +113,17 @@ final class CalibrateCommand implements Callable<Integer> {
         spec.commandLine().getOut().print(UnseenSummary.text(learned.unseen()));
         learnKinds(trainer);
         return ExitCode.of(candidates.rows().size(), failed);
+    }
+
+    /** Tells of an object from which nothing can be learned. */
+    private void tell(ObjectResult result) {
+        if (result.status() == Status.FAILED) {
+            failed++;
+            SingleSpectra.tellFailure(result, spec.commandLine().getErr());
+        } else if (result.best().isEmpty()) {
+            String name = result.candidate().name();
+            spec.commandLine().getErr().println(name + ": left out: no spectrum to measure");
+        }
     }
 
     /**
