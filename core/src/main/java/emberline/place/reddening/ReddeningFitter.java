@@ -7,6 +7,7 @@ import emberline.place.TypePosterior;
 import emberline.place.calibrated.CalibratedType;
 import emberline.place.calibrated.CalibratedWitness;
 import emberline.place.calibrated.Contribution;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.NavigableMap;
@@ -28,16 +29,24 @@ public final class ReddeningFitter {
     /** Greatest extinction in V that is tried (mag). */
     private static final double GREATEST_AV = 15;
 
-    /** Distance of the extinctions that are tried at last (mag). */
-    private static final double FINE = 0.1;
+    /** Distance of the extinctions whose probability is told (mag). */
+    private static final double CELL = 0.1;
 
-    private static final int GREATEST_TENTHS = (int) Math.round(GREATEST_AV / FINE);
+    private static final int LAST_CELL = (int) Math.round(GREATEST_AV / CELL);
 
-    /** Distance of those that are tried first, in tenths of a magnitude. */
-    private static final int COARSE_TENTHS = 10;
+    /** Least distance of the extinctions that are tried (mag). */
+    private static final double STEP = 0.25;
+
+    private static final int LAST_STEP = (int) Math.round(GREATEST_AV / STEP);
+
+    /** Distance of those that are tried first, in steps; a power of two. */
+    private static final int COARSE = 4;
 
     /** Extinctions less probable than the best by more than this logarithm are not refined. */
     private static final double NEGLIGIBLE = 8;
+
+    /** Between neighbours whose logarithms differ by less than this a line is good enough. */
+    private static final double SMOOTH = 0.5;
 
     private final CalibratedWitness witness;
 
@@ -62,42 +71,50 @@ public final class ReddeningFitter {
     public Optional<ReddeningFit> fit(DoubleFunction<Measurements> measuredAt) {
         Measurements asSeen = measuredAt.apply(0);
         NavigableMap<Integer, Trial> trials = new TreeMap<>();
-        for (int tenths = 0; tenths <= GREATEST_TENTHS; tenths += COARSE_TENTHS) {
-            trial(tenths, asSeen, measuredAt, trials);
+        for (int step = 0; step <= LAST_STEP; step += COARSE) {
+            trial(step, asSeen, measuredAt, trials);
         }
         if (trials.isEmpty()) {
             return Optional.empty();
         }
-        double least = best(trials) - NEGLIGIBLE;
-        NavigableMap<Integer, Trial> fine = new TreeMap<>();
-        for (Map.Entry<Integer, Trial> coarse : trials.entrySet()) {
-            if (coarse.getValue().logProbability > least) {
-                fine.put(coarse.getKey(), coarse.getValue());
+        for (int apart = COARSE; apart > 1; apart /= 2) {
+            for (int middle : worthTrying(trials, apart)) {
+                trial(middle, asSeen, measuredAt, trials);
             }
         }
-        for (int centre : List.copyOf(fine.keySet())) {
-            int from = Math.max(0, centre - COARSE_TENTHS + 1);
-            int to = Math.min(GREATEST_TENTHS, centre + COARSE_TENTHS - 1);
-            for (int tenths = from; tenths <= to; tenths++) {
-                if (!fine.containsKey(tenths)) {
-                    trial(tenths, asSeen, measuredAt, fine);
-                }
+        return Optional.of(summary(trials));
+    }
+
+    /** The middles between neighbours, so far apart, where the probability has a shape to find. */
+    private static List<Integer> worthTrying(NavigableMap<Integer, Trial> trials, int apart) {
+        double best = best(trials);
+        List<Integer> middles = new ArrayList<>();
+        for (int step : trials.keySet()) {
+            Trial here = trials.get(step);
+            Trial next = trials.get(step + apart);
+            if (next == null || trials.higherKey(step) != step + apart) {
+                continue;
+            }
+            double higher = Math.max(here.logProbability, next.logProbability);
+            double slope = Math.abs(here.logProbability - next.logProbability);
+            if (higher > best - NEGLIGIBLE && (slope > SMOOTH || higher == best)) {
+                middles.add(step + apart / 2);
             }
         }
-        return Optional.of(summary(fine, Optional.ofNullable(trials.get(0))));
+        return middles;
     }
 
     private static double best(NavigableMap<Integer, Trial> trials) {
         return trials.values().stream().mapToDouble(Trial::logProbability).max().orElseThrow();
     }
 
-    /** Tries an extinction, in tenths of a magnitude; where nothing can be placed, adds nothing. */
+    /** Tries an extinction, in steps; where nothing can be placed, adds nothing. */
     private void trial(
-            int tenths,
+            int step,
             Measurements asSeen,
             DoubleFunction<Measurements> measuredAt,
             NavigableMap<Integer, Trial> trials) {
-        Measurements freed = tenths == 0 ? asSeen : measuredAt.apply(tenths * FINE);
+        Measurements freed = step == 0 ? asSeen : measuredAt.apply(step * STEP);
         CalibratedType placed = witness.witness(freed);
         double stretch = 0;
         for (Contribution one : placed.contributions()) {
@@ -109,26 +126,42 @@ public final class ReddeningFitter {
         }
         double logProbability = placed.logEvidence() + stretch;
         placed.posterior()
-                .ifPresent(posterior -> trials.put(tenths, new Trial(logProbability, posterior)));
+                .ifPresent(posterior -> trials.put(step, new Trial(logProbability, posterior)));
     }
 
-    private static ReddeningFit summary(
-            NavigableMap<Integer, Trial> trials, Optional<Trial> without) {
+    /**
+     * Extinctions by cells; between trials the logarithm of the probability runs linearly, and the
+     * type is as at the nearer one.
+     */
+    private static ReddeningFit summary(NavigableMap<Integer, Trial> trials) {
         double best = best(trials);
-        List<TypePosterior> posteriors = trials.values().stream().map(Trial::posterior).toList();
-        List<Double> weights =
-                trials.values().stream()
-                        .map(trial -> Math.exp(trial.logProbability - best))
-                        .toList();
-        CellQuantiles extinction =
-                new CellQuantiles(
-                        trials.keySet().stream().mapToDouble(tenths -> tenths * FINE).toArray(),
-                        weights.stream().mapToDouble(Double::doubleValue).toArray(),
-                        FINE);
-        double mean =
-                weights.stream().mapToDouble(Double::doubleValue).sum() / (GREATEST_TENTHS + 1);
+        List<Double> extinctions = new ArrayList<>();
+        List<Double> weights = new ArrayList<>();
+        Map<Integer, Double> ofTrial = new TreeMap<>();
+        double sum = 0;
+        for (int cell = 0; cell <= LAST_CELL; cell++) {
+            double place = cell * CELL / STEP;
+            Integer before = trials.floorKey((int) Math.floor(place + 1e-9));
+            Integer after = trials.ceilingKey((int) Math.ceil(place - 1e-9));
+            if (before == null || after == null || after - before > COARSE) {
+                continue;
+            }
+            double part = after.equals(before) ? 0 : (place - before) / (after - before);
+            double log =
+                    (1 - part) * trials.get(before).logProbability
+                            + part * trials.get(after).logProbability;
+            double weight = Math.exp(log - best);
+            extinctions.add(cell * CELL);
+            weights.add(weight);
+            ofTrial.merge(part < 0.5 ? before : after, weight, Double::sum);
+            sum += weight;
+        }
+        CellQuantiles extinction = new CellQuantiles(array(extinctions), array(weights), CELL);
+        Trial without = trials.get(0);
         double logGain =
-                without.map(trial -> best + Math.log(mean) - trial.logProbability()).orElse(0.0);
+                without == null
+                        ? 0
+                        : best + Math.log(sum / (LAST_CELL + 1)) - without.logProbability;
         return new ReddeningFit(
                 positive(extinction.at(0.5)),
                 positive(extinction.at(0.16)),
@@ -136,7 +169,13 @@ public final class ReddeningFitter {
                 positive(extinction.at(0.025)),
                 positive(extinction.at(0.975)),
                 logGain,
-                TypePosterior.mixture(posteriors, weights));
+                TypePosterior.mixture(
+                        ofTrial.keySet().stream().map(step -> trials.get(step).posterior).toList(),
+                        List.copyOf(ofTrial.values())));
+    }
+
+    private static double[] array(List<Double> numbers) {
+        return numbers.stream().mapToDouble(Double::doubleValue).toArray();
     }
 
     /** The first cell reaches below zero, no extinction does. */
