@@ -40,7 +40,7 @@ public final class ReddeningFitter {
     private static final int LAST_STEP = (int) Math.round(GREATEST_AV / STEP);
 
     /** Distance of those that are tried first, in steps; a power of two. */
-    private static final int COARSE = 4;
+    private static final int COARSE = 8;
 
     /** Extinctions less probable than the best by more than this logarithm are not refined. */
     private static final double NEGLIGIBLE = 8;
@@ -74,6 +74,7 @@ public final class ReddeningFitter {
         for (int step = 0; step <= LAST_STEP; step += COARSE) {
             trial(step, asSeen, measuredAt, trials);
         }
+        trial(LAST_STEP, asSeen, measuredAt, trials);
         if (trials.isEmpty()) {
             return Optional.empty();
         }
