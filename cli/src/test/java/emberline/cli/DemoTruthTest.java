@@ -1,6 +1,7 @@
 package emberline.cli;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import de.siegmar.fastcsv.reader.CsvReader;
@@ -79,6 +80,21 @@ class DemoTruthTest {
                 .filter(name -> !found.get(name).getField(column).equals(expected))
                 .map(name -> name.substring("Tamarisk-".length()))
                 .toList();
+    }
+
+    /** Where the published relations agree nowhere, none is said to be far from the others. */
+    @Test
+    void relationsAreFarFromTheOthersOnlyWhereOthersAgree() throws IOException {
+        int agreeNowhere = 0;
+        for (NamedCsvRecord row : found.values()) {
+            if (row.getField("published_type").isEmpty()) {
+                String json =
+                        Files.readString(out.resolve("objects/" + row.getField("name") + ".json"));
+                assertFalse(json.contains("where the others agree"), row.getField("name"));
+                agreeNowhere += json.contains("no two relations agree on a type") ? 1 : 0;
+            }
+        }
+        assertTrue(agreeNowhere >= 1, "the metal-poor M6 is one");
     }
 
     @Test

@@ -49,6 +49,8 @@ final class PublishedWitness {
     /** A result may lie this far outside the range by noise (subclass). */
     private static final double EDGE = 0.5;
 
+    private static final String NO_AGREEMENT = "no two relations agree on a type";
+
     /** Always combined when this close to the best type (subclass). */
     private static final double NEAR = 2;
 
@@ -88,8 +90,8 @@ final class PublishedWitness {
         List<RelationEstimate> combined =
                 estimates.stream().filter(e -> e.use() == Use.COMBINED).toList();
         if (combined.isEmpty()) {
-            return new PublishedType(
-                    Optional.empty(), "no two relations agree on a type", estimates, List.of());
+            estimates.replaceAll(PublishedWitness::withoutPlace);
+            return new PublishedType(Optional.empty(), NO_AGREEMENT, estimates, List.of());
         }
         TypeEstimate type = combine(combined);
         return new PublishedType(
@@ -233,6 +235,13 @@ final class PublishedWitness {
                         Use.DISAGREES,
                         String.format(
                                 Locale.ROOT, "%.1f subclasses from where the others agree", off));
+    }
+
+    /** Where no two relations agree there is nothing that one of them could be far from. */
+    private static RelationEstimate withoutPlace(RelationEstimate estimate) {
+        return estimate.use() == Use.DISAGREES
+                ? setAside(estimate, Use.DISAGREES, NO_AGREEMENT)
+                : estimate;
     }
 
     private static RelationEstimate setAside(RelationEstimate estimate, Use use, String reason) {
