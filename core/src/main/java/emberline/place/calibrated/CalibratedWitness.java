@@ -57,20 +57,6 @@ public final class CalibratedWitness {
     }
 
     /**
-     * The place of a gravity class on the scale of the loci.
-     *
-     * @param gravity the class
-     * @return 0 field, 0.5 intermediate, 1 very low
-     */
-    public static double lowGravity(GravityClass gravity) {
-        return switch (gravity) {
-            case FLD_G -> 0;
-            case INT_G -> 0.5;
-            case VL_G -> 1;
-        };
-    }
-
-    /**
      * Places an object.
      *
      * @param measurements what was measured on it
@@ -149,14 +135,14 @@ public final class CalibratedWitness {
         double temper = Math.min(1, INDEPENDENT / sample.size());
         Map<GravityClass, double[]> log = new EnumMap<>(GravityClass.class);
         for (GravityClass gravity : GravityClass.values()) {
-            double lowGravity = lowGravity(gravity);
+            double centre = GravityScale.centre(gravity);
             double[] ofClass = new double[TypeKnots.COUNT];
             for (int k = 0; k < TypeKnots.COUNT; k++) {
                 LogProduct tails = new LogProduct();
                 LogProduct variances = new LogProduct();
                 for (int f = 0; f < sample.size(); f++) {
-                    double variance = variance(sample, f, k);
-                    double rest = sample.value(f) - sample.locus(f).mean(k, lowGravity);
+                    double variance = variance(sample, f, k, gravity);
+                    double rest = sample.value(f) - sample.locus(f).mean(k, centre);
                     tails.times(1 + rest * rest / variance / FREEDOM);
                     variances.times(variance);
                 }
@@ -169,9 +155,11 @@ public final class CalibratedWitness {
         return log;
     }
 
-    private static double variance(Sample sample, int f, int knot) {
+    /** Variance of a feature alone: scatter of objects and of gravity within the class, noise. */
+    private static double variance(Sample sample, int f, int knot, GravityClass gravity) {
         double scatter = sample.locus(f).scatter(knot);
-        return scatter * scatter + sample.noise(f, f);
+        double ofGravity = GravityScale.spread(gravity) * sample.locus(f).shift(knot);
+        return scatter * scatter + ofGravity * ofGravity + sample.noise(f, f);
     }
 
     /** Widens the sigma of features whose residuals are large wherever the object is probable. */
@@ -181,7 +169,8 @@ public final class CalibratedWitness {
         double[] expected = new double[inflation.length];
         double total = 0;
         for (Map.Entry<GravityClass, double[]> entry : logAtKnots.entrySet()) {
-            double lowGravity = lowGravity(entry.getKey());
+            GravityClass gravity = entry.getKey();
+            double centre = GravityScale.centre(gravity);
             for (int k = 0; k < TypeKnots.COUNT; k++) {
                 double weight = Math.exp(entry.getValue()[k] - best);
                 if (weight < 1e-4) {
@@ -189,8 +178,8 @@ public final class CalibratedWitness {
                 }
                 total += weight;
                 for (int f = 0; f < expected.length; f++) {
-                    double rest = sample.value(f) - sample.locus(f).mean(k, lowGravity);
-                    expected[f] += weight * rest * rest / variance(sample, f, k);
+                    double rest = sample.value(f) - sample.locus(f).mean(k, centre);
+                    expected[f] += weight * rest * rest / variance(sample, f, k, gravity);
                 }
             }
         }
@@ -228,7 +217,7 @@ public final class CalibratedWitness {
                 ofClass[k] =
                         knots[k] == null
                                 ? Double.NEGATIVE_INFINITY
-                                : knots[k].logLikelihood(0, lowGravity(gravity))
+                                : knots[k].at(0).logLikelihood(gravity)
                                         + Math.log(prior.density(TypeKnots.typeNumber(k), gravity));
             }
             log.put(gravity, ofClass);
@@ -240,23 +229,25 @@ public final class CalibratedWitness {
     private Map<GravityClass, double[]> onGrid(KnotLikelihood[] knots) {
         Map<GravityClass, double[]> grid = new EnumMap<>(GravityClass.class);
         for (GravityClass gravity : GravityClass.values()) {
-            double lowGravity = lowGravity(gravity);
             double[] log = new double[GRID];
-            for (int i = 0; i < GRID; i++) {
-                int below = Math.min(i / GRID_STEPS_A_KNOT, TypeKnots.COUNT - 2);
-                double part = (double) i / GRID_STEPS_A_KNOT - below;
-                KnotLikelihood before = knots[below];
-                KnotLikelihood after = knots[below + 1];
-                if (before == null || after == null) {
-                    log[i] = Double.NEGATIVE_INFINITY;
-                } else {
-                    log[i] =
-                            (1 - part) * before.logLikelihood(part, lowGravity)
-                                    + part * after.logLikelihood(part - 1, lowGravity)
-                                    + Math.log(prior.density(i * STEP, gravity));
-                }
-            }
+            Arrays.fill(log, Double.NEGATIVE_INFINITY);
             grid.put(gravity, log);
+        }
+        for (int i = 0; i < GRID; i++) {
+            int below = Math.min(i / GRID_STEPS_A_KNOT, TypeKnots.COUNT - 2);
+            if (knots[below] == null || knots[below + 1] == null) {
+                continue;
+            }
+            double part = (double) i / GRID_STEPS_A_KNOT - below;
+            KnotLikelihood.AtType before = knots[below].at(part);
+            KnotLikelihood.AtType after = knots[below + 1].at(part - 1);
+            for (Map.Entry<GravityClass, double[]> entry : grid.entrySet()) {
+                GravityClass gravity = entry.getKey();
+                entry.getValue()[i] =
+                        (1 - part) * before.logLikelihood(gravity)
+                                + part * after.logLikelihood(gravity)
+                                + Math.log(prior.density(i * STEP, gravity));
+            }
         }
         return grid;
     }
@@ -312,7 +303,7 @@ public final class CalibratedWitness {
         double type = mean(found);
         double lowGravity = 0;
         for (GravityClass gravity : GravityClass.values()) {
-            lowGravity += found.probability(gravity) * lowGravity(gravity);
+            lowGravity += found.probability(gravity) * GravityScale.centre(gravity);
         }
         double steps = type / TypeKnots.STEP;
         KnotLikelihood.Pull[] pulls = nearest.pulls(steps - Math.round(steps), lowGravity);

@@ -91,7 +91,9 @@ public final class Forecast {
         }
         double[] residuals = correlated(places, normal);
         Map<String, Measured> values = new LinkedHashMap<>();
-        double lowGravity = CalibratedWitness.lowGravity(setting.gravity());
+        double lowGravity =
+                GravityScale.centre(setting.gravity())
+                        + GravityScale.spread(setting.gravity()) * normal.sample();
         for (int f = 0; f < residuals.length; f++) {
             Locus locus = calibration.loci().get(places.get(f));
             double value =

@@ -1,5 +1,6 @@
 package emberline.place.calibrated;
 
+import emberline.place.GravityClass;
 import emberline.place.LowerFactor;
 import java.util.Arrays;
 
@@ -103,13 +104,12 @@ final class KnotLikelihood {
     }
 
     /**
-     * The logarithm of the likelihood.
+     * The likelihood at one type.
      *
      * @param stepsFromKnot distance of the type from this knot in steps of the knots, -1 to 1
-     * @param lowGravity 0 field, 0.5 intermediate, 1 very low
-     * @return log likelihood, up to a constant of the sample
+     * @return the likelihood there, for every gravity
      */
-    double logLikelihood(double stepsFromKnot, double lowGravity) {
+    AtType at(double stepsFromKnot) {
         int side = stepsFromKnot < 0 ? 0 : 2;
         double part = Math.abs(stepsFromKnot);
         solveIfNew(HERE);
@@ -118,14 +118,47 @@ final class KnotLikelihood {
         } else {
             side = HERE;
         }
-        double sum = 0;
+        double squares = 0;
+        double products = 0;
+        double shifts = 0;
         for (int f = 0; f < size; f++) {
-            double here = residual[HERE][f] - lowGravity * shift[HERE][f];
-            double there = residual[side][f] - lowGravity * shift[side][f];
-            double z = here + part * (there - here);
-            sum += z * z;
+            double rest = residual[HERE][f] + part * (residual[side][f] - residual[HERE][f]);
+            double ofGravity = shift[HERE][f] + part * (shift[side][f] - shift[HERE][f]);
+            squares += rest * rest;
+            products += rest * ofGravity;
+            shifts += ofGravity * ofGravity;
         }
-        return -0.5 * (sum + logDeterminant);
+        return new AtType(squares, products, shifts, logDeterminant);
+    }
+
+    /**
+     * The likelihood at one type, which is normal in gravity: products of whitened vectors.
+     *
+     * @param squares of the residual at field gravity with itself
+     * @param products of that residual with the gravity shift
+     * @param shifts of the gravity shift with itself
+     * @param logDeterminant logarithm of the determinant of the covariance
+     */
+    record AtType(double squares, double products, double shifts, double logDeterminant) {
+
+        /**
+         * The logarithm of the likelihood of a gravity class, its objects being spread normally.
+         *
+         * @param gravity the class
+         * @return log likelihood, up to a constant of the sample
+         */
+        double logLikelihood(GravityClass gravity) {
+            double centre = GravityScale.centre(gravity);
+            double variance = Math.pow(GravityScale.spread(gravity), 2);
+            double chiSquare = squares - 2 * centre * products + centre * centre * shifts;
+            double along = products - centre * shifts;
+            double wider = 1 + variance * shifts;
+            return -0.5
+                    * (chiSquare
+                            - variance * along * along / wider
+                            + Math.log(wider)
+                            + logDeterminant);
+        }
     }
 
     /**

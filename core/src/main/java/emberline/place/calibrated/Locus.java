@@ -64,6 +64,26 @@ final class Locus {
     }
 
     /**
+     * How steep the mean runs with type at a type.
+     *
+     * @param typeNumber type number (M0 = 0)
+     * @return change of the expected value a subclass, over the subclass around that type
+     */
+    double slope(double typeNumber) {
+        return TypeKnots.slope(field, typeNumber);
+    }
+
+    /**
+     * What very low gravity adds to the mean at a type.
+     *
+     * @param typeNumber type number (M0 = 0)
+     * @return expected difference to field gravity
+     */
+    double shift(double typeNumber) {
+        return TypeKnots.read(lowGravityShift, typeNumber);
+    }
+
+    /**
      * The mean at a type.
      *
      * @param typeNumber type number (M0 = 0)

@@ -5,17 +5,19 @@ import java.util.Arrays;
 import java.util.List;
 
 /**
- * Fits the locus of one feature: at every knot a local linear regression of the value on type and
- * gravity, with weights that fall off with the difference in type and with the residual. Where
- * spectra are scarce the kernel widens.
+ * Fits the locus of one feature: at every knot a local regression of the value on type, its square
+ * and gravity, with weights that fall off with the difference in type and with the residual. Where
+ * spectra are scarce the kernel widens. The scatter is that of the objects: what noise, the error
+ * of published types and the spread of gravity within a published class put into the residuals is
+ * taken off.
  */
 final class LocusFit {
 
     /** One-sigma width of the kernel where there are enough spectra (subclass). */
-    private static final double BANDWIDTH = 1.6;
+    private static final double BANDWIDTH = 2.0;
 
     /** From L9 on, where methane sets in and relations anchor the loci, the kernel is narrower. */
-    private static final double METHANE_BANDWIDTH = 0.9;
+    private static final double METHANE_BANDWIDTH = 1.2;
 
     private static final double METHANE_FROM = 19;
 
@@ -28,6 +30,12 @@ final class LocusFit {
     /** Weight of the prior that gravity does nothing. */
     private static final double GRAVITY_RIDGE = 0.3;
 
+    /** Weight of the prior that the locus is straight, as a share of the weight of the spectra. */
+    private static final double CURVATURE_RIDGE = 0.01;
+
+    /** Columns of the regression: mean, slope, gravity shift, curvature. */
+    private static final int TERMS = 4;
+
     private static final int ROUNDS = 4;
 
     /** Residuals beyond this many sigma lose more than half of their weight. */
@@ -36,8 +44,8 @@ final class LocusFit {
     /** What the soft weights take off the variance of normal residuals. */
     private static final double SOFT_LOSS = 1.25;
 
-    /** Largest share of the variance that is ascribed to noise. */
-    private static final double MOST_NOISE = 0.7;
+    /** Largest share of the variance that is ascribed to noise and to labels. */
+    private static final double MOST_NOISE = 0.65;
 
     /** Gravity is known to matter, and has been calibrated, between these types only. */
     private static final double[] GRAVITY_RANGE = {2, 4, 18, 20};
@@ -62,9 +70,9 @@ final class LocusFit {
         for (int k = 0; k < TypeKnots.COUNT; k++) {
             double type = TypeKnots.typeNumber(k);
             kernel(points, type, weights);
-            AtKnot fit = local(points, type, weights);
+            AtKnot fit = local(points, type, gravityMatters(type), weights);
             mean[k] = fit.mean;
-            shift[k] = fit.shift * gravityMatters(type);
+            shift[k] = fit.shift;
             scatter[k] = fit.scatter;
         }
         return new Locus(feature, mean, shift, scatter);
@@ -92,10 +100,11 @@ final class LocusFit {
         }
     }
 
-    private static AtKnot local(List<Point> points, double type, double[] kernel) {
+    private static AtKnot local(
+            List<Point> points, double type, double gravityMatters, double[] kernel) {
         double[] robust = new double[kernel.length];
         Arrays.fill(robust, 1);
-        double[] beta = new double[3];
+        double[] beta = new double[TERMS];
         double variance = 0;
         double noise = 0;
         double effective = 1;
@@ -124,30 +133,42 @@ final class LocusFit {
             }
         }
         double corrected = variance * SOFT_LOSS * effective / Math.max(effective - 2, 1);
-        double intrinsic = corrected - Math.min(noise, MOST_NOISE * corrected);
-        return new AtKnot(beta[0], beta[2], Math.sqrt(Math.max(intrinsic, 1e-8)));
+        double shift = beta[2] * gravityMatters;
+        double ofLabels =
+                Math.pow(TrainingSet.TYPE_NOISE_SUBCLASS * beta[1], 2)
+                        + Math.pow(TrainingSet.GRAVITY_NOISE * shift, 2);
+        double intrinsic = corrected - Math.min(noise + ofLabels, MOST_NOISE * corrected);
+        return new AtKnot(beta[0], shift, Math.sqrt(Math.max(intrinsic, 1e-8)));
     }
 
     private static double residual(Point point, double type, double[] beta) {
+        double difference = point.typeNumber() - type;
         return point.value()
                 - beta[0]
-                - beta[1] * (point.typeNumber() - type)
-                - beta[2] * point.lowGravity();
+                - beta[1] * difference
+                - beta[2] * point.lowGravity()
+                - beta[3] * difference * difference;
     }
 
-    /** Weighted least squares for mean, slope and gravity shift, with weak priors on the last. */
+    /**
+     * Weighted least squares for mean, slope, gravity shift and curvature, with weak priors on all
+     * but the mean.
+     */
     private static double[] regress(
             List<Point> points, double type, double[] kernel, double[] robust) {
-        double[][] normal = new double[3][4];
+        double[][] normal = new double[TERMS][TERMS + 1];
         for (int i = 0; i < kernel.length; i++) {
             double w = kernel[i] * robust[i];
             if (w < 1e-6) {
                 continue;
             }
             Point point = points.get(i);
-            double[] row = {1, point.typeNumber() - type, point.lowGravity(), point.value()};
-            for (int a = 0; a < 3; a++) {
-                for (int b = 0; b < 4; b++) {
+            double difference = point.typeNumber() - type;
+            double[] row = {
+                1, difference, point.lowGravity(), difference * difference, point.value()
+            };
+            for (int a = 0; a < TERMS; a++) {
+                for (int b = 0; b <= TERMS; b++) {
                     normal[a][b] += w * row[a] * row[b];
                 }
             }
@@ -155,23 +176,24 @@ final class LocusFit {
         normal[0][0] += 1e-9;
         normal[1][1] += 5e-5 * normal[0][0] + 1e-9;
         normal[2][2] += GRAVITY_RIDGE;
+        normal[3][3] += CURVATURE_RIDGE * normal[0][0] + 1e-9;
         return solve(normal);
     }
 
-    /** Solves three normal equations by elimination; they are positive definite. */
+    /** Solves the normal equations by elimination; they are positive definite. */
     private static double[] solve(double[][] a) {
-        for (int p = 0; p < 3; p++) {
-            for (int row = p + 1; row < 3; row++) {
+        for (int p = 0; p < TERMS; p++) {
+            for (int row = p + 1; row < TERMS; row++) {
                 double factor = a[row][p] / a[p][p];
-                for (int col = p; col < 4; col++) {
+                for (int col = p; col <= TERMS; col++) {
                     a[row][col] -= factor * a[p][col];
                 }
             }
         }
-        double[] x = new double[3];
-        for (int p = 2; p >= 0; p--) {
-            double sum = a[p][3];
-            for (int col = p + 1; col < 3; col++) {
+        double[] x = new double[TERMS];
+        for (int p = TERMS - 1; p >= 0; p--) {
+            double sum = a[p][TERMS];
+            for (int col = p + 1; col < TERMS; col++) {
                 sum -= a[p][col] * x[col];
             }
             x[p] = sum / a[p][p];

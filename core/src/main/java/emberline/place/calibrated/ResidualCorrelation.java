@@ -1,6 +1,5 @@
 package emberline.place.calibrated;
 
-import emberline.measure.Measurement.Measured;
 import emberline.place.calibrated.TrainingSet.Dwarf;
 import java.util.List;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
@@ -8,8 +7,9 @@ import org.apache.commons.math3.linear.EigenDecomposition;
 
 /**
  * How the residuals of features about their loci go together: an object with too much water for its
- * type shows it in every water index. One matrix for all types, from standardised residuals, shrunk
- * towards independence.
+ * type shows it in every water index. One matrix for all types, from standardised residuals,
+ * cleared of what the errors of published types and gravities put into all of them at once, and
+ * shrunk towards independence.
  */
 final class ResidualCorrelation {
 
@@ -17,10 +17,13 @@ final class ResidualCorrelation {
      * What is kept of the correlations found. Chosen by cross-validation: a few hundred dwarfs do
      * not determine thousands of correlations, and their errors cost more than they tell.
      */
-    private static final double KEPT = 0.25;
+    private static final double KEPT = 0.35;
 
-    /** Residuals are cut at this many sigma. */
-    private static final double CUT = 3;
+    /** Smallest share of the variance of a feature that is left to the objects. */
+    private static final double LEAST_OWN = 0.3;
+
+    /** No correlation is taken as stronger. */
+    private static final double MOST = 0.95;
 
     /** Pairs of features need more spectra in common than this. */
     private static final double FEWEST_PAIRS = 12;
@@ -43,54 +46,39 @@ final class ResidualCorrelation {
      */
     static double[][] of(List<Locus> loci, List<Dwarf> dwarfs) {
         int size = loci.size();
-        double[][] residuals = new double[dwarfs.size()][];
-        for (int d = 0; d < residuals.length; d++) {
-            residuals[d] = residuals(loci, dwarfs.get(d));
+        Residuals[] ofDwarf = new Residuals[dwarfs.size()];
+        for (int d = 0; d < ofDwarf.length; d++) {
+            ofDwarf[d] = new Residuals(loci, dwarfs.get(d));
         }
         double[][] matrix = new double[size][size];
         for (int a = 0; a < size; a++) {
             matrix[a][a] = 1;
             for (int b = 0; b < a; b++) {
-                matrix[a][b] = KEPT * correlation(residuals, dwarfs, a, b);
+                matrix[a][b] = KEPT * correlation(ofDwarf, a, b);
                 matrix[b][a] = matrix[a][b];
             }
         }
         return positiveDefinite(matrix);
     }
 
-    private static double[] residuals(List<Locus> loci, Dwarf dwarf) {
-        double[] residuals = new double[loci.size()];
-        for (int i = 0; i < residuals.length; i++) {
-            Locus locus = loci.get(i);
-            residuals[i] =
-                    dwarf.row()
-                            .feature(locus.feature())
-                            .map(value -> residual(locus, value, dwarf))
-                            .orElse(Double.NaN);
-        }
-        return residuals;
-    }
-
-    private static double residual(Locus locus, Measured value, Dwarf dwarf) {
-        double sigma = Math.hypot(locus.scatter(dwarf.typeNumber()), value.oneSigma());
-        double residual =
-                (value.value() - locus.mean(dwarf.typeNumber(), dwarf.lowGravity())) / sigma;
-        return Math.max(-CUT, Math.min(CUT, residual));
-    }
-
-    private static double correlation(double[][] residuals, List<Dwarf> dwarfs, int a, int b) {
+    /**
+     * The correlation of two residuals, less what the errors of labels make of it: an object whose
+     * published type is too late stands off all loci at once, which says nothing about objects.
+     */
+    private static double correlation(Residuals[] ofDwarf, int a, int b) {
         double aa = 0;
         double bb = 0;
         double ab = 0;
+        double labelsOfA = 0;
+        double labelsOfB = 0;
         int pairs = 0;
-        for (int d = 0; d < residuals.length; d++) {
-            double one = residuals[d][a];
-            double two = residuals[d][b];
-            if (!Double.isNaN(one) && !Double.isNaN(two)) {
-                double weight = dwarfs.get(d).weight();
-                aa += weight * one * one;
-                bb += weight * two * two;
-                ab += weight * one * two;
+        for (Residuals one : ofDwarf) {
+            if (one.hasBoth(a, b)) {
+                aa += one.product(a, a);
+                bb += one.product(b, b);
+                ab += one.product(a, b) - one.productOfLabels(a, b);
+                labelsOfA += one.productOfLabels(a, a);
+                labelsOfB += one.productOfLabels(b, b);
                 pairs++;
             }
         }
@@ -98,7 +86,9 @@ final class ResidualCorrelation {
             return 0;
         }
         double sure = (pairs - FEWEST_PAIRS) / (pairs + HALF_PAIRS);
-        return sure * ab / Math.sqrt(aa * bb);
+        double ofA = Math.max(aa - labelsOfA, LEAST_OWN * aa);
+        double ofB = Math.max(bb - labelsOfB, LEAST_OWN * bb);
+        return Math.max(-MOST, Math.min(MOST, sure * ab / Math.sqrt(ofA * ofB)));
     }
 
     private static double[][] positiveDefinite(double[][] matrix) {

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.stream.Collectors;
 
 /**
  * What the loci learn from: single late dwarfs of known type, weighted by how far their labels and
@@ -18,6 +19,18 @@ final class TrainingSet {
 
     /** Weight of a spectrum by its tier; other tiers teach nothing. */
     private static final Map<String, Double> WEIGHT = Map.of("A", 1.0, "B", 0.8, "C", 0.3);
+
+    /**
+     * One-sigma error of published types (subclass), of which the scatter of objects is cleared.
+     * Chosen by cross-validation; typers agree to about half a subclass.
+     */
+    static final double TYPE_NOISE_SUBCLASS = 0.35;
+
+    /**
+     * One-sigma spread of gravity within a published class, on the scale of the loci, of which the
+     * scatter of objects is cleared. Chosen by cross-validation.
+     */
+    static final double GRAVITY_NOISE = 0.2;
 
     /** Latest type that can be placed. */
     private static final double LATEST = TypeKnots.typeNumber(TypeKnots.COUNT - 1);
@@ -66,6 +79,7 @@ final class TrainingSet {
      * @return the training set
      */
     static TrainingSet of(ReferenceTable table, Map<String, List<Point>> anchors) {
+        Map<String, Double> ofGroup = lowGravityByGroup(table);
         List<Dwarf> dwarfs = new ArrayList<>();
         for (ReferenceRow row : table.rows()) {
             Double weight = WEIGHT.get(row.tier());
@@ -77,11 +91,26 @@ final class TrainingSet {
                         new Dwarf(
                                 row,
                                 row.typeNumber().getAsDouble(),
-                                lowGravity(row.gravity()),
+                                row.gravity().isEmpty()
+                                        ? ofGroup.getOrDefault(row.group(), 0.0)
+                                        : lowGravity(row.gravity()),
                                 weight));
             }
         }
         return new TrainingSet(List.copyOf(dwarfs), anchors);
+    }
+
+    /**
+     * The mean place on the scale of the loci of the spectra of each group that were classed: an
+     * object keeps its gravity from spectrum to spectrum, and companions are of one age.
+     */
+    private static Map<String, Double> lowGravityByGroup(ReferenceTable table) {
+        return table.rows().stream()
+                .filter(row -> row.kind().equals("dwarf") && !row.gravity().isEmpty())
+                .collect(
+                        Collectors.groupingBy(
+                                ReferenceRow::group,
+                                Collectors.averagingDouble(row -> lowGravity(row.gravity()))));
     }
 
     /**

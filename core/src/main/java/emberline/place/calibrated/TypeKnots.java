@@ -54,4 +54,18 @@ final class TypeKnots {
         double part = part(typeNumber, knot);
         return table[knot] * (1 - part) + table[knot + 1] * part;
     }
+
+    /**
+     * How steep a table runs at a type.
+     *
+     * @param table one value a knot
+     * @param typeNumber type number; near the ends the last interval is taken
+     * @return change of the value a subclass, between half a subclass before and after the type
+     */
+    static double slope(double[] table, double typeNumber) {
+        double last = typeNumber(COUNT - 1);
+        double from = Math.max(0, Math.min(last - STEP, typeNumber - STEP));
+        double to = Math.min(last, Math.max(STEP, typeNumber + STEP));
+        return (read(table, to) - read(table, from)) / (to - from);
+    }
 }

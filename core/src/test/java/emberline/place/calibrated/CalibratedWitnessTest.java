@@ -50,7 +50,7 @@ class CalibratedWitnessTest {
     void gravityIsFoundWithTheType() {
         for (double type = 7; type <= 15; type += 2) {
             for (GravityClass gravity : GravityClass.values()) {
-                double lowGravity = CalibratedWitness.lowGravity(gravity);
+                double lowGravity = GravityScale.centre(gravity);
                 CalibratedType placed = place(perfect(type, lowGravity, 0.1));
                 double probability = placed.posterior().orElseThrow().probability(gravity);
                 assertTrue(probability > 0.8, type + " " + gravity + ": " + probability);

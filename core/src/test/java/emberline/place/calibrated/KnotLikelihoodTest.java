@@ -3,6 +3,7 @@ package emberline.place.calibrated;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import emberline.measure.Measurement.Measured;
+import emberline.place.GravityClass;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -47,21 +48,27 @@ class KnotLikelihoodTest {
         return Sample.of(calibration(), values);
     }
 
-    private static double expected(double type, double lowGravity) {
-        return expected(type, lowGravity, new double[] {1, 1, 1});
+    private static double expected(double type, double lowGravity, double spread) {
+        return expected(type, lowGravity, spread, new double[] {1, 1, 1});
     }
 
-    private static double expected(double type, double lowGravity, double[] inflation) {
+    /** By the library's multivariate normal density; gravity adds its spread along its shift. */
+    private static double expected(
+            double type, double lowGravity, double spread, double[] inflation) {
         double[] means = new double[VALUE.length];
         double[][] covariance = new double[VALUE.length][VALUE.length];
         for (int f = 0; f < VALUE.length; f++) {
             means[f] = mean(f, type, lowGravity);
             for (int g = 0; g < VALUE.length; g++) {
                 double own = f == g ? NOISE[f] * NOISE[f] : 0;
+                double shifts =
+                        (mean(f, type, 1) - mean(f, type, 0))
+                                * (mean(g, type, 1) - mean(g, type, 0));
                 covariance[f][g] =
                         inflation[f]
-                                * inflation[g]
-                                * (CORRELATION[f][g] * SCATTER[f] * SCATTER[g] + own);
+                                        * inflation[g]
+                                        * (CORRELATION[f][g] * SCATTER[f] * SCATTER[g] + own)
+                                + spread * spread * shifts;
             }
         }
         return Math.log(new MultivariateNormalDistribution(means, covariance).density(VALUE))
@@ -73,12 +80,16 @@ class KnotLikelihoodTest {
         for (int knot : new int[] {3, 20, 40}) {
             KnotLikelihood likelihood = KnotLikelihood.at(sample(), calibration(), knot);
             for (double steps : new double[] {-1, -0.4, 0, 0.2, 1}) {
-                for (double lowGravity : new double[] {0, 0.5, 1}) {
+                for (GravityClass gravity : GravityClass.values()) {
                     double type = TypeKnots.typeNumber(knot) + steps * TypeKnots.STEP;
-                    double log = expected(type, lowGravity);
+                    double log =
+                            expected(
+                                    type,
+                                    GravityScale.centre(gravity),
+                                    GravityScale.spread(gravity));
                     assertEquals(
                             log,
-                            likelihood.logLikelihood(steps, lowGravity),
+                            likelihood.at(steps).logLikelihood(gravity),
                             1e-9 * Math.abs(log) + 1e-9);
                 }
             }
@@ -93,7 +104,9 @@ class KnotLikelihoodTest {
         for (double steps : new double[] {-0.7, 0, 0.4}) {
             double type = TypeKnots.typeNumber(20) + steps * TypeKnots.STEP;
             assertEquals(
-                    expected(type, 0.5, inflation), likelihood.logLikelihood(steps, 0.5), 1e-8);
+                    expected(type, 0.5, GravityScale.spread(GravityClass.INT_G), inflation),
+                    likelihood.at(steps).logLikelihood(GravityClass.INT_G),
+                    1e-8);
         }
     }
 
@@ -108,6 +121,6 @@ class KnotLikelihoodTest {
         assertEquals(1, share, 1e-12);
         double best = TypeKnots.typeNumber(knot) + pull;
         double h = 1e-3;
-        assertEquals(0, (expected(best + h, 0) - expected(best - h, 0)) / (2 * h), 1e-5);
+        assertEquals(0, (expected(best + h, 0, 0) - expected(best - h, 0, 0)) / (2 * h), 1e-5);
     }
 }
