@@ -16,7 +16,6 @@ import emberline.reports.attach.Digits;
 import emberline.reports.attach.StandardsText;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.SpectralType;
-import emberline.spectrum.Spectrum;
 import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
 import emberline.survey.verdict.Verdict;
@@ -226,7 +225,6 @@ final class KeyNumbers {
         if (leading.isEmpty()) {
             return;
         }
-        Spectrum spectrum = leading.get().prepared().spectrum();
         List<BandSignal> signals = leading.get().quality().bands();
         boolean bands = signals.stream().anyMatch(s -> s.range() != BandSignal.Range.WHOLE);
         String signal =
@@ -242,31 +240,14 @@ final class KeyNumbers {
                                                 + ")")
                         .collect(Collectors.joining(", "));
         Quality quality = leading.get().quality();
-        entries.add(new Entry("Quality", quality.grade().word() + ": " + quality.reason()));
+        entries.add(
+                new Entry(
+                        "Quality",
+                        quality.grade().word()
+                                + ": "
+                                + quality.reason()
+                                + (result.spectra().size() > 1 ? " (the best spectrum)" : "")));
         entries.add(new Entry("S/N per pixel", signal.isEmpty() ? "not known" : signal));
-        double resolvingPower = leading.get().prepared().resolvingPower().value();
-        entries.add(
-                new Entry(
-                        "Resolving power",
-                        Digits.significant(Math.rint(resolvingPower))
-                                + ", "
-                                + ProvenanceText.basis(
-                                        leading.get().prepared().resolvingPower().basis())));
-        entries.add(
-                new Entry(
-                        "Wavelengths",
-                        String.format(
-                                Locale.ROOT,
-                                "%.2f to %.2f µm, %d pixels",
-                                spectrum.wavelengthMicron(0),
-                                spectrum.wavelengthMicron(spectrum.size() - 1),
-                                spectrum.size())));
-        if (result.spectra().size() > 1) {
-            entries.add(
-                    new Entry(
-                            "Spectra",
-                            result.spectra().size() + "; the above is of the best of them"));
-        }
         result.best()
                 .ifPresent(
                         best -> {

@@ -11,7 +11,7 @@ final class LinePanel {
     /** The most charts side by side. */
     static final int MOST = 5;
 
-    private static final float CHART_TALL = 74;
+    private static final float CHART_TALL = 66;
     private static final float GUTTER = 6;
     private static final Frame FRAME = new Frame(20, 11, 5, 13);
     private static final String HEADING = "Lines";
@@ -28,7 +28,7 @@ final class LinePanel {
 
     /** The height that the panel takes up (point). */
     static float tall(List<Chart> charts) {
-        return charts.isEmpty() ? 0 : CHART_TALL + 20;
+        return charts.isEmpty() ? 0 : CHART_TALL + 18;
     }
 
     void write(Sheet sheet, List<Chart> charts, float y) throws IOException {

@@ -70,7 +70,7 @@ final class PageHead {
                         .limit(MOST_WARNINGS)
                         .toList();
         for (Finding warning : warnings) {
-            String text = "Warning: " + warning.text() + ".";
+            String text = "Warning: " + PrintedText.sentence(warning.text());
             for (String line : document.lines().wrap(styles.warning(), text, width, 2)) {
                 sheet.text(styles.warning(), FirstPage.MARGIN, y, line);
                 y += styles.warning().leadingPoint();

@@ -90,7 +90,7 @@ public final class PdfReport {
     }
 
     private void write(ReportDocument document, ObjectResult result) throws IOException {
-        List<Flow.Bookmark> sections = pages(document, result);
+        List<Columns.Bookmark> sections = pages(document, result);
         footers(document, List.of(new ContentsPages.Entry(result, 0)));
         PDDocumentOutline outline = new PDDocumentOutline();
         outline.addLast(item("Finding", document.pdf().getPage(0)));
@@ -112,7 +112,7 @@ public final class PdfReport {
         for (ObjectResult result : results) {
             int first = pdf.getNumberOfPages();
             entries.add(new ContentsPages.Entry(result, before + first));
-            List<Flow.Bookmark> sections = pages(document, result);
+            List<Columns.Bookmark> sections = pages(document, result);
             PDOutlineItem object = item(result.candidate().name(), pdf.getPage(first));
             object.addLast(item("Finding", pdf.getPage(first)));
             sections.forEach(s -> object.addLast(item(s.title(), s.sheet().page())));
@@ -130,7 +130,7 @@ public final class PdfReport {
     }
 
     /** The pages of an object; returns where the sections after the first page begin. */
-    private List<Flow.Bookmark> pages(ReportDocument document, ObjectResult result)
+    private List<Columns.Bookmark> pages(ReportDocument document, ObjectResult result)
             throws IOException {
         boolean gravityShown;
         try (Sheet first = new Sheet(document, settings.paper())) {
@@ -138,8 +138,8 @@ public final class PdfReport {
                     new FirstPage(document, catalogue, calibration, settings.paper())
                             .write(first, result);
         }
-        return new DetailPages(document, catalogue, calibration, settings)
-                .write(result, !gravityShown);
+        return new DetailPage(document, catalogue, calibration, settings, result)
+                .write(!gravityShown);
     }
 
     private static List<String> parts(List<ObjectResult> results) {

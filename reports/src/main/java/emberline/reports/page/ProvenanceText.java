@@ -11,6 +11,7 @@ import java.util.Locale;
 final class ProvenanceText {
 
     private static final int SHORT_CHECKSUM = 16;
+    private static final int LONGEST_PATH = 44;
 
     private ProvenanceText() {}
 
@@ -46,12 +47,23 @@ final class ProvenanceText {
         return sha256.length() <= SHORT_CHECKSUM ? sha256 : sha256.substring(0, SHORT_CHECKSUM);
     }
 
+    /** The end of a long path: the checksum tells which file it was. */
+    private static String shortened(String path) {
+        if (path.length() <= LONGEST_PATH) {
+            return path;
+        }
+        String end = path.substring(path.length() - LONGEST_PATH + 1);
+        int slash = end.indexOf('/');
+        boolean whole = slash >= 0 && slash < end.length() - 1;
+        return "\u2026" + (whole ? end.substring(slash) : end);
+    }
+
     static String of(SpectrumResult result) {
         Spectrum spectrum = result.prepared().spectrum();
         return String.format(
                 Locale.ROOT,
                 "%s: %s; SHA-256 begins %s; %.4f to %.4f µm, %d pixels; resolving power %s, %s; %s.",
-                result.path(),
+                shortened(result.path()),
                 result.format(),
                 checksum(result.sha256()),
                 spectrum.wavelengthMicron(0),

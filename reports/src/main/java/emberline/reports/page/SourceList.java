@@ -24,6 +24,12 @@ final class SourceList {
         return place < 0 ? "" : "[" + (place + 1) + "]";
     }
 
+    /** The number of a paper, e.g. {@code 4}; empty for one that is not listed. */
+    String number(Source source) {
+        int place = sources.indexOf(source);
+        return place < 0 ? "" : Integer.toString(place + 1);
+    }
+
     List<Source> sources() {
         return sources;
     }

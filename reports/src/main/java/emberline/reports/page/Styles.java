@@ -40,10 +40,10 @@ record Styles(
                 new Style(Face.SERIF, 9.4f, 12.6f, theme.ink()),
                 new Style(Face.SANS_BOLD, 7.8f, 11, theme.ink()),
                 new Style(Face.SERIF, 7.4f, 9.8f, theme.ink()),
-                new Style(Face.SANS, 6.4f, 8.2f, theme.quiet()),
-                new Style(Face.SANS, 6.7f, 8.5f, theme.ink()),
-                new Style(Face.SANS_BOLD, 6.7f, 8.5f, theme.colour(Tone.USED)),
-                new Style(Face.SANS_ITALIC, 6.4f, 8.2f, theme.quiet()),
+                new Style(Face.SANS, 6.5f, 8.2f, theme.quiet()),
+                new Style(Face.SANS, 6.6f, 8.4f, theme.ink()),
+                new Style(Face.SANS_BOLD, 6.6f, 8.4f, theme.colour(Tone.USED)),
+                new Style(Face.SANS_ITALIC, 6.5f, 8.2f, theme.quiet()),
                 new Style(Face.SANS, 7.2f, 9.4f, theme.accent()));
     }
 }
