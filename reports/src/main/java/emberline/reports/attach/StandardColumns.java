@@ -40,7 +40,7 @@ final class StandardColumns {
         columns.add(
                 number(
                         "best_standard_chi2",
-                        "stat.value;stat.fit.chi2",
+                        "stat.fit.chi2",
                         "",
                         "its reduced chi-square",
                         r -> best(r).map(m -> Digits.fixed(m.reducedChiSquare(), 2))));

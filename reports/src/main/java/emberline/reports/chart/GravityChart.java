@@ -25,6 +25,12 @@ public final class GravityChart {
 
     private static final double LOCUS_STEP = 0.25;
 
+    /** Room beside an object (subclass). */
+    private static final double BESIDE = 0.7;
+
+    /** By how much the axis is made longer for an object at most (subclass). */
+    private static final double FURTHER = 2;
+
     private final FeatureCatalogue catalogue;
     private final Calibration calibration;
 
@@ -66,20 +72,27 @@ public final class GravityChart {
         layers.add(area(intermediate, field, below, Tone.FIELD, "FLD"));
         layers.add(area(veryLow, intermediate, below, Tone.INTERMEDIATE, "INT"));
         layers.add(area(end, veryLow, below, Tone.VERY_LOW, "VL"));
-        locus(feature.id(), 0, Tone.LOCUS_FIELD).ifPresent(layers::add);
-        locus(feature.id(), 1, Tone.LOCUS_VERY_LOW).ifPresent(layers::add);
+        double first = FIRST_TYPE;
+        double last = LAST_TYPE;
+        for (Layer.Point point : object) {
+            first = Math.max(FIRST_TYPE - FURTHER, Math.min(first, point.x() - BESIDE));
+            last = Math.min(LAST_TYPE + FURTHER, Math.max(last, point.x() + BESIDE));
+        }
+        locus(feature.id(), 0, Tone.LOCUS_FIELD, first, last).ifPresent(layers::add);
+        locus(feature.id(), 1, Tone.LOCUS_VERY_LOW, first, last).ifPresent(layers::add);
         layers.add(new Layer.Points(object, Tone.RESULT, true));
-        Axis x = new Axis("", "", FIRST_TYPE, LAST_TYPE, Ticks.types(FIRST_TYPE, LAST_TYPE, 6));
+        Axis x = new Axis("", "", first, last, Ticks.types(first, last, 6));
         Axis y = new Axis("", "", range[0], range[1], Ticks.round(range[0], range[1], 4));
         return new Chart(feature.symbol(), x, y, layers);
     }
 
-    private Optional<Layer> locus(String feature, double lowGravity, Tone tone) {
-        int points = (int) ((LAST_TYPE - FIRST_TYPE) / LOCUS_STEP) + 1;
+    private Optional<Layer> locus(
+            String feature, double lowGravity, Tone tone, double first, double last) {
+        int points = (int) ((last - first) / LOCUS_STEP) + 1;
         double[] types = new double[points];
         double[] values = new double[points];
         for (int i = 0; i < points; i++) {
-            types[i] = FIRST_TYPE + i * LOCUS_STEP;
+            types[i] = first + i * LOCUS_STEP;
             Optional<Calibration.Expected> expected =
                     calibration.expected(feature, types[i], lowGravity);
             if (expected.isEmpty()) {
@@ -125,8 +138,8 @@ public final class GravityChart {
         low -= room;
         high += room;
         for (Layer.Point point : object) {
-            low = Math.max(first, Math.min(low, point.yLow() - room / 4));
-            high = Math.min(last, Math.max(high, point.yHigh() + room / 4));
+            low = Math.max(first, Math.min(low, point.yLow() - room / 2));
+            high = Math.min(last, Math.max(high, point.yHigh() + room / 2));
         }
         return new double[] {low, high};
     }

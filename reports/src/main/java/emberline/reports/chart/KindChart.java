@@ -15,6 +15,9 @@ public final class KindChart {
 
     private static final double HALF = 0.33;
 
+    /** Room between a bar and its number. */
+    private static final double BESIDE = 0.02;
+
     private KindChart() {}
 
     /**
@@ -38,7 +41,7 @@ public final class KindChart {
             rows.add(new Tick(row, kind.getKey().label()));
             words.add(
                     new Layer.Note(
-                            share,
+                            share + BESIDE,
                             row,
                             String.format(Locale.ROOT, "%.2f", share),
                             Tone.WORDS,

@@ -24,6 +24,9 @@ public final class LedgerChart {
 
     private static final double MOST_REACH = 4;
 
+    /** Share of the axis that a word beside a bar takes up. */
+    private static final double WORD_SHARE = 0.22;
+
     private LedgerChart() {}
 
     /**
@@ -83,8 +86,16 @@ public final class LedgerChart {
         for (LedgerEntry entry : ledger.entries()) {
             odds += entry.log10Factor();
             reach = Math.max(reach, Math.abs(odds));
+            reach = Math.max(reach, roomForWord(odds - entry.log10Factor(), odds));
         }
         return Math.min(MOST_REACH, Math.max(reach, Math.abs(ledger.finalLog10Odds()))) + 0.25;
+    }
+
+    /** The reach with which the word beside a bar finds room. */
+    private static double roomForWord(double from, double to) {
+        double left = Math.min(from, to);
+        double right = Math.max(from, to);
+        return (left + right > 0 ? -left : right) / (1 - 2 * WORD_SHARE);
     }
 
     /** A word on the side of a bar where there is more room. */

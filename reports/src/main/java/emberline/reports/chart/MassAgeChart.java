@@ -21,7 +21,7 @@ public final class MassAgeChart {
     private static final double[] AGES = {10, 100, 1000, 10000};
     private static final String[] AGE_LABELS = {"10 Myr", "100 Myr", "1 Gyr", "10 Gyr"};
 
-    private static final double WORD_ROOM = 0.01;
+    private static final double WORD_ROOM = 0.025;
 
     private MassAgeChart() {}
 
@@ -87,11 +87,13 @@ public final class MassAgeChart {
                 break;
             }
         }
+        int[] shown = shownColumns(plane);
         List<Block> blocks = new ArrayList<>();
         for (int m = 0; m < plane.masses(); m++) {
             int start = 0;
             for (int a = 0; a <= plane.ages(); a++) {
-                boolean inside = a < plane.ages() && plane.probability(a, m) >= least && least > 0;
+                boolean inside =
+                        a < plane.ages() && least > 0 && plane.probability(shown[a], m) >= least;
                 if (!inside) {
                     if (a > start) {
                         blocks.add(
@@ -106,6 +108,33 @@ public final class MassAgeChart {
             }
         }
         return blocks;
+    }
+
+    /**
+     * The column that is shown at each age: itself, or, where the steps of the evidence are wider
+     * than the cells, the nearest one before that holds anything, up to the last that does.
+     */
+    private static int[] shownColumns(MassAgePlane plane) {
+        int[] shown = new int[plane.ages()];
+        int last = -1;
+        for (int a = 0; a < shown.length; a++) {
+            last = holdsAnything(plane, a) ? a : last;
+        }
+        int before = -1;
+        for (int a = 0; a < shown.length; a++) {
+            before = holdsAnything(plane, a) ? a : before;
+            shown[a] = before >= 0 && a < last ? before : a;
+        }
+        return shown;
+    }
+
+    private static boolean holdsAnything(MassAgePlane plane, int age) {
+        for (int m = 0; m < plane.masses(); m++) {
+            if (plane.probability(age, m) > 0) {
+                return true;
+            }
+        }
+        return false;
     }
 
     private static Layer point(Judgement judgement, double left, double right) {

@@ -57,6 +57,16 @@ final class Reduction {
 
     /** Means of so many pixels each, weighted by inverse variance, with the sigma of the mean. */
     static Reduction ofMeans(Spectrum spectrum, int pixels) {
+        return ofMeans(spectrum, pixels, Double.POSITIVE_INFINITY);
+    }
+
+    /**
+     * Means of so many pixels each, or of fewer where they stand out of the noise, with the sigma
+     * of the mean.
+     *
+     * @param enough signal-to-noise from which a mean needs no further pixels
+     */
+    static Reduction ofMeans(Spectrum spectrum, int pixels, double enough) {
         Reduction reduction = new Reduction();
         double weights = 0;
         double sum = 0;
@@ -64,7 +74,7 @@ final class Reduction {
         int count = 0;
         for (int i = 0; i < spectrum.size(); i++) {
             boolean broken = i > 0 && isBreak(spectrum, i);
-            if (broken || count == pixels) {
+            if (broken || count == pixels || sum > enough * Math.sqrt(weights)) {
                 reduction.addMean(sum, weights, places, count);
                 weights = 0;
                 sum = 0;

@@ -24,6 +24,9 @@ public final class SpectrumChart {
     /** Pixels of a good spectrum with more noise than this share of its peak are pale. */
     private static final double SPOILT = 0.25;
 
+    /** Signal-to-noise from which a mean needs no further pixels. */
+    private static final double PLAIN = 20;
+
     /** About so many means are shown of a noisy spectrum. */
     private static final int MEANS = 260;
 
@@ -148,18 +151,18 @@ public final class SpectrumChart {
         int columns = (int) Math.round(1.2 * size.widthPoint());
         Reduction pixels = Reduction.ofPixels(spectrum, low, high, columns);
         int atOnce = Math.max(1, spectrum.size() / MEANS);
-        Reduction means = Reduction.ofMeans(spectrum, atOnce);
-        double peak = means.size() > 0 ? means.peak() : pixels.peak();
+        Reduction means = Reduction.ofMeans(spectrum, atOnce, PLAIN);
+        boolean noisy =
+                BandSignal.best(spectrum).map(s -> s.medianSignalToNoise() < NOISY).orElse(false);
+        double peak = noisy && means.size() > 0 ? means.peak() : pixels.peak();
         double factor = peak > 0 ? 1 / peak : 1;
         if (scaleTo.isPresent()) {
             factor = OverlapScale.of(spectrum, scaleTo.get(), factor);
         }
-        boolean noisy =
-                BandSignal.best(spectrum).map(s -> s.medianSignalToNoise() < NOISY).orElse(false);
         if (noisy && atOnce > 1 && means.size() > 0) {
             curves.add(pixels.curve(factor, Tone.PIXELS, false));
             curves.add(means.curve(factor, Tone.SPECTRUM, true));
-            remarks.add("Dark: means of " + atOnce + " pixels; light: single pixels.");
+            remarks.add("Dark: means of up to " + atOnce + " pixels; light: single pixels.");
         } else if (noisy) {
             curves.add(pixels.curve(factor, Tone.SPECTRUM, true));
         } else {

@@ -32,7 +32,7 @@ record StandardOverlay(Curve curve, String remark) {
         Reduction reduction = Reduction.ofMeans(shown, atOnce);
         return new StandardOverlay(
                 reduction.curve(factors[verdict.spectrum()] * best.scale(), Tone.STANDARD, false),
-                "Orange: the best standard, "
+                "Dashed, orange: the best standard, "
                         + best.first().name()
                         + " ("
                         + new SpectralType(best.first().typeNumber()).code()

@@ -38,8 +38,8 @@ final class Votable {
     private static void field(TableRows rows, int c, Writer out) throws IOException {
         ResultColumn column = rows.columns().get(c);
         StringBuilder field =
-                new StringBuilder("<FIELD ID=\"c")
-                        .append(c + 1)
+                new StringBuilder("<FIELD ID=\"")
+                        .append(id(rows, c))
                         .append("\" name=\"")
                         .append(escaped(column.name()))
                         .append('"');
@@ -62,6 +62,16 @@ final class Votable {
                         .append(escaped(column.description()))
                         .append("</DESCRIPTION></FIELD>\n")
                         .toString());
+    }
+
+    /** The name, by which some libraries take a column, where it can be an identifier of XML. */
+    private static String id(TableRows rows, int c) {
+        String name = rows.columns().get(c).name();
+        boolean unique =
+                rows.columns().stream().filter(other -> other.name().equals(name)).count() == 1;
+        return unique && name.matches("[A-Za-z][A-Za-z0-9_]*") && !name.matches("c\\d+")
+                ? name
+                : "c" + (c + 1);
     }
 
     /** Text for XML: marks escaped, characters that XML does not allow become blanks. */

@@ -210,7 +210,7 @@ final class DetailPage {
         passage.heading("Features behind type and gravity");
         passage.note(
                 "Says: the type by a published relation, bold where it was combined, or the gravity"
-                        + " score (g). Pull: how far it moved the type (subclass, + later). °:"
+                        + " score (g). Pull: how far it moved the type (subclass, + later). EW_:"
                         + " equivalent width (Å). *: definition quoted from memory, not yet checked"
                         + " in the paper. †: more than half of a window lies in a telluric band."
                         + " ‡: set aside as an outlier.");

@@ -28,7 +28,7 @@ final class EvidencePanel {
     private static final float BETWEEN = 1;
     private static final int KIN = 5;
     private static final Frame LEDGER = new Frame(60, 2, 4, 24);
-    private static final Frame PLANE = new Frame(34, 2, 9, 24);
+    private static final Frame PLANE = new Frame(34, 2, 14, 24);
 
     private final ReportDocument document;
     private final ObjectResult result;

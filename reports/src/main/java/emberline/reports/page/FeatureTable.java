@@ -3,7 +3,6 @@ package emberline.reports.page;
 import emberline.catalogue.Band;
 import emberline.catalogue.Feature;
 import emberline.catalogue.HowKnown;
-import emberline.catalogue.Kind;
 import emberline.catalogue.Purpose;
 import emberline.catalogue.Source;
 import emberline.measure.FeatureMeasurement;
@@ -172,8 +171,7 @@ final class FeatureTable {
         Measured value = (Measured) measurement.result();
         Contribution pull = contributions.get(feature.id());
         String marks =
-                (feature.kind() == Kind.BAND_INDEX ? "" : "°")
-                        + (feature.howKnown() == HowKnown.FROM_MEMORY ? "*" : "")
+                (feature.howKnown() == HowKnown.FROM_MEMORY ? "*" : "")
                         + (measurement.telluricShare() > MOSTLY_TELLURIC ? "†" : "")
                         + (pull != null && pull.setAside() ? "‡" : "");
         String number =
@@ -185,10 +183,12 @@ final class FeatureTable {
         List<Cell> cells = new ArrayList<>();
         cells.add(new Cell(styles.table(), feature.symbol() + marks, 0, SYMBOL_WIDTH, false));
         cells.add(new Cell(quiet, sources.number(feature.source()), MARK_END, MARK_WIDTH, true));
-        cells.add(
-                new Cell(
-                        styles.table(), number, valueEnd(end), valueEnd(end) - MARK_END - 2, true));
-        says(feature, end - PULL_WIDTH - 1).ifPresent(cells::add);
+        Optional<Cell> says = says(feature, end - PULL_WIDTH - 1);
+        float room = valueEnd(end) - MARK_END - 2;
+        boolean wide = says.isEmpty() && document.lines().width(styles.table(), number) > room;
+        float right = wide ? end - PULL_WIDTH - 2 : valueEnd(end);
+        cells.add(new Cell(styles.table(), number, right, right - MARK_END - 2, true));
+        says.ifPresent(cells::add);
         if (pull != null) {
             cells.add(new Cell(quiet, signed(pull.pullSubclass()), end, PULL_WIDTH, true));
         }

@@ -7,6 +7,7 @@ import emberline.place.GravityVerdict;
 import emberline.place.Placement;
 import emberline.place.RelationEstimate.Use;
 import emberline.place.TypeEstimate;
+import emberline.place.kind.ObjectKind;
 import emberline.place.metallicity.MetallicityVerdict;
 import emberline.place.pair.PairVerdict;
 import emberline.place.pair.PairVerdict.Strength;
@@ -48,10 +49,29 @@ public final class FindingSentence {
             pair(placement.pair()).ifPresent(p -> text.append("; ").append(p));
             result.judgement().ifPresent(j -> text.append("; ").append(decision(j)));
         } else {
-            text.append("No spectral type: ").append(placement.typeReason());
+            text.append(
+                    otherKind(placement)
+                            .map(kind -> kind + "; no spectral type is given")
+                            .orElse("No spectral type: " + placement.typeReason()));
         }
         signal(result).ifPresent(signal -> text.append("; ").append(signal));
         return text.append('.').toString();
+    }
+
+    /** The kind with its probability, where it is that of no late dwarf. */
+    private static Optional<String> otherKind(Placement placement) {
+        return placement
+                .kind()
+                .kind()
+                .filter(kind -> kind != ObjectKind.LATE_DWARF)
+                .map(
+                        kind ->
+                                "Most probable kind: "
+                                        + kind.label()
+                                        + " (P "
+                                        + probability(
+                                                placement.kind().probability(kind).orElseThrow())
+                                        + ")");
     }
 
     private static String decision(Judgement judgement) {

@@ -213,11 +213,20 @@ final class KeyNumbers {
                                 entries.add(
                                         new Entry(
                                                 "Distance",
-                                                Digits.fixed(d.pc().median(), 1)
+                                                Digits.fixed(
+                                                                d.pc().median(),
+                                                                decimals(d.pc().sigma()))
                                                         + " ± "
-                                                        + Digits.fixed(d.pc().sigma(), 1)
+                                                        + Digits.fixed(
+                                                                d.pc().sigma(),
+                                                                decimals(d.pc().sigma()))
                                                         + " pc by "
                                                         + d.method())));
+    }
+
+    /** Decimals with which an error is not zero. */
+    private static int decimals(double sigma) {
+        return sigma >= 0.1 ? 1 : sigma >= 0.01 ? 2 : 3;
     }
 
     private static void addSpectra(List<Entry> entries, ObjectResult result) {

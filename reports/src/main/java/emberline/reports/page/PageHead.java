@@ -3,6 +3,7 @@ package emberline.reports.page;
 import emberline.place.GravityVerdict;
 import emberline.place.Placement;
 import emberline.place.TypeEstimate;
+import emberline.place.kind.ObjectKind;
 import emberline.spectrum.Finding;
 import emberline.spectrum.Finding.Severity;
 import emberline.survey.ObjectResult;
@@ -45,11 +46,15 @@ final class PageHead {
             sheet.text(styles.name(), FirstPage.MARGIN, baseline, line);
             baseline += styles.name().leadingPoint();
         }
-        String headline = type.map(FindingSentence::withError).orElse("no type");
-        sheet.textRight(styles.headline(), right, y + 1, headline);
+        String headline = type.map(FindingSentence::withError).orElse(withoutType(result));
+        sheet.textRight(narrowed(headline), right, y + 1, headline);
         String gravity =
-                gravityWords(result.placement().orElseThrow().gravity())
-                        + result.judgement().map(j -> "   " + j.decision().word()).orElse("");
+                type.isEmpty()
+                        ? "no spectral type, gravity not judged"
+                        : gravityWords(result.placement().orElseThrow().gravity())
+                                + result.judgement()
+                                        .map(j -> "   " + j.decision().word())
+                                        .orElse("");
         sheet.textRight(styles.subhead(), right, y + 14.5f, gravity);
         float below = Math.max(baseline - styles.name().leadingPoint() + 7, y + 19);
         sheet.rule(FirstPage.MARGIN, right, below, document.theme().ink(), 0.7f);
@@ -60,6 +65,23 @@ final class PageHead {
             at += styles.finding().leadingPoint();
         }
         return warnings(sheet, result, at);
+    }
+
+    /** The kind of an object that is no late dwarf. */
+    private static String withoutType(ObjectResult result) {
+        return result.placement()
+                .flatMap(p -> p.kind().kind())
+                .filter(kind -> kind != ObjectKind.LATE_DWARF)
+                .map(ObjectKind::label)
+                .orElse("no type");
+    }
+
+    /** The style of the headline, smaller where the words are long. */
+    private Style narrowed(String headline) {
+        Style style = styles.headline();
+        float wide = document.lines().width(style, headline);
+        float size = style.sizePoint() * Math.min(1, HEADLINE_WIDTH / wide);
+        return new Style(style.face(), size, style.leadingPoint(), style.colour());
     }
 
     private float warnings(Sheet sheet, ObjectResult result, float from) throws IOException {

@@ -93,7 +93,8 @@ final class Passage {
         for (int i = 0; i < wrapped.size(); i++) {
             float from = i == 0 ? 0 : hanging;
             Cell cell = new Cell(style, wrapped.get(i), from, width - from, false);
-            int keep = i == 0 && wrapped.size() > 1 ? 1 : 0;
+            boolean kept = (i == 0 && wrapped.size() > 1) || style.equals(document.styles().note());
+            int keep = kept ? 1 : 0;
             lines.add(new Line(List.of(cell), 0, style.leadingPoint(), 0, keep, false));
         }
     }

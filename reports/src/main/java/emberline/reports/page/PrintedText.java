@@ -13,14 +13,18 @@ final class PrintedText {
 
     private PrintedText() {}
 
-    /** A line with plus-minus, minus and comparison signs, and the first letter a capital. */
+    /** A text with plus-minus, minus and comparison signs. */
+    static String signs(String text) {
+        return text.replace("+-", "\u00b1")
+                .replace(">=", "\u2265")
+                .replace("<=", "\u2264")
+                .replaceAll("(?<=[ (])-(?=[0-9])", "\u2212")
+                .replace("Msun", "solar masses");
+    }
+
+    /** A text with these signs and the first letter a capital. */
     static String line(String text) {
-        String signs =
-                text.replace("+-", "\u00b1")
-                        .replace(">=", "\u2265")
-                        .replace("<=", "\u2264")
-                        .replaceAll("(?<=[ (])-(?=[0-9])", "\u2212")
-                        .replace("Msun", "solar masses");
+        String signs = signs(text);
         return signs.isEmpty()
                 ? ""
                 : signs.substring(0, 1).toUpperCase(java.util.Locale.ROOT) + signs.substring(1);

@@ -112,7 +112,11 @@ final class TypeSections {
                 (reason, group) -> {
                     boolean plain = reason.isBlank() || reason.startsWith("shown");
                     passage.item(
-                            title + (plain ? "" : " (" + reason + ")") + ": " + typed(group) + ".");
+                            title
+                                    + (plain ? "" : " (" + PrintedText.signs(reason) + ")")
+                                    + ": "
+                                    + typed(group)
+                                    + ".");
                 });
     }
 
@@ -158,7 +162,7 @@ final class TypeSections {
         }
         passage.heading("Gravity");
         if (verdict.gravityClass().isPresent()) {
-            passage.item(
+            passage.whole(
                     "Class "
                             + verdict.gravityClass().get().label()
                             + ": P(FLD-G) "
@@ -172,11 +176,11 @@ final class TypeSections {
                                     .orElse("; no class by the published scores")
                             + ".");
         } else {
-            passage.item("Not judged: " + verdict.reason() + ".");
+            passage.whole("Not judged: " + verdict.reason() + ".");
         }
         for (GravityScore score : verdict.scores()) {
             if (score.index() instanceof Measured value) {
-                passage.item(score(score, value));
+                passage.whole(score(score, value));
             }
         }
     }

@@ -172,14 +172,7 @@ final class LayerDrawing extends AbstractXYAnnotation {
             pieces.forEach(piece -> graphics.fill(band(places, curve, piece[0], piece[1])));
         }
         graphics.setPaint(theme.colour(curve.tone()));
-        boolean isDashed = curve.tone() == Tone.LOCUS_VERY_LOW;
-        graphics.setStroke(
-                isDashed
-                        ? dashed(LOCUS_POINT)
-                        : new BasicStroke(
-                                curve.tone() == Tone.LOCUS_FIELD ? LOCUS_POINT : CURVE_POINT,
-                                BasicStroke.CAP_ROUND,
-                                BasicStroke.JOIN_ROUND));
+        graphics.setStroke(stroke(curve.tone()));
         for (int[] piece : pieces) {
             Path2D path = new Path2D.Double();
             path.moveTo(places.x(curve.x(piece[0])), places.y(curve.y(piece[0])));
@@ -191,6 +184,19 @@ final class LayerDrawing extends AbstractXYAnnotation {
             }
             graphics.draw(path);
         }
+    }
+
+    private static BasicStroke stroke(Tone tone) {
+        return switch (tone) {
+            case LOCUS_VERY_LOW -> dashed(LOCUS_POINT);
+            case LOCUS_FIELD -> full(LOCUS_POINT);
+            case STANDARD -> dashed(CURVE_POINT);
+            default -> full(CURVE_POINT);
+        };
+    }
+
+    private static BasicStroke full(float width) {
+        return new BasicStroke(width, BasicStroke.CAP_ROUND, BasicStroke.JOIN_ROUND);
     }
 
     /** The band, kept inside the plot: sigmas at the ends of a detector can be huge. */

@@ -169,24 +169,46 @@
         pen.font = '12px "DejaVu Sans Condensed", "Segoe UI", Arial, sans-serif';
         pen.fillText(plot.empty, frame.wide / 2, frame.tall / 2);
       }
+      if (sharp) { paintOdd(pen); }
       plot.mark();
+    };
+
+    // The objects unlike all others, with a name where there is room for it.
+    const namedOdd = () => {
+      const taken = [];
+      return (plot.odd || []).map(s => {
+        const x = plot.px(s.x);
+        const y = plot.py(s.y);
+        const room = s.object.name.length < 26 && !taken.some(t => Math.abs(t - y) < 12);
+        if (room) { taken.push(y); }
+        return { x, y, left: x > frame.wide * .6, name: room ? s.object.name : '' };
+      });
+    };
+
+    // On paper they are part of the picture, so that rings and points cannot come apart.
+    const paintOdd = pen => {
+      pen.strokeStyle = shades.accent;
+      pen.lineWidth = 1.2;
+      pen.font = '11px "DejaVu Sans Condensed", "Segoe UI", Arial, sans-serif';
+      namedOdd().forEach(({ x, y, left, name }) => {
+        pen.beginPath();
+        pen.arc(x, y, 7, 0, 2 * Math.PI);
+        pen.stroke();
+        pen.fillStyle = shades.accent;
+        pen.textAlign = left ? 'right' : 'left';
+        pen.fillText(name, x + (left ? -10 : 10), y + 4);
+      });
     };
 
     // What changes with the selection is drawn over the points.
     plot.mark = () => {
       top.replaceChildren();
       top.setAttribute('viewBox', `0 0 ${frame.wide} ${frame.tall}`);
-      const taken = [];
-      (plot.odd || []).forEach(s => {
-        const x = plot.px(s.x);
-        const y = plot.py(s.y);
+      namedOdd().forEach(({ x, y, left, name }) => {
         top.append(drawn('circle', { class: 'ring', cx: x, cy: y, r: 7, 'stroke-width': 1.2, style: 'stroke-width:1.2' }));
-        const left = x > frame.wide * .6;
-        const ty = y + 4;
-        if (s.object.name.length < 26 && !taken.some(t => Math.abs(t - ty) < 12)) {
-          taken.push(ty);
-          const label = drawn('text', { class: 'odd', x: x + (left ? -10 : 10), y: ty, 'text-anchor': left ? 'end' : 'start' });
-          label.textContent = s.object.name;
+        if (name) {
+          const label = drawn('text', { class: 'odd', x: x + (left ? -10 : 10), y: y + 4, 'text-anchor': left ? 'end' : 'start' });
+          label.textContent = name;
           top.append(label);
         }
       });

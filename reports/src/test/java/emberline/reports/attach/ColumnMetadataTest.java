@@ -26,6 +26,24 @@ class ColumnMetadataTest {
                     "arith", "em", "instr", "meta", "obs", "phot", "phys", "pos", "spect", "src",
                     "stat", "time");
 
+    /** Words that UCD1+ allows only as the first. */
+    private static final Set<String> ONLY_FIRST =
+            Set.of(
+                    "meta.code",
+                    "meta.code.multip",
+                    "meta.code.qual",
+                    "meta.code.status",
+                    "meta.id",
+                    "meta.note",
+                    "meta.ref",
+                    "stat.error",
+                    "stat.fit.chi2",
+                    "stat.snr");
+
+    /** Beginnings of the words that UCD1+ allows only after the first. */
+    private static final String NEVER_FIRST =
+            "em\\..*|meta\\.main|pos\\.galactic|stat\\.(max|median|min)";
+
     /** Primary words under which a number has no unit. */
     private static final Set<String> PURE =
             Set.of(
@@ -49,6 +67,16 @@ class ColumnMetadataTest {
         for (String word : column.ucd().split(";", -1)) {
             assertTrue(word.matches(WORD), column.name() + ": " + word);
             assertTrue(ROOTS.contains(word.split("\\.", -1)[0]), column.name() + ": " + word);
+        }
+    }
+
+    @ParameterizedTest
+    @MethodSource("columns")
+    void theWordsOfAUcdStandWhereTheyMay(ResultColumn column) {
+        List<String> words = List.of(column.ucd().split(";", -1));
+        assertFalse(words.get(0).matches(NEVER_FIRST), column.name() + ": " + column.ucd());
+        for (String word : words.subList(1, words.size())) {
+            assertFalse(ONLY_FIRST.contains(word), column.name() + ": " + column.ucd());
         }
     }
 

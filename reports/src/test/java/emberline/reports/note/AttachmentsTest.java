@@ -35,6 +35,10 @@ import javax.xml.parsers.ParserConfigurationException;
 import javax.xml.transform.stream.StreamSource;
 import javax.xml.validation.SchemaFactory;
 import javax.xml.validation.Validator;
+import org.jbibtex.BibTeXEntry;
+import org.jbibtex.BibTeXParser;
+import org.jbibtex.Key;
+import org.jbibtex.ParseException;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -187,6 +191,7 @@ class AttachmentsTest {
                         .newSchema(schema)
                         .newValidator();
         validator.validate(new StreamSource(folder.resolve("results.vot").toFile()));
+        assertTrue(text("results.vot").contains("<FIELD ID=\"type_number\" name=\"type_number\""));
         String broken = text("results.vot").replace("<FIELD ", "<FIELDS ");
         assertThrows(
                 SAXException.class,
@@ -308,6 +313,26 @@ class AttachmentsTest {
                 Files.delete(file);
             }
         }
+    }
+
+    /** By a parser that needs no LaTeX. */
+    @Test
+    void bibtexParses() throws IOException, ParseException {
+        String bib = text("sources.bib");
+        Map<Key, BibTeXEntry> entries =
+                new BibTeXParser().parse(new StringReader(bib)).getEntries();
+        assertEquals(
+                used().papers().stream().map(Source::key).collect(Collectors.toSet()),
+                entries.keySet().stream().map(Key::getValue).collect(Collectors.toSet()));
+        for (BibTeXEntry entry : entries.values()) {
+            for (Key field : List.of(BibTeXEntry.KEY_AUTHOR, BibTeXEntry.KEY_YEAR)) {
+                assertFalse(
+                        entry.getField(field).toUserString().isBlank(), entry.getKey().getValue());
+            }
+        }
+        String broken = bib.replaceFirst("year = \\{", "year = ");
+        assertThrows(
+                ParseException.class, () -> new BibTeXParser().parse(new StringReader(broken)));
     }
 
     private static boolean isInstalled(String program) {

@@ -33,7 +33,7 @@ class FindingSentenceTest {
     @Test
     void whatIsMissingIsSaidWithItsReason() {
         String dwarf = FindingSentence.of(Samples.tDwarf());
-        assertTrue(dwarf.startsWith("No spectral type: kind: unlike known (p 0."), dwarf);
+        assertTrue(dwarf.startsWith("Most probable kind: unlike known (P = 0."), dwarf);
         String none =
                 FindingSentence.of(
                         Samples.object(

@@ -116,7 +116,7 @@ class PdfReportTest {
     @ParameterizedTest
     @MethodSource("objects")
     void noTextOverlapsAnotherOrLeavesThePage(ObjectResult object) throws IOException {
-        PageLayout.assertWellSet(pdf(A4, object), Paper.A4);
+        PageLayout.assertTwoPagesWellSet(pdf(A4, object), Paper.A4);
     }
 
     @ParameterizedTest
@@ -124,7 +124,7 @@ class PdfReportTest {
     void bothPapersHoldTheSameContent(Paper paper) throws IOException {
         ReportSettings settings = ReportSettings.of("0.1.0", 7).withPaper(paper);
         byte[] pdf = pdf(new PdfReport(settings, Samples.CATALOGUE), Samples.lDwarf());
-        PageLayout.assertWellSet(pdf, paper);
+        PageLayout.assertTwoPagesWellSet(pdf, paper);
         assertTrue(PdfText.all(pdf).contains("What this cannot tell"));
     }
 
@@ -165,7 +165,7 @@ class PdfReportTest {
                         findings);
         warned = Samples.judged(warned);
         ReportSettings letter = ReportSettings.of("0.1.0", 7).withPaper(Paper.LETTER);
-        PageLayout.assertWellSet(
+        PageLayout.assertTwoPagesWellSet(
                 pdf(new PdfReport(letter, Samples.CATALOGUE), warned), Paper.LETTER);
     }
 
@@ -185,9 +185,9 @@ class PdfReportTest {
                         "WISE J235402.77+024015.0",
                         "2MASS J01415823-4633574")) {
             ObjectResult object = Samples.judged(RealSpectra.object(rows.get(name)));
-            PageLayout.assertWellSet(pdf(A4, object), Paper.A4);
+            PageLayout.assertTwoPagesWellSet(pdf(A4, object), Paper.A4);
             ReportSettings letter = ReportSettings.of("0.1.0", 7).withPaper(Paper.LETTER);
-            PageLayout.assertWellSet(
+            PageLayout.assertTwoPagesWellSet(
                     pdf(new PdfReport(letter, Samples.CATALOGUE), object), Paper.LETTER);
         }
     }
@@ -213,15 +213,17 @@ class PdfReportTest {
                         "burns deuterium",
                         "Key numbers",
                         "What this cannot tell",
-                        "Measured features",
+                        "Features behind type and gravity",
                         "FeH_z",
-                        "Not measured",
                         "Type relations",
-                        "Nearest reference objects",
                         "Judgement",
+                        "Odds of a substellar mass",
+                        "All together",
+                        "Nearest reference objects",
                         "Findings",
                         "What it was found from",
-                        "Spectra and provenance",
+                        "Spectra and program",
+                        "Not measured",
                         "Sources")) {
             int at = text.indexOf(piece, before + 1);
             assertTrue(at > before, piece + " not after what goes before it in: " + text);
