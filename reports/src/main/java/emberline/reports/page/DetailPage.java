@@ -13,7 +13,9 @@ import emberline.reports.paint.Face;
 import emberline.survey.ObjectResult;
 import java.io.IOException;
 import java.util.ArrayList;
+import java.util.EnumMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Set;
 import java.util.stream.Collectors;
 
@@ -30,6 +32,7 @@ final class DetailPage {
     private final ObjectResult result;
     private final Placement placement;
     private final FeatureTable table;
+    private final Map<Fullness, List<Line>> apart = new EnumMap<>(Fullness.class);
 
     DetailPage(
             ReportDocument document,
@@ -183,6 +186,21 @@ final class DetailPage {
         features(passage, fullness, others, sources);
         TypeSections types = new TypeSections(catalogue, sources, fullness);
         types.relations(passage, placement);
+        List<Line> lines = new ArrayList<>(passage.lines());
+        lines.addAll(apart.computeIfAbsent(fullness, f -> apart(types, f, columns.columnWidth())));
+        Passage end = new Passage(document, columns.columnWidth(), fullness.paragraphLines());
+        end.heading("Sources");
+        end.paragraph(
+                sources.sources().stream()
+                        .map(source -> sources.mark(source) + " " + source.cite())
+                        .collect(Collectors.joining("; ", "", ".")));
+        lines.addAll(end.lines());
+        return lines;
+    }
+
+    /** The sections that do not depend on which other features are shown. */
+    private List<Line> apart(TypeSections types, Fullness fullness, float width) {
+        Passage passage = new Passage(document, width, fullness.paragraphLines());
         types.gravity(passage, placement.gravity());
         SideSections side = new SideSections(document, fullness);
         result.judgement().ifPresent(judgement -> side.judgement(passage, judgement));
@@ -193,11 +211,6 @@ final class DetailPage {
         side.findings(passage, result);
         side.given(passage, result, settings);
         types.notMeasured(passage, result);
-        passage.heading("Sources");
-        passage.paragraph(
-                sources.sources().stream()
-                        .map(source -> sources.mark(source) + " " + source.cite())
-                        .collect(Collectors.joining("; ", "", ".")));
         return passage.lines();
     }
 

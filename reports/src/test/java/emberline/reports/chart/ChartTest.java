@@ -91,7 +91,7 @@ class ChartTest {
                         "Noisy", Samples.spectrum(0.8, 2.45, 4000, Bands.L_DWARF, 3, 9), 750);
         SpectrumChart.Drawn drawn = new SpectrumChart(Samples.CATALOGUE, SIZE, WIDTH).of(noisy);
         assertEquals(2, drawn.chart().layers(Curve.class).size());
-        assertTrue(drawn.remark().contains("means of 15 pixels"), drawn.remark());
+        assertTrue(drawn.remark().contains("means of up to 15 pixels"), drawn.remark());
     }
 
     @Test
