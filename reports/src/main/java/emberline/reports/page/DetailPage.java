@@ -16,6 +16,7 @@ import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import java.util.stream.Collectors;
 
@@ -62,9 +63,14 @@ final class DetailPage {
         List<Chart> charts = LineInset.of(result, catalogue, LinePanel.MOST);
         float gravityTall = withGravity ? GravityPanel.tall(result) : 0;
         float top = FirstPage.TOP + 20;
-        Columns columns =
-                new Columns(document, settings.paper(), top + gravityTall + LinePanel.tall(charts));
-        Setting setting = setting(columns);
+        Columns columns = columns(top + gravityTall + LinePanel.tall(charts));
+        Optional<Setting> found = setting(columns);
+        if (found.isEmpty()) {
+            charts = List.of();
+            columns = columns(top + gravityTall);
+            found = setting(columns);
+        }
+        Setting setting = found.isPresent() ? found.get() : cut(columns);
         try (Sheet sheet = new Sheet(document, settings.paper())) {
             head(sheet);
             if (withGravity) {
@@ -75,6 +81,10 @@ final class DetailPage {
             }
             return columns.draw(sheet, setting.lines(), setting.tightness());
         }
+    }
+
+    private Columns columns(float top) {
+        return new Columns(document, settings.paper(), top);
     }
 
     private void head(Sheet sheet) throws IOException {
@@ -92,26 +102,26 @@ final class DetailPage {
                 0.7f);
     }
 
-    /** The most that finds room. */
-    private Setting setting(Columns columns) {
+    /** The most that finds room; empty where not even the least does. */
+    private Optional<Setting> setting(Columns columns) {
         List<Float> tightness = Columns.TIGHTNESS;
         float tightest = tightness.get(tightness.size() - 1);
-        List<Line> lines = List.of();
         for (Fullness fullness : Fullness.values()) {
             List<FeatureMeasurement> others = table.others(fullness);
             SourceList sources = sources(fullness, others);
-            lines = lines(columns, fullness, others, sources);
+            List<Line> lines = lines(columns, fullness, others, sources);
             for (float tried : tightness) {
                 if (columns.hold(lines, tried)) {
-                    return new Setting(lines, tried);
+                    return Optional.of(new Setting(lines, tried));
                 }
             }
             if (!fullness.everyFeature()
                     && columns.hold(lines(columns, fullness, List.of(), sources), tightest)) {
-                return new Setting(fitted(columns, fullness, others, tightest), tightest);
+                return Optional.of(
+                        new Setting(fitted(columns, fullness, others, tightest), tightest));
             }
         }
-        return new Setting(cut(columns, lines, tightest), tightest);
+        return Optional.empty();
     }
 
     /** The lines with as many of the other features as find room beside the papers they need. */
@@ -134,8 +144,11 @@ final class DetailPage {
         return best;
     }
 
-    /** The beginning of lines that find no room even so, with a word on the rest. */
-    private List<Line> cut(Columns columns, List<Line> lines, float tightness) {
+    /** The beginning of the least that should be said, with a word on the rest. */
+    private Setting cut(Columns columns) {
+        float tightness = Columns.TIGHTNESS.get(Columns.TIGHTNESS.size() - 1);
+        Fullness least = Fullness.SPARE;
+        List<Line> lines = lines(columns, least, List.of(), sources(least, List.of()));
         Passage end = new Passage(document, columns.columnWidth(), 3);
         end.item("No room for more: the JSON of the object holds the rest.");
         int kept = columns.held(lines, tightness);
@@ -146,7 +159,7 @@ final class DetailPage {
             all.addAll(lines.subList(0, kept));
             all.addAll(end.lines());
         } while (kept > 1 && !columns.hold(all, tightness));
-        return all;
+        return new Setting(all, tightness);
     }
 
     /** Whether the page names the paper of a relation. */

@@ -139,7 +139,7 @@ final class SideSections {
         passage.subheading("Odds of a substellar mass, evidence by evidence");
         passage.whole("Prior: " + PrintedText.power(ledger.priorLog10Odds()) + " : 1.");
         for (LedgerEntry entry : ledger.entries()) {
-            passage.whole(
+            passage.item(
                     PrintedText.sentence(
                             (entry.label()
                                     + ": × "
