@@ -1,5 +1,7 @@
 #!/bin/sh
-# Makes TARGET/image from a Java home and what the build put into TARGET. The modules are those that the jars use.
+# Makes TARGET/image from a Java home and what the build put into TARGET: a folder that may be moved and needs no Java.
+# All jars become one module of the runtime; with the classes in the runtime's own file, the archive of loaded classes
+# (class-data sharing) stays valid wherever the folder goes, and a single spectrum is placed sooner.
 set -e
 java_home=$1
 target=$2
@@ -7,14 +9,81 @@ if [ ! -x "$java_home/bin/jlink" ] || [ ! -d "$java_home/jmods" ]; then
   echo "make-image: $java_home: no jlink or no jmods there; expected a full JDK. Install one with jmods." >&2
   exit 1
 fi
-rm -rf "$target/image"
-mkdir -p "$target/image"
-"$java_home/bin/jlink" --module-path "$java_home/jmods" \
-  --add-modules java.base,java.desktop,java.logging,java.management,java.naming,java.sql,java.xml,jdk.management,jdk.unsupported,jdk.charsets,jdk.zipfs \
-  --strip-debug --no-header-files --no-man-pages --compress=2 --output "$target/image/runtime"
-cp -R "$target/lib" "$target/image/lib"
-cp "$target/emberline.jar" "$target/emberline" "$target/image/"
-chmod +x "$target/image/emberline"
-mkdir -p "$target/image/share/man/man1" "$target/image/share/bash-completion/completions"
-"$target/image/emberline" manual --out "$target/image/share/man/man1" >/dev/null
-"$target/image/emberline" completion >"$target/image/share/bash-completion/completions/emberline"
+feature=$("$java_home/bin/java" -XshowSettings:properties -version 2>&1 | sed -n 's/^ *java.specification.version = //p')
+image=$target/image
+work=$target/image-work
+rm -rf "$image" "$work"
+mkdir -p "$image" "$work/classes"
+: >"$work/uses"
+: >"$work/provided"
+
+# One tree of classes and resources; of classes for several versions of Java that of this one.
+for jar in "$target"/lib/*.jar "$target/emberline.jar"; do
+  one=$work/one
+  rm -rf "$one"
+  mkdir "$one"
+  (cd "$one" && "$java_home/bin/jar" xf "$jar")
+  version=9
+  while [ "$version" -le "$feature" ]; do
+    if [ -d "$one/META-INF/versions/$version" ]; then
+      cp -R "$one/META-INF/versions/$version/." "$one/"
+    fi
+    version=$((version + 1))
+  done
+  if [ -f "$one/module-info.class" ]; then
+    "$java_home/bin/jar" --describe-module --file "$jar" --release "$feature" |
+      sed -n 's/^ *uses \([^ ]*\).*/\1/p' >>"$work/uses"
+  fi
+  for service in "$one"/META-INF/services/*; do
+    if [ -f "$service" ]; then
+      awk -v service="$(basename "$service")" '{ sub(/#.*/, "") } NF { print service, $1 }' "$service" >>"$work/provided"
+      basename "$service" >>"$work/uses"
+    fi
+  done
+  rm -rf "$one/META-INF" "$one/module-info.class"
+  cp -R "$one/." "$work/classes/"
+done
+
+# What jdeps sees, and what is reached by name only: logging, character sets of foreign files, zip file systems.
+modules=$("$java_home/bin/jdeps" --print-module-deps --ignore-missing-deps "$work/classes" | tr ',' ' ')
+{
+  echo "open module emberline {"
+  for module in $modules java.logging java.management java.xml jdk.unsupported; do
+    echo "  requires $module;"
+  done | sort -u | grep -v ' java.base;'
+  sort -u "$work/uses" | sed -e '/^java\./d' -e 's/.*/  uses &;/'
+  awk '{ with[$1] = with[$1] (with[$1] ? ", " : "") $2 }
+       END { for (service in with) print "  provides " service " with " with[service] ";" }' "$work/provided" | sort
+  echo "}"
+} >"$work/module-info.java"
+"$java_home/bin/javac" -nowarn -d "$work/classes" "$work/module-info.java"
+"$java_home/bin/jlink" --module-path "$java_home/jmods:$work/classes" --add-modules emberline,jdk.charsets,jdk.zipfs \
+  --no-header-files --no-man-pages --compress=2 --output "$image/runtime"
+
+cp "$target/emberline" "$image/"
+chmod +x "$image/emberline"
+cp -R "$target/lib/licences" "$target/lib/THIRD-PARTY.csv" "$image/"
+
+# The archive holds the classes of a few commands, reports and ledger included.
+run() {
+  list=$1
+  shift
+  "$image/runtime/bin/java" -XX:DumpLoadedClassList="$work/$list" -m emberline/emberline.cli.Emberline "$@" \
+    >"$work/$list.out" 2>&1
+}
+cat >"$work/spectrum.csv" <<'END'
+wavelength_micron,flux,sigma
+END
+awk 'BEGIN { for (l = 0.8; l < 2.45; l += 0.004) printf "%.3f,%.4f,0.02\n", l, 1 + 0.4 * sin(7 * l) }' >>"$work/spectrum.csv"
+printf 'name,spectrum,medium,resolution\nA,spectrum.csv,vacuum,120\n' >"$work/list.csv"
+run sort.classes sort "$work/list.csv" --out "$work/out"
+run place.classes place "$work/spectrum.csv" --medium vacuum --resolution 120
+run report.classes report "$work/spectrum.csv" --medium vacuum --resolution 120 --out "$work/report"
+awk '!seen[$0]++' "$work/place.classes" "$work/report.classes" "$work/sort.classes" >"$work/classes.list"
+"$image/runtime/bin/java" -Xshare:dump -XX:SharedClassListFile="$work/classes.list" \
+  -m emberline/emberline.cli.Emberline >"$work/archive.out" 2>&1
+
+mkdir -p "$image/share/man/man1" "$image/share/bash-completion/completions"
+"$image/emberline" manual --out "$image/share/man/man1" >/dev/null
+"$image/emberline" completion >"$image/share/bash-completion/completions/emberline"
+rm -rf "$work"

@@ -4,6 +4,8 @@ import emberline.reports.paint.HeadlessFonts;
 import java.io.PrintWriter;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
+import java.util.List;
+import java.util.Set;
 import java.util.logging.LogManager;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
@@ -19,22 +21,6 @@ import picocli.CommandLine.Spec;
                     + " micron), places each on the sequence M, L, T, Y, and reports.",
             "It supports and does not replace expert judgement."
         },
-        subcommands = {
-            SortCommand.class,
-            SurveyStatusCommand.class,
-            MergeCommand.class,
-            MeasureCommand.class,
-            PlaceCommand.class,
-            JudgeCommand.class,
-            PlanCommand.class,
-            ReportCommand.class,
-            CatalogueCommand.class,
-            CalibrateCommand.class,
-            CheckCommand.class,
-            DoctorCommand.class,
-            CompletionCommand.class,
-            ManualCommand.class
-        },
         mixinStandardHelpOptions = true,
         versionProvider = ProgramVersion.class,
         exitCodeListHeading = "%nExit codes:%n",
@@ -47,6 +33,27 @@ import picocli.CommandLine.Spec;
             "130, 143:sort was asked to end (SIGINT, SIGTERM); run it again to go on"
         })
 public final class Emberline implements Runnable {
+
+    private static final List<Class<?>> COMMANDS =
+            List.of(
+                    SortCommand.class,
+                    SurveyStatusCommand.class,
+                    MergeCommand.class,
+                    MeasureCommand.class,
+                    PlaceCommand.class,
+                    JudgeCommand.class,
+                    PlanCommand.class,
+                    ReportCommand.class,
+                    CatalogueCommand.class,
+                    CalibrateCommand.class,
+                    CheckCommand.class,
+                    DoctorCommand.class,
+                    CompletionCommand.class,
+                    ManualCommand.class);
+
+    /** Commands that tell of all the others. */
+    private static final Set<Class<?>> ABOUT_ALL =
+            Set.of(CompletionCommand.class, ManualCommand.class);
 
     @Spec private CommandSpec spec;
 
@@ -66,12 +73,29 @@ public final class Emberline implements Runnable {
                             + "); expected a writable one, for the fonts of the reports. Choose"
                             + " another by the Java option -Djava.io.tmpdir=DIR.");
         }
-        int code = commandLine(out, err).execute(arguments);
+        int code = commandLine(out, err, asked(arguments)).execute(arguments);
         if (out.checkError()) {
             err.println("standard output: cannot be written; check where it goes, then run again");
             code = ExitCode.NOT_WRITTEN;
         }
         System.exit(code);
+    }
+
+    /**
+     * What has to be described to run a command line. To describe all commands takes longer than
+     * most of them run, so one that is named first is described alone.
+     */
+    static List<Class<?>> asked(String... arguments) {
+        return COMMANDS.stream()
+                .filter(command -> !ABOUT_ALL.contains(command))
+                .filter(command -> arguments.length > 0 && arguments[0].equals(name(command)))
+                .findFirst()
+                .<List<Class<?>>>map(List::of)
+                .orElse(COMMANDS);
+    }
+
+    private static String name(Class<?> command) {
+        return command.getAnnotation(Command.class).name();
     }
 
     /**
@@ -82,8 +106,14 @@ public final class Emberline implements Runnable {
      * @return a command line, ready to execute
      */
     static CommandLine commandLine(PrintWriter out, PrintWriter err) {
-        return new CommandLine(new Emberline())
-                .setOut(out)
+        return commandLine(out, err, COMMANDS);
+    }
+
+    private static CommandLine commandLine(
+            PrintWriter out, PrintWriter err, List<Class<?>> commands) {
+        CommandLine line = new CommandLine(new Emberline());
+        commands.forEach(line::addSubcommand);
+        return line.setOut(out)
                 .setErr(err)
                 .setCaseInsensitiveEnumValuesAllowed(true)
                 .setParameterExceptionHandler(new UsageFailure())

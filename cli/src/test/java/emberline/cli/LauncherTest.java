@@ -51,6 +51,11 @@ class LauncherTest {
         return new CommandRun(process.exitValue(), out, err);
     }
 
+    /** Options for a command that is soon over, then the jar. */
+    private String quick() throws IOException {
+        return "<-XX:TieredStopAtLevel=1><-XX:+UseSerialGC>" + jar();
+    }
+
     private String jar() throws IOException {
         return "<-jar><" + home.toRealPath().resolve("emberline.jar") + ">";
     }
@@ -59,7 +64,7 @@ class LauncherTest {
     void wordsAndExitCodeArePassedOn() throws IOException, InterruptedException {
         CommandRun run =
                 run(Map.of(), folder, home.resolve("emberline").toString(), "place", "a b.csv", "");
-        assertEquals(jar() + "<place><a b.csv><>", run.out(), run.err());
+        assertEquals(quick() + "<place><a b.csv><>", run.out(), run.err());
         assertEquals(3, run.code());
     }
 
@@ -69,7 +74,7 @@ class LauncherTest {
         Files.createSymbolicLink(folder.resolve("first"), home.resolve("emberline"));
         Files.createSymbolicLink(bin.resolve("emberline"), Path.of("../first"));
         CommandRun absolute = run(Map.of(), folder, bin.resolve("emberline").toString());
-        assertEquals(jar(), absolute.out(), absolute.err());
+        assertEquals(quick(), absolute.out(), absolute.err());
         CommandRun byPath =
                 run(
                         Map.of("PATH", bin + ":" + System.getenv("PATH")),
@@ -77,7 +82,7 @@ class LauncherTest {
                         "sh",
                         "-c",
                         "emberline doctor");
-        assertEquals(jar() + "<doctor>", byPath.out(), byPath.err());
+        assertEquals(quick() + "<doctor>", byPath.out(), byPath.err());
     }
 
     @Test
@@ -92,6 +97,27 @@ class LauncherTest {
         Files.writeString(own, "#!/bin/sh\necho own\n");
         script(own);
         assertEquals("own\n", run(Map.of(), folder, home.resolve("emberline").toString()).out());
+    }
+
+    /** A long run profits from the second compiler, and so does a long list of spectra. */
+    @Test
+    void longRunsAreCompiledInFull() throws IOException, InterruptedException {
+        String launcher = home.resolve("emberline").toString();
+        CommandRun sort = run(Map.of(), folder, launcher, "sort", "list.csv");
+        assertEquals(jar() + "<sort><list.csv>", sort.out(), sort.err());
+        CommandRun many =
+                run(Map.of(), folder, "sh", "-c", "'" + launcher + "' place 1 2 3 4 5 6 7 8 9");
+        assertTrue(many.out().startsWith(jar() + "<place><1>"), many.out());
+    }
+
+    @Test
+    void withoutAJarTheRuntimeHoldsTheProgram() throws IOException, InterruptedException {
+        Files.delete(home.resolve("emberline.jar"));
+        Path own = Files.createDirectories(home.resolve("runtime/bin")).resolve("java");
+        script(Files.copy(folder.resolve("java"), own));
+        CommandRun run =
+                run(Map.of(), folder, home.resolve("emberline").toString(), "sort", "a b.csv");
+        assertEquals("<-m><emberline/emberline.cli.Emberline><sort><a b.csv>", run.out());
     }
 
     @Test

@@ -178,6 +178,18 @@ public final class CandidateListReader {
         }
     }
 
+    /**
+     * A row that stands in no list, such as one of a table in memory. It is checked as a row of a
+     * list is, except that no other row is known.
+     *
+     * @param cells the cells by column; {@code spectrum} holds where its spectra are
+     * @return the row as the first of a list
+     */
+    public static ListedCandidate row(Map<String, String> cells) {
+        List<String> keys = cells.keySet().stream().map(CandidateListReader::key).toList();
+        return listed(keys, List.copyOf(cells.values()), 1, new NameRows());
+    }
+
     /** The columns that the product uses, sorted. */
     static List<String> knownColumns() {
         return Stream.of(NUMBER_COLUMNS, TEXT_COLUMNS, LATER_COLUMNS)

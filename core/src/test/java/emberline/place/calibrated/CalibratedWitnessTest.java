@@ -10,17 +10,19 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 
 /** Objects made of the product's own loci, whose type and gravity are therefore known. */
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class CalibratedWitnessTest {
 
-    private static final Calibration CALIBRATION = Calibration.standard();
-    private static final CalibratedWitness WITNESS =
-            new CalibratedWitness(CALIBRATION, TypePriors.FLAT.load());
+    private final Calibration calibration = Calibration.standard();
+    private final CalibratedWitness witness =
+            new CalibratedWitness(calibration, TypePriors.FLAT.load());
 
-    private static Map<String, Measured> perfect(double type, double lowGravity, double noise) {
+    private Map<String, Measured> perfect(double type, double lowGravity, double noise) {
         Map<String, Measured> values = new LinkedHashMap<>();
-        for (Locus locus : CALIBRATION.loci()) {
+        for (Locus locus : calibration.loci()) {
             if (locus.feature().startsWith("burgasser") || locus.feature().startsWith("allers")) {
                 values.put(
                         locus.feature(),
@@ -31,11 +33,11 @@ class CalibratedWitnessTest {
         return values;
     }
 
-    private static CalibratedType place(Map<String, Measured> values) {
-        return WITNESS.witness(Sample.of(CALIBRATION, values));
+    private CalibratedType place(Map<String, Measured> values) {
+        return witness.witness(Sample.of(calibration, values));
     }
 
-    private static TypeEstimate type(Map<String, Measured> values) {
+    private TypeEstimate type(Map<String, Measured> values) {
         return place(values).posterior().orElseThrow().estimate();
     }
 
@@ -98,7 +100,7 @@ class CalibratedWitnessTest {
     /** A broad posterior follows the prior; a sharp one does not. */
     @Test
     void thePriorMattersWhereTheSpectrumSaysLittle() {
-        CalibratedWitness volume = new CalibratedWitness(CALIBRATION, TypePriors.MAGNITUDE.load());
+        CalibratedWitness volume = new CalibratedWitness(calibration, TypePriors.MAGNITUDE.load());
         Map<String, Measured> noisy = perfect(14, 0, 30);
         Map<String, Measured> sharp = perfect(14, 0, 0.1);
         assertTrue(
@@ -107,8 +109,8 @@ class CalibratedWitnessTest {
         assertEquals(type(sharp).typeNumber(), typeBy(volume, sharp), 0.3);
     }
 
-    private static double typeBy(CalibratedWitness witness, Map<String, Measured> values) {
-        return witness.witness(Sample.of(CALIBRATION, values))
+    private double typeBy(CalibratedWitness witness, Map<String, Measured> values) {
+        return witness.witness(Sample.of(calibration, values))
                 .posterior()
                 .orElseThrow()
                 .estimate()

@@ -6,32 +6,34 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import emberline.place.GravityClass;
 import emberline.place.TypeEstimate;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class ForecastTest {
 
-    private static final FeatureNoise NOISE = FeatureNoise.standard();
-    private static final Forecast FORECAST =
-            new Forecast(Calibration.standard(), TypePriors.FLAT.load(), NOISE);
+    private final FeatureNoise noise = FeatureNoise.standard();
+    private final Forecast forecast =
+            new Forecast(Calibration.standard(), TypePriors.FLAT.load(), noise);
 
     @Test
     void aFeatureIsNoisierPerPixelSignalWhereItsBandIsDeep() {
-        double ofM = NOISE.atUnitSignal("geballe2002/h2o_1.2", 7, 120).orElseThrow();
-        double ofT = NOISE.atUnitSignal("geballe2002/h2o_1.2", 22, 120).orElseThrow();
+        double ofM = noise.atUnitSignal("geballe2002/h2o_1.2", 7, 120).orElseThrow();
+        double ofT = noise.atUnitSignal("geballe2002/h2o_1.2", 22, 120).orElseThrow();
         assertTrue(ofT > 2 * ofM, ofM + " at M7, " + ofT + " at T2");
     }
 
     @Test
     void finePixelsHaveLessSignalEachSoThatAFeatureIsSharperAtUnitSignal() {
-        double low = NOISE.atUnitSignal("allers2013/h2od", 12, 120).orElseThrow();
-        double high = NOISE.atUnitSignal("allers2013/h2od", 12, 750).orElseThrow();
+        double low = noise.atUnitSignal("allers2013/h2od", 12, 120).orElseThrow();
+        double high = noise.atUnitSignal("allers2013/h2od", 12, 750).orElseThrow();
         assertTrue(high < low, low + " at R 120, " + high + " at R 750");
     }
 
     @Test
     void whatNoSpectrumShowsIsNotForecast() {
-        assertTrue(NOISE.atUnitSignal("no/such_feature", 12, 120).isEmpty());
+        assertTrue(noise.atUnitSignal("no/such_feature", 12, 120).isEmpty());
         assertTrue(
-                FORECAST.features(new Forecast.Setting(12, GravityClass.FLD_G, 120)).size() > 20);
+                forecast.features(new Forecast.Setting(12, GravityClass.FLD_G, 120)).size() > 20);
     }
 
     /** Binomial sigma of 300 draws: 2.7% and 1.3%; the label error, which is added, widens. */
@@ -43,7 +45,7 @@ class ForecastTest {
         for (int draw = 0; draw < draws; draw++) {
             double truth = 6 + 12.0 * draw / draws;
             TypeEstimate type =
-                    FORECAST.draw(new Forecast.Setting(truth, GravityClass.FLD_G, 120), 20, draw)
+                    forecast.draw(new Forecast.Setting(truth, GravityClass.FLD_G, 120), 20, draw)
                             .posterior()
                             .orElseThrow()
                             .estimate();
@@ -59,7 +61,7 @@ class ForecastTest {
         double sum = 0;
         for (int draw = 0; draw < 100; draw++) {
             sum +=
-                    FORECAST.draw(new Forecast.Setting(13, GravityClass.FLD_G, 120), 50, draw)
+                    forecast.draw(new Forecast.Setting(13, GravityClass.FLD_G, 120), 50, draw)
                             .posterior()
                             .orElseThrow()
                             .estimate()

@@ -10,20 +10,22 @@ import java.util.List;
 import org.apache.commons.rng.UniformRandomProvider;
 import org.apache.commons.rng.simple.RandomSource;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class ForestGrowerTest {
 
-    private static final KindFeatures FEATURES = KindFeatures.standard();
-    private static final Coverage H = Coverage.parse("H");
+    private final KindFeatures features = KindFeatures.standard();
+    private final Coverage nearH = Coverage.parse("H");
 
     /** Dwarfs, giants and galaxies that differ in the first feature of H by four of its sigma. */
-    private static List<TrainingRow> rows(long seed) {
+    private List<TrainingRow> rows(long seed) {
         UniformRandomProvider random = RandomSource.XO_RO_SHI_RO_128_PP.create(seed);
         ObjectKind[] kinds = {ObjectKind.LATE_DWARF, ObjectKind.GIANT, ObjectKind.EXTRAGALACTIC};
-        int telling = H.columns(FEATURES)[0];
+        int telling = nearH.columns(features)[0];
         List<TrainingRow> rows = new ArrayList<>();
         for (int k = 0; k < 150; k++) {
-            double[] values = new double[FEATURES.size()];
+            double[] values = new double[features.size()];
             Arrays.setAll(values, i -> random.nextDouble());
             values[telling] = k % 3 + 0.5 * random.nextDouble();
             rows.add(
@@ -38,7 +40,7 @@ class ForestGrowerTest {
 
     @Test
     void aForestTellsWhatItWasTaught() {
-        Forest forest = new ForestGrower(FEATURES, 20).grow(H, rows(2));
+        Forest forest = new ForestGrower(features, 20).grow(nearH, rows(2));
         for (TrainingRow row : rows(3)) {
             double[] p = forest.probabilities(row.vector().values());
             assertEquals(1, Arrays.stream(p).sum(), 1e-9);
@@ -51,13 +53,13 @@ class ForestGrowerTest {
     void theSameRowsGiveTheSameForest() {
         double[] probe = rows(4).get(0).vector().values();
         assertArrayEquals(
-                new ForestGrower(FEATURES, 10).grow(H, rows(2)).probabilities(probe),
-                new ForestGrower(FEATURES, 10).grow(H, rows(2)).probabilities(probe));
+                new ForestGrower(features, 10).grow(nearH, rows(2)).probabilities(probe),
+                new ForestGrower(features, 10).grow(nearH, rows(2)).probabilities(probe));
     }
 
     @Test
     void calibrationPrefersWhatIsTrueOfLeftOutRows() {
-        Forest forest = new ForestGrower(FEATURES, 20).grow(H, rows(2));
+        Forest forest = new ForestGrower(features, 20).grow(nearH, rows(2));
         float sharp = Sharpness.fit(List.of(forest), rows(3), row -> 0);
         assertTrue(sharp > 1, "clear cases deserve sharper probabilities: " + sharp);
         // labels that mean nothing deserve flat ones

@@ -14,17 +14,19 @@ import emberline.spectrum.Candidate;
 import java.util.List;
 import org.apache.commons.rng.simple.RandomSource;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class KindJudgeTest {
 
     private static final Measurer MEASURER =
             new Measurer(FeatureCatalogue.standard(), Measuring.withDefaults());
-    private static final KindJudge JUDGE = new KindJudge(KindPrior.standard());
+    private final KindJudge judge = new KindJudge(KindPrior.standard());
 
-    private static KindVerdict verdict(PreparedSpectrum prepared) {
-        return JUDGE.judge(MEASURER.measure(prepared));
+    private KindVerdict verdict(PreparedSpectrum prepared) {
+        return judge.judge(MEASURER.measure(prepared));
     }
 
     @ParameterizedTest
@@ -81,7 +83,7 @@ class KindJudgeTest {
     @Test
     void aReferenceSpectrumIsItsOwnNearestKin() throws Exception {
         Measurements measurements = MEASURER.measure(SharedList.prepared("LHS 2924"));
-        List<Kin> kin = JUDGE.kin(measurements);
+        List<Kin> kin = judge.kin(measurements);
         assertEquals(5, kin.size());
         assertEquals("LHS 2924", kin.get(0).object());
         assertEquals(0, kin.get(0).distance(), 1e-3);

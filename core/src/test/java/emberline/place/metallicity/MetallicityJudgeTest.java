@@ -35,13 +35,15 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class MetallicityJudgeTest {
 
     private static final FeatureCatalogue CATALOGUE = FeatureCatalogue.standard();
-    private static final MetallicityJudge JUDGE = new MetallicityJudge(CATALOGUE);
+    private final MetallicityJudge judge = new MetallicityJudge(CATALOGUE);
 
-    private static final Chain CHAIN =
+    private final Chain chain =
             new Chain(CATALOGUE, Measuring.withDefaults(), SurveySettings.withDefaults());
 
     /** CaH1 as low as in the subdwarfs of the table. */
@@ -97,12 +99,12 @@ class MetallicityJudgeTest {
         assertAll(PublishedRows.of("subdwarf-examples.csv").stream().map(row -> () -> check(row)));
     }
 
-    private static void check(NamedCsvRecord row) {
+    private void check(NamedCsvRecord row) {
         String published = row.getField("published_type");
         double cah1 = published.startsWith("dM") ? 0.853 : LOW_CAH1;
         Measurements measurements =
                 measured(number(row, "tio5"), cah1, number(row, "cah2"), number(row, "cah3"), 1e-4);
-        MetallicityVerdict verdict = JUDGE.judge(measurements, type(4), 1);
+        MetallicityVerdict verdict = judge.judge(measurements, type(4), 1);
         assertEquals("", verdict.reason(), row.getField("object"));
         assertEquals(
                 published.substring(0, published.indexOf('M')),
@@ -122,12 +124,12 @@ class MetallicityJudgeTest {
 
     @Test
     void recalibrationsStandSideBySideWithTheirRanges() {
-        MetallicityVerdict wide = JUDGE.judge(measured(0.63, 0.5, 0.55, 0.75, 0.001), type(2), 1);
+        MetallicityVerdict wide = judge.judge(measured(0.63, 0.5, 0.55, 0.75, 0.001), type(2), 1);
         assertTrue(reading(wide, "lepine2007/zeta").isUsed());
         assertTrue(reading(wide, "dhital2012/zeta").isUsed());
         ZetaReading corrected = reading(wide, "lepine2013/zeta");
         assertTrue(!corrected.isUsed() && corrected.zeta() instanceof Measured);
-        MetallicityVerdict narrow = JUDGE.judge(measured(0.63, 0.4, 0.3, 0.5, 0.001), type(5), 1);
+        MetallicityVerdict narrow = judge.judge(measured(0.63, 0.4, 0.3, 0.5, 0.001), type(5), 1);
         ZetaReading outside = reading(narrow, "dhital2012/zeta");
         assertTrue(outside.reason().contains("begins at 1.00"), outside.reason());
     }
@@ -136,9 +138,9 @@ class MetallicityJudgeTest {
     @Test
     void noiseSpreadsTheProbabilities() {
         MetallicityVerdict sharp =
-                JUDGE.judge(measured(0.629, 0.56, 0.384, 0.552, 1e-4), type(4), 1);
+                judge.judge(measured(0.629, 0.56, 0.384, 0.552, 1e-4), type(4), 1);
         MetallicityVerdict noisy =
-                JUDGE.judge(measured(0.629, 0.56, 0.384, 0.552, 0.15), type(4), 1);
+                judge.judge(measured(0.629, 0.56, 0.384, 0.552, 0.15), type(4), 1);
         assertEquals(1, sharp.probabilities().get(Name.SUBDWARF), 1e-9);
         assertTrue(noisy.probabilities().get(Name.EXTREME_SUBDWARF) > 0.1);
         double sum = noisy.probabilities().values().stream().mapToDouble(p -> p).sum();
@@ -151,7 +153,7 @@ class MetallicityJudgeTest {
     @Test
     void aSubdwarfNeedsLowCah1() {
         MetallicityVerdict high =
-                JUDGE.judge(measured(0.629, 0.95, 0.384, 0.552, 1e-4), type(4), 1);
+                judge.judge(measured(0.629, 0.95, 0.384, 0.552, 1e-4), type(4), 1);
         assertTrue(high.adopted().isEmpty() && high.pSubdwarf().isEmpty());
         assertTrue(high.reason().contains("CaH1 = 0.950 is not below"), high.reason());
         assertTrue(MetallicityJudge.findings(high).isEmpty());
@@ -160,15 +162,15 @@ class MetallicityJudgeTest {
     @Test
     void outsideItsTypesNothingIsJudged() {
         Measurements likeSubdwarf = measured(0.66, 0.74, 0.5, 0.62, 1e-3);
-        String late = JUDGE.judge(likeSubdwarf, type(10.5), 1).reason();
+        String late = judge.judge(likeSubdwarf, type(10.5), 1).reason();
         assertTrue(late.contains("outside K5 to M9"), late);
-        assertTrue(JUDGE.judge(likeSubdwarf, Optional.empty(), 1).reason().contains("no type"));
-        String early = JUDGE.judge(measured(0.96, 1, 1, 1, 1e-3), type(-1), 1).reason();
+        assertTrue(judge.judge(likeSubdwarf, Optional.empty(), 1).reason().contains("no type"));
+        String early = judge.judge(measured(0.96, 1, 1, 1, 1e-3), type(-1), 1).reason();
         assertTrue(early.contains("ends at 1.70"), early);
     }
 
-    private static MetallicityVerdict onReal(Path folder, String file) {
-        ObjectResult result = CHAIN.run(new Candidate(file, 1, List.of(file), Map.of()), folder);
+    private MetallicityVerdict onReal(Path folder, String file) {
+        ObjectResult result = chain.run(new Candidate(file, 1, List.of(file), Map.of()), folder);
         return result.placement().orElseThrow().metallicity();
     }
 

@@ -12,7 +12,9 @@ import emberline.place.TypeEstimate;
 import emberline.place.pair.PairVerdict.Strength;
 import emberline.prepare.PreparedSpectrum;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class PairJudgeTest {
 
     private static final String L6 = "2MASS J15150083+4847416";
@@ -21,10 +23,10 @@ class PairJudgeTest {
 
     private static final Measurer MEASURER =
             new Measurer(FeatureCatalogue.standard(), Measuring.withDefaults());
-    private static final PairJudge JUDGE = new PairJudge(FeatureCatalogue.standard());
+    private final PairJudge judge = new PairJudge(FeatureCatalogue.standard());
 
-    private static PairVerdict verdict(PreparedSpectrum prepared, double type) {
-        return JUDGE.judge(MEASURER.measure(prepared), TypeEstimate.normal(type, 0.7), 3);
+    private PairVerdict verdict(PreparedSpectrum prepared, double type) {
+        return judge.judge(MEASURER.measure(prepared), TypeEstimate.normal(type, 0.7), 3);
     }
 
     @Test
@@ -63,6 +65,6 @@ class PairJudgeTest {
     void theSameSeedGivesTheSameProbability() throws Exception {
         Measurements blend = MEASURER.measure(Blend.of(L6, "L6", T45, "T4", 20, 1));
         TypeEstimate type = TypeEstimate.normal(19, 0.7);
-        assertEquals(JUDGE.judge(blend, type, 9).pPair(), JUDGE.judge(blend, type, 9).pPair());
+        assertEquals(judge.judge(blend, type, 9).pPair(), judge.judge(blend, type, 9).pPair());
     }
 }

@@ -20,12 +20,13 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 
 /** Types from colours: recovery, intervals, alternatives, and what is refused. */
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class PhotometricWitnessTest {
 
-    private static final PhotometricWitness WITNESS =
-            new PhotometricWitness(TypePriors.FLAT.load());
+    private final PhotometricWitness witness = new PhotometricWitness(TypePriors.FLAT.load());
 
     private static CandidatePhotometry listed(String... cells) {
         Map<String, String> map = new LinkedHashMap<>();
@@ -104,7 +105,7 @@ class PhotometricWitnessTest {
                 mag -= b < colours.length ? Double.parseDouble(row.getField(colours[b])) : 0;
             }
             PhotometricType found =
-                    WITNESS.witness(
+                    witness.witness(
                             CandidatePhotometry.of(new Candidate("A", 1, List.of(), cells)));
             TypeEstimate estimate = found.type().orElseThrow();
             double off = estimate.typeNumber() - type;
@@ -129,7 +130,7 @@ class PhotometricWitnessTest {
             for (int i = 0; i < count; i++) {
                 double type = 6 + 20 * random.nextDouble();
                 TypeEstimate found =
-                        WITNESS.witness(atType(type, GravityClass.FLD_G, system, 0, random))
+                        witness.witness(atType(type, GravityClass.FLD_G, system, 0, random))
                                 .posterior()
                                 .orElseThrow()
                                 .estimate();
@@ -155,9 +156,9 @@ class PhotometricWitnessTest {
 
     @Test
     void aRedYoungDwarfIsNotTakenForALaterOne() {
-        PhotometricType found = WITNESS.witness(atType(13, GravityClass.VL_G, "2MASS", 0, null));
+        PhotometricType found = witness.witness(atType(13, GravityClass.VL_G, "2MASS", 0, null));
         double young = found.posterior().orElseThrow().probability(GravityClass.VL_G);
-        PhotometricType field = WITNESS.witness(atType(13, GravityClass.FLD_G, "2MASS", 0, null));
+        PhotometricType field = witness.witness(atType(13, GravityClass.FLD_G, "2MASS", 0, null));
         double old = field.posterior().orElseThrow().probability(GravityClass.VL_G);
         assertTrue(young > 0.1 && young > 2 * old, young + " against " + old);
         TypeEstimate type = found.type().orElseThrow();
@@ -166,7 +167,7 @@ class PhotometricWitnessTest {
 
     @Test
     void dustIsFound() {
-        PhotometricType found = WITNESS.witness(atType(8, GravityClass.FLD_G, "2MASS", 6, null));
+        PhotometricType found = witness.witness(atType(8, GravityClass.FLD_G, "2MASS", 6, null));
         assertTrue(found.pReddened() > 0.5, "p " + found.pReddened());
         assertEquals(6, found.avMag(), 1);
     }
@@ -174,7 +175,7 @@ class PhotometricWitnessTest {
     @Test
     void giantsGetNoType() {
         PhotometricType found =
-                WITNESS.witness(
+                witness.witness(
                         listed(
                                 "mag_system",
                                 "2MASS",
@@ -199,7 +200,7 @@ class PhotometricWitnessTest {
     @Test
     void bandsMayBeMissing() {
         PhotometricType two =
-                WITNESS.witness(
+                witness.witness(
                         listed(
                                 "w1_mag",
                                 "14",
@@ -215,7 +216,7 @@ class PhotometricWitnessTest {
         assertTrue(codes(two).contains("one-colour"));
         assertTrue(codes(two).contains("quasar-not-excluded"));
         PhotometricType without =
-                WITNESS.witness(
+                witness.witness(
                         listed(
                                 "mag_system",
                                 "MKO",
@@ -228,7 +229,7 @@ class PhotometricWitnessTest {
         assertEquals(List.of("J-K", "K-W1"), without.colours());
         assertTrue(codes(without).contains("magnitude-error-assumed"));
         assertTrue(codes(without).contains("kind-not-judged"));
-        PhotometricType one = WITNESS.witness(listed("j_mag", "16"));
+        PhotometricType one = witness.witness(listed("j_mag", "16"));
         assertTrue(one.posterior().isEmpty());
         assertTrue(one.reason().contains("two magnitudes"), one.reason());
     }
@@ -247,8 +248,8 @@ class PhotometricWitnessTest {
                         "14",
                         "w2_mag",
                         "13.7");
-        assertEquals(List.of("W1-W2"), WITNESS.witness(odd).colours());
-        assertTrue(codes(WITNESS.witness(odd)).contains("mag-system-unusable"));
+        assertEquals(List.of("W1-W2"), witness.witness(odd).colours());
+        assertTrue(codes(witness.witness(odd)).contains("mag-system-unusable"));
         CandidatePhotometry none =
                 listed("j_mag", "99.99", "h_mag", "15", "k_mag", "14", "k_mag_err", "-1");
         assertEquals(1, none.magnitudes().size());
@@ -258,12 +259,12 @@ class PhotometricWitnessTest {
     @Test
     void coloursOfAnotherTypeAreAFinding() {
         CandidatePhotometry late = atType(26, GravityClass.FLD_G, "MKO", 0, null);
-        assertTrue(WITNESS.disagreement(late, TypeEstimate.normal(26.5, 0.5), 0).isEmpty());
-        Finding finding = WITNESS.disagreement(late, TypeEstimate.normal(12, 0.5), 0).orElseThrow();
+        assertTrue(witness.disagreement(late, TypeEstimate.normal(26.5, 0.5), 0).isEmpty());
+        Finding finding = witness.disagreement(late, TypeEstimate.normal(12, 0.5), 0).orElseThrow();
         assertEquals("colours-unlike-type", finding.code());
         assertTrue(finding.text().contains("L2"), finding.text());
         CandidatePhotometry reddened = atType(12, GravityClass.FLD_G, "2MASS", 8, null);
-        assertFalse(WITNESS.disagreement(reddened, TypeEstimate.normal(12, 0.5), 0).isEmpty());
-        assertTrue(WITNESS.disagreement(reddened, TypeEstimate.normal(12, 0.5), 8).isEmpty());
+        assertFalse(witness.disagreement(reddened, TypeEstimate.normal(12, 0.5), 0).isEmpty());
+        assertTrue(witness.disagreement(reddened, TypeEstimate.normal(12, 0.5), 8).isEmpty());
     }
 }

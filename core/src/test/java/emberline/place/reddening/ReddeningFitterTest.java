@@ -17,6 +17,7 @@ import emberline.read.SpectrumReader;
 import emberline.spectrum.Medium;
 import emberline.spectrum.Spectrum;
 import java.util.List;
+import org.junit.jupiter.api.TestInstance;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
@@ -25,11 +26,12 @@ import org.junit.jupiter.params.provider.CsvSource;
  * found with their type and that extinction. Spectra and types: public libraries named in the
  * manifest beside them.
  */
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class ReddeningFitterTest {
 
     private static final FeatureCatalogue CATALOGUE = FeatureCatalogue.standard();
     private static final Measurer MEASURER = new Measurer(CATALOGUE, Measuring.withDefaults());
-    private static final Placer PLACER = new Placer(CATALOGUE);
+    private final Placer placer = new Placer(CATALOGUE);
 
     @ParameterizedTest
     @CsvSource({
@@ -51,7 +53,7 @@ class ReddeningFitterTest {
                                                         .resolve("originals/irtf_library")
                                                         .resolve(file)),
                                 stated);
-        ReddeningFit fit = PLACER.fitReddening(av -> measured(clean, avMag - av)).orElseThrow();
+        ReddeningFit fit = placer.fitReddening(av -> measured(clean, avMag - av)).orElseThrow();
         assertTrue(
                 fit.lo95Mag() - 0.5 <= avMag && avMag <= fit.hi95Mag() + 0.5,
                 "A_V " + avMag + " but " + fit.lo95Mag() + " to " + fit.hi95Mag());

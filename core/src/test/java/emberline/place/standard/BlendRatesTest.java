@@ -28,7 +28,7 @@ class BlendRatesTest {
 
     private static final Measurer MEASURER =
             new Measurer(FeatureCatalogue.standard(), Measuring.withDefaults());
-    private static final Placer PLACER = new Placer(FeatureCatalogue.standard());
+    private final Placer placer = new Placer(FeatureCatalogue.standard());
     private static final int SEEDS = 2;
 
     private List<Standard> standards;
@@ -82,7 +82,7 @@ class BlendRatesTest {
                 verdict.pair().filter(fit -> fit.outcome() == Outcome.CANDIDATE).isPresent()
                         ? 1
                         : 0;
-        Optional<Strength> strength = PLACER.place(MEASURER.measure(seen), seed).pair().strength();
+        Optional<Strength> strength = placer.place(MEASURER.measure(seen), seed).pair().strength();
         rates.byIndices += strength.equals(Optional.of(Strength.CANDIDATE)) ? 1 : 0;
     }
 

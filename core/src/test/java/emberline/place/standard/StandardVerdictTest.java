@@ -14,10 +14,12 @@ import java.util.OptionalDouble;
 import java.util.Set;
 import org.apache.commons.math3.distribution.FDistribution;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
 /** Fits of standards with fluxes chosen by hand, and what a comparison says. */
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class StandardVerdictTest {
 
     private static StandardMatch match(double type, double chiSquare, int freedom) {
@@ -126,20 +128,20 @@ class StandardVerdictTest {
         assertEquals("not compared with the standards: no overlap", none.text());
     }
 
-    private static final CommonGrid GRID = new CommonGrid(100);
+    private final CommonGrid grid = new CommonGrid(100);
 
-    private static Binned binned(double[] flux, double sigma) {
+    private Binned binned(double[] flux, double sigma) {
         double[] sigmas = new double[flux.length];
         Arrays.fill(sigmas, sigma);
-        return new Binned(GRID, flux, sigmas);
+        return new Binned(grid, flux, sigmas);
     }
 
     /** Fluxes by bin: a slope, times a factor within J. */
-    private static double[] slope(double per, double inJ) {
-        double[] flux = new double[GRID.size()];
+    private double[] slope(double per, double inJ) {
+        double[] flux = new double[grid.size()];
         for (int k = 0; k < flux.length; k++) {
-            boolean j = k >= GRID.from(Range.J) && k < GRID.to(Range.J);
-            flux[k] = (1 + per * GRID.centreMicron(k)) * (j ? inJ : 1);
+            boolean j = k >= grid.from(Range.J) && k < grid.to(Range.J);
+            flux[k] = (1 + per * grid.centreMicron(k)) * (j ? inJ : 1);
         }
         return flux;
     }
@@ -147,12 +149,12 @@ class StandardVerdictTest {
     /** ln(1.34 / 1.10) times 100 is 19.7, ln(1.80 / 1.45) 21.6: one bin a resolution element. */
     @Test
     void aGridHasOneBinAResolutionElement() {
-        assertEquals(19, GRID.to(Range.J) - GRID.from(Range.J));
-        assertEquals(21, GRID.to(Range.H) - GRID.from(Range.H));
-        assertEquals(GRID.to(Range.Y), GRID.from(Range.J));
-        assertEquals(GRID.size(), GRID.to(Range.K));
+        assertEquals(19, grid.to(Range.J) - grid.from(Range.J));
+        assertEquals(21, grid.to(Range.H) - grid.from(Range.H));
+        assertEquals(grid.to(Range.Y), grid.from(Range.J));
+        assertEquals(grid.size(), grid.to(Range.K));
         double step = Math.log(1.34 / 1.10) / 19;
-        assertEquals(1.10 * (1 + Math.exp(step)) / 2, GRID.centreMicron(GRID.from(Range.J)), 1e-12);
+        assertEquals(1.10 * (1 + Math.exp(step)) / 2, grid.centreMicron(grid.from(Range.J)), 1e-12);
         assertEquals(1, new CommonGrid(2).to(Range.OPTICAL));
     }
 
@@ -160,14 +162,14 @@ class StandardVerdictTest {
     void coverageIsCountedInBins() {
         double[] flux = slope(0, 1);
         for (int k = 0; k < 4; k++) {
-            flux[GRID.from(Range.J) + k] = Double.NaN;
+            flux[grid.from(Range.J) + k] = Double.NaN;
         }
         Binned holed = binned(flux, 0.1);
         assertEquals(15, holed.good(List.of(Range.J)));
         assertEquals(36, holed.good(List.of(Range.J, Range.H)));
         // 15 of 19 are 79%
         assertEquals(EnumSet.complementOf(EnumSet.of(Range.J)), holed.covered());
-        flux[GRID.from(Range.J)] = 3;
+        flux[grid.from(Range.J)] = 3;
         Binned better = binned(flux, 0.1);
         assertTrue(better.covered().contains(Range.J), "16 of 19 are 84%");
         assertEquals((15 + 3) / 16.0, better.mean(Range.J), 1e-12);
@@ -230,7 +232,7 @@ class StandardVerdictTest {
         // floors of 2% and 1%: weight 1 / (0.0005 y^2); noise of 3% adds to it
         ScaleFit.Target noisy = new ScaleFit.Target(binned(slope(0, 1), 0.03), List.of(Range.H));
         double[] off = slope(0, 1);
-        off[GRID.from(Range.H)] = 1.1;
+        off[grid.from(Range.H)] = 1.1;
         ScaleFit one = ScaleFit.one(noisy, noisy.of(binned(off, 0))).orElseThrow();
         double expected = 0.01 / (0.0009 + 0.0005) * 20 / 21.21;
         assertEquals(expected, one.chiSquare(), 0.06 * expected);
