@@ -44,7 +44,8 @@ final class ColourTemplates {
      */
     record Other(ObjectKind kind, double jMinusH, double hMinusK) {}
 
-    private ColourTemplates() {
+    /** Reads the templates anew. */
+    ColourTemplates() {
         ColourSettings settings = ColourSettings.standard();
         Map<TemplateColour, Map<GravityClass, List<Point>>> points = read();
         for (TemplateColour colour : TemplateColour.values()) {

@@ -19,6 +19,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Random;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestInstance;
 
@@ -120,6 +121,7 @@ class PhotometricWitnessTest {
     }
 
     @Test
+    @Tag("slow")
     void intervalsHoldTheirShareOfSimulatedObjects() {
         Random random = new Random(7);
         for (String system : List.of("MKO", "2MASS")) {
