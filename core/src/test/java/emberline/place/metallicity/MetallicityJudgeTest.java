@@ -169,6 +169,55 @@ class MetallicityJudgeTest {
         assertTrue(early.contains("ends at 1.70"), early);
     }
 
+    private static List<String> codes(MetallicityVerdict verdict) {
+        return MetallicityJudge.findings(verdict).stream().map(f -> f.code()).toList();
+    }
+
+    @Test
+    void aDwarfIsNotRemarkedOnUnlessItsClassIsOpen() {
+        MetallicityVerdict dwarf = judge.judge(measured(0.63, 0.85, 0.60, 0.80, 1e-4), type(2), 1);
+        assertEquals(Optional.of(Name.DWARF), dwarf.adopted(), dwarf.reason());
+        assertEquals(List.of(), codes(dwarf));
+        assertEquals(0, dwarf.pSubdwarf().orElseThrow(), 1e-12);
+        assertEquals("", dwarf.hint(), "nothing of the near-infrared was seen");
+        MetallicityVerdict noisy =
+                judge.judge(measured(0.629, 0.30, 0.384, 0.552, 0.15), type(4), 1);
+        assertTrue(codes(noisy).contains("metallicity-class-unsure"), codes(noisy).toString());
+        assertTrue(
+                reading(dwarf, "lepine2013/zeta").reason().startsWith("shown only"),
+                "a scale without limits");
+    }
+
+    @Test
+    void withoutCah1ASubdwarfIsNotBelieved() {
+        MetallicityVerdict verdict =
+                judge.judge(measured(0.629, Double.NaN, 0.384, 0.552, 1e-4), type(4), 1);
+        assertTrue(verdict.adopted().isEmpty());
+        assertTrue(verdict.reason().startsWith("zeta says sdM, but CaH1"), verdict.reason());
+        assertTrue(verdict.reason().endsWith("was not measured"), verdict.reason());
+    }
+
+    /** In L dwarfs dust weakens TiO. */
+    @Test
+    void theClassEndsWhereLDwarfsBegin() {
+        Measurements dwarf = measured(0.63, 0.85, 0.60, 0.80, 1e-4);
+        assertEquals("", judge.judge(dwarf, type(9.7), 1).reason());
+        assertTrue(judge.judge(dwarf, type(10), 1).reason().contains("outside K5 to M9"));
+    }
+
+    /** Two readings of the same object are averaged. */
+    @Test
+    void theClassIsTheMeanOfTheReadingsThatApply() {
+        MetallicityVerdict verdict = judge.judge(measured(0.63, 0.3, 0.52, 0.70, 0.03), type(3), 1);
+        List<ZetaReading> used = verdict.readings().stream().filter(ZetaReading::isUsed).toList();
+        assertTrue(used.size() >= 2, "two scales apply");
+        for (Name name : verdict.probabilities().keySet()) {
+            double mean =
+                    used.stream().mapToDouble(r -> r.probabilities().get(name)).average().orElse(0);
+            assertEquals(mean, verdict.probabilities().get(name), 1e-12, name.toString());
+        }
+    }
+
     private MetallicityVerdict onReal(Path folder, String file) {
         ObjectResult result = chain.run(new Candidate(file, 1, List.of(file), Map.of()), folder);
         return result.placement().orElseThrow().metallicity();

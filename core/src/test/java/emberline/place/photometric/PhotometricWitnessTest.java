@@ -269,4 +269,136 @@ class PhotometricWitnessTest {
         assertFalse(witness.disagreement(reddened, TypeEstimate.normal(12, 0.5), 0).isEmpty());
         assertTrue(witness.disagreement(reddened, TypeEstimate.normal(12, 0.5), 8).isEmpty());
     }
+
+    @Test
+    void aPlainFieldDwarfIsRemarkedOnByNothing() {
+        PhotometricType found = witness.witness(atType(15, GravityClass.FLD_G, "2MASS", 0, null));
+        assertEquals(List.of(), codes(found));
+        assertEquals(3, found.freedom(), "four colours, one type");
+        assertTrue(found.chiSquare() < 1, "made of the templates: " + found.chiSquare());
+        assertEquals(found.chiSquare() / 3, found.reducedChiSquare().orElseThrow(), 1e-12);
+        assertEquals("JHK W1 W2 colours", found.kind().coverage());
+    }
+
+    @Test
+    void whatTheObserverShouldKnowIsSaid() {
+        PhotometricType early = witness.witness(atType(5, GravityClass.FLD_G, "2MASS", 0, null));
+        assertTrue(codes(early).contains("type-at-edge"), codes(early).toString());
+        PhotometricType dusty = witness.witness(atType(8, GravityClass.FLD_G, "2MASS", 6, null));
+        assertTrue(codes(dusty).contains("colours-reddened"), codes(dusty).toString());
+        PhotometricType odd =
+                witness.witness(
+                        listed(
+                                "mag_system",
+                                "MKO",
+                                "j_mag",
+                                "16",
+                                "j_mag_err",
+                                "0.03",
+                                "h_mag",
+                                "13",
+                                "h_mag_err",
+                                "0.03",
+                                "k_mag",
+                                "16",
+                                "k_mag_err",
+                                "0.03"));
+        assertTrue(codes(odd).contains("colours-unlike-templates"), codes(odd).toString());
+    }
+
+    /** Active galaxies have W1-W2 of 0.8 and more; a colour well below excludes them. */
+    @Test
+    void aBlueMidInfraredColourExcludesAQuasar() {
+        PhotometricType found =
+                witness.witness(
+                        listed(
+                                "w1_mag",
+                                "14",
+                                "w1_mag_err",
+                                "0.03",
+                                "w2_mag",
+                                "13.7",
+                                "w2_mag_err",
+                                "0.03"));
+        assertTrue(codes(found).contains("one-colour"));
+        assertFalse(codes(found).contains("quasar-not-excluded"), codes(found).toString());
+        double limit = ColourSettings.standard().of("quasar-w1-w2");
+        String near = String.format(Locale.ROOT, "%.3f", 14 - limit + 0.04);
+        PhotometricType within =
+                witness.witness(
+                        listed(
+                                "w1_mag",
+                                "14",
+                                "w1_mag_err",
+                                "0.03",
+                                "w2_mag",
+                                near,
+                                "w2_mag_err",
+                                "0.03"));
+        assertTrue(
+                codes(within).contains("quasar-not-excluded"), "0.04 off with an error of 0.042");
+        PhotometricType sharper =
+                witness.witness(
+                        listed(
+                                "w1_mag",
+                                "14",
+                                "w1_mag_err",
+                                "0.02",
+                                "w2_mag",
+                                near,
+                                "w2_mag_err",
+                                "0.02"));
+        assertFalse(codes(sharper).contains("quasar-not-excluded"), "0.04 off with 0.028");
+    }
+
+    /** The entropy of the kind in bits, and by how many halvings a spectrum narrows the type. */
+    @Test
+    void theGainIsCountedInBits() {
+        for (double type : new double[] {6, 9, 17}) {
+            PhotometricType found =
+                    witness.witness(atType(type, GravityClass.FLD_G, "2MASS", 0, null));
+            double bits = 0;
+            for (double p : found.kind().probabilities().values()) {
+                bits -= p > 0 ? p * Math.log(p) / Math.log(2) : 0;
+            }
+            double sigma = found.posterior().orElseThrow().estimate().sigmaSubclass();
+            double narrower = sigma / ColourSettings.standard().of("spectrum-sigma");
+            double dwarf = found.kind().probability(ObjectKind.LATE_DWARF).orElseThrow();
+            assertTrue(narrower > 1, "colours alone are worse than a spectrum: " + narrower);
+            assertEquals(
+                    bits + dwarf * Math.log(narrower) / Math.log(2),
+                    found.spectrumGainBits(),
+                    1e-9);
+        }
+    }
+
+    @Test
+    void chiSquareIsSharedByItsFreedom() {
+        PhotometricType found = witness.witness(atType(12, GravityClass.FLD_G, "MKO", 0, null));
+        PhotometricType other =
+                new PhotometricType(
+                        found.colours(),
+                        found.posterior(),
+                        "",
+                        found.kind(),
+                        6,
+                        3,
+                        0,
+                        0,
+                        0,
+                        List.of());
+        assertEquals(2, other.reducedChiSquare().orElseThrow());
+        assertTrue(PhotometricType.allowsType(0.4));
+        assertFalse(PhotometricType.allowsType(0.399));
+    }
+
+    /** There are no colours of dwarfs before M5, so such a type is not contradicted. */
+    @Test
+    void earlyTypesAreNotContradicted() {
+        CandidatePhotometry late = atType(26, GravityClass.FLD_G, "MKO", 0, null);
+        assertTrue(witness.disagreement(late, TypeEstimate.normal(3, 0.5), 0).isEmpty());
+        assertTrue(witness.disagreement(late, TypeEstimate.normal(5, 0.5), 0).isPresent());
+        CandidatePhotometry none = listed("j_mag", "16");
+        assertTrue(witness.disagreement(none, TypeEstimate.normal(12, 0.5), 0).isEmpty());
+    }
 }
