@@ -12,7 +12,7 @@ enum Fullness {
     /** Notes by their names only; features that hardly pull the type stand with the others. */
     SHORT(2, 8, 16, 1),
     /** The least. */
-    SPARE(1, 2, 6, 0);
+    SPARE(1, 2, 4, 0);
 
     private final int kin;
     private final int paragraphLines;
