@@ -16,13 +16,19 @@ import emberline.place.calibrated.TypePrior;
 import emberline.place.calibrated.TypePriors;
 import emberline.prepare.NoiseModel;
 import emberline.prepare.PreparedSpectrum;
+import emberline.read.CandidateListReader;
+import emberline.read.ListedCandidate;
+import emberline.read.UnreadableListException;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
 import emberline.spectrum.ResolvingPower;
 import emberline.spectrum.Spectrum;
+import emberline.survey.Chain;
 import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
 import emberline.survey.Status;
+import emberline.survey.SurveySettings;
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -173,6 +179,27 @@ public final class Samples {
     /** An invented L dwarf at low resolution with good signal. */
     public static ObjectResult lDwarf() {
         return object("Ember 12", spectrum(0.8, 2.45, 600, Bands.L_DWARF, 60, 3), 120);
+    }
+
+    /** An L3 of very low gravity from the demo survey, with all the bands of its type. */
+    public static ObjectResult demoLDwarf() {
+        Path list =
+                Path.of(System.getProperty("emberline.root", ".."))
+                        .resolve("demo-objects/survey/candidates.csv")
+                        .toAbsolutePath();
+        try {
+            Candidate candidate =
+                    new CandidateListReader()
+                            .read(list).rows().stream()
+                                    .map(ListedCandidate::candidate)
+                                    .filter(one -> one.name().equals("Tamarisk-0246+0411"))
+                                    .findFirst()
+                                    .orElseThrow();
+            return new Chain(CATALOGUE, Measuring.withDefaults(), SurveySettings.withDefaults())
+                    .run(candidate, list.getParent());
+        } catch (UnreadableListException e) {
+            throw new IllegalStateException(e);
+        }
     }
 
     /** An invented T dwarf. */

@@ -2,6 +2,7 @@ package emberline.reports.chart;
 
 import emberline.spectrum.Spectrum;
 import java.util.Arrays;
+import java.util.OptionalDouble;
 
 /** Brings a spectrum to the scale of another one for a plot. */
 final class OverlapScale {
@@ -11,22 +12,23 @@ final class OverlapScale {
     private OverlapScale() {}
 
     /**
-     * The factor for a spectrum so that its median flux where both have pixels is that of the
-     * other, whose peak is one.
+     * The factor that brings the median flux of a spectrum, where both have pixels, to that of
+     * another.
      *
-     * @param ownFactor the factor where they do not overlap
+     * @param spectrum the spectrum to be scaled
+     * @param other the other
+     * @return the factor; empty where they do not overlap by five pixels or a median is not
+     *     positive
      */
-    static double of(Spectrum spectrum, Spectrum first, double ownFactor) {
-        double from = Math.max(spectrum.wavelengthMicron(0), first.wavelengthMicron(0));
+    static OptionalDouble of(Spectrum spectrum, Spectrum other) {
+        double from = Math.max(spectrum.wavelengthMicron(0), other.wavelengthMicron(0));
         double to =
                 Math.min(
                         spectrum.wavelengthMicron(spectrum.size() - 1),
-                        first.wavelengthMicron(first.size() - 1));
+                        other.wavelengthMicron(other.size() - 1));
         double here = median(spectrum, from, to);
-        double there = median(first, from, to);
-        Reduction means = Reduction.ofMeans(first, Math.max(1, first.size() / 260));
-        double peak = means.size() > 0 ? means.peak() : 1;
-        return here > 0 && there > 0 && peak > 0 ? there / here / peak : ownFactor;
+        double there = median(other, from, to);
+        return here > 0 && there > 0 ? OptionalDouble.of(there / here) : OptionalDouble.empty();
     }
 
     private static double median(Spectrum spectrum, double from, double to) {

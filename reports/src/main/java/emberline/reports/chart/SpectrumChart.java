@@ -11,6 +11,7 @@ import emberline.survey.SpectrumResult;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * The spectrum of an object with its one-sigma band; bands and lines labelled in rows above it;
@@ -91,10 +92,9 @@ public final class SpectrumChart {
         List<Curve> curves = new ArrayList<>();
         List<String> remarks = new ArrayList<>();
         Heights heights = new Heights();
-        double[] factors = new double[spectra.size()];
+        double[] factors = factors(spectra, low, high);
         for (int i = 0; i < spectra.size(); i++) {
-            Optional<Spectrum> first = i == 0 ? Optional.empty() : Optional.of(spectra.get(0));
-            factors[i] = addSpectrum(spectra.get(i), first, low, high, curves, remarks, heights);
+            addSpectrum(spectra.get(i), factors[i], low, high, curves, remarks, heights);
         }
         result.standards()
                 .filter(verdict -> !verdict.best().isEmpty())
@@ -139,26 +139,59 @@ public final class SpectrumChart {
         }
     }
 
-    /** Adds the curves of a spectrum; returns the factor by which its fluxes are multiplied. */
-    private double addSpectrum(
+    /**
+     * By what the fluxes of each spectrum are multiplied: all are scaled to the first where they
+     * overlap, and the highest peak of all is 1.
+     */
+    private double[] factors(List<Spectrum> spectra, double low, double high) {
+        double[] factors = new double[spectra.size()];
+        double highest = 0;
+        for (int i = 0; i < factors.length; i++) {
+            Spectrum spectrum = spectra.get(i);
+            double peak = peak(spectrum, low, high);
+            double alone = peak > 0 ? 1 / peak : 1;
+            OptionalDouble toFirst =
+                    i == 0 ? OptionalDouble.empty() : OverlapScale.of(spectrum, spectra.get(0));
+            factors[i] = toFirst.isPresent() ? toFirst.getAsDouble() * factors[0] : alone;
+            highest = Math.max(highest, factors[i] * peak);
+        }
+        for (int i = 0; i < factors.length && highest > 0; i++) {
+            factors[i] /= highest;
+        }
+        return factors;
+    }
+
+    private double peak(Spectrum spectrum, double low, double high) {
+        Reduction means = Reduction.ofMeans(spectrum, atOnce(spectrum), PLAIN);
+        return isNoisy(spectrum) && means.size() > 0
+                ? means.peak()
+                : Reduction.ofPixels(spectrum, low, high, columns()).peak();
+    }
+
+    private int columns() {
+        return (int) Math.round(1.2 * size.widthPoint());
+    }
+
+    private static int atOnce(Spectrum spectrum) {
+        return Math.max(1, spectrum.size() / MEANS);
+    }
+
+    private static boolean isNoisy(Spectrum spectrum) {
+        return BandSignal.best(spectrum).map(s -> s.medianSignalToNoise() < NOISY).orElse(false);
+    }
+
+    private void addSpectrum(
             Spectrum spectrum,
-            Optional<Spectrum> scaleTo,
+            double factor,
             double low,
             double high,
             List<Curve> curves,
             List<String> remarks,
             Heights heights) {
-        int columns = (int) Math.round(1.2 * size.widthPoint());
-        Reduction pixels = Reduction.ofPixels(spectrum, low, high, columns);
-        int atOnce = Math.max(1, spectrum.size() / MEANS);
+        Reduction pixels = Reduction.ofPixels(spectrum, low, high, columns());
+        int atOnce = atOnce(spectrum);
         Reduction means = Reduction.ofMeans(spectrum, atOnce, PLAIN);
-        boolean noisy =
-                BandSignal.best(spectrum).map(s -> s.medianSignalToNoise() < NOISY).orElse(false);
-        double peak = noisy && means.size() > 0 ? means.peak() : pixels.peak();
-        double factor = peak > 0 ? 1 / peak : 1;
-        if (scaleTo.isPresent()) {
-            factor = OverlapScale.of(spectrum, scaleTo.get(), factor);
-        }
+        boolean noisy = isNoisy(spectrum);
         if (noisy && atOnce > 1 && means.size() > 0) {
             curves.add(pixels.curve(factor, Tone.PIXELS, false));
             curves.add(means.curve(factor, Tone.SPECTRUM, true));
@@ -176,7 +209,6 @@ public final class SpectrumChart {
         }
         heights.include(
                 factor * pixels.quantile(0.004) - 0.02, factor * pixels.quantile(0.996) + 0.04);
-        return factor;
     }
 
     private static Optional<TypeEstimate> type(ObjectResult result) {

@@ -44,8 +44,8 @@ class ChartTest {
     @Test
     void bandsFollowTheType() {
         assertTrue(labels(Samples.tDwarf()).contains("CH\u2084"));
-        assertFalse(labels(Samples.lDwarf()).contains("CH\u2084"));
-        assertTrue(labels(Samples.lDwarf()).contains("CO"));
+        assertFalse(labels(Samples.demoLDwarf()).contains("CH\u2084"));
+        assertTrue(labels(Samples.demoLDwarf()).contains("CO"));
     }
 
     private static List<String> labels(ObjectResult object) {
@@ -131,7 +131,7 @@ class ChartTest {
     /** The areas must agree with the scores: 2 lies in the area of very low gravity. */
     @Test
     void theObjectLiesInTheAreaOfItsScore() {
-        ObjectResult object = Samples.lDwarf();
+        ObjectResult object = Samples.demoLDwarf();
         Placement placement = object.placement().orElseThrow();
         List<Tone> tones = List.of(Tone.FIELD, Tone.INTERMEDIATE, Tone.VERY_LOW);
         int checked = 0;

@@ -4,20 +4,11 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.catalogue.MetallicityClass.Name;
-import emberline.measure.Measuring;
 import emberline.place.metallicity.MetallicityVerdict;
 import emberline.place.pair.PairVerdict;
 import emberline.place.pair.PairVerdict.Strength;
-import emberline.read.CandidateListReader;
-import emberline.read.ListedCandidate;
-import emberline.read.UnreadableListException;
 import emberline.reports.Samples;
 import emberline.reports.Samples.Bands;
-import emberline.spectrum.Candidate;
-import emberline.survey.Chain;
-import emberline.survey.ObjectResult;
-import emberline.survey.SurveySettings;
-import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -27,8 +18,8 @@ import org.junit.jupiter.api.Test;
 class FindingSentenceTest {
 
     @Test
-    void typeGravityAndSignalAreSaid() throws UnreadableListException {
-        String sentence = FindingSentence.of(demoObject("Tamarisk-0246+0411"));
+    void typeGravityAndSignalAreSaid() {
+        String sentence = FindingSentence.of(Samples.demoLDwarf());
         assertTrue(
                 sentence.matches(
                         "Spectral type L\\d(\\.5)? ± \\d\\.\\d by \\d+ features against spectra of"
@@ -37,22 +28,6 @@ class FindingSentenceTest {
                                 + " \\d\\.\\d\\d\\); (FLD|INT|VL)-G by \\d published"
                                 + " scores?; .*S/N about \\d+ per pixel in [JHKY]\\."),
                 sentence);
-    }
-
-    private static ObjectResult demoObject(String name) throws UnreadableListException {
-        Path list =
-                Path.of(System.getProperty("emberline.root", ".."))
-                        .resolve("demo-objects/survey/candidates.csv")
-                        .toAbsolutePath();
-        Candidate candidate =
-                new CandidateListReader()
-                        .read(list).rows().stream()
-                                .map(ListedCandidate::candidate)
-                                .filter(one -> one.name().equals(name))
-                                .findFirst()
-                                .orElseThrow();
-        return new Chain(Samples.CATALOGUE, Measuring.withDefaults(), SurveySettings.withDefaults())
-                .run(candidate, list.getParent());
     }
 
     @Test
