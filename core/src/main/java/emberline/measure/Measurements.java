@@ -130,24 +130,33 @@ public final class Measurements {
                         .add(new Drawn(k, part));
             }
         }
-        double[][] draws = new double[ids.size()][count];
+        double[][] draws = new double[ids.size()][];
         long stream = seed;
         for (Map.Entry<MeasuredSpectrum, List<Drawn>> group : bySpectrum.entrySet()) {
             List<Formula> formulas =
                     group.getValue().stream().map(one -> one.part.formula()).toList();
             double[][] drawn = group.getKey().draws(formulas, count, stream++);
             for (int f = 0; f < drawn.length; f++) {
-                double[] sum = draws[group.getValue().get(f).place];
+                int place = group.getValue().get(f).place;
                 double weight = group.getValue().get(f).part.weight();
-                for (int i = 0; i < count; i++) {
-                    sum[i] += weight * drawn[f][i];
-                }
+                draws[place] = sum(draws[place], weight, drawn[f]);
             }
         }
         for (int k = 0; k < draws.length; k++) {
             measuredEntry(ids.get(k)).widen(draws[k]);
         }
         return draws;
+    }
+
+    /** What there is, or null, plus weighted draws, of which the array is taken over. */
+    private static double[] sum(double[] before, double weight, double[] drawn) {
+        if (before == null && weight == 1) {
+            return drawn;
+        }
+        for (int i = 0; i < drawn.length; i++) {
+            drawn[i] = weight * drawn[i] + (before == null ? 0 : before[i]);
+        }
+        return drawn;
     }
 
     /** A part of a feature that is to be drawn, and the place of the feature among the others. */
