@@ -10,60 +10,63 @@ public final class LowerFactor {
     private static final double LEAST_VARIANCE = 1e-14;
     private static final double LEAST_SHARE = 1e-12;
 
-    private final double[] lower;
-    private final int size;
+    /** The columns of the factor, each from its diagonal element on; what is before is no part. */
+    private final double[][] columns;
+
     private final double logDeterminant;
 
-    private LowerFactor(double[] lower, int size) {
-        this.lower = lower;
-        this.size = size;
+    private LowerFactor(double[][] columns) {
+        this.columns = columns;
         double sum = 0;
-        for (int row = 0; row < size; row++) {
-            sum += Math.log(lower[row * size + row]);
+        for (int k = 0; k < columns.length; k++) {
+            sum += Math.log(columns[k][k]);
         }
         this.logDeterminant = 2 * sum;
     }
 
     /**
-     * Factors a matrix.
+     * Factors a matrix. All inner loops add runs of numbers of equal place, which a compiler turns
+     * into operations on several at once.
      *
-     * @param covariance the matrix row by row, of which the lower triangle is read; used up
-     * @param size number of its rows
+     * @param covariance the rows of the matrix, of which each is read from the diagonal on; used up
      * @return the factor
      */
-    public static LowerFactor of(double[] covariance, int size) {
-        double[] a = covariance;
-        for (int row = 0; row < size; row++) {
-            int start = row * size;
-            double least = Math.max(LEAST_VARIANCE, LEAST_SHARE * a[start + row]);
-            for (int col = 0; col < row; col++) {
-                int other = col * size;
-                a[start + col] =
-                        (a[start + col] - product(a, start, a, other, col)) / a[other + col];
+    public static LowerFactor of(double[][] covariance) {
+        double[][] a = covariance;
+        for (int row = 0; row < a.length; row++) {
+            double[] own = a[row];
+            double least = Math.max(LEAST_VARIANCE, LEAST_SHARE * own[row]);
+            int k = 0;
+            for (; k + 3 < row; k += 4) {
+                subtractFour(own, row, a[k], a[k + 1], a[k + 2], a[k + 3]);
             }
-            double pivot = a[start + row] - product(a, start, a, start, row);
-            a[start + row] = Math.sqrt(Math.max(pivot, least));
+            for (; k < row; k++) {
+                subtract(own, row, a[k][row], a[k]);
+            }
+            double pivot = Math.sqrt(Math.max(own[row], least));
+            own[row] = pivot;
+            for (int j = row + 1; j < own.length; j++) {
+                own[j] /= pivot;
+            }
         }
-        return new LowerFactor(a, size);
+        return new LowerFactor(a);
     }
 
-    /** The sum of products of two runs of numbers, in four sums that do not wait for each other. */
-    private static double product(double[] a, int fromA, double[] b, int fromB, int length) {
-        double one = 0;
-        double two = 0;
-        double three = 0;
-        double four = 0;
-        int k = 0;
-        for (; k + 3 < length; k += 4) {
-            one += a[fromA + k] * b[fromB + k];
-            two += a[fromA + k + 1] * b[fromB + k + 1];
-            three += a[fromA + k + 2] * b[fromB + k + 2];
-            four += a[fromA + k + 3] * b[fromB + k + 3];
+    private static void subtractFour(
+            double[] from, int start, double[] a, double[] b, double[] c, double[] d) {
+        double byA = a[start];
+        double byB = b[start];
+        double byC = c[start];
+        double byD = d[start];
+        for (int j = start; j < from.length; j++) {
+            from[j] -= byA * a[j] + byB * b[j] + byC * c[j] + byD * d[j];
         }
-        for (; k < length; k++) {
-            one += a[fromA + k] * b[fromB + k];
+    }
+
+    private static void subtract(double[] from, int start, double weight, double[] a) {
+        for (int j = start; j < from.length; j++) {
+            from[j] -= weight * a[j];
         }
-        return one + two + (three + four);
     }
 
     /**
@@ -83,10 +86,9 @@ public final class LowerFactor {
      * @return the same array
      */
     public double[] whiten(double[] vector) {
-        for (int row = 0; row < size; row++) {
-            int start = row * size;
-            vector[row] =
-                    (vector[row] - product(lower, start, vector, 0, row)) / lower[start + row];
+        for (int k = 0; k < vector.length; k++) {
+            vector[k] /= columns[k][k];
+            subtract(vector, k + 1, vector[k], columns[k]);
         }
         return vector;
     }
@@ -98,12 +100,12 @@ public final class LowerFactor {
      * @return the same array
      */
     public double[] unwhiten(double[] vector) {
-        for (int row = size - 1; row >= 0; row--) {
-            double sum = vector[row];
-            for (int k = row + 1; k < size; k++) {
-                sum -= lower[k * size + row] * vector[k];
+        for (int k = vector.length - 1; k >= 0; k--) {
+            double sum = vector[k];
+            for (int j = k + 1; j < vector.length; j++) {
+                sum -= columns[k][j] * vector[j];
             }
-            vector[row] = sum / lower[row * size + row];
+            vector[k] = sum / columns[k][k];
         }
         return vector;
     }
@@ -115,9 +117,9 @@ public final class LowerFactor {
      * @return a new vector
      */
     public double[] colour(double[] vector) {
-        double[] coloured = new double[size];
-        for (int row = 0; row < size; row++) {
-            coloured[row] = product(lower, row * size, vector, 0, row + 1);
+        double[] coloured = new double[vector.length];
+        for (int k = 0; k < vector.length; k++) {
+            subtract(coloured, k, -vector[k], columns[k]);
         }
         return coloured;
     }
@@ -129,7 +131,10 @@ public final class LowerFactor {
      * @return its squared length in units of sigma
      */
     public double chiSquare(double[] vector) {
-        whiten(vector);
-        return product(vector, 0, vector, 0, size);
+        double sum = 0;
+        for (double one : whiten(vector)) {
+            sum += one * one;
+        }
+        return sum;
     }
 }

@@ -97,10 +97,13 @@ public final class Placer {
      * Fits type and extinction together.
      *
      * @param measuredAt the features once an extinction in V (mag) is taken out
-     * @return the fit; empty where too little was measured
+     * @param leastGain how much more probable extinction must make the measurements (natural
+     *     logarithm) for the fit to be of use
+     * @return the fit; empty where too little was measured, or the gain is out of reach
      */
-    public Optional<ReddeningFit> fitReddening(DoubleFunction<Measurements> measuredAt) {
-        return new ReddeningFitter(calibrated).fit(measuredAt);
+    public Optional<ReddeningFit> fitReddening(
+            DoubleFunction<Measurements> measuredAt, double leastGain) {
+        return new ReddeningFitter(calibrated).fit(measuredAt, leastGain);
     }
 
     /**

@@ -53,20 +53,24 @@ final class PlacingStep {
                     case CALLED_FOR -> ReddeningCall.reason(asSeen);
                     case ALWAYS -> Optional.of("");
                 };
+        boolean onCall = reddeningMode == ReddeningMode.CALLED_FOR;
+        double leastGain = onCall ? ReddeningCall.LEAST_GAIN : Double.NEGATIVE_INFINITY;
         Optional<ReddeningFit> fit =
                 call.flatMap(
-                        reason -> placer.fitReddening(avMag -> measuredAt(avMag, used, placer)));
+                        reason ->
+                                placer.fitReddening(
+                                        avMag -> measuredAt(avMag, used, placer), leastGain));
         if (fit.isEmpty()) {
-            return new Placed(spectra, joined, asSeen, Optional.empty());
+            Optional<Finding> finding =
+                    onCall ? call.map(PlacingStep::notBelieved) : Optional.empty();
+            return new Placed(spectra, joined, asSeen, finding);
         }
         List<SpectrumResult> freed = new ArrayList<>();
         used.forEach((path, one) -> freed.add(again(path, one, fit.get().avMag())));
         SeveralSpectra.Joined freedJoined = joined(placer, freed);
         Placement placement = placer.place(freedJoined.measurements(), fit, draws);
-        if (reddeningMode == ReddeningMode.CALLED_FOR
-                && !ReddeningCall.isBelieved(fit.get(), placement)) {
-            Finding finding = notBelieved(call.orElseThrow(), fit.get());
-            return new Placed(spectra, joined, asSeen, Optional.of(finding));
+        if (onCall && !ReddeningCall.isBelieved(fit.get(), placement)) {
+            return new Placed(spectra, joined, asSeen, call.map(PlacingStep::notBelieved));
         }
         Finding finding = fitted(call.orElseThrow(), fit.get());
         return new Placed(freed, freedJoined, placement, Optional.of(finding));
@@ -116,15 +120,11 @@ final class PlacingStep {
                         fit.avMag()));
     }
 
-    private static Finding notBelieved(String reason, ReddeningFit fit) {
+    private static Finding notBelieved(String reason) {
         return Finding.note(
                 "reddening-not-believed",
-                String.format(
-                        Locale.ROOT,
-                        "%s, so extinction was fitted; the best for a late dwarf is %.1f mag in V,"
-                                + " which does not make it one surely enough: nothing was taken out"
-                                + " (--fit-reddening takes it out)",
-                        reason,
-                        fit.avMag()));
+                reason
+                        + ", so extinction was fitted; none makes a late dwarf of it surely enough, and"
+                        + " nothing was taken out (--fit-reddening takes out the best)");
     }
 }

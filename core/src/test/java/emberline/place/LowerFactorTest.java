@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.Arrays;
 import java.util.Random;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
 import org.apache.commons.math3.linear.ArrayRealVector;
@@ -26,13 +27,11 @@ class LowerFactorTest {
         return matrix.multiply(matrix.transpose());
     }
 
-    private static double[] rows(RealMatrix matrix) {
-        int size = matrix.getRowDimension();
-        double[] rows = new double[size * size];
-        for (int row = 0; row < size; row++) {
-            for (int col = 0; col <= row; col++) {
-                rows[row * size + col] = matrix.getEntry(row, col);
-            }
+    /** What is before the diagonal is not read. */
+    private static double[][] rows(RealMatrix matrix) {
+        double[][] rows = matrix.getData();
+        for (int row = 0; row < rows.length; row++) {
+            Arrays.fill(rows[row], 0, row, Double.NaN);
         }
         return rows;
     }
@@ -44,7 +43,7 @@ class LowerFactorTest {
         RealMatrix matrix = covariance(size, random);
         double[] vector = random.doubles(size, -2, 2).toArray();
         CholeskyDecomposition known = new CholeskyDecomposition(matrix);
-        LowerFactor factor = LowerFactor.of(rows(matrix), size);
+        LowerFactor factor = LowerFactor.of(rows(matrix));
         assertEquals(Math.log(known.getDeterminant()), factor.logDeterminant(), 1e-8);
         assertArrayEquals(known.getL().operate(vector), factor.colour(vector), 1e-9);
         assertArrayEquals(vector, factor.whiten(factor.colour(vector)), 1e-8);
@@ -61,8 +60,8 @@ class LowerFactorTest {
     @ParameterizedTest
     @ValueSource(doubles = {1, 1e20, 1e-6})
     void aSingularMatrixGivesNumbers(double scale) {
-        double[] ones = {scale, 0, 0, scale, scale, 0, scale, scale, scale};
-        LowerFactor factor = LowerFactor.of(ones, 3);
+        double[][] ones = {{scale, scale, scale}, {0, scale, scale}, {0, 0, scale}};
+        LowerFactor factor = LowerFactor.of(ones);
         assertTrue(Double.isFinite(factor.logDeterminant()));
         assertTrue(Double.isFinite(factor.chiSquare(new double[] {scale, -scale, scale})));
     }

@@ -43,7 +43,14 @@ public final class CalibratedWitness {
     private static final int ROUNDS = 2;
 
     private final Calibration calibration;
-    private final TypePrior prior;
+
+    /** Logarithm of the prior at the knots and on the grid, by gravity class. */
+    private final Map<GravityClass, double[]> logPriorAtKnots;
+
+    private final Map<GravityClass, double[]> logPriorOnGrid;
+
+    /** Probability of an error of published types by steps of the grid. */
+    private final double[] labelError = new double[GRID];
 
     /**
      * A witness.
@@ -53,7 +60,23 @@ public final class CalibratedWitness {
      */
     public CalibratedWitness(Calibration calibration, TypePrior prior) {
         this.calibration = calibration;
-        this.prior = prior;
+        this.logPriorAtKnots = logPrior(prior, TypeKnots.COUNT, TypeKnots.STEP);
+        this.logPriorOnGrid = logPrior(prior, GRID, STEP);
+        for (int i = 0; i < GRID; i++) {
+            labelError[i] = calibration.labelError().probability(i * STEP, STEP);
+        }
+    }
+
+    private static Map<GravityClass, double[]> logPrior(TypePrior prior, int size, double step) {
+        Map<GravityClass, double[]> log = new EnumMap<>(GravityClass.class);
+        for (GravityClass gravity : GravityClass.values()) {
+            double[] ofClass = new double[size];
+            for (int i = 0; i < size; i++) {
+                ofClass[i] = Math.log(prior.density(i * step, gravity));
+            }
+            log.put(gravity, ofClass);
+        }
+        return log;
     }
 
     /**
@@ -121,7 +144,7 @@ public final class CalibratedWitness {
             boolean[] probable = probable(logAtKnots);
             for (int k = 0; k < TypeKnots.COUNT; k++) {
                 if (probable[k] && prepared[k] == null) {
-                    prepared[k] = KnotLikelihood.at(sample, calibration, k);
+                    prepared[k] = KnotLikelihood.at(sample, k);
                 }
                 knots[k] = probable[k] ? prepared[k].widened(inflation) : null;
             }
@@ -147,8 +170,7 @@ public final class CalibratedWitness {
                     variances.times(variance);
                 }
                 double sum = -(FREEDOM + 1) / 2 * tails.value() - 0.5 * variances.value();
-                ofClass[k] =
-                        temper * sum + Math.log(prior.density(TypeKnots.typeNumber(k), gravity));
+                ofClass[k] = temper * sum + logPriorAtKnots.get(gravity)[k];
             }
             log.put(gravity, ofClass);
         }
@@ -218,7 +240,7 @@ public final class CalibratedWitness {
                         knots[k] == null
                                 ? Double.NEGATIVE_INFINITY
                                 : knots[k].at(0).logLikelihood(gravity)
-                                        + Math.log(prior.density(TypeKnots.typeNumber(k), gravity));
+                                        + logPriorAtKnots.get(gravity)[k];
             }
             log.put(gravity, ofClass);
         }
@@ -246,7 +268,7 @@ public final class CalibratedWitness {
                 entry.getValue()[i] =
                         (1 - part) * before.logLikelihood(gravity)
                                 + part * after.logLikelihood(gravity)
-                                + Math.log(prior.density(i * STEP, gravity));
+                                + logPriorOnGrid.get(gravity)[i];
             }
         }
         return grid;
@@ -275,15 +297,11 @@ public final class CalibratedWitness {
     }
 
     private double[] blurred(double[] density) {
-        double[] kernel = new double[GRID];
-        for (int i = 0; i < GRID; i++) {
-            kernel[i] = calibration.labelError().probability(i * STEP, STEP);
-        }
         double[] blurred = new double[GRID];
         for (int i = 0; i < GRID; i++) {
             if (density[i] > 1e-12) {
                 for (int j = 0; j < GRID; j++) {
-                    blurred[j] += density[i] * kernel[Math.abs(i - j)];
+                    blurred[j] += density[i] * labelError[Math.abs(i - j)];
                 }
             }
         }

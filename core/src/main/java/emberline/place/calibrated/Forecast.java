@@ -108,15 +108,14 @@ public final class Forecast {
     /** Normal deviates with the correlation of the residuals of some loci. */
     private double[] correlated(List<Integer> places, ZigguratSampler.NormalizedGaussian normal) {
         int size = places.size();
-        double[] matrix = new double[size * size];
+        double[][] matrix = new double[size][size];
         double[] independent = new double[size];
         for (int row = 0; row < size; row++) {
-            for (int column = 0; column <= row; column++) {
-                matrix[row * size + column] =
-                        calibration.correlation(places.get(row), places.get(column));
+            for (int column = row; column < size; column++) {
+                matrix[row][column] = calibration.correlation(places.get(row), places.get(column));
             }
             independent[row] = normal.sample();
         }
-        return LowerFactor.of(matrix, size).colour(independent);
+        return LowerFactor.of(matrix).colour(independent);
     }
 }

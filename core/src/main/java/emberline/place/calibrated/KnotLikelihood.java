@@ -46,14 +46,13 @@ final class KnotLikelihood {
      * Prepares a knot.
      *
      * @param sample the values
-     * @param calibration the correlations
      * @param knot index of the knot
      * @return the likelihood with sigmas as they are
      */
-    static KnotLikelihood at(Sample sample, Calibration calibration, int knot) {
+    static KnotLikelihood at(Sample sample, int knot) {
         double[] as = new double[sample.size()];
         Arrays.fill(as, 1);
-        LowerFactor factor = LowerFactor.of(covariance(sample, calibration, knot), sample.size());
+        LowerFactor factor = LowerFactor.of(covariance(sample, knot));
         return new KnotLikelihood(sample, knot, factor, as);
     }
 
@@ -87,17 +86,17 @@ final class KnotLikelihood {
         }
     }
 
-    private static double[] covariance(Sample sample, Calibration calibration, int knot) {
+    private static double[][] covariance(Sample sample, int knot) {
         int size = sample.size();
         double[] scatter = new double[size];
         for (int f = 0; f < size; f++) {
             scatter[f] = sample.locus(f).scatter(knot);
         }
-        double[] matrix = new double[size * size];
+        double[][] matrix = new double[size][size];
         for (int f = 0; f < size; f++) {
-            for (int g = 0; g <= f; g++) {
-                double correlation = calibration.correlation(sample.place(f), sample.place(g));
-                matrix[f * size + g] = scatter[f] * scatter[g] * correlation + sample.noise(f, g);
+            for (int g = f; g < size; g++) {
+                matrix[f][g] =
+                        scatter[f] * scatter[g] * sample.correlation(f, g) + sample.noise(f, g);
             }
         }
         return matrix;

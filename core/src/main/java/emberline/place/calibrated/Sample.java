@@ -14,6 +14,7 @@ final class Sample {
     private final List<Integer> places = new ArrayList<>();
     private final List<Measured> values = new ArrayList<>();
     private double[][] noise = {};
+    private double[][] correlation = {};
 
     private Sample() {}
 
@@ -30,6 +31,7 @@ final class Sample {
             sample.add(calibration, i, measurements.measured(calibration.loci().get(i).feature()));
         }
         sample.noise = measurements.covariance(sample.loci.stream().map(Locus::feature).toList());
+        sample.correlation = sample.correlations(calibration);
         return sample;
     }
 
@@ -50,6 +52,7 @@ final class Sample {
         for (int f = 0; f < sample.size(); f++) {
             sample.noise[f][f] = Math.pow(sample.values.get(f).oneSigma(), 2);
         }
+        sample.correlation = sample.correlations(calibration);
         return sample;
     }
 
@@ -59,6 +62,16 @@ final class Sample {
             places.add(place);
             values.add(value.get());
         }
+    }
+
+    private double[][] correlations(Calibration calibration) {
+        double[][] all = new double[size()][size()];
+        for (int f = 0; f < all.length; f++) {
+            for (int g = 0; g < all.length; g++) {
+                all[f][g] = calibration.correlation(places.get(f), places.get(g));
+            }
+        }
+        return all;
     }
 
     int size() {
@@ -80,6 +93,11 @@ final class Sample {
 
     double value(int f) {
         return values.get(f).value();
+    }
+
+    /** Correlation of the residuals of two features from their loci. */
+    double correlation(int f, int other) {
+        return correlation[f][other];
     }
 
     /** Covariance of the noise of two features. */

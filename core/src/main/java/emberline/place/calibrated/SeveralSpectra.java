@@ -169,7 +169,7 @@ public final class SeveralSpectra {
         }
         double[][] ofOne = one.covariance(ids);
         double[][] ofTwo = two.covariance(ids);
-        double[] matrix = new double[ids.size() * ids.size()];
+        double[][] matrix = new double[ids.size()][ids.size()];
         double[] scatter =
                 ids.stream()
                         .mapToDouble(id -> calibrationSigma(id, typeNumber).orElseThrow())
@@ -182,14 +182,14 @@ public final class SeveralSpectra {
                                 * calibration.correlation(places.get(f), places.get(g))
                                 * scatter[f]
                                 * scatter[g];
-                matrix[f * ids.size() + g] = ofOne[f][g] + ofTwo[f][g] + shared;
+                matrix[f][g] = ofOne[f][g] + ofTwo[f][g] + shared;
             }
-            if (Math.abs(difference.get(f)) > NAMED * Math.sqrt(matrix[f * ids.size() + f])) {
+            if (Math.abs(difference.get(f)) > NAMED * Math.sqrt(matrix[f][f])) {
                 far.add(ids.get(f));
             }
         }
         double[] apart = difference.stream().mapToDouble(Double::doubleValue).toArray();
-        return new Repeats(ids, LowerFactor.of(matrix, apart.length).chiSquare(apart), far);
+        return new Repeats(ids, LowerFactor.of(matrix).chiSquare(apart), far);
     }
 
     private static Finding finding(

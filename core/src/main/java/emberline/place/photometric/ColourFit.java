@@ -24,7 +24,7 @@ final class ColourFit {
             terms.add(colours.terms(c));
         }
         for (int point = 0; point < ColourTemplates.SIZE; point++) {
-            factor[point] = LowerFactor.of(covariance(templates, terms, point), size);
+            factor[point] = LowerFactor.of(covariance(templates, terms, point));
             int g = 0;
             for (GravityClass gravity : GravityClass.values()) {
                 double[] rest = new double[size];
@@ -39,10 +39,10 @@ final class ColourFit {
         }
     }
 
-    private double[] covariance(ColourTemplates templates, List<List<Term>> terms, int point) {
+    private double[][] covariance(ColourTemplates templates, List<List<Term>> terms, int point) {
         int size = colours.size();
         double correlation = templates.correlation(point);
-        double[] matrix = new double[size * size];
+        double[][] matrix = new double[size][size];
         for (int c = 0; c < size; c++) {
             for (int d = 0; d < size; d++) {
                 double sum = colours.noise(c, d);
@@ -57,7 +57,7 @@ final class ColourFit {
                                         * templates.scatter(two.colour(), point);
                     }
                 }
-                matrix[c * size + d] = sum;
+                matrix[c][d] = sum;
             }
         }
         return matrix;

@@ -72,14 +72,14 @@ final class ColourKinds {
     /** Giants and earlier stars, each without dust and, as another kind, behind it. */
     private void addOthers(ColourVector colours, Map<ObjectKind, Double> weight) {
         int size = colours.size();
-        double[] matrix = new double[size * size];
+        double[][] matrix = new double[size][size];
         for (int c = 0; c < size; c++) {
             double scatter = settings.of(c < 2 ? "scatter-other" : "w1-w2-other-scatter");
             for (int d = 0; d < size; d++) {
-                matrix[c * size + d] = colours.noise(c, d) + (c == d ? scatter * scatter : 0);
+                matrix[c][d] = colours.noise(c, d) + (c == d ? scatter * scatter : 0);
             }
         }
-        LowerFactor factor = LowerFactor.of(matrix, size);
+        LowerFactor factor = LowerFactor.of(matrix);
         double scale = Math.exp(-0.5 * factor.logDeterminant());
         Map<ObjectKind, Integer> count = new EnumMap<>(ObjectKind.class);
         Map<ObjectKind, Double> clear = new EnumMap<>(ObjectKind.class);

@@ -34,7 +34,7 @@ public final class ReddeningCall {
     private static final double YOUNG = 0.5;
 
     /** Extinction must make the measurements so much more probable (natural logarithm). */
-    private static final double LEAST_GAIN = 15;
+    public static final double LEAST_GAIN = 15;
 
     /** And a late dwarf so probable once it is taken out. */
     private static final double DWARF_SURE = 0.9;

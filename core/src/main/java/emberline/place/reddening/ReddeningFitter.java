@@ -66,16 +66,19 @@ public final class ReddeningFitter {
      * Fits an object.
      *
      * @param measuredAt what is measured once an extinction in V (mag) is taken out
-     * @return the fit; empty where too little was measured to place the object
+     * @param leastGain how much more probable extinction must make the measurements (natural
+     *     logarithm); where the first trials show that none will, no more are made
+     * @return the fit; empty where too little was measured to place the object, or where the gain
+     *     is out of reach
      */
-    public Optional<ReddeningFit> fit(DoubleFunction<Measurements> measuredAt) {
+    public Optional<ReddeningFit> fit(DoubleFunction<Measurements> measuredAt, double leastGain) {
         Measurements asSeen = measuredAt.apply(0);
         NavigableMap<Integer, Trial> trials = new TreeMap<>();
         for (int step = 0; step <= LAST_STEP; step += COARSE) {
             trial(step, asSeen, measuredAt, trials);
         }
         trial(LAST_STEP, asSeen, measuredAt, trials);
-        if (trials.isEmpty()) {
+        if (trials.isEmpty() || greatestGain(trials) < leastGain) {
             return Optional.empty();
         }
         for (int apart = COARSE; apart > 1; apart /= 2) {
@@ -84,6 +87,26 @@ public final class ReddeningFitter {
             }
         }
         return Optional.of(summary(trials));
+    }
+
+    /**
+     * The gain of the best trial, and what a better one between the first may add: a parabola rises
+     * above its best place by at most an eighth of the second difference, twice that is allowed.
+     */
+    private static double greatestGain(NavigableMap<Integer, Trial> trials) {
+        if (trials.get(0) == null) {
+            return 0;
+        }
+        double most = 0;
+        for (int step : trials.keySet()) {
+            Trial before = trials.get(step - COARSE);
+            Trial after = trials.get(step + COARSE);
+            if (before != null && after != null) {
+                double ends = before.logProbability + after.logProbability;
+                most = Math.max(most, Math.abs(ends - 2 * trials.get(step).logProbability));
+            }
+        }
+        return best(trials) + most / 4 - trials.get(0).logProbability;
     }
 
     /** The middles between neighbours, so far apart, where the probability has a shape to find. */

@@ -78,7 +78,7 @@ class KnotLikelihoodTest {
     @Test
     void itIsTheMultivariateNormalDensity() {
         for (int knot : new int[] {3, 20, 40}) {
-            KnotLikelihood likelihood = KnotLikelihood.at(sample(), calibration(), knot);
+            KnotLikelihood likelihood = KnotLikelihood.at(sample(), knot);
             for (double steps : new double[] {-1, -0.4, 0, 0.2, 1}) {
                 for (GravityClass gravity : GravityClass.values()) {
                     double type = TypeKnots.typeNumber(knot) + steps * TypeKnots.STEP;
@@ -99,8 +99,7 @@ class KnotLikelihoodTest {
     @Test
     void widerSigmasScaleRowsAndColumnsOfTheCovariance() {
         double[] inflation = {1, 3.5, 1.2};
-        KnotLikelihood likelihood =
-                KnotLikelihood.at(sample(), calibration(), 20).widened(inflation);
+        KnotLikelihood likelihood = KnotLikelihood.at(sample(), 20).widened(inflation);
         for (double steps : new double[] {-0.7, 0, 0.4}) {
             double type = TypeKnots.typeNumber(20) + steps * TypeKnots.STEP;
             assertEquals(
@@ -114,7 +113,7 @@ class KnotLikelihoodTest {
     @Test
     void pullsBalanceAtTheBestTypeAndSharesAddUp() {
         int knot = 20;
-        KnotLikelihood likelihood = KnotLikelihood.at(sample(), calibration(), knot);
+        KnotLikelihood likelihood = KnotLikelihood.at(sample(), knot);
         KnotLikelihood.Pull[] pulls = likelihood.pulls(0, 0);
         double pull = Arrays.stream(pulls).mapToDouble(KnotLikelihood.Pull::subclass).sum();
         double share = Arrays.stream(pulls).mapToDouble(KnotLikelihood.Pull::share).sum();

@@ -53,7 +53,7 @@ class ReddeningFitterTest {
                                                         .resolve("originals/irtf_library")
                                                         .resolve(file)),
                                 stated);
-        ReddeningFit fit = placer.fitReddening(av -> measured(clean, avMag - av)).orElseThrow();
+        ReddeningFit fit = placer.fitReddening(av -> measured(clean, avMag - av), 0).orElseThrow();
         assertTrue(
                 fit.lo95Mag() - 0.5 <= avMag && avMag <= fit.hi95Mag() + 0.5,
                 "A_V " + avMag + " but " + fit.lo95Mag() + " to " + fit.hi95Mag());

@@ -10,6 +10,8 @@ import emberline.place.calibrated.Calibration;
 import emberline.place.calibrated.StandardLoci;
 import emberline.place.calibrated.TypePriors;
 import java.util.Map;
+import java.util.Optional;
+import java.util.concurrent.atomic.AtomicInteger;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestInstance;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -20,6 +22,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 class ReddeningShapeTest {
 
     private static final double TYPE = 8;
+    private static final double ANY = Double.NEGATIVE_INFINITY;
 
     private final ReddeningFitter fitter =
             new ReddeningFitter(
@@ -33,7 +36,7 @@ class ReddeningShapeTest {
     @ParameterizedTest
     @ValueSource(doubles = {3, 5.1, 11.75})
     void theExtinctionThatLeadsBackToTheLociIsFound(double avMag) {
-        ReddeningFit fit = fitter.fit(av -> off(avMag - av)).orElseThrow();
+        ReddeningFit fit = fitter.fit(av -> off(avMag - av), ANY).orElseThrow();
         assertEquals(avMag, fit.avMag(), 0.15, fit.toString());
         assertTrue(fit.lo68Mag() < fit.avMag() && fit.avMag() < fit.hi68Mag(), fit.toString());
         assertTrue(fit.lo95Mag() < fit.lo68Mag() && fit.hi68Mag() < fit.hi95Mag());
@@ -44,7 +47,7 @@ class ReddeningShapeTest {
 
     @Test
     void withoutExtinctionNothingIsGained() {
-        ReddeningFit fit = fitter.fit(this::off).orElseThrow();
+        ReddeningFit fit = fitter.fit(this::off, ANY).orElseThrow();
         assertEquals(0, fit.lo95Mag(), 0.05);
         assertTrue(fit.avMag() < 1, fit.toString());
         assertTrue(fit.logGain() < 0, "what was tried in vain counts against it");
@@ -53,7 +56,7 @@ class ReddeningShapeTest {
     /** Where extinction changes nothing all of 0 to 15 are as probable, in cells of 0.1. */
     @Test
     void whatExtinctionDoesNotTouchTellsNothingOfIt() {
-        ReddeningFit fit = fitter.fit(av -> off(0)).orElseThrow();
+        ReddeningFit fit = fitter.fit(av -> off(0), ANY).orElseThrow();
         assertEquals(0, fit.logGain(), 1e-9);
         assertEquals(7.5, fit.avMag(), 1e-9);
         assertEquals(-0.05 + 0.16 * 15.1, fit.lo68Mag(), 1e-9);
@@ -64,6 +67,31 @@ class ReddeningShapeTest {
 
     @Test
     void whatCannotBePlacedGetsNoExtinction() {
-        assertTrue(fitter.fit(av -> GivenMeasurements.of(Map.of(), 1)).isEmpty());
+        assertTrue(fitter.fit(av -> GivenMeasurements.of(Map.of(), 1), ANY).isEmpty());
+    }
+
+    /** A gain that no extinction reaches ends the search after its first nine trials. */
+    @Test
+    void whatIsOutOfReachIsNotLookedFor() {
+        AtomicInteger trials = new AtomicInteger();
+        Optional<ReddeningFit> none =
+                fitter.fit(
+                        av -> {
+                            trials.incrementAndGet();
+                            return off(av);
+                        },
+                        15);
+        assertTrue(none.isEmpty());
+        assertEquals(9, trials.get());
+    }
+
+    /** A gain that is reached changes nothing, even where the best place lies between trials. */
+    @ParameterizedTest
+    @ValueSource(doubles = {1, 3, 5.1, 11.75})
+    void whatIsWithinReachIsFoundAsIfNothingWereAsked(double avMag) {
+        ReddeningFit all = fitter.fit(av -> off(avMag - av), ANY).orElseThrow();
+        ReddeningFit asked = fitter.fit(av -> off(avMag - av), all.logGain()).orElseThrow();
+        assertEquals(all.avMag(), asked.avMag());
+        assertEquals(all.logGain(), asked.logGain());
     }
 }
