@@ -92,9 +92,10 @@ public final class SpectrumChart {
         List<Curve> curves = new ArrayList<>();
         List<String> remarks = new ArrayList<>();
         Heights heights = new Heights();
-        double[] factors = factors(spectra, low, high);
-        for (int i = 0; i < spectra.size(); i++) {
-            addSpectrum(spectra.get(i), factors[i], low, high, curves, remarks, heights);
+        List<Shown> shown = spectra.stream().map(one -> shown(one, low, high)).toList();
+        double[] factors = factors(shown);
+        for (int i = 0; i < factors.length; i++) {
+            addSpectrum(shown.get(i), factors[i], curves, remarks, heights);
         }
         result.standards()
                 .filter(verdict -> !verdict.best().isEmpty())
@@ -143,15 +144,16 @@ public final class SpectrumChart {
      * By what the fluxes of each spectrum are multiplied: all are scaled to the first where they
      * overlap, and the highest peak of all is 1.
      */
-    private double[] factors(List<Spectrum> spectra, double low, double high) {
-        double[] factors = new double[spectra.size()];
+    private static double[] factors(List<Shown> shown) {
+        double[] factors = new double[shown.size()];
         double highest = 0;
         for (int i = 0; i < factors.length; i++) {
-            Spectrum spectrum = spectra.get(i);
-            double peak = peak(spectrum, low, high);
+            double peak = shown.get(i).peak();
             double alone = peak > 0 ? 1 / peak : 1;
             OptionalDouble toFirst =
-                    i == 0 ? OptionalDouble.empty() : OverlapScale.of(spectrum, spectra.get(0));
+                    i == 0
+                            ? OptionalDouble.empty()
+                            : OverlapScale.of(shown.get(i).spectrum, shown.get(0).spectrum);
             factors[i] = toFirst.isPresent() ? toFirst.getAsDouble() * factors[0] : alone;
             highest = Math.max(highest, factors[i] * peak);
         }
@@ -161,42 +163,39 @@ public final class SpectrumChart {
         return factors;
     }
 
-    private double peak(Spectrum spectrum, double low, double high) {
-        Reduction means = Reduction.ofMeans(spectrum, atOnce(spectrum), PLAIN);
-        return isNoisy(spectrum) && means.size() > 0
-                ? means.peak()
-                : Reduction.ofPixels(spectrum, low, high, columns()).peak();
+    /**
+     * A spectrum as it can be shown: single pixels, and where they are noisy means of so many at
+     * once.
+     */
+    private record Shown(
+            Spectrum spectrum, Reduction pixels, Reduction means, int atOnce, boolean noisy) {
+
+        double peak() {
+            return noisy && means.size() > 0 ? means.peak() : pixels.peak();
+        }
     }
 
-    private int columns() {
-        return (int) Math.round(1.2 * size.widthPoint());
+    private Shown shown(Spectrum spectrum, double low, double high) {
+        int columns = (int) Math.round(1.2 * size.widthPoint());
+        int atOnce = Math.max(1, spectrum.size() / MEANS);
+        boolean noisy =
+                BandSignal.best(spectrum).map(s -> s.medianSignalToNoise() < NOISY).orElse(false);
+        return new Shown(
+                spectrum,
+                Reduction.ofPixels(spectrum, low, high, columns),
+                Reduction.ofMeans(spectrum, atOnce, PLAIN),
+                atOnce,
+                noisy);
     }
 
-    private static int atOnce(Spectrum spectrum) {
-        return Math.max(1, spectrum.size() / MEANS);
-    }
-
-    private static boolean isNoisy(Spectrum spectrum) {
-        return BandSignal.best(spectrum).map(s -> s.medianSignalToNoise() < NOISY).orElse(false);
-    }
-
-    private void addSpectrum(
-            Spectrum spectrum,
-            double factor,
-            double low,
-            double high,
-            List<Curve> curves,
-            List<String> remarks,
-            Heights heights) {
-        Reduction pixels = Reduction.ofPixels(spectrum, low, high, columns());
-        int atOnce = atOnce(spectrum);
-        Reduction means = Reduction.ofMeans(spectrum, atOnce, PLAIN);
-        boolean noisy = isNoisy(spectrum);
-        if (noisy && atOnce > 1 && means.size() > 0) {
+    private static void addSpectrum(
+            Shown shown, double factor, List<Curve> curves, List<String> remarks, Heights heights) {
+        Reduction pixels = shown.pixels;
+        if (shown.noisy && shown.atOnce > 1 && shown.means.size() > 0) {
             curves.add(pixels.curve(factor, Tone.PIXELS, false));
-            curves.add(means.curve(factor, Tone.SPECTRUM, true));
-            remarks.add("Dark: means of up to " + atOnce + " pixels; light: single pixels.");
-        } else if (noisy) {
+            curves.add(shown.means.curve(factor, Tone.SPECTRUM, true));
+            remarks.add("Dark: means of up to " + shown.atOnce + " pixels; light: single pixels.");
+        } else if (shown.noisy) {
             curves.add(pixels.curve(factor, Tone.SPECTRUM, true));
         } else {
             Reduction spoilt = pixels.bySigma(SPOILT / factor, true);
