@@ -1,5 +1,6 @@
 package emberline.place.calibrated;
 
+import static org.junit.jupiter.api.Assertions.assertAll;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertNotSame;
@@ -16,12 +17,9 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Random;
-import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.api.TestInstance;
 
 /** Thirty invented dwarfs from M5 on, half a subclass apart, with features that run straight. */
-@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class CalibratorTest {
 
     private static final int OBJECTS = 30;
@@ -31,8 +29,20 @@ class CalibratorTest {
     private Calibrator.Outcome outcome;
     private Calibrator.Outcome spoilt;
 
-    @BeforeAll
-    void learn() {
+    /** One test, since learning takes longest. */
+    @Test
+    void whatIsLearnedAndHowUnseenObjectsArePlaced() {
+        learn();
+        assertAll(
+                this::aLocusNeedsTwelveSpectra,
+                this::theLociAreThoseOfTheObjects,
+                this::everySpectrumIsPlacedNearItsType,
+                this::theErrorOfLabelsIsFittedAndGoesEverywhere,
+                this::objectsAreDealtIntoTenEvenFolds,
+                this::noCalibrationHasSeenWhatItPlaces);
+    }
+
+    private void learn() {
         Map<String, List<TrainingSet.Point>> anchors = RelationAnchors.of(catalogue);
         LocusFeatures.standard().stream()
                 .filter(id -> !anchors.containsKey(id))
@@ -69,8 +79,7 @@ class CalibratorTest {
         return new ReferenceTable(features, rows);
     }
 
-    @Test
-    void aLocusNeedsTwelveSpectra() {
+    private void aLocusNeedsTwelveSpectra() {
         List<String> found = outcome.calibration().loci().stream().map(Locus::feature).toList();
         // the fourth has 13 spectra of 11 objects, the last 15 of 10: enough in all
         assertEquals(features, found);
@@ -80,8 +89,7 @@ class CalibratorTest {
         assertTrue(!left.contains(features.get(3)), "ten or eleven spectra are left: " + left);
     }
 
-    @Test
-    void theLociAreThoseOfTheObjects() {
+    private void theLociAreThoseOfTheObjects() {
         for (int f = 0; f < 3; f++) {
             for (double type = 7; type < 21; type += 2) {
                 Calibration.Expected expected =
@@ -92,8 +100,7 @@ class CalibratorTest {
         }
     }
 
-    @Test
-    void everySpectrumIsPlacedNearItsType() {
+    private void everySpectrumIsPlacedNearItsType() {
         assertEquals(OBJECTS + 5, outcome.unseen().size());
         double squares = 0;
         for (Calibrator.Unseen one : outcome.unseen()) {
@@ -106,8 +113,7 @@ class CalibratorTest {
     }
 
     /** Types without error: the narrowest core that is tried, and not the one to start with. */
-    @Test
-    void theErrorOfLabelsIsFittedAndGoesEverywhere() {
+    private void theErrorOfLabelsIsFittedAndGoesEverywhere() {
         LabelError error = outcome.calibration().labelError();
         assertNotEquals(new LabelError(0.5, 1.5, 0.1), error);
         assertTrue(error.coreSubclass() < 0.5, error.toString());
@@ -115,8 +121,7 @@ class CalibratorTest {
     }
 
     /** Each fold spans the sequence: objects next to each other are dealt to different folds. */
-    @Test
-    void objectsAreDealtIntoTenEvenFolds() {
+    private void objectsAreDealtIntoTenEvenFolds() {
         IdentityHashMap<Calibration, Integer> sizes = new IdentityHashMap<>();
         outcome.withoutGroup().values().forEach(c -> sizes.merge(c, 1, Integer::sum));
         assertEquals(OBJECTS, outcome.withoutGroup().size());
@@ -133,8 +138,7 @@ class CalibratorTest {
     }
 
     /** An object that is far off spoils all calibrations but the one that has not seen it. */
-    @Test
-    void noCalibrationHasSeenWhatItPlaces() {
+    private void noCalibrationHasSeenWhatItPlaces() {
         String feature = features.get(0);
         double at = type(20);
         for (int k = 0; k < OBJECTS; k++) {

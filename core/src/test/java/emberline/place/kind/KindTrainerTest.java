@@ -1,5 +1,6 @@
 package emberline.place.kind;
 
+import static org.junit.jupiter.api.Assertions.assertAll;
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
@@ -19,7 +20,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.OptionalDouble;
 import org.apache.commons.math3.stat.descriptive.rank.Median;
-import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestInstance;
 
@@ -33,9 +33,17 @@ class KindTrainerTest {
     private final List<String> progress = new ArrayList<>();
     private Trained trained;
 
-    @BeforeAll
-    void learn() {
+    /** One test, since learning takes longest. */
+    @Test
+    void whatIsLearnedFromEighteenObjects() {
         trained = trainer(11, 7).train(progress::add);
+        assertAll(
+                this::onlyTheCoverageThatTheSpectraHaveIsLearned,
+                this::theReferencesAreKept,
+                this::everyRowAndNonsenseIsTried,
+                this::leftOutObjectsAreToldApart,
+                this::theScatterIsThatOfNearestKin,
+                this::theSameSpectraGiveTheSameModel);
     }
 
     private static ReferenceRow reference(String object, String group, String kind) {
@@ -114,15 +122,13 @@ class KindTrainerTest {
         assertTrue(thrown.getMessage().startsWith("6 spectra of known kind"), thrown.getMessage());
     }
 
-    @Test
-    void onlyTheCoverageThatTheSpectraHaveIsLearned() {
+    private void onlyTheCoverageThatTheSpectraHaveIsLearned() {
         assertEquals(List.of("kind: H, " + (11 * 4 + 7 * 7) + " spectra"), progress);
         FeatureVector h = features.of(measurer.measure(giant(1)));
         assertEquals(List.of(Coverage.parse("H")), trained.model().coverages(h));
     }
 
-    @Test
-    void theReferencesAreKept() {
+    private void theReferencesAreKept() {
         List<ReferenceKin> rows = trained.model().kin().rows();
         assertEquals(18, rows.size());
         ReferenceKin first = rows.get(0);
@@ -138,8 +144,7 @@ class KindTrainerTest {
     }
 
     /** All rows, and 240 invented spectra of nothing beside what became of every fourth one. */
-    @Test
-    void everyRowAndNonsenseIsTried() {
+    private void everyRowAndNonsenseIsTried() {
         List<KindTrial> whole =
                 trained.trials().stream().filter(t -> t.how().equals("as observed")).toList();
         assertEquals(18, whole.size());
@@ -173,8 +178,7 @@ class KindTrainerTest {
     }
 
     /** Judged by models that have not seen them, peaked spectra are dwarfs and others not. */
-    @Test
-    void leftOutObjectsAreToldApart() {
+    private void leftOutObjectsAreToldApart() {
         List<Coverage> h = List.of(Coverage.parse("H"));
         int dwarf = ObjectKind.LATE_DWARF.position();
         double[] ofDwarf = trained.model().known(h, features.of(measurer.measure(dwarf(3))));
@@ -187,8 +191,7 @@ class KindTrainerTest {
      * Each broad feature scatters by 1.4826 times the median difference of nearest neighbours, at
      * least by 0.02; what was not measured by the first guess of 0.08, and so do lines.
      */
-    @Test
-    void theScatterIsThatOfNearestKin() {
+    private void theScatterIsThatOfNearestKin() {
         float[] scatter = trained.model().kin().scatter();
         List<ReferenceKin> rows = trained.model().kin().rows();
         int wide = 0;
@@ -220,8 +223,7 @@ class KindTrainerTest {
         return new Median().evaluate(steps);
     }
 
-    @Test
-    void theSameSpectraGiveTheSameModel() throws IOException {
+    private void theSameSpectraGiveTheSameModel() throws IOException {
         ByteArrayOutputStream one = new ByteArrayOutputStream();
         trained.model().write(one);
         ByteArrayOutputStream two = new ByteArrayOutputStream();
