@@ -163,7 +163,8 @@ public final class Placer {
                 findings);
     }
 
-    private static List<Finding> ofType(
+    /** Findings on the type of an object. */
+    static List<Finding> ofType(
             Measurements measurements,
             Optional<TypeEstimate> type,
             PublishedType byRelations,
@@ -204,7 +205,8 @@ public final class Placer {
         return findings;
     }
 
-    private static List<Finding> ofGravity(GravityVerdict verdict, CalibratedType byLoci) {
+    /** Findings on the gravity class of an object. */
+    static List<Finding> ofGravity(GravityVerdict verdict, CalibratedType byLoci) {
         List<Finding> findings = new ArrayList<>();
         if (verdict.gravityClass().isEmpty()) {
             return findings;

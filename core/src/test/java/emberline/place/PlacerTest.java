@@ -3,13 +3,18 @@ package emberline.place;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import emberline.SharedSpectra;
 import emberline.catalogue.FeatureCatalogue;
 import emberline.measure.Measurements;
 import emberline.measure.Measurer;
 import emberline.measure.Measuring;
 import emberline.prepare.NoiseModel;
 import emberline.prepare.PreparedSpectrum;
+import emberline.prepare.Preparer;
+import emberline.prepare.Preparing;
+import emberline.read.SpectrumReader;
 import emberline.spectrum.Finding;
+import emberline.spectrum.Medium;
 import emberline.spectrum.ResolvingPower;
 import emberline.spectrum.ResolvingPower.Basis;
 import emberline.spectrum.Spectrum;
@@ -59,6 +64,34 @@ class PlacerTest {
     void tooLittleToSayThatThereAreNoBands() {
         Placement placement = new Placer(CATALOGUE).place(flat(1.45, 1.8), 1);
         assertTrue(!codes(placement).contains("no-bands"), codes(placement).toString());
+    }
+
+    /** LHS 2924, an M9 of a public library: see the manifest beside its spectrum. */
+    @Test
+    void aLateDwarfGetsTypeAndVerdicts() throws Exception {
+        PreparedSpectrum dwarf =
+                new Preparer()
+                        .prepare(
+                                new SpectrumReader()
+                                        .read(
+                                                SharedSpectra.folder()
+                                                        .resolve("originals/irtf_library")
+                                                        .resolve("M9V_LHS2924.fits")),
+                                Preparing.withDefaults()
+                                        .withMedium(Medium.VACUUM)
+                                        .withResolvingPower(2000));
+        Measurements measured = new Measurer(CATALOGUE, Measuring.withDefaults()).measure(dwarf);
+        Placer placer = new Placer(CATALOGUE);
+        Placement placement = placer.place(measured, 1);
+        assertEquals(9, placement.type().orElseThrow().typeNumber(), 1);
+        assertEquals("", placement.typeReason());
+        assertTrue(placement.gravity().gravityClass().isPresent(), "gravity is judged");
+        assertTrue(placement.pair().reason().contains("outside L7 to T4"), "pairs are later");
+        assertEquals(5, placement.kin().size());
+        assertTrue(placement.reddening().isEmpty());
+        Placement other = placer.place(flat(0.8, 2.4), 1);
+        assertTrue(other.pair().reason().endsWith("no type"), other.pair().reason());
+        assertTrue(other.gravity().reason().startsWith("no type"), other.gravity().reason());
     }
 
     @Test

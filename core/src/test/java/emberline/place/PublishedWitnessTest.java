@@ -138,6 +138,137 @@ class PublishedWitnessTest {
         assertEquals("one-relation", type.findings().get(0).code());
     }
 
+    private static double rms(String id) {
+        return relation(id).rms().orElseThrow();
+    }
+
+    /** The mean weighted by 1 / rms squared; widened where the scatter is more than the rms. */
+    @Test
+    void relationsCountByTheirPrintedRms() {
+        Map<String, Double> types = new HashMap<>();
+        types.put("allers2013/h2o", 9.0);
+        types.put("allers2013/h2o-1", 10.2);
+        types.put("allers2013/h2o-2", 9.3);
+        checkCombination(types);
+        types.put("allers2013/h2o", 8.2);
+        types.put("allers2013/h2o-2", 9.8);
+        checkCombination(types);
+    }
+
+    private static void checkCombination(Map<String, Double> types) {
+        double weights = 0;
+        double sum = 0;
+        for (String id : types.keySet()) {
+            weights += Math.pow(rms(id), -2);
+            sum += Math.pow(rms(id), -2) * types.get(id);
+        }
+        double chiSquare = 0;
+        for (String id : types.keySet()) {
+            chiSquare += Math.pow((types.get(id) - sum / weights) / rms(id), 2);
+        }
+        double widening = Math.max(1, chiSquare / 2);
+        PublishedType found = witness(types, 1e-6);
+        TypeEstimate type = found.type().orElseThrow();
+        assertEquals(sum / weights, type.typeNumber(), 1e-3, types.toString());
+        double sigma = Math.sqrt(0.25 + widening / weights);
+        assertEquals(sigma, type.sigmaSubclass(), 1e-3, types.toString());
+        assertTrue(found.scheme().startsWith("3 relations of Allers"), found.scheme());
+        assertTrue(found.scheme().endsWith(", weighted by inverse variance"), found.scheme());
+        assertTrue(found.findings().isEmpty(), found.findings().toString());
+    }
+
+    @Test
+    void aRelationAloneHasItsRms() {
+        PublishedType found = witness(Map.of("allers2013/h2o", 9.0), 1e-6);
+        double sigma = Math.hypot(0.5, rms("allers2013/h2o"));
+        assertEquals(sigma, found.type().orElseThrow().sigmaSubclass(), 1e-3);
+        assertTrue(found.scheme().startsWith("1 relation of Allers"), found.scheme());
+        assertEquals(1, found.findings().size());
+    }
+
+    private static RelationEstimate estimate(PublishedType type, String relation) {
+        return type.estimates().stream()
+                .filter(e -> e.relation().id().equals(relation))
+                .findFirst()
+                .orElseThrow();
+    }
+
+    /** Two subclasses off is near enough, two and a half is too far. */
+    @Test
+    void howFarARelationMayStand() {
+        Map<String, Double> types = water(9);
+        types.put("allers2013/h2o-2", 7.2);
+        assertEquals(Use.COMBINED, use(witness(types, 1e-6), "allers2013/h2o-2"));
+        types.put("allers2013/h2o-2", 6.3);
+        PublishedType found = witness(types, 1e-6);
+        RelationEstimate aside = estimate(found, "allers2013/h2o-2");
+        assertEquals(Use.DISAGREES, aside.use());
+        assertTrue(
+                aside.reason().matches("-2[.][5-9] subclasses from where the others agree"),
+                aside.reason());
+        assertTrue(found.findings().isEmpty(), "one of three may stand aside");
+    }
+
+    @Test
+    void asManyAsideAsCombinedIsWarnedOf() {
+        Map<String, Double> types = new HashMap<>();
+        types.put("allers2013/h2o", 13.5);
+        types.put("allers2013/h2o-2", 5.0);
+        List<String> codes = witness(types, 1e-6).findings().stream().map(f -> f.code()).toList();
+        assertEquals(List.of("one-relation", "relations-disagree"), codes);
+    }
+
+    /** CH4-H is combined from T2 on; half a subclass before that noise may have moved it. */
+    @Test
+    void beforeTheCombinedPartOfItsRangeARelationIsOnlyShown() {
+        String id = "burgasser2007/ch4-h";
+        assertEquals(Use.COMBINED, use(witness(Map.of(id, 21.6), 1e-6), id));
+        RelationEstimate before = estimate(witness(Map.of(id, 21.4), 1e-6), id);
+        assertEquals(Use.SHOWN, before.use());
+        assertEquals("outside the part of its range that is combined", before.reason());
+        assertEquals(21.4, before.type().orElseThrow().typeNumber(), 1e-3);
+    }
+
+    @Test
+    void anIndexOutsideAllRangesGivesNoType() {
+        Relation relation = relation("allers2013/h2o");
+        Feature feature = CATALOGUE.feature(relation.feature()).orElseThrow();
+        double[] wavelengths = new double[(int) (1.7 / STEP)];
+        Arrays.setAll(wavelengths, i -> 0.7 + i * STEP);
+        double[] flux = new double[wavelengths.length];
+        double[] noise = new double[wavelengths.length];
+        Arrays.fill(flux, Double.NaN);
+        Arrays.fill(noise, 1e-6);
+        fill(wavelengths, flux, feature.window(Role.DENOMINATOR), 1);
+        fill(wavelengths, flux, feature.window(Role.NUMERATOR), 3);
+        PublishedType found =
+                new PublishedWitness(CATALOGUE)
+                        .witness(
+                                new Measurer(CATALOGUE, Measuring.withDefaults())
+                                        .measure(
+                                                new PreparedSpectrum(
+                                                        Spectrum.of(wavelengths, flux, noise),
+                                                        new ResolvingPower(150, Basis.GIVEN),
+                                                        NoiseModel.INDEPENDENT,
+                                                        List.of())));
+        assertTrue(found.type().isEmpty());
+        RelationEstimate outside = estimate(found, relation.id());
+        assertEquals(Use.OUTSIDE_RANGE, outside.use());
+        assertEquals("index 3.000 outside 0.986 to 1.351", outside.reason());
+        long measured = found.estimates().stream().filter(e -> e.use() != Use.NOT_MEASURED).count();
+        assertTrue(
+                found.scheme().startsWith("none of the " + measured + " measured indices"),
+                found.scheme());
+    }
+
+    @Test
+    void whatWasNotMeasuredSaysWhy() {
+        RelationEstimate unused = estimate(witness(water(9), 1e-4), "burgasser2007/ch4-h");
+        assertEquals(Use.NOT_MEASURED, unused.use());
+        assertTrue(unused.reason().contains(": "), unused.reason());
+        assertTrue(unused.type().isEmpty());
+    }
+
     @Test
     void withoutAnyIndexTheReasonIsGiven() {
         PublishedType type =
