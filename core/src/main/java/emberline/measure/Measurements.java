@@ -143,6 +143,9 @@ public final class Measurements {
             }
         }
         for (int k = 0; k < draws.length; k++) {
+            if (draws[k] == null) {
+                draws[k] = new double[count];
+            }
             measuredEntry(ids.get(k)).widen(draws[k]);
         }
         return draws;

@@ -4,18 +4,13 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.catalogue.FeatureCatalogue;
+import emberline.measure.GivenMeasurements;
 import emberline.measure.Measurement.Measured;
 import emberline.measure.Measurements;
-import emberline.measure.Measurer;
-import emberline.measure.Measuring;
 import emberline.place.calibrated.CalibratedType;
 import emberline.place.kind.KindVerdict;
 import emberline.place.kind.ObjectKind;
-import emberline.prepare.NoiseModel;
-import emberline.prepare.PreparedSpectrum;
 import emberline.spectrum.Finding;
-import emberline.spectrum.ResolvingPower;
-import emberline.spectrum.Spectrum;
 import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
@@ -30,17 +25,7 @@ import org.junit.jupiter.api.TestInstance;
 class PlacerFindingsTest {
 
     private final FeatureCatalogue catalogue = FeatureCatalogue.standard();
-    private final Measurements nothing =
-            new Measurer(catalogue, Measuring.withDefaults())
-                    .measure(
-                            new PreparedSpectrum(
-                                    Spectrum.of(
-                                            new double[] {3.0, 3.1},
-                                            new double[] {1, 1},
-                                            new double[] {0.1, 0.1}),
-                                    new ResolvingPower(100, ResolvingPower.Basis.GIVEN),
-                                    NoiseModel.INDEPENDENT,
-                                    List.of()));
+    private final Measurements nothing = GivenMeasurements.of(Map.of(), 1);
 
     private static CalibratedType placed() {
         Map<GravityClass, double[]> weights = new EnumMap<>(GravityClass.class);

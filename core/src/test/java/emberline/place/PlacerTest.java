@@ -10,11 +10,7 @@ import emberline.measure.Measurer;
 import emberline.measure.Measuring;
 import emberline.prepare.NoiseModel;
 import emberline.prepare.PreparedSpectrum;
-import emberline.prepare.Preparer;
-import emberline.prepare.Preparing;
-import emberline.read.SpectrumReader;
 import emberline.spectrum.Finding;
-import emberline.spectrum.Medium;
 import emberline.spectrum.ResolvingPower;
 import emberline.spectrum.ResolvingPower.Basis;
 import emberline.spectrum.Spectrum;
@@ -69,17 +65,7 @@ class PlacerTest {
     /** LHS 2924, an M9 of a public library: see the manifest beside its spectrum. */
     @Test
     void aLateDwarfGetsTypeAndVerdicts() throws Exception {
-        PreparedSpectrum dwarf =
-                new Preparer()
-                        .prepare(
-                                new SpectrumReader()
-                                        .read(
-                                                SharedSpectra.folder()
-                                                        .resolve("originals/irtf_library")
-                                                        .resolve("M9V_LHS2924.fits")),
-                                Preparing.withDefaults()
-                                        .withMedium(Medium.VACUUM)
-                                        .withResolvingPower(2000));
+        PreparedSpectrum dwarf = SharedSpectra.ofLibrary("M9V_LHS2924.fits");
         Measurements measured = new Measurer(CATALOGUE, Measuring.withDefaults()).measure(dwarf);
         Placer placer = new Placer(CATALOGUE);
         Placement placement = placer.place(measured, 1);

@@ -11,10 +11,6 @@ import emberline.measure.Measuring;
 import emberline.place.Placer;
 import emberline.prepare.ExtinctionLaw;
 import emberline.prepare.PreparedSpectrum;
-import emberline.prepare.Preparer;
-import emberline.prepare.Preparing;
-import emberline.read.SpectrumReader;
-import emberline.spectrum.Medium;
 import emberline.spectrum.Spectrum;
 import java.util.List;
 import org.junit.jupiter.api.TestInstance;
@@ -42,17 +38,7 @@ class ReddeningFitterTest {
     })
     void typeAndExtinctionAreFoundTogether(String file, double type, double avMag)
             throws Exception {
-        Preparing stated =
-                Preparing.withDefaults().withMedium(Medium.VACUUM).withResolvingPower(2000);
-        PreparedSpectrum clean =
-                new Preparer()
-                        .prepare(
-                                new SpectrumReader()
-                                        .read(
-                                                SharedSpectra.folder()
-                                                        .resolve("originals/irtf_library")
-                                                        .resolve(file)),
-                                stated);
+        PreparedSpectrum clean = SharedSpectra.ofLibrary(file);
         ReddeningFit fit = placer.fitReddening(av -> measured(clean, avMag - av), 0).orElseThrow();
         assertTrue(
                 fit.lo95Mag() - 0.5 <= avMag && avMag <= fit.hi95Mag() + 0.5,
