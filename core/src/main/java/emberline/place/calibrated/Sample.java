@@ -82,11 +82,6 @@ final class Sample {
         return loci.get(f);
     }
 
-    /** Index of a feature among all loci of the calibration. */
-    int place(int f) {
-        return places.get(f);
-    }
-
     Measured measured(int f) {
         return values.get(f);
     }
