@@ -4,7 +4,7 @@ package emberline.measure;
  * Draws of window functionals from their joint normal distribution, block by block. A functional is
  * its mean plus a row of the Cholesky factor times independent normal deviates, one a functional.
  *
- * <p>The second half of a block mirrors the first about the means (antithetic variates, Hammersley
+ * <p>Every other block mirrors the one before it about the means (antithetic variates, Hammersley
  * and Morton 1956, Proc. Camb. Phil. Soc. 52, 449): it has the same joint distribution and costs
  * neither deviates nor products. Pairs of draws are opposite, all others independent. So the mean
  * of what is nearly linear is exact and a quantile at least as well known as from as many
@@ -17,16 +17,14 @@ package emberline.measure;
 final class FunctionalDraws {
 
     /** How many draws are made at once: few enough to stay in a near cache. */
-    static final int BLOCK = 500;
-
-    /** The draws of a block before their mirrored ones. */
-    static final int HALF = BLOCK / 2;
+    static final int BLOCK = 250;
 
     private final EnvelopeMatrix lower;
     private final double[] means;
     private final boolean[] wanted;
     private final NormalDeviates[] sequences;
     private final double[][] block;
+    private boolean mirrorNext;
 
     /**
      * Draws.
@@ -59,23 +57,39 @@ final class FunctionalDraws {
      *     without meaning or null for the others
      */
     double[][] next() {
+        if (mirrorNext) {
+            mirror();
+        } else {
+            draw();
+        }
+        mirrorNext = !mirrorNext;
+        return block;
+    }
+
+    private void draw() {
         for (int row = 0; row < block.length; row++) {
             if (block[row] != null) {
-                sequences[row].fill(block[row], HALF);
+                sequences[row].fill(block[row], BLOCK);
             }
         }
         for (int row = block.length - 1; row >= 0; row--) {
             if (wanted[row]) {
-                lower.multiplyRow(block, HALF, row, means[row]);
+                lower.multiplyRow(block, BLOCK, row, means[row]);
+            }
+        }
+    }
+
+    private void mirror() {
+        for (int row = 0; row < block.length; row++) {
+            if (wanted[row]) {
                 mirror(block[row], means[row]);
             }
         }
-        return block;
     }
 
     private static void mirror(double[] draws, double mean) {
-        for (int n = 0; n < HALF; n++) {
-            draws[HALF + n] = 2 * mean - draws[n];
+        for (int n = 0; n < BLOCK; n++) {
+            draws[n] = 2 * mean - draws[n];
         }
     }
 }

@@ -189,8 +189,11 @@ final class NoiseCheck {
                 below += Math.abs(flux[i]) < sigma[i] ? 1 : 0;
             }
         }
+        if (2 * below <= good) {
+            return false;
+        }
         double scatter = PixelScatter.inUnitsOf(flux, sigma);
-        return 2 * below > good && scatter > 0 && scatter < 1 / OTHER_SCALE;
+        return scatter > 0 && scatter < 1 / OTHER_SCALE;
     }
 
     private static Settled estimated(double[] flux, String why) {

@@ -37,4 +37,14 @@ public record PreparedSpectrum(
         more.add(finding);
         return new PreparedSpectrum(spectrum, resolvingPower, noise, more);
     }
+
+    /**
+     * The same with other fluxes.
+     *
+     * @param other a spectrum on the same pixels, its noise known in the same way
+     * @return a new value
+     */
+    public PreparedSpectrum with(Spectrum other) {
+        return new PreparedSpectrum(other, resolvingPower, noise, findings);
+    }
 }

@@ -52,9 +52,8 @@ public final class Preparer {
                 NoiseCheck.settle(
                         observation.fluxSigmas().map(s -> Arrays.copyOfRange(s, cut, size)), flux);
         findings.addAll(noise.findings());
-        double[] sigma = noise.sigma();
-        stated.extinction().ifPresent(e -> deredden(wavelengths, flux, sigma, e, findings));
-        Spectrum spectrum = Spectrum.of(wavelengths, flux, sigma);
+        Spectrum seen = Spectrum.of(wavelengths, flux, noise.sigma());
+        Spectrum spectrum = stated.extinction().map(e -> without(e, seen, findings)).orElse(seen);
         ResolvingPower resolvingPower = resolvingPower(observation, stated, spectrum, findings);
         return new PreparedSpectrum(spectrum, resolvingPower, noise.model(), findings);
     }
@@ -173,18 +172,8 @@ public final class Preparer {
                                 velocity)));
     }
 
-    private static void deredden(
-            double[] wavelengths,
-            double[] flux,
-            double[] sigma,
-            Preparing.Extinction extinction,
-            List<Finding> findings) {
-        ExtinctionLaw law = ExtinctionLaw.fitzpatrick1999(extinction.rv());
-        for (int i = 0; i < flux.length; i++) {
-            double factor = Math.pow(10, 0.4 * extinction.avMag() * law.relativeTo(wavelengths[i]));
-            flux[i] *= factor;
-            sigma[i] *= factor;
-        }
+    private static Spectrum without(
+            Preparing.Extinction extinction, Spectrum seen, List<Finding> findings) {
         findings.add(
                 Finding.note(
                         "dereddened",
@@ -194,6 +183,7 @@ public final class Preparer {
                                         + " R_V = %.1f)",
                                 extinction.avMag(),
                                 extinction.rv())));
+        return new Dereddening(seen, extinction.rv()).without(extinction.avMag());
     }
 
     private static ResolvingPower resolvingPower(

@@ -81,15 +81,20 @@ final class MeasuringStep {
     }
 
     /**
-     * The features alone, as stated and without a look at the lines.
+     * Prepares a spectrum without measuring it.
      *
      * @param observation the spectrum as read
      * @param stated what is stated about it
-     * @return its features
+     * @return the spectrum to measure
      * @throws UnreadableSpectrumException if it cannot be prepared
      */
-    Measurements features(Observation observation, Preparing stated)
+    PreparedSpectrum prepared(Observation observation, Preparing stated)
             throws UnreadableSpectrumException {
-        return measurer.measure(preparer.prepare(observation, stated));
+        return preparer.prepare(observation, stated);
+    }
+
+    /** The features alone of a prepared spectrum, without a look at the lines. */
+    Measurements features(PreparedSpectrum prepared) {
+        return measurer.measure(prepared);
     }
 }

@@ -1,6 +1,5 @@
 package emberline.survey;
 
-import emberline.measure.Measurements;
 import emberline.place.Placement;
 import emberline.place.Placer;
 import emberline.place.calibrated.SeveralSpectra;
@@ -59,7 +58,8 @@ final class PlacingStep {
                 call.flatMap(
                         reason ->
                                 placer.fitReddening(
-                                        avMag -> measuredAt(avMag, used, placer), leastGain));
+                                        ExtinctionTrials.of(measuring, placer, used.values())::at,
+                                        leastGain));
         if (fit.isEmpty()) {
             Optional<Finding> finding =
                     onCall ? call.map(PlacingStep::notBelieved) : Optional.empty();
@@ -78,18 +78,6 @@ final class PlacingStep {
 
     private static SeveralSpectra.Joined joined(Placer placer, List<SpectrumResult> spectra) {
         return placer.join(spectra.stream().map(SpectrumResult::measurements).toList());
-    }
-
-    private Measurements measuredAt(double avMag, Map<String, Degraded> used, Placer placer) {
-        List<Measurements> all = new ArrayList<>();
-        for (Degraded one : used.values()) {
-            try {
-                all.add(measuring.features(one.observation(), freed(one, avMag)));
-            } catch (UnreadableSpectrumException e) {
-                throw new IllegalStateException("prepared before, but not now", e);
-            }
-        }
-        return placer.join(all).measurements();
     }
 
     /** Measures a spectrum that was measured before, with another extinction taken out. */

@@ -289,21 +289,21 @@ class DrawsTest {
         }
     }
 
-    /** The second half of a block mirrors the first; apart from that no draw knows of another. */
+    /** Every other block mirrors the one before it; apart from that no draw knows of another. */
     @Test
     void drawsComeInOppositePairsIndependentOfEachOther() {
         Measurements measured = TestSpectra.measure(spectrum(20, NoiseModel.INDEPENDENT));
-        int half = FunctionalDraws.HALF;
-        int size = 100 * half;
+        int length = FunctionalDraws.BLOCK;
+        int size = 100 * length;
         for (double[] draws : measured.draws(FEATURES, 2 * size, 9)) {
             double[] first = new double[size];
             double[] mirrored = new double[size];
             for (int block = 0; block < 100; block++) {
-                System.arraycopy(draws, 2 * block * half, first, block * half, half);
-                System.arraycopy(draws, (2 * block + 1) * half, mirrored, block * half, half);
+                System.arraycopy(draws, 2 * block * length, first, block * length, length);
+                System.arraycopy(draws, (2 * block + 1) * length, mirrored, block * length, length);
             }
             assertTrue(correlation(first, mirrored) < -0.98, "" + correlation(first, mirrored));
-            for (int lag : new int[] {1, half, 2 * half}) {
+            for (int lag : new int[] {1, length, 2 * length}) {
                 assertEquals(
                         0,
                         correlation(

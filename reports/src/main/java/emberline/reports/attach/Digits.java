@@ -22,6 +22,15 @@ public final class Digits {
     private static final int SIGNAL_DECIMALS = 1;
     private static final MathContext FIVE = new MathContext(5, RoundingMode.HALF_EVEN);
 
+    /** Powers of ten by which a number is made whole without going through its decimal text. */
+    private static final double[] TENS = {1, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6};
+
+    /** Whole numbers up to here are rounded by machine arithmetic. */
+    private static final double LARGEST_WHOLE = 1e9;
+
+    /** What is as near as this to the middle between two whole numbers is rounded by its text. */
+    private static final double MIDDLE = 1e-5;
+
     private Digits() {}
 
     /**
@@ -100,7 +109,21 @@ public final class Digits {
         if (!Double.isFinite(value)) {
             throw new IllegalArgumentException("number " + value + ": expected a finite number");
         }
-        BigDecimal rounded = BigDecimal.valueOf(value).setScale(decimals, RoundingMode.HALF_EVEN);
-        return rounded.toPlainString();
+        return rounded(value, decimals).toPlainString();
+    }
+
+    /**
+     * A number rounded to a number of decimals, half to even. Its decimal text, which takes long to
+     * make, is needed only where it lies in the middle.
+     */
+    private static BigDecimal rounded(double value, int decimals) {
+        if (decimals < TENS.length) {
+            double scaled = value * TENS[decimals];
+            double whole = Math.rint(scaled);
+            if (Math.abs(scaled) < LARGEST_WHOLE && Math.abs(scaled - whole) < 0.5 - MIDDLE) {
+                return BigDecimal.valueOf((long) whole, decimals);
+            }
+        }
+        return BigDecimal.valueOf(value).setScale(decimals, RoundingMode.HALF_EVEN);
     }
 }
