@@ -27,6 +27,11 @@ final class EvidenceCurves {
     private final Optional<Kinematics> kinematics;
     private final double velocityError;
 
+    /** Temperatures, as points of their axis, at which some type is possible: from, up to. */
+    private int fromTeff = NodeTable.TEFF_SIZE;
+
+    private int toTeff;
+
     EvidenceCurves(
             Evidence evidence,
             TypeMix mix,
@@ -68,6 +73,12 @@ final class EvidenceCurves {
                 kernel.add(s, n, mix.evidence(n, g), typeAndClass[g][s]);
             }
         }
+        for (int i = 0; i < NodeTable.TEFF_SIZE; i++) {
+            if (typeAlone[s][i] > 0) {
+                fromTeff = Math.min(fromTeff, i);
+                toTeff = Math.max(toTeff, i + 1);
+            }
+        }
     }
 
     /** Whether a piece is there and counts. */
@@ -105,15 +116,15 @@ final class EvidenceCurves {
             this.youngSequence = young;
             double[] weight = {1 - young, young};
             for (int s = 0; s < weight.length; s++) {
-                add(typeAlone[s], weight[s], type);
-                add(typeAndClass[NO_CLASS][s], weight[s], withClass);
+                addTypes(typeAlone[s], weight[s], type);
+                addTypes(typeAndClass[NO_CLASS][s], weight[s], withClass);
                 for (int g = 0; g < NO_CLASS; g++) {
-                    add(typeAndClass[g][s], weight[s] * shares[g], withClass);
+                    addTypes(typeAndClass[g][s], weight[s] * shares[g], withClass);
                 }
             }
             this.luminous = counts(Piece.LUMINOSITY) ? new double[NodeTable.LOG_L_SIZE] : null;
             for (int s = 0; luminous != null && s < weight.length; s++) {
-                add(luminosity[s], weight[s], luminous);
+                add(luminosity[s], weight[s], luminous, 0, luminous.length);
             }
             this.halpha =
                     counts(Piece.HALPHA) ? age.halpha(evidence.halpha(), meanType, ageMyr) : 1;
@@ -128,10 +139,14 @@ final class EvidenceCurves {
             this.chance = lithiumChance * lithium.youngFactor(meanType, ageMyr);
         }
 
-        private void add(double[] from, double weight, double[] to) {
+        private void addTypes(double[] curve, double weight, double[] to) {
+            add(curve, weight, to, fromTeff, toTeff);
+        }
+
+        private void add(double[] curve, double weight, double[] to, int from, int end) {
             if (weight > 0) {
-                for (int i = 0; i < to.length; i++) {
-                    to[i] += weight * from[i];
+                for (int i = from; i < end; i++) {
+                    to[i] += weight * curve[i];
                 }
             }
         }
@@ -147,7 +162,8 @@ final class EvidenceCurves {
          */
         void fill(NodeTable table, int a, int m, double[] factor) {
             double place = table.teffPlace(a, m);
-            double typeHere = NodeTable.along(type, place);
+            boolean possible = place > fromTeff - 1 && place < toTeff;
+            double typeHere = possible ? NodeTable.along(type, place) : 0;
             factor[Piece.TYPE.order()] = typeHere;
             if (typeHere == 0) {
                 return;

@@ -22,7 +22,7 @@ public final class MassAgePlane {
         }
         for (int a = 0; a < table.ages(); a++) {
             double[] ofAge = probability[cell(table.ageMyr(a), lowMyr, highMyr, AGES)];
-            for (int m = 0; m < massCell.length; m++) {
+            for (int m = posterior.first(a); m < posterior.end(a); m++) {
                 ofAge[massCell[m]] += posterior.probability(a, m);
             }
         }

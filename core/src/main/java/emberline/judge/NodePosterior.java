@@ -2,7 +2,8 @@ package emberline.judge;
 
 /**
  * The posterior on the cells of a table, and the sums from which a ledger is made: by substellar or
- * not and by young or not, after each piece of evidence, and with each piece left out.
+ * not and by young or not, after each piece of evidence, and with each piece left out. The type
+ * rules most cells out, so for each age it is kept which masses are possible.
  */
 final class NodePosterior {
 
@@ -13,6 +14,11 @@ final class NodePosterior {
 
     private final NodeTable table;
     private final double[][] weight;
+
+    /** For each age the first cell of mass with some weight, and the one after the last. */
+    private final int[] first;
+
+    private final int[] end;
     private final double[] youngSequence;
     private final double[][] after = new double[PIECES + 1][KINDS];
     private final double[][] without = new double[PIECES][KINDS];
@@ -21,6 +27,8 @@ final class NodePosterior {
     NodePosterior(NodeTable table, EvidenceCurves curves, JudgeNumbers numbers) {
         this.table = table;
         this.weight = new double[table.ages()][table.masses()];
+        this.first = new int[table.ages()];
+        this.end = new int[table.ages()];
         this.youngSequence = new double[table.ages()];
         double limit = numbers.of("hydrogen-limit");
         double young = numbers.of("young-age");
@@ -40,6 +48,8 @@ final class NodePosterior {
                 }
                 weight[a][m] = add(kind, prior, factor, suffix);
                 total += weight[a][m];
+                first[a] = end[a] == 0 ? m : first[a];
+                end[a] = m + 1;
             }
         }
         if (!(total > 0)) {
@@ -63,15 +73,25 @@ final class NodePosterior {
     }
 
     private void normalise() {
-        for (double[] ofAge : weight) {
-            for (int m = 0; m < ofAge.length; m++) {
-                ofAge[m] /= total;
+        for (int a = 0; a < weight.length; a++) {
+            for (int m = first[a]; m < end[a]; m++) {
+                weight[a][m] /= total;
             }
         }
     }
 
     NodeTable table() {
         return table;
+    }
+
+    /** The first cell of mass that has some probability at an age. */
+    int first(int a) {
+        return first[a];
+    }
+
+    /** The cell of mass after the last that has some probability at an age. */
+    int end(int a) {
+        return end[a];
     }
 
     /** Probability of a cell. */
@@ -83,8 +103,8 @@ final class NodePosterior {
     double onYoungSequence() {
         double sum = 0;
         for (int a = 0; a < weight.length; a++) {
-            for (double one : weight[a]) {
-                sum += one * youngSequence[a];
+            for (int m = first[a]; m < end[a]; m++) {
+                sum += weight[a][m] * youngSequence[a];
             }
         }
         return sum;
@@ -93,9 +113,9 @@ final class NodePosterior {
     /** Probability of a mass below a limit on which an edge of the cells lies. */
     double below(double massMsun) {
         double sum = 0;
-        for (double[] ofAge : weight) {
-            for (int m = 0; m < ofAge.length && table.mass(m) < massMsun; m++) {
-                sum += ofAge[m];
+        for (int a = 0; a < weight.length; a++) {
+            for (int m = first[a]; m < end[a] && table.mass(m) < massMsun; m++) {
+                sum += weight[a][m];
             }
         }
         return Math.min(1, sum);
@@ -105,7 +125,7 @@ final class NodePosterior {
     double cooler(double limitK) {
         double sum = 0;
         for (int a = 0; a < weight.length; a++) {
-            for (int m = 0; m < weight[a].length; m++) {
+            for (int m = first[a]; m < end[a]; m++) {
                 sum += table.teff(a, m) < limitK ? weight[a][m] : 0;
             }
         }
@@ -116,8 +136,8 @@ final class NodePosterior {
     double[] byAge() {
         double[] sum = new double[table.ages()];
         for (int a = 0; a < sum.length; a++) {
-            for (double one : weight[a]) {
-                sum[a] += one;
+            for (int m = first[a]; m < end[a]; m++) {
+                sum[a] += weight[a][m];
             }
         }
         return sum;
@@ -126,9 +146,9 @@ final class NodePosterior {
     /** Probability of each mass cell. */
     double[] byMass() {
         double[] sum = new double[table.masses()];
-        for (double[] ofAge : weight) {
-            for (int m = 0; m < sum.length; m++) {
-                sum[m] += ofAge[m];
+        for (int a = 0; a < weight.length; a++) {
+            for (int m = first[a]; m < end[a]; m++) {
+                sum[m] += weight[a][m];
             }
         }
         return sum;
@@ -152,7 +172,7 @@ final class NodePosterior {
             edges[i] = low + (high - low) * i / bins;
         }
         for (int a = 0; a < weight.length; a++) {
-            for (int m = 0; m < weight[a].length; m++) {
+            for (int m = first[a]; m < end[a]; m++) {
                 if (weight[a][m] > 0) {
                     double place = (quantity.of(table, a, m) - low) / (high - low) * bins;
                     sum[(int) Math.min(bins - 1.0, Math.max(0, place))] += weight[a][m];

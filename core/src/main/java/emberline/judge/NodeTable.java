@@ -53,6 +53,9 @@ final class NodeTable {
     private final double[][] logL;
     private final double[][] logG;
     private final double[][] lithiumLeft;
+    private final double[][] teffPlace;
+    private final double[][] logLPlace;
+    private final double[][] radius;
 
     /**
      * A table.
@@ -93,12 +96,22 @@ final class NodeTable {
         this.logL = grid.on(Column.LOG_L, logAge, logMass);
         this.logG = grid.on(Column.LOG_G, logAge, logMass);
         this.lithiumLeft = forLithium.on(Column.LITHIUM, logAge, logMass);
+        this.teffPlace = new double[ageWeight.length][massWeight.length];
+        this.logLPlace = new double[ageWeight.length][massWeight.length];
+        this.radius = new double[ageWeight.length][massWeight.length];
         for (int a = 0; a < logAge.length; a++) {
             for (int m = 0; m < logMass.length; m++) {
                 teff[a][m] = Math.pow(10, teff[a][m]);
                 lithiumLeft[a][m] = EvolutionGrid.lithiumLeft(lithiumLeft[a][m]);
+                teffPlace[a][m] = place(teff[a][m], FIRST_TEFF, TEFF_STEP, TEFF_SIZE);
+                logLPlace[a][m] = place(logL[a][m], FIRST_LOG_L, LOG_L_STEP, LOG_L_SIZE);
+                radius[a][m] = Math.sqrt(mass(m) * Math.pow(10, SOLAR_LOG_G - logG[a][m]));
             }
         }
+    }
+
+    private static double place(double value, double first, double step, int size) {
+        return Math.min(size - 1.001, Math.max(0, (value - first) / step));
     }
 
     private static double[] centres(double[] edges) {
@@ -200,7 +213,7 @@ final class NodeTable {
 
     /** Place on the axis of temperatures, within its ends. */
     double teffPlace(int a, int m) {
-        return Math.min(TEFF_SIZE - 1.001, Math.max(0, (teff[a][m] - FIRST_TEFF) / TEFF_STEP));
+        return teffPlace[a][m];
     }
 
     /** log10 of the luminosity (solar). */
@@ -210,7 +223,7 @@ final class NodeTable {
 
     /** Place on the axis of log L, within its ends. */
     double logLPlace(int a, int m) {
-        return Math.min(LOG_L_SIZE - 1.001, Math.max(0, (logL[a][m] - FIRST_LOG_L) / LOG_L_STEP));
+        return logLPlace[a][m];
     }
 
     /** log10 of the surface gravity (cm/s2). */
@@ -220,7 +233,7 @@ final class NodeTable {
 
     /** Radius (solar) from mass and gravity. */
     double radius(int a, int m) {
-        return Math.sqrt(mass(m) * Math.pow(10, SOLAR_LOG_G - logG[a][m]));
+        return radius[a][m];
     }
 
     /** Part of the lithium left, 0 to 1. */

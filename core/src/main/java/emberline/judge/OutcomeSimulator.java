@@ -48,7 +48,7 @@ final class OutcomeSimulator {
 
     private void visit(double[][] joint, Visitor visitor) {
         for (int a = 0; a < table.ages(); a++) {
-            for (int m = 0; m < table.masses(); m++) {
+            for (int m = posterior.first(a); m < posterior.end(a); m++) {
                 double p = posterior.probability(a, m);
                 if (p > NEGLIGIBLE) {
                     visitor.visit(a, m, p, joint[kinds.of(table, a, m)]);
@@ -145,7 +145,7 @@ final class OutcomeSimulator {
             EvidenceCurves.AtAge here = curves.new AtAge(table.ageMyr(a));
             double[] factor = new double[Piece.COUNT];
             double[] weight = {1 - here.youngSequence(), here.youngSequence()};
-            for (int m = 0; m < table.masses(); m++) {
+            for (int m = posterior.first(a); m < posterior.end(a); m++) {
                 double p = posterior.probability(a, m);
                 if (p <= NEGLIGIBLE) {
                     continue;

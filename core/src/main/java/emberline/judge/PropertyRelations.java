@@ -26,7 +26,7 @@ final class PropertyRelations {
 
     private static final int COEFFICIENTS = 8;
 
-    private final Map<Quantity, Map<String, TypeRelation>> relations =
+    private final Map<Quantity, Map<String, Map<Sequence, TypeRelation>>> relations =
             new EnumMap<>(Quantity.class);
 
     PropertyRelations() {
@@ -48,24 +48,22 @@ final class PropertyRelations {
                                     JudgeTable.number(row, "x0"),
                                     Arrays.copyOf(coefficients, last),
                                     JudgeTable.number(row, "rms"));
-                    String name =
-                            name(row.getField("band"), Sequence.valueOf(row.getField("sequence")));
+                    Sequence sequence = Sequence.valueOf(row.getField("sequence"));
                     relations
                             .computeIfAbsent(
                                     Quantity.valueOf(row.getField("quantity")),
                                     q -> new HashMap<>())
-                            .computeIfAbsent(name, n -> new TypeRelation())
+                            .computeIfAbsent(
+                                    row.getField("band"), band -> new EnumMap<>(Sequence.class))
+                            .computeIfAbsent(sequence, one -> new TypeRelation())
                             .add(piece);
-                    return name;
+                    return sequence;
                 });
     }
 
-    private static String name(String band, Sequence sequence) {
-        return band + "/" + sequence;
-    }
-
     private Optional<TypeRelation> find(Quantity quantity, String band, Sequence sequence) {
-        return Optional.ofNullable(relations.get(quantity).get(name(band, sequence)));
+        return Optional.ofNullable(relations.get(quantity).get(band))
+                .map(bySequence -> bySequence.get(sequence));
     }
 
     /** A relation without a band at a type, the field's where the sequence has none there. */

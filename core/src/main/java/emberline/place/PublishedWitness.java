@@ -179,30 +179,23 @@ final class PublishedWitness {
     }
 
     private double bestType(List<RelationEstimate> estimates) {
-        double best = FIRST_TYPE;
-        double highest = Double.NEGATIVE_INFINITY;
-        int steps = (int) Math.round((LAST_TYPE - FIRST_TYPE) / STEP);
-        for (int k = 0; k <= steps; k++) {
-            double type = FIRST_TYPE + k * STEP;
-            double sum = 0;
-            for (RelationEstimate estimate : estimates) {
-                sum += logLikelihood(estimate, type);
-            }
-            if (sum > highest) {
-                highest = sum;
-                best = type;
+        double[] sum = new double[(int) Math.round((LAST_TYPE - FIRST_TYPE) / STEP) + 1];
+        for (RelationEstimate estimate : estimates) {
+            Optional<Member> member = consensus.member(estimate.relation());
+            for (int k = 0; member.isPresent() && k < sum.length; k++) {
+                sum[k] += logLikelihood(estimate, member.get(), FIRST_TYPE + k * STEP);
             }
         }
-        return best;
+        int best = 0;
+        for (int k = 1; k < sum.length; k++) {
+            best = sum[k] > sum[best] ? k : best;
+        }
+        return FIRST_TYPE + best * STEP;
     }
 
-    private double logLikelihood(RelationEstimate estimate, double type) {
-        Optional<Member> member = consensus.member(estimate.relation());
-        if (member.isEmpty()) {
-            return 0;
-        }
-        double from = member.get().fromType();
-        double to = member.get().toType();
+    private static double logLikelihood(RelationEstimate estimate, Member member, double type) {
+        double from = member.fromType();
+        double to = member.toType();
         if (estimate.use() == Use.OUTSIDE_RANGE) {
             boolean wellInside = type >= from + MARGIN && type <= to - MARGIN;
             return wellInside ? Math.log(OUT_OF_RANGE_FACTOR) : 0;
