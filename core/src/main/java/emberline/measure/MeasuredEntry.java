@@ -25,7 +25,13 @@ record MeasuredEntry(FeatureMeasurement measurement, List<Part> parts, double in
      * @param formula the feature as a function of its window functionals
      * @param weight share of the value
      */
-    record Part(MeasuredSpectrum spectrum, Formula formula, double weight) {}
+    record Part(MeasuredSpectrum spectrum, Formula formula, double weight) {
+
+        private LinearEntry.Part linear() {
+            return new LinearEntry.Part(
+                    spectrum, formula.rows(), spectrum.gradient(formula), weight);
+        }
+    }
 
     /** What was measured on one spectrum. */
     static MeasuredEntry of(
@@ -46,20 +52,9 @@ record MeasuredEntry(FeatureMeasurement measurement, List<Part> parts, double in
         return measured().map(Measured::oneSigma).orElse(Double.POSITIVE_INFINITY);
     }
 
-    /** Covariance with another feature from the pixels that both use, to first order. */
-    double covariance(MeasuredEntry other) {
-        double sum = 0;
-        for (Part mine : parts) {
-            for (Part theirs : other.parts) {
-                if (mine.spectrum == theirs.spectrum) {
-                    sum +=
-                            mine.weight
-                                    * theirs.weight
-                                    * mine.spectrum.covariance(mine.formula, theirs.formula);
-                }
-            }
-        }
-        return inflation * other.inflation * sum;
+    /** The measurement to first order. */
+    LinearEntry linear() {
+        return new LinearEntry(parts.stream().map(Part::linear).toList(), inflation);
     }
 
     /** Widens draws about the value by the inflation, in place. */

@@ -70,7 +70,7 @@ final class MeasuredSpectrum {
 
     /** The root of the variance of a weighted sum of functionals. */
     private double root(int[] rows, double[] weights) {
-        double variance = bilinear(rows, weights, rows, weights);
+        double variance = covariance(rows, weights, rows, weights);
         if (variance >= 0 || Double.isNaN(variance)) {
             return Math.sqrt(variance);
         }
@@ -90,14 +90,13 @@ final class MeasuredSpectrum {
         return 0;
     }
 
-    /** Covariance of two features, to first order. */
-    double covariance(Formula one, Formula two) {
-        double[] gradientOne = one.gradient(means);
-        double[] gradientTwo = one == two ? gradientOne : two.gradient(means);
-        return bilinear(one.rows(), gradientOne, two.rows(), gradientTwo);
+    /** The derivative of a feature by each of its functionals. */
+    double[] gradient(Formula formula) {
+        return formula.gradient(means);
     }
 
-    private double bilinear(int[] rowsA, double[] a, int[] rowsB, double[] b) {
+    /** Covariance of two weighted sums of functionals. */
+    double covariance(int[] rowsA, double[] a, int[] rowsB, double[] b) {
         double sum = 0;
         for (int i = 0; i < rowsA.length; i++) {
             for (int j = 0; j < rowsB.length; j++) {

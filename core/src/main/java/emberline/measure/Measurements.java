@@ -90,7 +90,7 @@ public final class Measurements {
      * @throws IllegalArgumentException if one of them was not measured
      */
     public double covariance(String one, String two) {
-        return measuredEntry(one).covariance(measuredEntry(two));
+        return measuredEntry(one).linear().covariance(measuredEntry(two).linear());
     }
 
     /**
@@ -101,10 +101,11 @@ public final class Measurements {
      * @throws IllegalArgumentException if one of them was not measured
      */
     public double[][] covariance(List<String> ids) {
+        List<LinearEntry> linear = ids.stream().map(id -> measuredEntry(id).linear()).toList();
         double[][] matrix = new double[ids.size()][ids.size()];
         for (int a = 0; a < matrix.length; a++) {
             for (int b = 0; b <= a; b++) {
-                matrix[a][b] = covariance(ids.get(a), ids.get(b));
+                matrix[a][b] = linear.get(a).covariance(linear.get(b));
                 matrix[b][a] = matrix[a][b];
             }
         }

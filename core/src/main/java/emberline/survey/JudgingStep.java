@@ -9,6 +9,7 @@ import emberline.place.calibrated.TypePrior;
 import emberline.spectrum.Finding;
 import java.util.List;
 import java.util.Optional;
+import java.util.concurrent.CompletableFuture;
 
 /** Judges placed objects, as far as their type means something. */
 final class JudgingStep {
@@ -16,11 +17,13 @@ final class JudgingStep {
     /** With this finding a type means nothing. */
     private static final String NO_BANDS = "no-bands";
 
-    private final Judge judge;
+    /** Made while the first object is read, measured and placed: its tables take their time. */
+    private final CompletableFuture<Judge> judge;
+
     private final TypePrior prior;
 
     JudgingStep(Judging judging, TypePrior prior) {
-        this.judge = new Judge(judging);
+        this.judge = CompletableFuture.supplyAsync(() -> new Judge(judging));
         this.prior = prior;
     }
 
@@ -44,7 +47,7 @@ final class JudgingStep {
         }
         ObjectResult told = placed.withFindings(gathered.get().findings());
         try {
-            Judgement judgement = judge.judge(gathered.get().evidence());
+            Judgement judgement = judge.join().judge(gathered.get().evidence());
             return told.withJudgement(judgement);
         } catch (IllegalStateException e) {
             return told.withFindings(
