@@ -18,7 +18,8 @@ final class Locus {
      * @param feature id of the feature
      * @param field mean at field gravity, one value a knot, in the unit of the feature
      * @param lowGravityShift what very low gravity adds to it; intermediate gravity adds half
-     * @param scatter one-sigma scatter of objects, positive, without noise and label errors
+     * @param scatter one-sigma scatter of objects, positive, without noise and label errors, with
+     *     the uncertainty of the mean
      */
     Locus(String feature, double[] field, double[] lowGravityShift, double[] scatter) {
         if (field.length != TypeKnots.COUNT

@@ -9,17 +9,23 @@ import java.util.List;
  * and gravity, with weights that fall off with the difference in type and with the residual. Where
  * spectra are scarce the kernel widens. The scatter is that of the objects: what noise, the error
  * of published types and the spread of gravity within a published class put into the residuals is
- * taken off.
+ * taken off. To it goes the uncertainty of the fitted mean itself, which is small along the
+ * sequence and large where few spectra bear on the mean or it is carried on beyond them: an object
+ * that is placed is not among those from which the mean was found.
  */
 final class LocusFit {
 
     /** One-sigma width of the kernel where there are enough spectra (subclass). */
     private static final double BANDWIDTH = 2.0;
 
-    /** From L9 on, where methane sets in and relations anchor the loci, the kernel is narrower. */
+    /** In the T dwarfs, where methane sets in and relations anchor the loci, it is narrower. */
     private static final double METHANE_BANDWIDTH = 1.2;
 
-    private static final double METHANE_FROM = 19;
+    /**
+     * From the first of these types to the second, L7 to T1, the kernel narrows in step with the
+     * type: a sudden change would put a step into the loci.
+     */
+    private static final double[] NARROWING = {17, 21};
 
     /** Greatest width that is still widened (subclass). */
     private static final double WIDEST = 6;
@@ -38,6 +44,9 @@ final class LocusFit {
 
     private static final int ROUNDS = 4;
 
+    /** Spectra with less weight are left out of the regression. */
+    private static final double LEAST_WEIGHT = 1e-6;
+
     /** Residuals beyond this many sigma lose more than half of their weight. */
     private static final double SOFT_LIMIT = 2;
 
@@ -54,6 +63,21 @@ final class LocusFit {
 
     /** Mean, gravity shift, scatter at one knot. */
     private record AtKnot(double mean, double shift, double scatter) {}
+
+    /** A weighted regression. */
+    private static final class Regression {
+
+        /** Mean, slope, gravity shift, curvature. */
+        private final double[] beta;
+
+        /** Variance of the mean where that of a value is 1. */
+        private final double varianceOfMean;
+
+        private Regression(double[] beta, double varianceOfMean) {
+            this.beta = beta;
+            this.varianceOfMean = varianceOfMean;
+        }
+    }
 
     /**
      * Fits a locus.
@@ -85,7 +109,7 @@ final class LocusFit {
     }
 
     private static void kernel(List<Point> points, double type, double[] weights) {
-        double width = type >= METHANE_FROM ? METHANE_BANDWIDTH : BANDWIDTH;
+        double width = width(type);
         while (true) {
             double sum = 0;
             for (int i = 0; i < weights.length; i++) {
@@ -100,16 +124,25 @@ final class LocusFit {
         }
     }
 
+    /** Width of the kernel where there are enough spectra (subclass). */
+    private static double width(double type) {
+        double part = (type - NARROWING[0]) / (NARROWING[1] - NARROWING[0]);
+        return BANDWIDTH + Math.max(0, Math.min(1, part)) * (METHANE_BANDWIDTH - BANDWIDTH);
+    }
+
     private static AtKnot local(
             List<Point> points, double type, double gravityMatters, double[] kernel) {
         double[] robust = new double[kernel.length];
         Arrays.fill(robust, 1);
         double[] beta = new double[TERMS];
+        double varianceOfMean = 0;
         double variance = 0;
         double noise = 0;
         double effective = 1;
         for (int round = 0; round < ROUNDS; round++) {
-            beta = regress(points, type, kernel, robust);
+            Regression regression = regress(points, type, kernel, robust);
+            beta = regression.beta;
+            varianceOfMean = regression.varianceOfMean;
             double sum = 0;
             double squares = 0;
             double spread = 0;
@@ -138,7 +171,8 @@ final class LocusFit {
                 Math.pow(TrainingSet.TYPE_NOISE_SUBCLASS * beta[1], 2)
                         + Math.pow(TrainingSet.GRAVITY_NOISE * shift, 2);
         double intrinsic = corrected - Math.min(noise + ofLabels, MOST_NOISE * corrected);
-        return new AtKnot(beta[0], shift, Math.sqrt(Math.max(intrinsic, 1e-8)));
+        double expected = intrinsic + varianceOfMean * corrected;
+        return new AtKnot(beta[0], shift, Math.sqrt(Math.max(expected, 1e-8)));
     }
 
     private static double residual(Point point, double type, double[] beta) {
@@ -154,45 +188,66 @@ final class LocusFit {
      * Weighted least squares for mean, slope, gravity shift and curvature, with weak priors on all
      * but the mean.
      */
-    private static double[] regress(
+    private static Regression regress(
             List<Point> points, double type, double[] kernel, double[] robust) {
-        double[][] normal = new double[TERMS][TERMS + 1];
+        double[][] normal = new double[TERMS][TERMS + 2];
         for (int i = 0; i < kernel.length; i++) {
             double w = kernel[i] * robust[i];
-            if (w < 1e-6) {
+            if (w < LEAST_WEIGHT) {
                 continue;
             }
-            Point point = points.get(i);
-            double difference = point.typeNumber() - type;
-            double[] row = {
-                1, difference, point.lowGravity(), difference * difference, point.value()
-            };
+            double[] row = row(points.get(i), type);
             for (int a = 0; a < TERMS; a++) {
-                for (int b = 0; b <= TERMS; b++) {
+                for (int b = 0; b < TERMS; b++) {
                     normal[a][b] += w * row[a] * row[b];
                 }
+                normal[a][TERMS] += w * row[a] * points.get(i).value();
             }
         }
+        normal[0][TERMS + 1] = 1;
         normal[0][0] += 1e-9;
         normal[1][1] += 5e-5 * normal[0][0] + 1e-9;
         normal[2][2] += GRAVITY_RIDGE;
         normal[3][3] += CURVATURE_RIDGE * normal[0][0] + 1e-9;
-        return solve(normal);
+        eliminate(normal);
+        double[] ofMean = substitute(normal, TERMS + 1);
+        double varianceOfMean = 0;
+        for (int i = 0; i < kernel.length; i++) {
+            double w = kernel[i] * robust[i];
+            if (w >= LEAST_WEIGHT) {
+                double[] row = row(points.get(i), type);
+                double influence = 0;
+                for (int a = 0; a < TERMS; a++) {
+                    influence += w * row[a] * ofMean[a];
+                }
+                varianceOfMean += influence * influence;
+            }
+        }
+        return new Regression(substitute(normal, TERMS), varianceOfMean);
     }
 
-    /** Solves the normal equations by elimination; they are positive definite. */
-    private static double[] solve(double[][] a) {
+    private static double[] row(Point point, double type) {
+        double difference = point.typeNumber() - type;
+        return new double[] {1, difference, point.lowGravity(), difference * difference};
+    }
+
+    /** Brings the normal equations into triangular form; they are positive definite. */
+    private static void eliminate(double[][] a) {
         for (int p = 0; p < TERMS; p++) {
             for (int row = p + 1; row < TERMS; row++) {
                 double factor = a[row][p] / a[p][p];
-                for (int col = p; col <= TERMS; col++) {
+                for (int col = p; col < a[row].length; col++) {
                     a[row][col] -= factor * a[p][col];
                 }
             }
         }
+    }
+
+    /** Solves the triangular equations for one of their right sides. */
+    private static double[] substitute(double[][] a, int rightSide) {
         double[] x = new double[TERMS];
         for (int p = TERMS - 1; p >= 0; p--) {
-            double sum = a[p][TERMS];
+            double sum = a[p][rightSide];
             for (int col = p + 1; col < TERMS; col++) {
                 sum -= a[p][col] * x[col];
             }

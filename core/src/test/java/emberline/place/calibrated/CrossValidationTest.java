@@ -74,13 +74,33 @@ class CrossValidationTest {
         assertTrue(rms(all) <= 0.60, "tiers A and B, rms " + rms(all));
         assertTrue(rms(dwarfs(4, 40, "A")) <= 0.50, "tier A, rms " + rms(dwarfs(4, 40, "A")));
         for (double[] range : new double[][] {{4, 10}, {10, 15}, {15, 20}}) {
-            double bias =
-                    dwarfs(range[0], range[1], "AB").stream()
-                            .mapToDouble(CrossValidationTest::difference)
-                            .average()
-                            .orElseThrow();
+            double bias = bias(dwarfs(range[0], range[1], "AB"));
             assertEquals(0, bias, 0.1, "bias from " + range[0]);
         }
+    }
+
+    /**
+     * Nine T dwarfs of the better tiers do not tell a bias to better than 0.2 subclasses: one of
+     * them, published as T0.5 with a doubt, has the water bands of L9 and is found there. With the
+     * ten of tier C it is clearer.
+     */
+    @Test
+    void typesOfUnseenTDwarfs() {
+        List<Unseen> best = dwarfs(20, 30, "AB");
+        assertEquals(9, best.size());
+        assertTrue(rms(best) <= 0.60, "tiers A and B, rms " + rms(best));
+        assertEquals(0, bias(best), 0.25, "tiers A and B");
+        List<Unseen> all =
+                dwarfs(20, 30, "ABC").stream()
+                        .filter(one -> one.placed().posterior().isPresent())
+                        .toList();
+        assertEquals(19, all.size());
+        assertTrue(rms(all) <= 0.60, "all tiers, rms " + rms(all));
+        assertEquals(0, bias(all), 0.1, "all tiers");
+    }
+
+    private static double bias(List<Unseen> all) {
+        return all.stream().mapToDouble(CrossValidationTest::difference).average().orElseThrow();
     }
 
     private static double rms(List<Unseen> all) {

@@ -80,6 +80,39 @@ class LocusFitTest {
         assertTrue(Math.abs(locus.mean(10.0, 0) - locus.mean(10.0, 1)) > 0.05);
     }
 
+    /**
+     * Beyond the last spectra the locus is carried on, and off by more than objects scatter. The
+     * scatter says so: of the objects that were not learned from as many stand within one sigma as
+     * between the spectra (without the uncertainty of the mean it would be one in four).
+     */
+    @Test
+    void beyondTheSpectraTheScatterGrowsByWhatTheMeanMayBeOff() {
+        int trials = 200;
+        double[] types = {19, 26, 27, 28, 29};
+        int[] within = new int[types.length];
+        double[] scatter = new double[types.length];
+        for (int trial = 0; trial < trials; trial++) {
+            Random random = new Random(trial);
+            List<Point> points = new ArrayList<>();
+            for (int i = 0; i < 150; i++) {
+                double at = 12 + 13 * random.nextDouble();
+                points.add(new Point(at, 0, 1, 30 + random.nextGaussian(), 0, 0));
+            }
+            Locus locus = LocusFit.fit("invented", points);
+            for (int i = 0; i < types.length; i++) {
+                double value = 30 + random.nextGaussian();
+                double sigma = locus.scatter(types[i]);
+                within[i] += Math.abs(value - locus.mean(types[i], 0)) < sigma ? 1 : 0;
+                scatter[i] += sigma / trials;
+            }
+        }
+        for (int i = 0; i < types.length; i++) {
+            String where = "type " + types[i] + ", mean scatter " + scatter[i];
+            assertEquals(0.62, within[i] / (double) trials, 0.1, where);
+            assertTrue(types[i] < 25 ? scatter[i] < 1.1 : scatter[i] > 1.2, where);
+        }
+    }
+
     /** A locus that bends is not flattened, as a mean over the kernel would flatten it. */
     @Test
     void aBendIsFollowed() {
