@@ -74,6 +74,7 @@ final class RegressionFitter {
     }
 
     /** Minus the penalised logarithm of the likelihood, with its gradient. */
+    @SuppressWarnings("serial") // never written
     private static final class Likelihood implements DifferentiableMultivariateFunction {
 
         private final double[][] rows;
