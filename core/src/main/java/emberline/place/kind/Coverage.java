@@ -6,7 +6,7 @@ import java.util.ArrayList;
 import java.util.List;
 
 /**
- * The part of a spectrum for which a forest was grown.
+ * The part of a spectrum of which kinds are learned.
  *
  * @param regions a mask of {@link Regions}
  * @param withLines whether lines are used beside the shape
@@ -36,7 +36,7 @@ record Coverage(int regions, boolean withLines) {
         return List.copyOf(all);
     }
 
-    /** The coverages for which forests are grown, the widest first, with lines before without. */
+    /** The coverages of which kinds are learned, the widest first, with lines before without. */
     static List<Coverage> forests() {
         return ALL;
     }

@@ -8,7 +8,7 @@ import java.io.IOException;
  * A random forest as flat arrays: per node the feature, the threshold and the two children, or the
  * distribution over kinds at a leaf.
  */
-final class Forest {
+final class Forest implements KindLearner<Forest> {
 
     /** Kinds that a forest tells apart: all but {@link ObjectKind#UNLIKE_KNOWN}. */
     static final int KINDS = ObjectKind.values().length - 1;
@@ -56,7 +56,8 @@ final class Forest {
     record Nodes(int[] roots, byte[] splits, float[] thresholds, int[] children, byte[] leaves) {}
 
     /** These trees with another exponent of the probabilities. */
-    Forest withSharpness(float exponent) {
+    @Override
+    public Forest withSharpness(float exponent) {
         return new Forest(
                 columns,
                 fill,
@@ -69,7 +70,8 @@ final class Forest {
      * Probabilities of the kinds for equal prior probabilities of those that the forest knows; 0
      * for kinds that it never saw.
      */
-    double[] probabilities(double[] values) {
+    @Override
+    public double[] probabilities(double[] values) {
         double[] x = new double[columns.length];
         for (int k = 0; k < columns.length; k++) {
             double value = values[columns[k]];

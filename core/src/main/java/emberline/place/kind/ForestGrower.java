@@ -4,9 +4,6 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.stream.LongStream;
-import org.apache.commons.rng.UniformRandomProvider;
-import org.apache.commons.rng.sampling.ListSampler;
-import org.apache.commons.rng.simple.RandomSource;
 import smile.base.cart.CART;
 import smile.base.cart.DecisionNode;
 import smile.base.cart.InternalNode;
@@ -37,18 +34,9 @@ final class ForestGrower {
         this.trees = trees;
     }
 
-    /** Most rows of each kind that a forest learns from. */
-    private static int most(ObjectKind kind) {
-        return switch (kind) {
-            case LATE_DWARF -> 1200;
-            case GIANT -> 700;
-            default -> 400;
-        };
-    }
-
     /** A forest with uncalibrated probabilities. */
     Forest grow(Coverage coverage, List<TrainingRow> rows) {
-        List<TrainingRow> chosen = chosen(rows);
+        List<TrainingRow> chosen = TrainingSample.of(rows);
         int[] columns = coverage.columns(features);
         float[] fill = fill(columns, chosen);
         ObjectKind[] present =
@@ -90,19 +78,6 @@ final class ForestGrower {
             shares[row.kind().position()] += 1f / chosen.size();
         }
         return new Forest(columns, fill, shares, 1, new Flattening(present, data).of(forest));
-    }
-
-    /** As many rows of each kind as are allowed, drawn always alike. */
-    private static List<TrainingRow> chosen(List<TrainingRow> rows) {
-        UniformRandomProvider random = RandomSource.XO_RO_SHI_RO_128_PP.create(5);
-        List<TrainingRow> chosen = new ArrayList<>();
-        for (ObjectKind kind : ObjectKind.values()) {
-            List<TrainingRow> ofKind =
-                    new ArrayList<>(rows.stream().filter(r -> r.kind() == kind).toList());
-            ListSampler.shuffle(random, ofKind);
-            chosen.addAll(ofKind.subList(0, Math.min(ofKind.size(), most(kind))));
-        }
-        return chosen;
     }
 
     private static float[] fill(int[] columns, List<TrainingRow> rows) {

@@ -19,35 +19,35 @@ import java.util.zip.GZIPInputStream;
 import java.util.zip.GZIPOutputStream;
 
 /**
- * What was learned of kinds: a forest for each coverage, the reference objects, and how remoteness
+ * What was learned of kinds: a blend for each coverage, the reference objects, and how remoteness
  * turns into the probability of something unknown. Written by {@code calibrate}, read at first use.
  *
  * <p>The file is gzipped and binary (big-endian, as of {@link DataOutputStream}): a version, the
- * ids of the features, the limits of remoteness, the reference objects, the forests.
+ * ids of the features, the limits of remoteness, the reference objects, the blends.
  */
 public final class KindModel {
 
     private static final String RESOURCE = "/emberline/place/kind/model.gz";
-    private static final int VERSION = 2;
-    private static final int MOST_FORESTS = 4;
+    private static final int VERSION = 3;
+    private static final int MOST_COVERAGES = 4;
     private static final double LEAST = 1e-4;
 
     private final KindFeatures features;
     private final KinTable kin;
     private final RemotenessLimits limits;
-    private final Map<Coverage, Forest> forests;
+    private final Map<Coverage, Blend> blends;
     private final double sharpness;
 
     KindModel(
             KindFeatures features,
             KinTable kin,
             RemotenessLimits limits,
-            Map<Coverage, Forest> forests,
+            Map<Coverage, Blend> blends,
             double sharpness) {
         this.features = features;
         this.kin = kin;
         this.limits = limits;
-        this.forests = new LinkedHashMap<>(forests);
+        this.blends = new LinkedHashMap<>(blends);
         this.sharpness = sharpness;
     }
 
@@ -81,21 +81,21 @@ public final class KindModel {
         return kin;
     }
 
-    /** The coverages of which the forests are used for a spectrum: the widest that hold. */
+    /** The coverages of which the blends are used for a spectrum: the widest that hold. */
     List<Coverage> coverages(FeatureVector vector) {
-        List<Coverage> holding = Coverage.of(vector, features, List.copyOf(forests.keySet()));
-        return holding.subList(0, Math.min(MOST_FORESTS, holding.size()));
+        List<Coverage> holding = Coverage.of(vector, features, List.copyOf(blends.keySet()));
+        return holding.subList(0, Math.min(MOST_COVERAGES, holding.size()));
     }
 
     /**
      * Probabilities of the known kinds for equal priors: the geometric mean of those of several
-     * forests, since one forest saw few spectra of the widest coverages, to the power that
+     * coverages, since few spectra to learn from have the widest coverages, to the power that
      * calibrates it.
      */
     double[] known(List<Coverage> coverages, FeatureVector vector) {
         double[] logs = new double[Forest.KINDS];
         for (Coverage coverage : coverages) {
-            double[] p = forests.get(coverage).probabilities(vector.values());
+            double[] p = blends.get(coverage).probabilities(vector.values());
             for (int kind = 0; kind < logs.length; kind++) {
                 logs[kind] += Math.log(Math.max(LEAST, p[kind])) / coverages.size();
             }
@@ -113,7 +113,7 @@ public final class KindModel {
 
     /** This model with another power of the mean. */
     KindModel withSharpness(double power) {
-        return new KindModel(features, kin, limits, forests, power);
+        return new KindModel(features, kin, limits, blends, power);
     }
 
     /**
@@ -154,10 +154,10 @@ public final class KindModel {
             write(out, row, kin.columns());
         }
         out.writeDouble(sharpness);
-        out.writeInt(forests.size());
-        for (Map.Entry<Coverage, Forest> forest : forests.entrySet()) {
-            out.writeUTF(forest.getKey().code());
-            forest.getValue().write(out);
+        out.writeInt(blends.size());
+        for (Map.Entry<Coverage, Blend> blend : blends.entrySet()) {
+            out.writeUTF(blend.getKey().code());
+            blend.getValue().write(out);
         }
         out.flush();
         zip.finish();
@@ -223,17 +223,17 @@ public final class KindModel {
         for (int k = 0; k < rowCount; k++) {
             rows.add(readRow(in, count, columns));
         }
-        Map<Coverage, Forest> forests = new LinkedHashMap<>();
+        Map<Coverage, Blend> blends = new LinkedHashMap<>();
         double sharpness = in.readDouble();
-        int forestCount = in.readInt();
-        for (int k = 0; k < forestCount; k++) {
-            forests.put(Coverage.parse(in.readUTF()), Forest.read(in));
+        int blendCount = in.readInt();
+        for (int k = 0; k < blendCount; k++) {
+            blends.put(Coverage.parse(in.readUTF()), Blend.read(in));
         }
         return new KindModel(
                 features,
                 new KinTable(features, rows, scatter),
                 new RemotenessLimits(limits),
-                forests,
+                blends,
                 sharpness);
     }
 

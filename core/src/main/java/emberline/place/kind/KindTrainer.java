@@ -19,16 +19,16 @@ import java.util.function.Consumer;
  * Learns kinds from reference spectra. Fed spectrum by spectrum; the same spectra in the same order
  * give the same model.
  *
- * <p>Forests learn from the spectra and from copies of them made worse ({@code TrainingCopies}).
- * Their probabilities are calibrated on objects that they did not learn from: all spectra and
- * copies of one object are on the same side.
+ * <p>Forests and regressions learn from the spectra and from copies of them made worse ({@code
+ * TrainingCopies}). Their probabilities are calibrated on objects that they did not learn from: all
+ * spectra and copies of one object are on the same side.
  */
 public final class KindTrainer {
 
     private static final int TREES = 50;
     private static final int FOLDS = 5;
 
-    /** Fewer rows of a late dwarf or of others than this do not make a forest. */
+    /** Fewer rows of a late dwarf or of others than this teach nothing. */
     private static final int LEAST_ROWS = 20;
 
     private final KindFeatures features = KindFeatures.standard();
@@ -128,34 +128,25 @@ public final class KindTrainer {
         KinTable table = new KinTable(features, kin, scatter());
         RemotenessLimits limits = RemotenessLimits.of(rows, table, features);
         Map<String, Integer> folds = folds();
-        Map<Coverage, Forest> forests = new LinkedHashMap<>();
-        List<Map<Coverage, Forest>> ofFold = new ArrayList<>();
+        Map<Coverage, Blend> blends = new LinkedHashMap<>();
+        List<Map<Coverage, Blend>> ofFold = new ArrayList<>();
         for (int fold = 0; fold < FOLDS; fold++) {
             ofFold.add(new LinkedHashMap<>());
         }
-        ForestGrower grower = new ForestGrower(features, TREES);
+        BlendTrainer trainer = new BlendTrainer(features, TREES, FOLDS);
         for (Coverage coverage : Coverage.forests()) {
             List<TrainingRow> fit = fitting(coverage);
             if (isEnough(fit)) {
                 progress.accept("kind: " + coverage.code() + ", " + fit.size() + " spectra");
-                List<Forest> left = new ArrayList<>();
+                BlendTrainer.Learned learned =
+                        trainer.learn(coverage, fit, r -> folds.get(r.group()));
+                blends.put(coverage, learned.ofAll());
                 for (int fold = 0; fold < FOLDS; fold++) {
-                    int out = fold;
-                    left.add(
-                            grower.grow(
-                                    coverage,
-                                    fit.stream()
-                                            .filter(r -> folds.get(r.group()) != out)
-                                            .toList()));
+                    ofFold.get(fold).put(coverage, learned.leftOut().get(fold));
                 }
-                float sharpness = Sharpness.fit(left, fit, r -> folds.get(r.group()));
-                for (int fold = 0; fold < FOLDS; fold++) {
-                    ofFold.get(fold).put(coverage, left.get(fold).withSharpness(sharpness));
-                }
-                forests.put(coverage, grower.grow(coverage, fit).withSharpness(sharpness));
             }
         }
-        if (forests.isEmpty()) {
+        if (blends.isEmpty()) {
             throw new IllegalStateException(
                     kin.size()
                             + " spectra of known kind: too few to learn kinds from; expected some"
@@ -167,7 +158,7 @@ public final class KindTrainer {
         List<KindModel> left = plain.stream().map(m -> m.withSharpness(power)).toList();
         List<KindTrial> trials =
                 KindTrial.of(left, r -> folds.get(r.group()), rows, nonsense, features);
-        return new Trained(new KindModel(features, table, limits, forests, power), trials);
+        return new Trained(new KindModel(features, table, limits, blends, power), trials);
     }
 
     private static boolean isEnough(List<TrainingRow> fit) {

@@ -11,9 +11,11 @@ import java.util.Optional;
  * How remote from its nearest kin a spectrum must be to be like nothing known, for each set of
  * regions. Remoteness is ln(d / sqrt(i)): d is the distance to the nearest reference object, i the
  * distance of that one to its own nearest kin, so that sparsely known objects are not all remote.
+ * One that lies nearer to its kin than the scatter between like objects, 1, counts as that far: it
+ * is not sparse.
  *
- * @param limits by regions: the remoteness that 1% of the late dwarfs exceed, their own object left
- *     out
+ * @param limits by regions: the remoteness that 0.5% of the late dwarfs exceed, their own object
+ *     left out
  */
 record RemotenessLimits(Map<Integer, Double> limits) {
 
@@ -27,12 +29,12 @@ record RemotenessLimits(Map<Integer, Double> limits) {
                     Regions.J | Regions.H | Regions.K);
 
     /** Share of late dwarfs beyond the limit. */
-    private static final double BEYOND = 0.01;
+    private static final double BEYOND = 0.005;
 
     /** How fast the odds grow with remoteness. */
     private static final double STEEPNESS = 8;
 
-    private static final double LEAST_ISOLATION = 0.3;
+    private static final double LEAST_ISOLATION = 1;
     private static final int LEAST_ROWS = 20;
 
     RemotenessLimits {

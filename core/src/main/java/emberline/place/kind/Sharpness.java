@@ -5,7 +5,7 @@ import java.util.function.Function;
 import java.util.function.ToIntFunction;
 
 /**
- * Calibrates the probabilities of a forest on objects that it did not learn from: the exponent for
+ * Calibrates the probabilities of a learner on objects that it did not learn from: the exponent for
  * which the mean log probability of the true kind is greatest, every kind of equal weight.
  */
 final class Sharpness {
@@ -16,8 +16,8 @@ final class Sharpness {
 
     private Sharpness() {}
 
-    static float fit(
-            List<Forest> leftOut, List<TrainingRow> rows, ToIntFunction<TrainingRow> fold) {
+    static <T extends KindLearner<T>> float fit(
+            List<T> leftOut, List<TrainingRow> rows, ToIntFunction<TrainingRow> fold) {
         float best = 1;
         double highest = Double.NEGATIVE_INFINITY;
         for (double exponent = LEAST; exponent <= MOST + 1e-9; exponent += STEP) {
@@ -30,7 +30,7 @@ final class Sharpness {
         return best;
     }
 
-    /** The power of the mean over forests, from the same rows. */
+    /** The power of the mean over coverages, from the same rows. */
     static double ofModels(
             List<KindModel> leftOut, List<TrainingRow> rows, ToIntFunction<TrainingRow> fold) {
         double best = 1;
@@ -56,15 +56,15 @@ final class Sharpness {
         return best;
     }
 
-    private static double score(
-            List<Forest> leftOut,
+    private static <T extends KindLearner<T>> double score(
+            List<T> leftOut,
             List<TrainingRow> rows,
             ToIntFunction<TrainingRow> fold,
             float exponent) {
-        List<Forest> forests = leftOut.stream().map(f -> f.withSharpness(exponent)).toList();
+        List<T> learners = leftOut.stream().map(f -> f.withSharpness(exponent)).toList();
         return score(
                 rows,
-                row -> forests.get(fold.applyAsInt(row)).probabilities(row.vector().values()));
+                row -> learners.get(fold.applyAsInt(row)).probabilities(row.vector().values()));
     }
 
     private static double score(

@@ -11,7 +11,7 @@ import org.apache.commons.rng.UniformRandomProvider;
 import org.apache.commons.rng.simple.RandomSource;
 
 /**
- * Copies of a reference spectrum made worse, so that forests know noisy, coarse and reddened
+ * Copies of a reference spectrum made worse, so that what learns knows noisy, coarse and reddened
  * spectra, and the rare kinds as well as the frequent ones. Copies are made of the pixels and
  * measured like any spectrum.
  */

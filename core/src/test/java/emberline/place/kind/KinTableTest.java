@@ -122,9 +122,10 @@ class KinTableTest {
                 0.5, limits.unlike(new Remoteness(4, 1), Regions.K), 1e-4, "the widest elsewhere");
         assertEquals(0.5, limits.unlike(new Remoteness(4, 4), Regions.J), 1e-4, "alone as it is");
         assertEquals(
-                limits.unlike(new Remoteness(2, 0.3), Regions.J),
+                limits.unlike(new Remoteness(2, 1), Regions.J),
                 limits.unlike(new Remoteness(2, 0.01), Regions.J),
-                1e-12);
+                1e-12,
+                "nearer to its kin than like objects are is not sparse");
         assertEquals(0, new RemotenessLimits(Map.of()).unlike(new Remoteness(9, 1), Regions.J));
     }
 

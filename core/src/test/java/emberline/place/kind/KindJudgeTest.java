@@ -122,7 +122,7 @@ class KindJudgeTest {
                 KindVerdict verdict = verdict(SharedList.prepared(candidate));
                 if (verdict.kind().isPresent()) {
                     all++;
-                    kept += verdict.probability(ObjectKind.LATE_DWARF).orElse(0) >= 0.4 ? 1 : 0;
+                    kept += verdict.probability(ObjectKind.LATE_DWARF).orElse(0) >= 0.35 ? 1 : 0;
                 }
             }
         }
