@@ -158,8 +158,8 @@ final class CalibrateCommand implements Callable<Integer> {
                         + ": calibrate "
                         + listOptions.file().getFileName()
                         + ".",
-                "Our own measurements on public spectra; types, gravities and kinds as published;"
-                        + " `source` in reference.csv names the data set.",
+                "Measured by this program on the spectra of the list; types, gravities and kinds as"
+                        + " listed; `source` in reference.csv names the data set.",
                 what);
     }
 }
