@@ -137,17 +137,17 @@ class PlacerFindingsTest {
 
     @Test
     void onlyWhatMayBeALateDwarfGetsAType() {
-        assertTrue(KindGate.refusal(kind(0.4)).isEmpty());
-        assertEquals("kind: giant (p 0.61)", KindGate.refusal(kind(0.39)).orElseThrow());
+        assertTrue(KindGate.refusal(kind(0.35)).isEmpty());
+        assertEquals("kind: giant (p 0.66)", KindGate.refusal(kind(0.34)).orElseThrow());
         KindVerdict unknown = KindVerdict.notJudged("too noisy");
         assertTrue(KindGate.refusal(unknown).isEmpty());
         assertEquals(List.of("kind-not-judged"), codes(KindGate.findings(unknown, true)));
         assertTrue(KindGate.findings(unknown, false).isEmpty());
         assertTrue(KindGate.findings(kind(0.9), true).isEmpty());
         assertEquals(List.of("kind-unsure"), codes(KindGate.findings(kind(0.89), true)));
-        assertEquals(List.of("kind-unsure"), codes(KindGate.findings(kind(0.4), true)));
-        List<Finding> none = KindGate.findings(kind(0.39), true);
+        assertEquals(List.of("kind-unsure"), codes(KindGate.findings(kind(0.35), true)));
+        List<Finding> none = KindGate.findings(kind(0.34), true);
         assertEquals(List.of("not-a-late-dwarf"), codes(none));
-        assertTrue(none.get(0).text().contains("a probability of 0.61"), none.get(0).text());
+        assertTrue(none.get(0).text().contains("a probability of 0.66"), none.get(0).text());
     }
 }

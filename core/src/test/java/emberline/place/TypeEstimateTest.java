@@ -98,19 +98,19 @@ class TypeEstimateTest {
                 Map.of(ObjectKind.LATE_DWARF, pDwarf, ObjectKind.GIANT, 1 - pDwarf), "JHK", "");
     }
 
-    /** A type from 0.4 on, without a caution from 0.9 on. */
+    /** A type from 0.35 on, without a caution from 0.9 on. */
     @Test
     void theKindDecidesWhetherThereIsAType() {
-        assertTrue(KindGate.refusal(kind(0.4)).isEmpty());
-        assertEquals("kind: giant (p 0.61)", KindGate.refusal(kind(0.39)).orElseThrow());
+        assertTrue(KindGate.refusal(kind(0.35)).isEmpty());
+        assertEquals("kind: giant (p 0.66)", KindGate.refusal(kind(0.34)).orElseThrow());
         assertTrue(KindGate.refusal(KindVerdict.notJudged("no spectrum")).isEmpty());
         assertEquals(List.of(), KindGate.findings(kind(0.9), true));
-        Finding unsure = KindGate.findings(kind(0.4), true).get(0);
+        Finding unsure = KindGate.findings(kind(0.35), true).get(0);
         assertEquals("kind-unsure", unsure.code());
-        assertTrue(unsure.text().contains("only 0.40"), unsure.text());
-        Finding other = KindGate.findings(kind(0.39), true).get(0);
+        assertTrue(unsure.text().contains("only 0.35"), unsure.text());
+        Finding other = KindGate.findings(kind(0.34), true).get(0);
         assertEquals("not-a-late-dwarf", other.code());
-        assertTrue(other.text().contains("0.61 (most probable: giant)"), other.text());
+        assertTrue(other.text().contains("0.66 (most probable: giant)"), other.text());
         KindVerdict open = KindVerdict.notJudged("too short");
         Finding notJudged = KindGate.findings(open, true).get(0);
         assertEquals("kind-not-judged", notJudged.code());

@@ -112,15 +112,14 @@ final class KinTable {
      */
     private List<Neighbour> nearest(
             FeatureVector one, FeatureVector mask, int most, Predicate<ReferenceKin> allowed) {
-        int[] own = Arrays.stream(columns).filter(k -> one.has(k) && mask.has(k)).toArray();
-        int least = (int) Math.max(LEAST_IN_COMMON, Math.ceil(LEAST_SHARE * own.length));
+        Wanted wanted = wanted(one, mask);
         List<Neighbour> near = new ArrayList<>();
         for (ReferenceKin row : rows) {
             double worst =
                     near.size() < most ? Double.POSITIVE_INFINITY : near.get(most - 1).distance();
             if (allowed.test(row)) {
                 Optional<Neighbour> compared =
-                        compare(one, row, own, least, worst * worst * own.length);
+                        compare(wanted, row, worst * worst * wanted.columns.length);
                 if (compared.isPresent() && compared.get().distance() < worst) {
                     Neighbour found = compared.get();
                     int place = near.size();
@@ -137,22 +136,33 @@ final class KinTable {
         return near;
     }
 
+    /** The features of an object that are compared with those of every reference. */
+    @SuppressWarnings("ArrayRecordComponent") // never compared
+    private record Wanted(int[] columns, double[] values, double[] variances) {}
+
+    private Wanted wanted(FeatureVector one, FeatureVector mask) {
+        int[] own = Arrays.stream(columns).filter(k -> one.has(k) && mask.has(k)).toArray();
+        double[] values = new double[own.length];
+        double[] variances = new double[own.length];
+        for (int i = 0; i < own.length; i++) {
+            int k = own[i];
+            values[i] = one.values()[k];
+            variances[i] = scatter[k] * scatter[k] + one.sigmas()[k] * one.sigmas()[k];
+        }
+        return new Wanted(own, values, variances);
+    }
+
     /** The comparison; empty if too little is in common or the sum goes beyond the greatest. */
-    private Optional<Neighbour> compare(
-            FeatureVector one, ReferenceKin other, int[] own, int least, double greatest) {
-        double[] values = one.values();
-        double[] sigmas = one.sigmas();
+    private static Optional<Neighbour> compare(Wanted one, ReferenceKin other, double greatest) {
         double[] others = other.vector().values();
         double[] otherSigmas = other.vector().sigmas();
         double sum = 0;
         int count = 0;
-        for (int k : own) {
-            double difference = values[k] - others[k];
+        for (int i = 0; i < one.columns.length; i++) {
+            int k = one.columns[i];
+            double difference = one.values[i] - others[k];
             if (!Double.isNaN(difference)) { // NaN where the other has none
-                double variance =
-                        scatter[k] * scatter[k]
-                                + sigmas[k] * sigmas[k]
-                                + otherSigmas[k] * otherSigmas[k];
+                double variance = one.variances[i] + otherSigmas[k] * otherSigmas[k];
                 sum += Math.min(MOST * MOST, difference * difference / variance);
                 count++;
                 if (sum > greatest) {
@@ -160,6 +170,7 @@ final class KinTable {
                 }
             }
         }
+        double least = Math.max(LEAST_IN_COMMON, Math.ceil(LEAST_SHARE * one.columns.length));
         return count < least
                 ? Optional.empty()
                 : Optional.of(new Neighbour(other, Math.sqrt(sum / count), count));

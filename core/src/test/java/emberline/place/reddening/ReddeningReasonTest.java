@@ -121,27 +121,27 @@ class ReddeningReasonTest {
                         .isEmpty());
     }
 
-    /** A fifth for a star behind dust, an early star or nothing known, together. */
+    /** A twelfth for a star behind dust, an early star or nothing known, together. */
     @Test
     void aPossibleStarCallsForAFit() {
         Map<ObjectKind, Double> star =
                 Map.of(
-                        ObjectKind.LATE_DWARF, 0.79,
-                        ObjectKind.REDDENED_BACKGROUND, 0.09,
-                        ObjectKind.UNLIKE_KNOWN, 0.07,
-                        ObjectKind.EARLY_STAR, 0.05);
+                        ObjectKind.LATE_DWARF, 0.91,
+                        ObjectKind.REDDENED_BACKGROUND, 0.04,
+                        ObjectKind.UNLIKE_KNOWN, 0.03,
+                        ObjectKind.EARLY_STAR, 0.02);
         Optional<String> reason =
                 ReddeningCall.reason(
                         placed(Optional.empty(), gravity(0, 0), star, List.of(), List.of()));
-        assertTrue(reason.orElseThrow().endsWith("(p 0.21)"), reason.toString());
+        assertTrue(reason.orElseThrow().endsWith("(p 0.09)"), reason.toString());
         Map<ObjectKind, Double> giant =
                 Map.of(
                         ObjectKind.LATE_DWARF,
                         0.5,
                         ObjectKind.GIANT,
-                        0.4,
+                        0.43,
                         ObjectKind.EARLY_STAR,
-                        0.1);
+                        0.07);
         assertTrue(
                 ReddeningCall.reason(
                                 placed(
