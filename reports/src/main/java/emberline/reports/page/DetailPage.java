@@ -262,7 +262,9 @@ final class DetailPage {
                                     ? " and entered neither type nor gravity"
                                     : "; "
                                             + faint.size()
-                                            + " of them pulled the type by less than 0.005 each: "
+                                            + " of them pulled the type by less than "
+                                            + fullness.leastPullSubclass()
+                                            + " each: "
                                             + String.join(", ", faint))
                             + ". The JSON of the object has them under features, and emberline"
                             + " measure prints them.");

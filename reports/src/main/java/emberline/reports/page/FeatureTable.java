@@ -34,9 +34,6 @@ final class FeatureTable {
     /** Share of a window in telluric bands from which a feature is marked. */
     private static final double MOSTLY_TELLURIC = 0.5;
 
-    /** Pull (subclass) and share of the information below which a feature hardly matters. */
-    private static final double FAINT = 0.005;
-
     private static final float SYMBOL_WIDTH = 49;
     private static final float MARK_END = 57;
     private static final float MARK_WIDTH = 9;
@@ -109,10 +106,9 @@ final class FeatureTable {
             return true;
         }
         Contribution pull = contributions.get(id);
+        double least = fullness.leastPullSubclass();
         return pull != null
-                && (fullness.faintPulls()
-                        || Math.abs(pull.pullSubclass()) >= FAINT
-                        || pull.share() >= 2 * FAINT);
+                && (Math.abs(pull.pullSubclass()) >= least || pull.share() >= 2 * least);
     }
 
     /** The symbols of those of these that entered the type. */

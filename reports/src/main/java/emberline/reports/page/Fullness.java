@@ -12,7 +12,7 @@ enum Fullness {
     /** Notes by their names only; features that hardly pull the type stand with the others. */
     SHORT(2, 8, 16, 1),
     /** The least. */
-    SPARE(1, 2, 4, 0);
+    SPARE(1, 2, 3, 0);
 
     private final int kin;
     private final int paragraphLines;
@@ -43,7 +43,7 @@ enum Fullness {
 
     /** The most spectra whose origin is told. */
     int spectra() {
-        return Math.max(2, observations);
+        return this == SPARE ? 1 : Math.max(2, observations);
     }
 
     /** The most further observations besides the best. */
@@ -71,8 +71,15 @@ enum Fullness {
         return this != SPARE;
     }
 
-    /** Whether features that hardly pull the type stand with those that carry it. */
-    boolean faintPulls() {
-        return this == FULL || this == LESS;
+    /**
+     * Features that pull the type by less stand with those that do not carry it (subclass). The
+     * least leaves room for the papers where a hundred features pull.
+     */
+    double leastPullSubclass() {
+        return switch (this) {
+            case FULL, LESS -> 0;
+            case SHORT -> 0.005;
+            case SPARE -> 0.015;
+        };
     }
 }

@@ -63,12 +63,22 @@ final class TypeSections {
         placement.reddening().ifPresent(fit -> passage.item(reddening(fit)));
         reasons(passage, "In disagreement, not combined", of(estimates, Use.DISAGREES));
         List<RelationEstimate> shown = of(estimates, Use.SHOWN);
+        List<RelationEstimate> outside = of(estimates, Use.OUTSIDE_RANGE);
         if (fullness.names()) {
             reasons(passage, "Shown, not combined", shown);
-        } else if (!shown.isEmpty()) {
-            passage.item("Shown, not combined: " + shown.size() + ", told in the JSON.");
+            outside(passage, outside);
+            notMeasured(passage, of(estimates, Use.NOT_MEASURED));
+        } else {
+            passage.item(
+                    "Told in the JSON: "
+                            + shown.size()
+                            + " not combined, "
+                            + outside.size()
+                            + " outside the valid range.");
         }
-        List<RelationEstimate> outside = of(estimates, Use.OUTSIDE_RANGE);
+    }
+
+    private void outside(Passage passage, List<RelationEstimate> outside) {
         if (!outside.isEmpty()) {
             passage.item(
                     "Index outside the valid range ("
@@ -80,7 +90,9 @@ final class TypeSections {
                                     .collect(Collectors.joining(fullness.ranges() ? "; " : ", "))
                             + ".");
         }
-        List<RelationEstimate> missing = of(estimates, Use.NOT_MEASURED);
+    }
+
+    private void notMeasured(Passage passage, List<RelationEstimate> missing) {
         if (!missing.isEmpty()) {
             passage.item(
                     "Index not measured: "
