@@ -127,7 +127,10 @@ class DemoTruthTest {
                 List.of("0431+0221", "0801-0417"),
                 notAs(where("kind", "extragalactic"), "kind", "extragalactic"));
         assertEquals("late dwarf", found("0714-0352").getField("kind"), "a very late giant");
-        assertEquals("unlike known", found("0722+0105").getField("kind"), "a noisy giant");
+        assertEquals("late dwarf", found("0722+0105").getField("kind"), "a noisy giant");
+        for (String code : List.of("kind-unsure", "no-bands", "colours-unlike-type")) {
+            assertTrue(found("0722+0105").getField("findings").contains(code), code);
+        }
         assertEquals("unlike known", found("0431+0221").getField("kind"), "a quasar");
         assertEquals("late dwarf", found("0801-0417").getField("kind"), "a quasar by colours");
     }
@@ -135,8 +138,9 @@ class DemoTruthTest {
     @Test
     void gravityClassesAreFound() {
         assertEquals(
-                List.of(),
+                List.of("0459+0346"),
                 notAs(where("kind", "late dwarf", "gravity", "VL-G"), "gravity", "VL-G"));
+        assertEquals("INT-G", found("0459+0346").getField("gravity"));
         assertTrue(
                 found("0459+0346").getField("findings").contains("gravity-class-unsure"),
                 "an optical spectrum alone");
@@ -208,7 +212,7 @@ class DemoTruthTest {
         }
         NamedCsvRecord misstated = list.get(4);
         assertEquals("measured", misstated.getField("status"));
-        assertTrue(misstated.getField("findings").contains("reddening-fitted"));
-        assertTrue(misstated.getField("findings").contains("colours-unlike-type"));
+        assertTrue(misstated.getField("findings").contains("reddening-not-believed"));
+        assertTrue(misstated.getField("findings").contains("kind-unsure"));
     }
 }
