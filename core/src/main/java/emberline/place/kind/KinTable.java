@@ -136,9 +136,9 @@ final class KinTable {
         return near;
     }
 
-    /** The features of an object that are compared with those of every reference. */
+    /** The features of an object to compare, and how many of them a reference must have. */
     @SuppressWarnings("ArrayRecordComponent") // never compared
-    private record Wanted(int[] columns, double[] values, double[] variances) {}
+    private record Wanted(int[] columns, double[] values, double[] variances, int least) {}
 
     private Wanted wanted(FeatureVector one, FeatureVector mask) {
         int[] own = Arrays.stream(columns).filter(k -> one.has(k) && mask.has(k)).toArray();
@@ -149,7 +149,8 @@ final class KinTable {
             values[i] = one.values()[k];
             variances[i] = scatter[k] * scatter[k] + one.sigmas()[k] * one.sigmas()[k];
         }
-        return new Wanted(own, values, variances);
+        int least = (int) Math.max(LEAST_IN_COMMON, Math.ceil(LEAST_SHARE * own.length));
+        return new Wanted(own, values, variances, least);
     }
 
     /** The comparison; empty if too little is in common or the sum goes beyond the greatest. */
@@ -170,8 +171,7 @@ final class KinTable {
                 }
             }
         }
-        double least = Math.max(LEAST_IN_COMMON, Math.ceil(LEAST_SHARE * one.columns.length));
-        return count < least
+        return count < one.least
                 ? Optional.empty()
                 : Optional.of(new Neighbour(other, Math.sqrt(sum / count), count));
     }
