@@ -51,7 +51,7 @@ public final class ReferenceMaker {
                         candidate.name(),
                         ObjectGroup.of(candidate),
                         candidate.number("known_type_number"),
-                        candidate.text("known_gravity").orElse(""),
+                        KnownGravity.of(candidate),
                         candidate.text("known_kind").orElse(""),
                         candidate.text("tier").orElse(""),
                         candidate.text("dataset").orElse(""),

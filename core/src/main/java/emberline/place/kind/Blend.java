@@ -36,14 +36,10 @@ final class Blend implements KindLearner<Blend> {
     public double[] probabilities(double[] values) {
         double[] p = forest.probabilities(values);
         double[] other = regression.probabilities(values);
-        double sum = 0;
         for (int kind = 0; kind < p.length; kind++) {
-            p[kind] = Math.pow(p[kind] * other[kind], sharpness / 2);
-            sum += p[kind];
+            p[kind] *= other[kind];
         }
-        for (int kind = 0; kind < p.length; kind++) {
-            p[kind] /= sum;
-        }
+        Shares.sharpen(p, sharpness / 2);
         return p;
     }
 

@@ -91,17 +91,13 @@ final class Forest implements KindLearner<Forest> {
     }
 
     private double[] calibrated(double[] sum) {
-        double total = 0;
         for (int kind = 0; kind < KINDS; kind++) {
-            if (trainingShares[kind] > 0) {
-                double share = (sum[kind] / roots.length + LEAST) / trainingShares[kind];
-                sum[kind] = Math.pow(share, sharpness);
-                total += sum[kind];
-            }
+            sum[kind] =
+                    trainingShares[kind] > 0
+                            ? (sum[kind] / roots.length + LEAST) / trainingShares[kind]
+                            : 0;
         }
-        for (int kind = 0; kind < KINDS; kind++) {
-            sum[kind] /= total;
-        }
+        Shares.sharpen(sum, sharpness);
         return sum;
     }
 

@@ -3,6 +3,7 @@ package emberline.place.kind;
 import java.io.DataInputStream;
 import java.io.DataOutputStream;
 import java.io.IOException;
+import org.apache.commons.math3.util.FastMath;
 
 /**
  * A multinomial logistic regression of the kinds on squeezed features: {@code asinh((x - m) / u)},
@@ -55,8 +56,7 @@ final class Regression implements KindLearner<Regression> {
         if (Double.isNaN(value)) {
             return 0;
         }
-        double t = (value - median) / unit;
-        return Math.signum(t) * Math.log(Math.abs(t) + Math.sqrt(1 + t * t));
+        return FastMath.asinh((value - median) / unit);
     }
 
     @Override
@@ -77,39 +77,12 @@ final class Regression implements KindLearner<Regression> {
                 p[kind] += weights[k * kinds + kind] * x;
             }
         }
-        toShares(p, known);
-        double total = 0;
+        Shares.fromLogarithms(p, known);
         for (int kind = 0; kind < kinds; kind++) {
-            if (known[kind]) {
-                p[kind] = Math.pow(p[kind] + LEAST, sharpness);
-                total += p[kind];
-            }
+            p[kind] = known[kind] ? p[kind] + LEAST : 0;
         }
-        for (int kind = 0; kind < kinds; kind++) {
-            p[kind] /= total;
-        }
+        Shares.sharpen(p, sharpness);
         return p;
-    }
-
-    /**
-     * Turns logarithms into shares of the known kinds that add up to 1, 0 for the others.
-     *
-     * @return the logarithm of what the shares were divided by
-     */
-    static double toShares(double[] logs, boolean[] known) {
-        double most = Double.NEGATIVE_INFINITY;
-        for (int kind = 0; kind < logs.length; kind++) {
-            most = known[kind] ? Math.max(most, logs[kind]) : most;
-        }
-        double sum = 0;
-        for (int kind = 0; kind < logs.length; kind++) {
-            logs[kind] = known[kind] ? Math.exp(logs[kind] - most) : 0;
-            sum += logs[kind];
-        }
-        for (int kind = 0; kind < logs.length; kind++) {
-            logs[kind] /= sum;
-        }
-        return most + Math.log(sum);
     }
 
     void write(DataOutputStream out) throws IOException {

@@ -132,7 +132,7 @@ final class RegressionFitter {
                 }
             }
             double logOfTruth = p[truth];
-            double loss = weightOfKind[truth] * (Regression.toShares(p, known) - logOfTruth);
+            double loss = weightOfKind[truth] * (Shares.fromLogarithms(p, known) - logOfTruth);
             p[truth] -= 1;
             for (int kind = 0; kind < p.length; kind++) {
                 p[kind] *= weightOfKind[truth];

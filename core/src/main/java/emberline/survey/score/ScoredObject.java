@@ -9,6 +9,7 @@ import emberline.prepare.BandSignal;
 import emberline.spectrum.Candidate;
 import emberline.spectrum.Finding;
 import emberline.spectrum.SpectralType;
+import emberline.survey.KnownGravity;
 import emberline.survey.ObjectGroup;
 import emberline.survey.ObjectResult;
 import emberline.survey.SpectrumResult;
@@ -86,7 +87,7 @@ public record ScoredObject(
             return new Known(
                     kind,
                     number,
-                    candidate.text("known_gravity").orElse(""),
+                    KnownGravity.of(candidate),
                     KnownMetallicity.of(candidate, kind, number.isPresent()));
         }
 
