@@ -2,6 +2,7 @@ package emberline.survey;
 
 import emberline.place.GravityClass;
 import emberline.spectrum.Candidate;
+import emberline.spectrum.SpectralType;
 import java.util.EnumSet;
 import java.util.Optional;
 import java.util.Set;
@@ -17,9 +18,6 @@ public final class KnownGravity {
 
     /** Low gravity whose class is not stated. */
     private static final String LOW = "young";
-
-    private static final Pattern REMARKS =
-            Pattern.compile("\\s*(?:[eu]?s?d/?)*[KMLTY]\\s*\\d(?:\\.\\d+)?:*(?<remarks>.*)");
 
     private static final Pattern LETTER =
             Pattern.compile("(?<![a-z_])(alpha|beta|gamma|delta)(?![a-z0-9_])|[αβγδ]");
@@ -41,12 +39,11 @@ public final class KnownGravity {
     }
 
     private static String remarked(String type) {
-        Matcher typed = REMARKS.matcher(type);
-        if (!typed.matches()) {
+        if (SpectralType.parse(type).isEmpty()) {
             return "";
         }
         Set<GravityClass> classes = EnumSet.noneOf(GravityClass.class);
-        Matcher letter = LETTER.matcher(typed.group("remarks"));
+        Matcher letter = LETTER.matcher(type);
         while (letter.find()) {
             classes.add(ofLetter(letter.group()));
         }
