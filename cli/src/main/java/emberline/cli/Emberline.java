@@ -55,6 +55,15 @@ public final class Emberline implements Runnable {
     private static final Set<Class<?>> ABOUT_ALL =
             Set.of(CompletionCommand.class, ManualCommand.class);
 
+    /** Commands that draw nothing. */
+    private static final Set<Class<?>> WITHOUT_CHARTS =
+            Set.of(
+                    SurveyStatusCommand.class,
+                    MeasureCommand.class,
+                    PlaceCommand.class,
+                    JudgeCommand.class,
+                    CatalogueCommand.class);
+
     @Spec private CommandSpec spec;
 
     /** Runs a command line and ends the program with its exit code. */
@@ -64,6 +73,19 @@ public final class Emberline implements Runnable {
                 .reset(); // the table and FITS libraries log what we report better
         PrintWriter out = new PrintWriter(System.out, false, StandardCharsets.UTF_8);
         PrintWriter err = new PrintWriter(System.err, true, StandardCharsets.UTF_8);
+        List<Class<?>> asked = asked(arguments);
+        if (asked.size() == 1 && !WITHOUT_CHARTS.containsAll(asked)) {
+            prepareFonts(err);
+        }
+        int code = commandLine(out, err, asked).execute(arguments);
+        if (out.checkError()) {
+            err.println("standard output: cannot be written; check where it goes, then run again");
+            code = ExitCode.NOT_WRITTEN;
+        }
+        System.exit(code);
+    }
+
+    private static void prepareFonts(PrintWriter err) {
         try {
             HeadlessFonts.prepare();
         } catch (UncheckedIOException e) {
@@ -73,12 +95,6 @@ public final class Emberline implements Runnable {
                             + "); expected a writable one, for the fonts of the reports. Choose"
                             + " another by the Java option -Djava.io.tmpdir=DIR.");
         }
-        int code = commandLine(out, err, asked(arguments)).execute(arguments);
-        if (out.checkError()) {
-            err.println("standard output: cannot be written; check where it goes, then run again");
-            code = ExitCode.NOT_WRITTEN;
-        }
-        System.exit(code);
     }
 
     /**

@@ -20,8 +20,8 @@ final class CatalogueLinks {
         String argument = shortfall.parts(PartRole.ARGUMENT).get(0).feature();
         return relations.stream()
                 .filter(relation -> relation.quantity() == Quantity.SOLAR_TIO5)
-                .filter(relation -> relation.source().equals(shortfall.source()))
                 .filter(relation -> relation.feature().equals(argument))
+                .filter(relation -> relation.source().key().equals(shortfall.source().key()))
                 .findFirst();
     }
 

@@ -8,7 +8,7 @@ import java.util.List;
 interface CatalogueTables {
 
     /** The names of the tables relative to the root, with forward slashes, sorted. */
-    List<String> files() throws InvalidCatalogueException;
+    List<String> files();
 
     /** Opens a table as UTF-8 text. */
     Reader open(String file) throws IOException;

@@ -13,11 +13,18 @@ final class ResourceTables implements CatalogueTables {
 
     private static final String LIST = "files.csv";
 
+    private final List<String> files;
+
+    ResourceTables() throws InvalidCatalogueException {
+        files =
+                CatalogueTable.read(this, LIST, List.of("file"), List.of()).stream()
+                        .map(row -> row.textOrBlank("file"))
+                        .toList();
+    }
+
     @Override
-    public List<String> files() throws InvalidCatalogueException {
-        return CatalogueTable.read(this, LIST, List.of("file"), List.of()).stream()
-                .map(row -> row.textOrBlank("file"))
-                .toList();
+    public List<String> files() {
+        return files;
     }
 
     @Override

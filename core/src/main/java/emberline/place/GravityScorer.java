@@ -9,7 +9,7 @@ import emberline.measure.Measurements;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.EnumMap;
-import java.util.LinkedHashMap;
+import java.util.HashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -38,15 +38,19 @@ final class GravityScorer {
     /** A type this close to the printed range is scored at its end (subclass). */
     private static final double EDGE = 0.5;
 
-    private final Map<Feature, NavigableMap<Double, GravityThreshold>> thresholds =
-            new LinkedHashMap<>();
+    private final List<Feature> features = new ArrayList<>();
+
+    /** The printed limits by type number, by the id of the feature. */
+    private final Map<String, NavigableMap<Double, GravityThreshold>> thresholds = new HashMap<>();
 
     GravityScorer(FeatureCatalogue catalogue) {
         for (GravityThreshold threshold : catalogue.gravityThresholds()) {
             Feature feature = catalogue.feature(threshold.feature()).orElseThrow();
-            thresholds
-                    .computeIfAbsent(feature, unseen -> new TreeMap<>())
-                    .put(threshold.typeNumber(), threshold);
+            if (!thresholds.containsKey(feature.id())) {
+                features.add(feature);
+                thresholds.put(feature.id(), new TreeMap<>());
+            }
+            thresholds.get(feature.id()).put(threshold.typeNumber(), threshold);
         }
     }
 
@@ -73,7 +77,7 @@ final class GravityScorer {
     GravityVerdict judge(
             Measurements measurements, TypeEstimate type, long seed, boolean withProbabilities) {
         List<GravityScore> scores = new ArrayList<>();
-        for (Feature feature : thresholds.keySet()) {
+        for (Feature feature : features) {
             scores.add(score(feature, measurements, type.typeNumber()));
         }
         List<GravityScore> scored = scores.stream().filter(s -> s.score().isPresent()).toList();
@@ -117,7 +121,7 @@ final class GravityScorer {
     private GravityScore score(Feature feature, Measurements measurements, double typeNumber) {
         Optional<Limits> limits = limits(feature, typeNumber);
         boolean lowIfBelow =
-                thresholds.get(feature).firstEntry().getValue().lowGravityIf()
+                thresholds.get(feature.id()).firstEntry().getValue().lowGravityIf()
                         == LowGravityIf.BELOW;
         Measurement index = measurements.of(feature.id()).orElseThrow().result();
         OptionalInt score =
@@ -145,7 +149,7 @@ final class GravityScorer {
     }
 
     private Optional<Limits> limits(Feature feature, double typeNumber) {
-        NavigableMap<Double, GravityThreshold> table = thresholds.get(feature);
+        NavigableMap<Double, GravityThreshold> table = thresholds.get(feature.id());
         double inside = Math.min(Math.max(typeNumber, table.firstKey()), table.lastKey());
         if (Math.abs(inside - typeNumber) > EDGE) {
             return Optional.empty();

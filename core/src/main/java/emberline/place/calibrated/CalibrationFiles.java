@@ -4,6 +4,7 @@ import de.siegmar.fastcsv.reader.NamedCsvRecord;
 import emberline.read.ProductTable;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -72,9 +73,13 @@ public final class CalibrationFiles {
         for (int i = 0; i < matrix.length; i++) {
             matrix[i][i] = 1;
         }
+        Map<String, Integer> place = new HashMap<>();
+        for (String feature : features) {
+            place.put(feature, place.size());
+        }
         for (NamedCsvRecord row : rows(CORRELATIONS)) {
-            int one = features.indexOf(row.getField("feature"));
-            int two = features.indexOf(row.getField("other"));
+            int one = place.get(row.getField("feature"));
+            int two = place.get(row.getField("other"));
             matrix[one][two] = Double.parseDouble(row.getField("correlation"));
             matrix[two][one] = matrix[one][two];
         }

@@ -139,27 +139,13 @@ final class Forest implements KindLearner<Forest> {
             columns[k] = in.readInt();
             fill[k] = in.readFloat();
         }
-        float[] shares = new float[KINDS];
-        for (int kind = 0; kind < KINDS; kind++) {
-            shares[kind] = in.readFloat();
-        }
+        float[] shares = NumberBlocks.floats(in, KINDS);
         float sharpness = in.readFloat();
-        int[] roots = new int[in.readInt()];
-        for (int k = 0; k < roots.length; k++) {
-            roots[k] = in.readInt();
-        }
+        int[] roots = NumberBlocks.ints(in, in.readInt());
         byte[] splits = new byte[in.readInt()];
         in.readFully(splits);
-        float[] thresholds = new float[splits.length];
-        for (int node = 0; node < splits.length; node++) {
-            if (splits[node] >= 0) {
-                thresholds[node] = in.readFloat();
-            }
-        }
-        int[] children = new int[splits.length];
-        for (int node = 0; node < children.length; node++) {
-            children[node] = in.readInt();
-        }
+        float[] thresholds = thresholds(splits, in);
+        int[] children = NumberBlocks.ints(in, splits.length);
         byte[] leaves = new byte[in.readInt()];
         in.readFully(leaves);
         return new Forest(
@@ -168,5 +154,22 @@ final class Forest implements KindLearner<Forest> {
                 shares,
                 sharpness,
                 new Nodes(roots, splits, thresholds, children, leaves));
+    }
+
+    /** Thresholds stand in the file for nodes that split, one after the other. */
+    private static float[] thresholds(byte[] splits, DataInputStream in) throws IOException {
+        int splitting = 0;
+        for (byte split : splits) {
+            splitting += split >= 0 ? 1 : 0;
+        }
+        float[] written = NumberBlocks.floats(in, splitting);
+        float[] thresholds = new float[splits.length];
+        int next = 0;
+        for (int node = 0; node < splits.length; node++) {
+            if (splits[node] >= 0) {
+                thresholds[node] = written[next++];
+            }
+        }
+        return thresholds;
     }
 }

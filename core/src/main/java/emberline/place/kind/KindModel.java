@@ -213,10 +213,7 @@ public final class KindModel {
         for (int k = 0; k < limitCount; k++) {
             limits.put(in.readInt(), in.readDouble());
         }
-        float[] scatter = new float[count];
-        for (int k = 0; k < count; k++) {
-            scatter[k] = in.readFloat();
-        }
+        float[] scatter = NumberBlocks.floats(in, count);
         int[] columns = KinTable.columns(features);
         List<ReferenceKin> rows = new ArrayList<>();
         int rowCount = in.readInt();
@@ -249,9 +246,10 @@ public final class KindModel {
         double[] sigmas = new double[count];
         Arrays.fill(values, Double.NaN);
         Arrays.fill(sigmas, Double.NaN);
-        for (int k : columns) {
-            values[k] = in.readFloat();
-            sigmas[k] = in.readFloat();
+        float[] written = NumberBlocks.floats(in, 2 * columns.length);
+        for (int i = 0; i < columns.length; i++) {
+            values[columns[i]] = written[2 * i];
+            sigmas[columns[i]] = written[2 * i + 1];
         }
         return new ReferenceKin(
                 object,

@@ -114,10 +114,7 @@ final class Regression implements KindLearner<Regression> {
         for (int kind = 0; kind < known.length; kind++) {
             known[kind] = in.readBoolean();
         }
-        float[] weights = new float[(columns.length + 1) * Forest.KINDS];
-        for (int k = 0; k < weights.length; k++) {
-            weights[k] = in.readFloat();
-        }
+        float[] weights = NumberBlocks.floats(in, (columns.length + 1) * Forest.KINDS);
         return new Regression(columns, medians, units, known, weights, in.readFloat());
     }
 }
