@@ -110,6 +110,33 @@ class LauncherTest {
         assertTrue(many.out().startsWith(jar() + "<place><1>"), many.out());
     }
 
+    /** Java would crash on an archive that was cut off, and cannot use two. */
+    @Test
+    void anArchiveOfClassesIsUsedWhereItIsWhole() throws IOException, InterruptedException {
+        String launcher = home.resolve("emberline").toString();
+        Path archive = Files.writeString(home.resolve("emberline.jsa"), "0123456789");
+        String with =
+                "<-Xlog:cds=off><-XX:SharedArchiveFile="
+                        + home.toRealPath().resolve("emberline.jsa")
+                        + ">";
+        assertEquals(quick(), run(Map.of(), folder, launcher).out());
+        Path size = Files.writeString(home.resolve("emberline.jsa.bytes"), "10\n");
+        assertEquals(with + quick(), run(Map.of(), folder, launcher).out());
+        assertEquals(
+                with + jar() + "<sort><a.csv>",
+                run(Map.of(), folder, launcher, "sort", "a.csv").out());
+        Map<String, String> other =
+                Map.of("EMBERLINE_JAVA_OPTIONS", "-XX:SharedArchiveFile=/other.jsa");
+        assertEquals(
+                "<-XX:SharedArchiveFile=/other.jsa>" + jar(), run(other, folder, launcher).out());
+        Files.writeString(archive, "012345678");
+        assertEquals(quick(), run(Map.of(), folder, launcher).out());
+        Files.writeString(size, "");
+        CommandRun noSize = run(Map.of(), folder, launcher);
+        assertEquals(quick(), noSize.out());
+        assertEquals("", noSize.err());
+    }
+
     @Test
     void withoutAJarTheRuntimeHoldsTheProgram() throws IOException, InterruptedException {
         Files.delete(home.resolve("emberline.jar"));

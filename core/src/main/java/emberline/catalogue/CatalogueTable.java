@@ -5,7 +5,6 @@ import de.siegmar.fastcsv.reader.CsvParseException;
 import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.CsvRecord;
 import java.io.IOException;
-import java.io.Reader;
 import java.io.UncheckedIOException;
 import java.util.ArrayList;
 import java.util.HashMap;
@@ -56,15 +55,14 @@ final class CatalogueTable {
     private static List<CsvRecord> records(CatalogueTables tables, String file)
             throws InvalidCatalogueException {
         List<CsvRecord> records = new ArrayList<>();
-        try (Reader text = tables.open(file);
-                CsvReader<CsvRecord> reader =
-                        CsvReader.builder()
-                                .commentStrategy(CommentStrategy.SKIP)
-                                .skipEmptyLines(true)
-                                .detectBomHeader(false)
-                                .allowExtraFields(true)
-                                .allowMissingFields(true)
-                                .ofCsvRecord(text)) {
+        try (CsvReader<CsvRecord> reader =
+                CsvReader.builder()
+                        .commentStrategy(CommentStrategy.SKIP)
+                        .skipEmptyLines(true)
+                        .detectBomHeader(false)
+                        .allowExtraFields(true)
+                        .allowMissingFields(true)
+                        .ofCsvRecord(tables.text(file))) {
             reader.forEach(records::add);
         } catch (CsvParseException | UncheckedIOException | IOException e) {
             throw new InvalidCatalogueException(

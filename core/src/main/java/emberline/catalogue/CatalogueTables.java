@@ -1,7 +1,6 @@
 package emberline.catalogue;
 
 import java.io.IOException;
-import java.io.Reader;
 import java.util.List;
 
 /** A set of tables to load: the product's own, or a user's folder. */
@@ -10,8 +9,8 @@ interface CatalogueTables {
     /** The names of the tables relative to the root, with forward slashes, sorted. */
     List<String> files();
 
-    /** Opens a table as UTF-8 text. */
-    Reader open(String file) throws IOException;
+    /** A table, read as UTF-8. */
+    String text(String file) throws IOException;
 
     /** What to call a table, or the root for a blank name, in a message. */
     String label(String file);

@@ -1,8 +1,6 @@
 package emberline.catalogue;
 
 import java.io.IOException;
-import java.io.Reader;
-import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
@@ -85,8 +83,8 @@ final class FolderTables implements CatalogueTables {
     }
 
     @Override
-    public Reader open(String file) throws IOException {
-        return Files.newBufferedReader(folder.resolve(file), StandardCharsets.UTF_8);
+    public String text(String file) throws IOException {
+        return Files.readString(folder.resolve(file));
     }
 
     @Override

@@ -3,8 +3,6 @@ package emberline.catalogue;
 import java.io.FileNotFoundException;
 import java.io.IOException;
 import java.io.InputStream;
-import java.io.InputStreamReader;
-import java.io.Reader;
 import java.nio.charset.StandardCharsets;
 import java.util.List;
 
@@ -28,12 +26,13 @@ final class ResourceTables implements CatalogueTables {
     }
 
     @Override
-    public Reader open(String file) throws IOException {
-        InputStream stream = ResourceTables.class.getResourceAsStream(file);
-        if (stream == null) {
-            throw new FileNotFoundException(label(file) + ": no such resource");
+    public String text(String file) throws IOException {
+        try (InputStream stream = ResourceTables.class.getResourceAsStream(file)) {
+            if (stream == null) {
+                throw new FileNotFoundException(label(file) + ": no such resource");
+            }
+            return new String(stream.readAllBytes(), StandardCharsets.UTF_8);
         }
-        return new InputStreamReader(stream, StandardCharsets.UTF_8);
     }
 
     @Override

@@ -25,10 +25,11 @@ final class ChiCurve {
 
     /** The curves of a catalogue in the order of its tables. */
     static List<ChiCurve> all(FeatureCatalogue catalogue) {
-        Map<Source, ChiCurve> curves = new LinkedHashMap<>();
+        Map<String, ChiCurve> curves = new LinkedHashMap<>();
         for (ActivityFactor factor : catalogue.activityFactors()) {
             if (factor.quantity() == Quantity.CHI) {
-                curves.computeIfAbsent(factor.source(), ChiCurve::new)
+                curves.computeIfAbsent(
+                                factor.source().key(), key -> new ChiCurve(factor.source()))
                         .byType
                         .put(factor.typeNumber().orElseThrow(), factor);
             }

@@ -5,7 +5,6 @@ import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
 import java.io.IOException;
 import java.io.InputStream;
-import java.io.InputStreamReader;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.util.List;
@@ -40,19 +39,25 @@ public final class ProductTable {
      * @throws IllegalStateException if the product was built without the table
      */
     public List<NamedCsvRecord> rows() {
-        InputStream stream = ProductTable.class.getResourceAsStream(resource);
-        if (stream == null) {
-            throw new IllegalStateException(
-                    resource
-                            + ": not in the product: expected a table of the build. Build it anew.");
-        }
         try (CsvReader<NamedCsvRecord> rows =
                 CsvReader.builder()
                         .commentStrategy(CommentStrategy.SKIP)
-                        .ofNamedCsvRecord(new InputStreamReader(stream, StandardCharsets.UTF_8))) {
+                        .ofNamedCsvRecord(text())) {
             return rows.stream().toList();
         } catch (IOException e) {
             throw new UncheckedIOException(e);
+        }
+    }
+
+    private String text() throws IOException {
+        try (InputStream stream = ProductTable.class.getResourceAsStream(resource)) {
+            if (stream == null) {
+                throw new IllegalStateException(
+                        resource
+                                + ": not in the product: expected a table of the build. Build it"
+                                + " anew.");
+            }
+            return new String(stream.readAllBytes(), StandardCharsets.UTF_8);
         }
     }
 

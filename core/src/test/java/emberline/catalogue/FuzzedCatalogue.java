@@ -2,8 +2,6 @@ package emberline.catalogue;
 
 import java.io.FileNotFoundException;
 import java.io.IOException;
-import java.io.Reader;
-import java.io.StringReader;
 import java.nio.charset.StandardCharsets;
 import java.util.List;
 import java.util.NavigableMap;
@@ -50,12 +48,12 @@ public final class FuzzedCatalogue {
         }
 
         @Override
-        public Reader open(String file) throws IOException {
+        public String text(String file) throws IOException {
             String text = texts.get(file);
             if (text == null) {
                 throw new FileNotFoundException(file);
             }
-            return new StringReader(text);
+            return text;
         }
 
         @Override

@@ -64,22 +64,7 @@ cp "$target/emberline" "$image/"
 chmod +x "$image/emberline"
 cp -R "$target/lib/licences" "$target/lib/THIRD-PARTY.csv" "$image/"
 
-# The archive holds the classes of a few commands, reports and ledger included.
-run() {
-  list=$1
-  shift
-  "$image/runtime/bin/java" -XX:DumpLoadedClassList="$work/$list" -m emberline/emberline.cli.Emberline "$@" \
-    >"$work/$list.out" 2>&1
-}
-cat >"$work/spectrum.csv" <<'END'
-wavelength_micron,flux,sigma
-END
-awk 'BEGIN { for (l = 0.8; l < 2.45; l += 0.004) printf "%.3f,%.4f,0.02\n", l, 1 + 0.4 * sin(7 * l) }' >>"$work/spectrum.csv"
-printf 'name,spectrum,medium,resolution\nA,spectrum.csv,vacuum,120\n' >"$work/list.csv"
-run sort.classes sort "$work/list.csv" --out "$work/out"
-run place.classes place "$work/spectrum.csv" --medium vacuum --resolution 120
-run report.classes report "$work/spectrum.csv" --medium vacuum --resolution 120 --out "$work/report"
-awk '!seen[$0]++' "$work/place.classes" "$work/report.classes" "$work/sort.classes" >"$work/classes.list"
+sh "$(dirname "$0")/class-list.sh" "$work" "$image/runtime/bin/java" -m emberline/emberline.cli.Emberline
 "$image/runtime/bin/java" -Xshare:dump -XX:SharedClassListFile="$work/classes.list" \
   -m emberline/emberline.cli.Emberline >"$work/archive.out" 2>&1
 
