@@ -1,24 +1,25 @@
 #!/bin/sh
-# Writes WORK/classes.list: what a few commands load, reports and ledger included. The rest of the words start the program.
-# class-list.sh WORK JAVA WORD...
+# Writes WORK/classes.list: what a few commands load for some objects of a survey, ledger and reports included. The words after
+# the survey start the program.
+# class-list.sh WORK SURVEY JAVA WORD...
 set -e
 work=$1
-java=$2
-shift 2
-
-cat >"$work/spectrum.csv" <<'END'
-wavelength_micron,flux,sigma
-END
-awk 'BEGIN { for (l = 0.8; l < 2.45; l += 0.004) printf "%.3f,%.4f,0.02\n", l, 1 + 0.4 * sin(7 * l) }' >>"$work/spectrum.csv"
-printf 'name,spectrum,medium,resolution\nA,spectrum.csv,vacuum,120\n' >"$work/list.csv"
+survey=$2
+java=$3
+shift 3
 
 list() {
   list=$1
   shift
-  "$java" -Xshare:auto -XX:DumpLoadedClassList="$work/$list" "$@" >"$work/$list.out" 2>&1
+  "$java" -XX:TieredStopAtLevel=1 -XX:+UseSerialGC -Xshare:auto -XX:DumpLoadedClassList="$work/$list" "$@" >"$work/$list.out" 2>&1
 }
-list place.classes "$@" place "$work/spectrum.csv" --medium vacuum --resolution 120
-list report.classes "$@" report "$work/spectrum.csv" --medium vacuum --resolution 120 --out "$work/report"
+# A file of each format; a dwarf with a velocity, one of low gravity, a T dwarf, one without a spectrum.
+spectra=$survey/spectra
+list place.classes "$@" place "$spectra/tamarisk-0217+0635.fits" "$spectra/tamarisk-0246+0411.vot" \
+  "$spectra/tamarisk-0308+0256.ecsv" "$spectra/tamarisk-0722+0105.csv" "$spectra/tamarisk-0131-0207.txt"
+list report.classes "$@" report "$spectra/tamarisk-0714-0352.fits" --out "$work/report"
+ln -s "$spectra" "$work/spectra"
+head -n 5 "$survey/candidates.csv" >"$work/list.csv"
 list sort.classes "$@" sort "$work/list.csv" --out "$work/out"
 
 # Classes of before Java 6 can be archived as long as nothing links them, which a lambda of theirs would.

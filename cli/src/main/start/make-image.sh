@@ -1,10 +1,12 @@
 #!/bin/sh
-# Makes TARGET/image from a Java home and what the build put into TARGET: a folder that may be moved and needs no Java.
+# Makes TARGET/image from a Java home and what the build put into TARGET: a folder that may be moved and needs no Java. The
+# classes that placing objects of SURVEY loads are archived in it. make-image.sh JAVA_HOME TARGET SURVEY
 # All jars become one module of the runtime; with the classes in the runtime's own file, the archive of loaded classes
 # (class-data sharing) stays valid wherever the folder goes, and a single spectrum is placed sooner.
 set -e
 java_home=$1
 target=$2
+survey=$3
 if [ ! -x "$java_home/bin/jlink" ] || [ ! -d "$java_home/jmods" ]; then
   echo "make-image: $java_home: no jlink or no jmods there; expected a full JDK. Install one with jmods." >&2
   exit 1
@@ -64,7 +66,7 @@ cp "$target/emberline" "$image/"
 chmod +x "$image/emberline"
 cp -R "$target/lib/licences" "$target/lib/THIRD-PARTY.csv" "$image/"
 
-sh "$(dirname "$0")/class-list.sh" "$work" "$image/runtime/bin/java" -m emberline/emberline.cli.Emberline
+sh "$(dirname "$0")/class-list.sh" "$work" "$survey" "$image/runtime/bin/java" -m emberline/emberline.cli.Emberline
 "$image/runtime/bin/java" -Xshare:dump -XX:SharedClassListFile="$work/classes.list" \
   -m emberline/emberline.cli.Emberline >"$work/archive.out" 2>&1
 

@@ -28,8 +28,7 @@ final class ChiCurve {
         Map<String, ChiCurve> curves = new LinkedHashMap<>();
         for (ActivityFactor factor : catalogue.activityFactors()) {
             if (factor.quantity() == Quantity.CHI) {
-                curves.computeIfAbsent(
-                                factor.source().key(), key -> new ChiCurve(factor.source()))
+                curves.computeIfAbsent(factor.source().key(), key -> new ChiCurve(factor.source()))
                         .byType
                         .put(factor.typeNumber().orElseThrow(), factor);
             }
