@@ -2,7 +2,7 @@ package emberline.reports.page;
 
 import emberline.catalogue.MetallicityClass;
 import emberline.judge.Decision;
-import emberline.judge.Judgement;
+import emberline.judge.Limits;
 import emberline.place.GravityVerdict;
 import emberline.place.Placement;
 import emberline.place.RelationEstimate.Use;
@@ -47,7 +47,7 @@ public final class FindingSentence {
                     .append(gravity(placement.gravity()));
             metallicity(placement.metallicity()).ifPresent(m -> text.append("; ").append(m));
             pair(placement.pair()).ifPresent(p -> text.append("; ").append(p));
-            result.judgement().ifPresent(j -> text.append("; ").append(decision(j)));
+            result.judgement().ifPresent(j -> text.append("; ").append(decision(j.limits())));
         } else {
             text.append(
                     otherKind(placement)
@@ -74,11 +74,20 @@ public final class FindingSentence {
                                         + ")");
     }
 
-    private static String decision(Judgement judgement) {
-        String share = "P(substellar) " + probability(judgement.limits().pSubstellar());
-        return judgement.decision() == Decision.UNDECIDED
-                ? "undecided whether substellar (" + share + ")"
-                : judgement.decision().word() + " (" + share + ")";
+    /** The decision; one that is open says how far it hangs on the hydrogen-burning limit. */
+    static String decision(Limits limits) {
+        String share = "P(substellar) " + probability(limits.pSubstellar());
+        return limits.decision() == Decision.UNDECIDED
+                ? "undecided whether substellar (" + share + "; " + byLimit(limits) + ")"
+                : limits.decision().word() + " (" + share + ")";
+    }
+
+    /** What P(substellar) is at the lowest and the highest hydrogen-burning limit. */
+    static String byLimit(Limits limits) {
+        return Digits.fixed(limits.pSubstellarLow(), 2)
+                + " to "
+                + Digits.fixed(limits.pSubstellarHigh(), 2)
+                + " by the limit";
     }
 
     /** By what the type was found. */

@@ -179,10 +179,9 @@ final class KeyNumbers {
                         "Substellar",
                         String.format(
                                 Locale.ROOT,
-                                "P %.2f (%.2f to %.2f by the limit)",
+                                "P %.2f (%s)",
                                 limits.pSubstellar(),
-                                limits.pSubstellarLow(),
-                                limits.pSubstellarHigh())));
+                                FindingSentence.byLimit(limits))));
         Estimate mass = judgement.massMsun();
         entries.add(
                 new Entry(

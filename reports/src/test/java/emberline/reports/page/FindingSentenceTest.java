@@ -4,6 +4,8 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import emberline.catalogue.MetallicityClass.Name;
+import emberline.judge.Decision;
+import emberline.judge.Limits;
 import emberline.place.metallicity.MetallicityVerdict;
 import emberline.place.pair.PairVerdict;
 import emberline.place.pair.PairVerdict.Strength;
@@ -42,6 +44,16 @@ class FindingSentenceTest {
         assertEquals(
                 "Nothing was measured: no such file.",
                 FindingSentence.of(Samples.failed("x", "no such file")));
+    }
+
+    @Test
+    void anOpenDecisionSaysHowFarItHangsOnTheLimit() {
+        assertEquals(
+                "undecided whether substellar (P(substellar) = 0.99; 0.57 to 1.00 by the limit)",
+                FindingSentence.decision(new Limits(0.567, 0.991, 1, 0.001, Decision.UNDECIDED)));
+        assertEquals(
+                "substellar (P(substellar) = 0.98)",
+                FindingSentence.decision(new Limits(0.96, 0.98, 0.99, 0.001, Decision.SUBSTELLAR)));
     }
 
     @Test
