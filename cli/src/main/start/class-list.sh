@@ -13,10 +13,11 @@ list() {
   shift
   "$java" -XX:TieredStopAtLevel=1 -XX:+UseSerialGC -Xshare:auto -XX:DumpLoadedClassList="$work/$list" "$@" >"$work/$list.out" 2>&1
 }
-# A file of each format; a dwarf with a velocity, one of low gravity, a T dwarf, one without a spectrum.
+# A file of each format; among them a spectrum with a velocity, a T dwarf, and two of low gravity.
 spectra=$survey/spectra
-list place.classes "$@" place "$spectra/tamarisk-0217+0635.fits" "$spectra/tamarisk-0246+0411.vot" \
-  "$spectra/tamarisk-0308+0256.ecsv" "$spectra/tamarisk-0722+0105.csv" "$spectra/tamarisk-0131-0207.txt"
+list place.classes "$@" place "$spectra/tamarisk-0217+0635.fits" "$spectra/tamarisk-0353+0408.fits" \
+  "$spectra/tamarisk-0246+0411.vot" "$spectra/tamarisk-0308+0256.ecsv" "$spectra/tamarisk-0722+0105.csv" \
+  "$spectra/tamarisk-0131-0207.txt"
 list report.classes "$@" report "$spectra/tamarisk-0714-0352.fits" --out "$work/report"
 ln -s "$spectra" "$work/spectra"
 head -n 5 "$survey/candidates.csv" >"$work/list.csv"
